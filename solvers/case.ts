@@ -1,0 +1,107 @@
+import type { z } from 'zod'
+import type { CautionId } from './cautions.ts'
+import { type Issue, DomainError } from './errors.ts'
+import { type OutputDescription, type OutputName, type Shape, outputCatalogue } from './outputs.ts'
+import type { Solution } from './solution.ts'
+import type { Warning } from './warnings.ts'
+
+/** A statement about the input that the reader can check, with the figures compared. */
+export interface Check {
+  id: string
+  holds: boolean
+  value: number
+  limit: number
+  text: string
+}
+
+export interface Numbers {
+  biot?: number
+  fourier?: number[]
+  /** The length that the Biot and Fourier numbers were made with, m. */
+  length?: number
+}
+
+/** What every resolved input has beside the case's own: SI, defaults filled in, refusals made. */
+export interface Resolved {
+  times: number[]
+  depths?: number[]
+  outputs: OutputName[]
+}
+
+/** Signs for the small drawing of the case. */
+export interface Sketch {
+  body: 'half-space' | 'slab' | 'lumped'
+  boundary: 'convection'
+}
+
+/**
+ * An analytical case, described once. Its route, validation, contract entry, page, form, snippets, price and common
+ * tests are read from here.
+ */
+export interface CaseDescription<Shape_ extends z.ZodRawShape, R extends Resolved> {
+  id: string
+  title: string
+  /** One sentence: the body and what happens to it. */
+  summary: string
+  /** What it is for, what it assumes, and where it stops; plain sentences. */
+  notes: string
+  /** The formula in TeX, one entry a line. */
+  formula: readonly string[]
+  sources: readonly string[]
+  family: 'half-space' | 'slab' | 'lumped'
+  sketch: Sketch
+  /** The case's own fields. Times, depths, outputs and detail are added by the operation. */
+  fields: Shape_
+  /** Where the answer has places: depths inward from the exposed face, or none. */
+  places: 'depths' | 'none'
+  outputs: Partial<Record<OutputName, Partial<Pick<OutputDescription, 'unit' | 'shape'>>>>
+  /** Outputs that a reader would expect and the case cannot have, each with the reason. */
+  absentOutputs: Partial<Record<OutputName, string>>
+  /** Priced points per number, and once per call. */
+  weight: number
+  setUp: number
+  cautions: readonly CautionId[]
+  example: Record<string, unknown>
+  /** SI, defaults and every refusal of the domain; pushes an issue for each thing refused. */
+  resolve(input: ParsedInput<Shape_>, refuse: (issue: Issue) => void): R
+  solve(input: R): Solution
+  numbers(input: R): Numbers
+  checks(input: R): Check[]
+  warnings(input: R): Warning[]
+  /** Unit of an output where it depends on the input. */
+  unitOf?(output: OutputName, input: R): string | undefined
+}
+
+export type ParsedInput<S extends z.ZodRawShape> = z.infer<z.ZodObject<S>> & {
+  times: number[]
+  depths?: number[] | undefined
+  outputs: OutputName[]
+}
+
+/** A case with its types hidden, as the lists and operations hold it. */
+export type Case = Omit<CaseDescription<z.ZodRawShape, Resolved>, 'resolve'> & {
+  /** Throws DomainError. */
+  resolve(input: Record<string, unknown>): Resolved
+}
+
+export function defineCase<S extends z.ZodRawShape, R extends Resolved>(description: CaseDescription<S, R>): Case {
+  const resolve = (input: Record<string, unknown>): R => {
+    const issues: Issue[] = []
+    const resolved = description.resolve(input as ParsedInput<S>, (issue) => issues.push(issue))
+    if (issues.length > 0) throw new DomainError(issues)
+    return resolved
+  }
+  return { ...(description as unknown as Case), resolve }
+}
+
+export function outputOf(c: Case, name: OutputName): OutputDescription {
+  return { ...outputCatalogue[name], ...c.outputs[name] }
+}
+
+export function shapeOf(c: Case, name: OutputName): Shape {
+  return outputOf(c, name).shape
+}
+
+export function outputNamesOf(c: Case): OutputName[] {
+  return Object.keys(c.outputs) as OutputName[]
+}

@@ -1,0 +1,7 @@
+import type { Case } from '../case.ts'
+import lumpedConvection from './lumped-convection/case.ts'
+import semiInfiniteConvection from './semi-infinite-convection/case.ts'
+import slabConvection from './slab-convection/case.ts'
+
+/** Every case of the product. Adding one is a folder beside this file and a line here. */
+export const cases: readonly Case[] = [lumpedConvection, semiInfiniteConvection, slabConvection]

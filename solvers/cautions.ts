@@ -1,0 +1,25 @@
+/**
+ * Cautions travel in every answer of a case that can hurt someone; a client cannot switch them off.
+ * A changed wording is a new version.
+ */
+export const cautions = {
+  general: {
+    version: 1,
+    text: 'Answers follow the stated assumptions and inputs; responsibility for use remains with a qualified person under local rules.',
+  },
+  envelope: {
+    version: 1,
+    text: 'Not a compliance calculation. Condensation, air leakage and thermal bridges are outside this case.',
+  },
+  concrete: {
+    version: 1,
+    text: 'Indicative temperatures. Limits such as maximum temperature and core-surface difference (e.g. ACI 301: 70 °C, 19 K) are set by the project specification; cracking also depends on restraint and strength.',
+  },
+  food: {
+    version: 1,
+    text: 'Time estimate only. Legal cooling and storage limits apply; verify with a calibrated probe.',
+  },
+  control: { version: 1, text: 'Do not use as a safety interlock.' },
+} as const
+
+export type CautionId = keyof typeof cautions

@@ -1,0 +1,69 @@
+/** Where an output has numbers: at each time and place, at each time, at each place, or once. */
+export type Shape = 'grid' | 'times' | 'places' | 'single'
+
+export interface OutputDescription {
+  label: string
+  symbol: string
+  unit: string
+  shape: Shape
+  text: string
+}
+
+/* The outputs that cases share. A case names those it has; where its unit or shape differs, it says so. */
+export const outputCatalogue = {
+  temperature: { label: 'Temperature', symbol: 'T', unit: 'Cel', shape: 'grid', text: 'Temperature at each time and place.' },
+  heatFlux: {
+    label: 'Heat flux',
+    symbol: 'q',
+    unit: 'W/m2',
+    shape: 'grid',
+    text: 'Local heat flux, positive inward from the exposed face.',
+  },
+  surfaceHeatFlux: {
+    label: 'Surface heat flux',
+    symbol: 'qₛ',
+    unit: 'W/m2',
+    shape: 'times',
+    text: 'Heat flux conducted into the body at the exposed face.',
+  },
+  heatGained: {
+    label: 'Heat gained',
+    symbol: 'Q',
+    unit: 'J/m2',
+    shape: 'times',
+    text: 'Energy stored since time 0; negative where the body cools.',
+  },
+  meanTemperature: { label: 'Mean temperature', symbol: 'T̄', unit: 'Cel', shape: 'times', text: 'Mean over the volume.' },
+  remainingFraction: {
+    label: 'Remaining fraction',
+    symbol: 'θ',
+    unit: '1',
+    shape: 'grid',
+    text: 'Share of the initial difference to the end state that is left: 1 at the start.',
+  },
+  completedFraction: {
+    label: 'Completed fraction',
+    symbol: '1 − θ',
+    unit: '1',
+    shape: 'grid',
+    text: 'Share of the change that is done, computed without cancellation.',
+  },
+  heatFraction: {
+    label: 'Heat fraction',
+    symbol: 'Q/Q₀',
+    unit: '1',
+    shape: 'times',
+    text: 'Heat gained as a share of what the body gains in all.',
+  },
+  steadyTemperature: { label: 'Steady temperature', symbol: 'T∞', unit: 'Cel', shape: 'single', text: 'The end state.' },
+  timeConstant: {
+    label: 'Time constant',
+    symbol: 'τ',
+    unit: 's',
+    shape: 'single',
+    text: 'Time in which the difference to the end state falls to 1/e.',
+  },
+} as const satisfies Record<string, OutputDescription>
+
+export type OutputName = keyof typeof outputCatalogue
+export const outputNames = Object.keys(outputCatalogue) as OutputName[]

@@ -1,0 +1,59 @@
+import { z } from 'zod'
+
+/** A physical quantity as a field: how it is named, what it may be and what it usually is. */
+export interface QuantityDescription {
+  /** As printed in formulas; plain text with Unicode sub- and superscripts. */
+  symbol: string
+  /** UCUM code of the unit that a plain number has. */
+  unit: string
+  label: string
+  min: number
+  max: number
+  /** Zero is allowed beside min..max. */
+  zero?: boolean
+  /** Values met in practice; outside them the answer carries a warning. */
+  typical?: readonly [number, number]
+  /** One short line for the form and the reference. */
+  hint?: string
+}
+
+export function acceptedOf(d: QuantityDescription): string {
+  const unit = d.unit === '1' ? '' : ` ${d.unit}`
+  return `a number from ${d.min} to ${d.max}${d.zero ? ', or 0,' : ''}${unit}`
+}
+
+/** A number in SI (temperatures in degrees Celsius), with everything its readers need in its metadata. */
+export function quantity(d: QuantityDescription) {
+  return z
+    .number()
+    .min(d.zero ? 0 : d.min)
+    .max(d.max)
+    .refine((value) => value === 0 || value >= d.min, { params: { code: 'out-of-range' } })
+    .meta({
+      title: d.label,
+      description: [d.label, d.hint].filter(Boolean).join(': ') + `. Unit ${d.unit}; ${acceptedOf(d)}.`,
+      'x-symbol': d.symbol,
+      'x-ucum': d.unit,
+      'x-accepted': acceptedOf(d),
+      ...(d.hint ? { 'x-hint': d.hint } : {}),
+      ...(d.zero ? { 'x-zero-or': d.min } : {}),
+      ...(d.typical ? { 'x-typical': [...d.typical] } : {}),
+    })
+}
+
+/** A list of one quantity, kept in the order given. */
+export function quantities(d: QuantityDescription, maximum: number) {
+  return z
+    .array(quantity(d))
+    .min(1)
+    .max(maximum)
+    .meta({
+      title: d.label,
+      description: `${[d.label, d.hint].filter(Boolean).join(': ')}. Unit ${d.unit}; 1 to ${maximum} values, each ${acceptedOf(d)}.`,
+      'x-symbol': d.symbol,
+      'x-ucum': d.unit,
+      'x-accepted': `1 to ${maximum} values, each ${acceptedOf(d)}`,
+      ...(d.hint ? { 'x-hint': d.hint } : {}),
+      ...(d.typical ? { 'x-typical': [...d.typical] } : {}),
+    })
+}

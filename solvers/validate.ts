@@ -1,0 +1,107 @@
+import type { z } from 'zod'
+import { type DomainCode, type Issue, DomainError, MAX_ISSUES, pointerOf } from './errors.ts'
+
+/** Parses by a schema, or throws a DomainError whose issues name each field and what it would accept. */
+export function parse<S extends z.ZodType>(schema: S, value: unknown): z.output<S> {
+  const result = schema.safeParse(value, { reportInput: true })
+  if (result.success) return result.data
+  throw new DomainError(issuesOf(schema, result.error))
+}
+
+/** The issues of a failed parse, with pointers, codes of ours and what would be accepted. */
+export function issuesOf(schema: z.ZodType, error: z.ZodError): Issue[] {
+  return error.issues.slice(0, MAX_ISSUES).flatMap((issue) => toIssues(schema, issue as RawIssue))
+}
+
+type RawIssue = z.core.$ZodIssue & { input?: unknown }
+
+function toIssues(schema: z.ZodType, issue: RawIssue): Issue[] {
+  if (issue.code === 'unrecognized_keys') {
+    const known = Object.keys(shapeAt(schema, issue.path) ?? {})
+    return issue.keys.slice(0, MAX_ISSUES).map((key) => ({
+      pointer: pointerOf([...issue.path, key]),
+      code: 'unknown-field' as const,
+      detail: `There is no field "${key.slice(0, 60)}" here.`,
+      accepted: known.length ? known.join(', ') : 'no fields',
+    }))
+  }
+  const pointer = pointerOf(issue.path)
+  const accepted = acceptedAt(schema, issue.path)
+  const [code, detail] = describe(issue)
+  return [{ pointer, code, detail, ...(accepted ? { accepted } : {}) }]
+}
+
+function describe(issue: RawIssue): [DomainCode, string] {
+  const name = String(issue.path.at(-1) ?? 'The body')
+  switch (issue.code) {
+    case 'invalid_type':
+    case 'invalid_union':
+      if (issue.input === undefined) return ['missing-field', `${name} is missing.`]
+      if (issue.code === 'invalid_union') return ['not-in-list', `${name} is not one of the values offered.`]
+      if (typeof issue.input === 'number') return ['out-of-range', `${name} is not a finite number.`]
+      return ['wrong-type', `${name} is ${kindOf(issue.input)}; ${article(issue.expected)} is expected.`]
+    case 'too_small':
+    case 'too_big': {
+      const limit = issue.code === 'too_small' ? issue.minimum : issue.maximum
+      const side = issue.code === 'too_small' ? 'least' : 'most'
+      if (issue.origin === 'number' || issue.origin === 'int')
+        return ['out-of-range', `${name} is ${String(issue.input)}; at ${side} ${limit} is accepted.`]
+      return ['wrong-length', `${name} must have at ${side} ${limit} ${issue.origin === 'string' ? 'characters' : 'entries'}.`]
+    }
+    case 'invalid_value':
+      if (issue.input === undefined) return ['missing-field', `${name} is missing.`]
+      return ['not-in-list', `${name} must be ${issue.values.map((v) => JSON.stringify(v)).join(' or ')}.`]
+    case 'invalid_format':
+      return ['wrong-form', `${name} is not of the required form.`]
+    case 'custom':
+      if (issue.params?.['code'] === 'out-of-range')
+        return ['out-of-range', `${name} is ${String(issue.input)}, below its range.`]
+      return ['wrong-form', issue.message]
+    default:
+      return ['wrong-form', issue.message]
+  }
+}
+
+function kindOf(value: unknown): string {
+  if (value === null) return 'null'
+  if (Array.isArray(value)) return 'a list'
+  return article(typeof value)
+}
+
+function article(kind: string): string {
+  const word = { string: 'text', object: 'object', array: 'list', boolean: 'boolean', number: 'number' }[kind] ?? kind
+  return `${/^[aeiou]/.test(word) ? 'an' : 'a'} ${word}`
+}
+
+/* Walks a schema along a path, through optional and default wrappers, to what a field says of itself. */
+function schemaAt(schema: z.ZodType, path: readonly PropertyKey[]): z.ZodType | undefined {
+  let at: z.ZodType | undefined = schema
+  for (const part of path) {
+    at = at && unwrap(at)
+    const def = at?.def as { shape?: Record<string, z.ZodType>; element?: z.ZodType } | undefined
+    at = def?.shape ? def.shape[String(part)] : def?.element
+  }
+  return at
+}
+
+function unwrap(schema: z.ZodType): z.ZodType {
+  let at = schema
+  for (let depth = 0; depth < 8; depth++) {
+    const inner = (at.def as { innerType?: z.ZodType }).innerType
+    if (!inner) return at
+    at = inner
+  }
+  return at
+}
+
+function shapeAt(schema: z.ZodType, path: readonly PropertyKey[]): Record<string, unknown> | undefined {
+  const at = schemaAt(schema, path)
+  return at && (unwrap(at).def as { shape?: Record<string, unknown> }).shape
+}
+
+function acceptedAt(schema: z.ZodType, path: readonly PropertyKey[]): string | undefined {
+  const at = schemaAt(schema, path)
+  const meta = at && (at.meta() ?? unwrap(at).meta())
+  const accepted = meta?.['x-accepted']
+  return typeof accepted === 'string' ? accepted : undefined
+}

@@ -1,0 +1,27 @@
+/** Warnings say that a number may not mean what its reader thinks. Each code has its own page in the portal. */
+export const warningCodes = {
+  'film-includes-radiation-unknown': {
+    title: 'The film coefficient is taken as the total',
+    text: 'The film coefficient is taken as the total, radiation included. One for air movement alone needs about 5 W/(m2.K) more indoors.',
+  },
+  'lumped-biot-high': {
+    title: 'One temperature for the whole body is a coarse model here',
+    text: 'Above a Biot number of 0.1 the inside lags the face so much that one temperature does not describe the body.',
+  },
+  'lumped-errs-early': {
+    title: 'The lumped body reaches its target early',
+    text: 'A body with one temperature changes faster than the real one: the time to a temperature errs early, the unsafe side when a core must be cooled or heated.',
+  },
+  'outside-typical-range': {
+    title: 'A value is unusual',
+    text: 'The value is allowed and solved exactly, but outside what is met in practice. A wrong unit is the common cause.',
+  },
+} as const
+
+export type WarningCode = keyof typeof warningCodes
+
+export interface Warning {
+  code: WarningCode
+  text: string
+  value: number
+}
