@@ -9,7 +9,10 @@ import { attempt, run } from './run.mjs'
  */
 export async function installPackage(name, { before } = {}) {
   const prefix = await privilege()
-  if (!prefix) throw new Refusal(`${name} is missing and only root may install it: run "sudo apt-get install ${name}", then this again.`)
+  if (!prefix)
+    throw new Refusal(
+      `${name} is missing and only root may install it: run "sudo apt-get install ${name}", then this again.`,
+    )
   // A file written before its package arrives is a changed configuration file to dpkg: keep ours, ask nothing.
   const apt = ['env', 'DEBIAN_FRONTEND=noninteractive', 'apt-get', '-q', '-y', '-o', 'Dpkg::Options::=--force-confold']
   const refusal = `${name} could not be installed: run "apt-get update && apt-get install ${name}" as root, mend what it says, then this again.`

@@ -25,6 +25,8 @@ export function ensureFolder(folder) {
     mkdirSync(folder, { recursive: true, mode: 0o711 })
     accessSync(folder, constants.W_OK | constants.X_OK)
   } catch {
-    throw new Refusal(`The folder ${folder} cannot be written by ${me()}: make it writable, or set SOAKSTONE_DATA to a folder that is.`)
+    throw new Refusal(
+      `The folder ${folder} cannot be written by ${me()}: make it writable, or set SOAKSTONE_DATA to a folder that is.`,
+    )
   }
 }

@@ -17,6 +17,8 @@ export function readJson(file) {
   try {
     return JSON.parse(readFileSync(file, 'utf8'))
   } catch (error) {
-    throw new Refusal(`${file} cannot be read (${/** @type {Error} */ (error).message}): mend or delete it, then start again.`)
+    throw new Refusal(
+      `${file} cannot be read (${/** @type {Error} */ (error).message}): mend or delete it, then start again.`,
+    )
   }
 }

@@ -19,7 +19,9 @@ export async function postgresPrograms(version) {
   })
   const installed = find(version)
   if (installed) return installed
-  throw new Refusal(`PostgreSQL ${version ?? `${OLDEST} or later`} is not under ${LIBRARY} even after installing it: set DATABASE_URL to a server of yours instead.`)
+  throw new Refusal(
+    `PostgreSQL ${version ?? `${OLDEST} or later`} is not under ${LIBRARY} even after installing it: set DATABASE_URL to a server of yours instead.`,
+  )
 }
 
 /** @param {string} [version] */

@@ -7,6 +7,8 @@ import { Refusal } from './refusal.mjs'
  * @property {NodeJS.ProcessEnv} [env]
  * @property {number} [uid]
  * @property {number} [gid]
+ * @property {boolean} [detached] a Ctrl-C in the terminal does not reach it
+ * @property {AbortSignal} [signal] ends it
  * @property {string} [input] written to its stdin
  * @property {string} [refusal] the sentence thrown when it fails
  */
@@ -46,5 +48,8 @@ export async function run(command, args, options = {}) {
   const { code, stdout, output } = await attempt(command, args, options)
   if (code === 0) return stdout
   const tail = output.trim().split('\n').slice(-40).join('\n')
-  throw new Refusal(options.refusal ?? `${command} ${args[0] ?? ''} failed with code ${code}; its last words are above.`, tail)
+  throw new Refusal(
+    options.refusal ?? `${command} ${args[0] ?? ''} failed with code ${code}; its last words are above.`,
+    tail,
+  )
 }
