@@ -19,6 +19,8 @@ export interface Numbers {
   fourier?: number[]
   /** The length that the Biot and Fourier numbers were made with, m. */
   length?: number
+  /** Depth that 1 % of a surface step has reached at the last time, m. */
+  penetrationDepth?: number
 }
 
 /** What every resolved input has beside the case's own: SI, defaults filled in, refusals made. */
@@ -65,6 +67,8 @@ export interface CaseDescription<Shape_ extends z.ZodRawShape, R extends Resolve
   /** SI, defaults and every refusal of the domain; pushes an issue for each thing refused. */
   resolve(input: ParsedInput<Shape_>, refuse: (issue: Issue) => void): R
   solve(input: R): Solution
+  /** The input as echoed in the answer, where it is not what the solver reads. */
+  echo?(input: R): Record<string, unknown>
   numbers(input: R): Numbers
   checks(input: R): Check[]
   warnings(input: R): Warning[]

@@ -11,7 +11,13 @@ export interface OutputDescription {
 
 /* The outputs that cases share. A case names those it has; where its unit or shape differs, it says so. */
 export const outputCatalogue = {
-  temperature: { label: 'Temperature', symbol: 'T', unit: 'Cel', shape: 'grid', text: 'Temperature at each time and place.' },
+  temperature: {
+    label: 'Temperature',
+    symbol: 'T',
+    unit: 'Cel',
+    shape: 'grid',
+    text: 'Temperature at each time and place.',
+  },
   heatFlux: {
     label: 'Heat flux',
     symbol: 'q',
@@ -33,7 +39,13 @@ export const outputCatalogue = {
     shape: 'times',
     text: 'Energy stored since time 0; negative where the body cools.',
   },
-  meanTemperature: { label: 'Mean temperature', symbol: 'T̄', unit: 'Cel', shape: 'times', text: 'Mean over the volume.' },
+  meanTemperature: {
+    label: 'Mean temperature',
+    symbol: 'T̄',
+    unit: 'Cel',
+    shape: 'times',
+    text: 'Mean over the volume.',
+  },
   remainingFraction: {
     label: 'Remaining fraction',
     symbol: 'θ',
@@ -55,7 +67,13 @@ export const outputCatalogue = {
     shape: 'times',
     text: 'Heat gained as a share of what the body gains in all.',
   },
-  steadyTemperature: { label: 'Steady temperature', symbol: 'T∞', unit: 'Cel', shape: 'single', text: 'The end state.' },
+  steadyTemperature: {
+    label: 'Steady temperature',
+    symbol: 'T∞',
+    unit: 'Cel',
+    shape: 'single',
+    text: 'The end state.',
+  },
   timeConstant: {
     label: 'Time constant',
     symbol: 'τ',

@@ -19,26 +19,32 @@ export interface QuantityDescription {
 
 export function acceptedOf(d: QuantityDescription): string {
   const unit = d.unit === '1' ? '' : ` ${d.unit}`
-  return `a number from ${d.min} to ${d.max}${d.zero ? ', or 0,' : ''}${unit}`
+  return `${d.zero ? '0, or ' : ''}a number from ${figure(d.min)} to ${figure(d.max)}${unit}`
+}
+
+function figure(value: number): string {
+  const size = Math.abs(value)
+  return size >= 1e6 || (size > 0 && size < 1e-3) ? value.toExponential().replace('e+', 'e') : String(value)
 }
 
 /** A number in SI (temperatures in degrees Celsius), with everything its readers need in its metadata. */
 export function quantity(d: QuantityDescription) {
-  return z
+  const number = z
     .number()
     .min(d.zero ? 0 : d.min)
     .max(d.max)
-    .refine((value) => value === 0 || value >= d.min, { params: { code: 'out-of-range' } })
-    .meta({
-      title: d.label,
-      description: [d.label, d.hint].filter(Boolean).join(': ') + `. Unit ${d.unit}; ${acceptedOf(d)}.`,
-      'x-symbol': d.symbol,
-      'x-ucum': d.unit,
-      'x-accepted': acceptedOf(d),
-      ...(d.hint ? { 'x-hint': d.hint } : {}),
-      ...(d.zero ? { 'x-zero-or': d.min } : {}),
-      ...(d.typical ? { 'x-typical': [...d.typical] } : {}),
-    })
+  return (
+    d.zero ? number.refine((value) => value <= 0 || value >= d.min, { params: { code: 'out-of-range' } }) : number
+  ).meta({
+    title: d.label,
+    description: [d.label, d.hint].filter(Boolean).join(': ') + `. Unit ${d.unit}; ${acceptedOf(d)}.`,
+    'x-symbol': d.symbol,
+    'x-ucum': d.unit,
+    'x-accepted': acceptedOf(d),
+    ...(d.hint ? { 'x-hint': d.hint } : {}),
+    ...(d.zero ? { 'x-zero-or': d.min } : {}),
+    ...(d.typical ? { 'x-typical': [...d.typical] } : {}),
+  })
 }
 
 /** A list of one quantity, kept in the order given. */

@@ -65,7 +65,12 @@ export function resolveSolid(input: SolidInput, refuse: (issue: Issue) => void):
     const heat = resolveHeatCapacity(input, refuse, ways)
     if (conductivity === undefined || heat === undefined) return undefined
     const capacity = heat.volumetricHeatCapacity
-    return { conductivity, ...heat, diffusivity: conductivity / capacity, effusivity: Math.sqrt(conductivity * capacity) }
+    return {
+      conductivity,
+      ...heat,
+      diffusivity: conductivity / capacity,
+      effusivity: Math.sqrt(conductivity * capacity),
+    }
   }
   const second = Object.entries({ density, specificHeat, volumetricHeatCapacity }).find(([, v]) => v !== undefined)
   if (second) {
@@ -74,5 +79,10 @@ export function resolveSolid(input: SolidInput, refuse: (issue: Issue) => void):
   }
   if (conductivity === undefined) return undefined
   const capacity = conductivity / diffusivity
-  return { conductivity, volumetricHeatCapacity: capacity, diffusivity, effusivity: conductivity / Math.sqrt(diffusivity) }
+  return {
+    conductivity,
+    volumetricHeatCapacity: capacity,
+    diffusivity,
+    effusivity: conductivity / Math.sqrt(diffusivity),
+  }
 }

@@ -32,7 +32,7 @@ function toIssues(schema: z.ZodType, issue: RawIssue): Issue[] {
 }
 
 function describe(issue: RawIssue): [DomainCode, string] {
-  const name = String(issue.path.at(-1) ?? 'The body')
+  const name = issue.path.join('/') || 'The body'
   switch (issue.code) {
     case 'invalid_type':
     case 'invalid_union':
@@ -46,7 +46,10 @@ function describe(issue: RawIssue): [DomainCode, string] {
       const side = issue.code === 'too_small' ? 'least' : 'most'
       if (issue.origin === 'number' || issue.origin === 'int')
         return ['out-of-range', `${name} is ${String(issue.input)}; at ${side} ${limit} is accepted.`]
-      return ['wrong-length', `${name} must have at ${side} ${limit} ${issue.origin === 'string' ? 'characters' : 'entries'}.`]
+      return [
+        'wrong-length',
+        `${name} must have at ${side} ${limit} ${issue.origin === 'string' ? 'characters' : 'entries'}.`,
+      ]
     }
     case 'invalid_value':
       if (issue.input === undefined) return ['missing-field', `${name} is missing.`]
@@ -101,7 +104,11 @@ function shapeAt(schema: z.ZodType, path: readonly PropertyKey[]): Record<string
 
 function acceptedAt(schema: z.ZodType, path: readonly PropertyKey[]): string | undefined {
   const at = schemaAt(schema, path)
-  const meta = at && (at.meta() ?? unwrap(at).meta())
-  const accepted = meta?.['x-accepted']
+  const accepted = at && metaOf(at)?.['x-accepted']
   return typeof accepted === 'string' ? accepted : undefined
+}
+
+/** What a field says of itself, be it optional or not. */
+export function metaOf(schema: z.ZodType): Record<string, unknown> | undefined {
+  return schema.meta() ?? unwrap(schema).meta()
 }

@@ -5,7 +5,7 @@ import { cautions } from '../cautions.ts'
 import { DomainError } from '../errors.ts'
 import { depths, times } from '../fields.ts'
 import { type OutputName, type Shape } from '../outputs.ts'
-import { issuesOf } from '../validate.ts'
+import { issuesOf, metaOf } from '../validate.ts'
 import { SOLVER_VERSION } from '../version.ts'
 import type { Warning } from '../warnings.ts'
 import type { Call, CaseOperation } from './index.ts'
@@ -13,10 +13,11 @@ import type { Call, CaseOperation } from './index.ts'
 /** Longer series of the input are echoed as count and digest; the axes hold them whole. */
 const ECHO_LIMIT = 100
 
-export const detailField = z
-  .enum(['full', 'compact'])
-  .optional()
-  .meta({ title: 'Detail', description: 'Detail: full, or compact (result, bound and warning codes only).', 'x-accepted': 'full or compact' })
+export const detailField = z.enum(['full', 'compact']).optional().meta({
+  title: 'Detail',
+  description: 'Detail: full, or compact (result, bound and warning codes only).',
+  'x-accepted': 'full or compact',
+})
 
 function inputSchema(c: Case) {
   const names = outputNamesOf(c)
@@ -25,7 +26,11 @@ function inputSchema(c: Case) {
     .min(1)
     .max(names.length)
     .default(['temperature'])
-    .meta({ title: 'Outputs', description: `Outputs: some of ${names.join(', ')}. Default temperature.`, 'x-accepted': names.join(', ') })
+    .meta({
+      title: 'Outputs',
+      description: `Outputs: some of ${names.join(', ')}. Default temperature.`,
+      'x-accepted': names.join(', '),
+    })
   return z.strictObject({
     ...c.fields,
     ...(c.places === 'depths' ? { depths: depths.optional() } : {}),
@@ -56,7 +61,11 @@ function answerSchema(c: Case) {
     z.strictObject(Object.fromEntries(names.map((name) => [name, schemaOf(name).optional()])))
   const result = perOutput((name) => {
     const o = outputOf(c, name)
-    return valuesSchema[answeredShape(c, name)].meta({ title: o.label, description: `${o.text} Unit ${o.unit}.`, 'x-ucum': o.unit })
+    return valuesSchema[answeredShape(c, name)].meta({
+      title: o.label,
+      description: `${o.text} Unit ${o.unit}.`,
+      'x-ucum': o.unit,
+    })
   })
   const series = z.array(z.number())
   return z.strictObject({
@@ -64,7 +73,9 @@ function answerSchema(c: Case) {
     operation: z.literal('solve'),
     solver: z.string().meta({ description: 'Version of the numbers.' }),
     points: z.number().meta({ description: 'Priced points of this answer, before the floor of a call.' }),
-    input: z.record(z.string(), z.unknown()).meta({ description: 'The input as used: SI, with defaults and derived properties.' }),
+    input: z
+      .record(z.string(), z.unknown())
+      .meta({ description: 'The input as used: SI, with defaults and derived properties.' }),
     axes: z.strictObject({ times: series, ...(c.places === 'depths' ? { depths: series.optional() } : {}) }),
     units: z.record(z.string(), z.string()).meta({ description: 'UCUM code of each output and axis.' }),
     result,
@@ -77,8 +88,15 @@ function answerSchema(c: Case) {
       scope: z.literal('numerical'),
       note: z.string(),
     }),
-    numbers: z.strictObject({ biot: z.number().optional(), fourier: series.optional(), length: z.number().optional() }),
-    checks: z.array(z.strictObject({ id: z.string(), holds: z.boolean(), value: z.number(), limit: z.number(), text: z.string() })),
+    numbers: z.strictObject({
+      biot: z.number().optional(),
+      fourier: series.optional(),
+      length: z.number().optional(),
+      penetrationDepth: z.number().optional(),
+    }),
+    checks: z.array(
+      z.strictObject({ id: z.string(), holds: z.boolean(), value: z.number(), limit: z.number(), text: z.string() }),
+    ),
     warnings: z.array(z.strictObject({ code: z.string(), text: z.string(), value: z.number() })),
     cautions: z.array(z.strictObject({ id: z.string(), version: z.number(), text: z.string() })),
     sources: z.array(z.string()),
@@ -100,7 +118,12 @@ function refuseBadInput(c: Case, schema: z.ZodType, error: z.ZodError, body: unk
     if (!match || issue.code !== 'not-in-list') return issue
     const name = String((body as { outputs: unknown[] }).outputs[Number(match[1])]).slice(0, 60)
     const reason = c.absentOutputs[name as OutputName] ?? 'It is no output of this case.'
-    return { ...issue, code: 'output-not-defined' as const, detail: `"${name}": ${reason}`, accepted: outputNamesOf(c).join(', ') }
+    return {
+      ...issue,
+      code: 'output-not-defined' as const,
+      detail: `"${name}": ${reason}`,
+      accepted: outputNamesOf(c).join(', '),
+    }
   })
   throw new DomainError(issues)
 }
@@ -109,12 +132,20 @@ function prepare(c: Case, body: unknown, defaultDetail: 'full' | 'compact'): Cal
   const schema = inputOf(c)
   const parsed = schema.safeParse(body, { reportInput: true })
   if (!parsed.success) refuseBadInput(c, schema, parsed.error, body)
-  const { detail = defaultDetail, ...input } = parsed.data as Record<string, unknown> & { outputs: OutputName[]; depths?: number[] }
+  const { detail = defaultDetail, ...input } = parsed.data as Record<string, unknown> & {
+    outputs: OutputName[]
+    depths?: number[]
+  }
   input.outputs = [...new Set(input.outputs)]
   const placed = input.outputs.filter((name) => ['grid', 'places'].includes(answeredShape(c, name)))
   if (placed.length > 0 && !input.depths)
     throw new DomainError([
-      { pointer: '#/depths', code: 'missing-field', detail: `${placed[0]} needs depths.`, accepted: 'a list of depths in m, inward from the exposed face' },
+      {
+        pointer: '#/depths',
+        code: 'missing-field',
+        detail: `${placed[0]} needs depths.`,
+        accepted: 'a list of depths in m, inward from the exposed face',
+      },
     ])
   const resolved = c.resolve(input)
   const values = countValues(c, resolved)
@@ -124,7 +155,12 @@ function prepare(c: Case, body: unknown, defaultDetail: 'full' | 'compact'): Cal
 
 function countValues(c: Case, input: Resolved): number {
   const places = input.depths?.length ?? 0
-  const counts: Record<Shape, number> = { grid: input.times.length * places, times: input.times.length, places, single: 1 }
+  const counts: Record<Shape, number> = {
+    grid: input.times.length * places,
+    times: input.times.length,
+    places,
+    single: 1,
+  }
   return input.outputs.reduce((sum, name) => sum + counts[answeredShape(c, name)], 0)
 }
 
@@ -140,7 +176,8 @@ function answer(c: Case, input: Resolved, points: number, compact: boolean) {
     bound[name] = output.bound
     units[name] = c.unitOf?.(name, input) ?? outputOf(c, name).unit
   }
-  const warnings: Warning[] = c.warnings(input)
+  const echoed = c.echo?.(input) ?? { ...input }
+  const warnings: Warning[] = [...c.warnings(input), ...unusualValues(c, echoed)]
   if (compact) return { result, accuracy: { bound }, warnings: warnings.map((w) => w.code) }
   units['times'] = 's'
   if (input.depths) units['depths'] = 'm'
@@ -149,7 +186,11 @@ function answer(c: Case, input: Resolved, points: number, compact: boolean) {
     operation: 'solve',
     solver: SOLVER_VERSION,
     points,
-    input: Object.fromEntries(Object.entries(input).filter(([, v]) => v !== undefined).map(([k, v]) => [k, echo(v)])),
+    input: Object.fromEntries(
+      Object.entries(echoed)
+        .filter(([, v]) => v !== undefined)
+        .map(([k, v]) => [k, shortened(v)]),
+    ),
     axes: { times: input.times, ...(input.depths ? { depths: input.depths } : {}) },
     units,
     result,
@@ -170,7 +211,19 @@ function answer(c: Case, input: Resolved, points: number, compact: boolean) {
   }
 }
 
-function echo(value: unknown): unknown {
+/** Values outside what their field calls typical. */
+function unusualValues(c: Case, input: Record<string, unknown>): Warning[] {
+  return Object.entries(c.fields).flatMap(([name, schema]) => {
+    const meta = metaOf(schema as z.ZodType)
+    const typical = meta?.['x-typical'] as [number, number] | undefined
+    const value = input[name]
+    if (!typical || typeof value !== 'number' || (value >= typical[0] && value <= typical[1])) return []
+    const text = `${name} is ${value} ${String(meta!['x-ucum'])}; values from ${typical[0]} to ${typical[1]} are usual.`
+    return [{ code: 'outside-typical-range' as const, text, value }]
+  })
+}
+
+function shortened(value: unknown): unknown {
   if (!Array.isArray(value) || value.length <= ECHO_LIMIT) return value
   return { count: value.length, digest: 'sha-256=' + createHash('sha256').update(JSON.stringify(value)).digest('hex') }
 }

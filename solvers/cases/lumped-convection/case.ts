@@ -1,0 +1,187 @@
+import { z } from 'zod'
+import { defineCase, type Resolved } from '../../case.ts'
+import type { Issue } from '../../errors.ts'
+import { exposedFaces, film, initialTemperature, radius, solid, thickness } from '../../fields.ts'
+import { filmWarnings } from '../../film.ts'
+import type { OutputName } from '../../outputs.ts'
+import { quantity } from '../../quantity.ts'
+import type { Warning } from '../../warnings.ts'
+import { type LumpedBody, resolveBody } from './body.ts'
+import { solve, type LumpedInput } from './solve.ts'
+
+interface LumpedResolved extends LumpedInput, Resolved {
+  times: number[]
+  outputs: OutputName[]
+  filmCoefficient: number
+  /** Absent where the body was not stated by shape and solid. */
+  biot?: number
+  body: LumpedBody
+}
+
+const fields = {
+  heatCapacity: quantity({
+    symbol: 'C',
+    unit: 'J/K',
+    label: 'Heat capacity of the body',
+    min: 1e-12,
+    max: 1e15,
+    hint: 'with area',
+  }).optional(),
+  volume: quantity({
+    symbol: 'V',
+    unit: 'm3',
+    label: 'Volume',
+    min: 1e-27,
+    max: 1e15,
+    hint: 'with area and the heat capacity of the solid',
+  }).optional(),
+  area: quantity({ symbol: 'A', unit: 'm2', label: 'Exchanging area', min: 1e-18, max: 1e10 }).optional(),
+  body: z.enum(['slab', 'cylinder', 'sphere']).optional().meta({
+    title: 'Body',
+    description:
+      'Body: slab (with thickness and exposedFaces), cylinder or sphere (with radius), in place of heatCapacity or volume with area.',
+    'x-accepted': 'slab, cylinder or sphere',
+    'x-hint': 'in place of heat capacity and area',
+  }),
+  thickness: thickness.optional(),
+  exposedFaces: exposedFaces.optional(),
+  radius: radius.optional(),
+  ...solid,
+  correction: z.enum(['none', 'mean']).optional().meta({
+    title: 'Correction',
+    description: 'Correction: none (default) or mean, with body only.',
+    'x-accepted': 'none or mean',
+    'x-hint': 'with body only',
+  }),
+  power: quantity({
+    symbol: 'P',
+    unit: 'W',
+    label: 'Heat source',
+    min: -1e15,
+    max: 1e15,
+    hint: 'released inside; without body only',
+  }).optional(),
+  initialTemperature,
+  ...film,
+}
+
+export default defineCase<typeof fields, LumpedResolved>({
+  id: 'lumped-convection',
+  title: 'One temperature, convection',
+  summary: 'A body small or well mixed enough to have one temperature meets a fluid at another.',
+  notes:
+    'For sensors, thin sheets, small parts and stirred tanks. State the body by heatCapacity and area; or by volume, the heat capacity of its solid, and area; or as a slab, cylinder or sphere with a full solid. With a shape, correction "mean" uses Bi/(1 + Bi/(n + 2)), n = 1, 2, 3, which follows the mean temperature to 1 % up to Bi 1; it is the mean only. Heat is for the body; with a shape per m2 of one exposed face (slab), per m (cylinder), or whole (sphere).',
+  formula: [
+    'T = T_i + \\left(T_a - T_i + \\frac{P}{hA}\\right) \\left(1 - e^{-t/\\tau}\\right), \\qquad \\tau = \\frac{C}{hA}',
+    '\\text{mean correction:}\\quad h \\to \\frac{h}{1 + \\mathrm{Bi}/(n+2)}',
+  ],
+  sources: [
+    'F. P. Incropera, D. P. DeWitt, Fundamentals of Heat and Mass Transfer, chapter 5, lumped capacitance (from memory)',
+  ],
+  family: 'lumped',
+  sketch: { body: 'lumped', boundary: 'convection' },
+  fields,
+  places: 'none',
+  outputs: {
+    temperature: {},
+    heatGained: { unit: 'J' },
+    remainingFraction: {},
+    completedFraction: {},
+    heatFraction: {},
+    steadyTemperature: {},
+    timeConstant: {},
+  },
+  absentOutputs: {
+    heatFlux: 'A body with one temperature has no heat flux inside.',
+    surfaceHeatFlux: 'Ask heatGained; the film carries h(Tₐ − T).',
+    meanTemperature: 'The one temperature is the mean.',
+  },
+  weight: 1,
+  setUp: 0,
+  cautions: ['food', 'control', 'general'],
+  example: {
+    heatCapacity: 627000,
+    area: 1.8,
+    filmCoefficient: 8,
+    initialTemperature: 60,
+    ambientTemperature: 20,
+    times: [3600, 36000],
+  },
+  resolve(input, refuse): LumpedResolved {
+    const { filmCoefficient, initialTemperature, ambientTemperature, times, outputs, power = 0 } = input
+    const body = resolveBody(input, refuse) ?? nothing
+    refuseEndless(filmCoefficient, power, outputs, refuse)
+    const biot = body.solid && (filmCoefficient * body.length!) / body.solid.conductivity
+    const film = input.correction === 'mean' ? filmCoefficient / (1 + biot! / (body.dimension! + 2)) : filmCoefficient
+    const { capacity, area } = body
+    const step = { initialTemperature, ambientTemperature, times, outputs }
+    return {
+      ...step,
+      body,
+      capacity,
+      conductance: film * area,
+      power,
+      filmCoefficient,
+      ...(biot === undefined ? {} : { biot }),
+    }
+  },
+  solve,
+  echo({ body, filmCoefficient, initialTemperature, ambientTemperature, times, outputs }) {
+    return { ...body.echo, filmCoefficient, initialTemperature, ambientTemperature, times, outputs }
+  },
+  numbers({ biot, body, times }) {
+    if (!body.solid) return {}
+    const rate = body.solid.diffusivity / (body.length! * body.length!)
+    return { biot: biot!, fourier: times.map((time) => rate * time), length: body.length! }
+  },
+  checks({ biot }) {
+    if (biot === undefined) return []
+    return [
+      {
+        id: 'one-temperature-will-do',
+        holds: biot <= 0.1,
+        value: biot,
+        limit: 0.1,
+        text: 'The Biot number is at most 0.1, so one temperature describes the body.',
+      },
+    ]
+  },
+  warnings: ({ filmCoefficient, biot }) => [...filmWarnings(filmCoefficient), ...biotWarnings(biot)],
+  unitOf: (output, { body }) => (output === 'heatGained' ? body.heatUnit : undefined),
+})
+
+/** Stands in for a body that was refused, so that the rest of the input is still examined. */
+const nothing: LumpedBody = { capacity: 1, area: 1, heatUnit: 'J', echo: {} }
+
+/** Without a film a source heats for ever: no end state, and no fraction of one. */
+function refuseEndless(
+  film: number,
+  power: number,
+  outputs: readonly OutputName[],
+  refuse: (issue: Issue) => void,
+): void {
+  if (film !== 0) return
+  const endless: readonly OutputName[] = ['remainingFraction', 'completedFraction', 'heatFraction', 'steadyTemperature']
+  const absent: readonly OutputName[] = power === 0 ? ['timeConstant'] : [...endless, 'timeConstant']
+  outputs.forEach((name, i) => {
+    if (!absent.includes(name)) return
+    const detail = `"${name}": with a film coefficient of 0 ${power === 0 ? 'the body never changes' : 'and a source the body never settles'}.`
+    refuse({ pointer: `#/outputs/${i}`, code: 'output-not-defined', detail, accepted: 'temperature, heatGained' })
+  })
+}
+
+function biotWarnings(biot: number | undefined): Warning[] {
+  if (biot === undefined || biot <= 0.1) return []
+  return [
+    {
+      code: 'lumped-biot-high',
+      text: 'The Biot number is above 0.1: inside and face differ noticeably. At 0.1 a slab is off by 2 % at its centre, a cylinder at 0.2 by 4.8 %, a sphere at 0.3 by 8.1 %.',
+      value: biot,
+    },
+    {
+      code: 'lumped-errs-early',
+      text: 'The time to a temperature errs early, the unsafe side when a core must be cooled or heated.',
+      value: biot,
+    },
+  ]
+}

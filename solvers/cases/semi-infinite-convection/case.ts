@@ -1,0 +1,83 @@
+import { defineCase, type Resolved } from '../../case.ts'
+import { film, initialTemperature, solid } from '../../fields.ts'
+import { filmWarnings } from '../../film.ts'
+import { penetrationDepth } from '../../half-space-reach.ts'
+import { resolveSolid } from '../../solid.ts'
+import { solve, type HalfSpaceInput } from './solve.ts'
+
+type HalfSpaceResolved = HalfSpaceInput & Resolved
+
+const fields = { ...solid, initialTemperature, ...film }
+
+export default defineCase<typeof fields, HalfSpaceResolved>({
+  id: 'semi-infinite-convection',
+  title: 'Half space, convection at the surface',
+  summary: 'A body too deep for its back to be felt meets a fluid at another temperature.',
+  notes:
+    'For ground, thick walls and the first minutes or hours of any body. It holds while the far side has felt nothing: numbers.penetrationDepth is where 1 % of a surface step has arrived at the last time, and the body must be deeper. A film coefficient of 0 leaves the body as it is.',
+  formula: [
+    '\\frac{T - T_i}{T_a - T_i} = e^{-\\eta^2} \\left[\\operatorname{erfcx}(\\eta) - \\operatorname{erfcx}(\\eta + \\beta)\\right]',
+    '\\eta = \\frac{x}{2\\sqrt{at}}, \\qquad \\beta = \\frac{h\\sqrt{at}}{k}, \\qquad \\operatorname{erfcx}(s) = e^{s^2} \\operatorname{erfc}(s)',
+  ],
+  sources: ['H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, section 2.7'],
+  family: 'half-space',
+  sketch: { body: 'half-space', boundary: 'convection' },
+  fields,
+  places: 'depths',
+  outputs: {
+    temperature: {},
+    heatFlux: {},
+    surfaceHeatFlux: {},
+    heatGained: {},
+    remainingFraction: {},
+    completedFraction: {},
+  },
+  absentOutputs: {
+    meanTemperature: 'The body has no end, so its mean stays the initial temperature.',
+    heatFraction: 'The heat that the body takes up in all is infinite.',
+    steadyTemperature: 'The body ends at the ambient temperature, after infinite time.',
+    timeConstant: 'A body without end has no time constant.',
+  },
+  weight: 1,
+  setUp: 0,
+  cautions: ['envelope', 'general'],
+  example: {
+    conductivity: 1.5,
+    density: 1500,
+    specificHeat: 2085,
+    filmCoefficient: 25,
+    initialTemperature: 9,
+    ambientTemperature: -12,
+    depths: [0, 0.5, 1],
+    times: [86400, 864000],
+  },
+  resolve(input, refuse): HalfSpaceResolved {
+    const body = resolveSolid(input, refuse)
+    const { filmCoefficient, initialTemperature, ambientTemperature, times, outputs } = input
+    return {
+      ...body!,
+      filmCoefficient,
+      initialTemperature,
+      ambientTemperature,
+      depths: input.depths ?? [],
+      times,
+      outputs,
+    }
+  },
+  solve,
+  numbers: (input) => ({ penetrationDepth: penetrationDepth(input.diffusivity, input.times) }),
+  checks(input) {
+    const reach = penetrationDepth(input.diffusivity, input.times)
+    const deepest = input.depths.reduce((most, depth) => Math.max(most, depth), 0)
+    return [
+      {
+        id: 'change-has-arrived',
+        holds: deepest <= reach,
+        value: deepest,
+        limit: reach,
+        text: 'The deepest position lies within the depth that 1 % of a surface step has reached at the last time.',
+      },
+    ]
+  },
+  warnings: (input) => filmWarnings(input.filmCoefficient),
+})
