@@ -1,0 +1,81 @@
+import type { Case } from '../../solvers/case.ts'
+import { cases } from '../../solvers/cases/index.ts'
+import { type Call, type CaseOperation, caseOperations } from '../../solvers/operations/index.ts'
+import { caseOperationPath } from '../catalogue/describe.ts'
+import { type Body, operation } from '../operation.ts'
+import { Problem } from '../problems.ts'
+import { MAX_POINTS, MAX_TRY_VALUES } from './limits.ts'
+import { solveMetered } from './solve-metered.ts'
+import { answerOf, inputOf } from './schemas.ts'
+
+/** A validated call with the body it came from, which a worker thread reads again. */
+export interface PreparedCall {
+  call: Call
+  raw: unknown
+}
+
+const bodyOf = (c: Case, o: CaseOperation): Body<PreparedCall> => ({
+  schema: inputOf(c, o),
+  parse: (raw) => ({ call: o.prepare(c, raw, 'full'), raw }),
+})
+
+function metered(c: Case, o: CaseOperation) {
+  return operation({
+    id: `${o.id}-${c.id}`,
+    document: 'openapi',
+    method: 'post',
+    path: caseOperationPath(c.id, o.id),
+    tag: 'Cases',
+    summary: `${c.title}: ${o.title.toLowerCase()}`,
+    description: `${o.summary}\n\n${c.summary}\n\n${c.notes}\n\nPrice: ${priceOf(c)}.`,
+    access: 'key',
+    metered: true,
+    body: bodyOf(c, o),
+    status: 200,
+    answer: answerOf(c, o),
+    example: { body: o.example(c) },
+    caseId: c.id,
+    caseOperation: o.id,
+    handle({ body, caller, call, deps }) {
+      if (body.call.points > MAX_POINTS)
+        throw new Problem('too-many-points', `The call needs ${body.call.points} points; one call may need ${MAX_POINTS}.`)
+      return solveMetered({ case: c.id, operation: o.id, ...body }, caller, call, deps)
+    },
+  })
+}
+
+function unmetered(c: Case, o: CaseOperation) {
+  return operation({
+    id: `try-${o.id}-${c.id}`,
+    document: 'portal',
+    method: 'post',
+    path: `/portal/v1/try/${c.id}/${o.id}`,
+    tag: 'Try',
+    summary: `${c.title}: ${o.title.toLowerCase()} without a key`,
+    description: `The same answer as with a key, for at most ${MAX_TRY_VALUES} numbers. Unmetered and limited per address.`,
+    access: 'public',
+    limiter: 'try',
+    body: bodyOf(c, o),
+    status: 200,
+    answer: answerOf(c, o),
+    problems: ['too-many-values', 'solve-too-slow'],
+    example: { body: o.example(c) },
+    caseId: c.id,
+    caseOperation: o.id,
+    handle({ body, deps }) {
+      if (body.call.values > MAX_TRY_VALUES)
+        throw new Problem('too-many-values', `The call asks for ${body.call.values} numbers; ${MAX_TRY_VALUES} are answered without a key.`)
+      return deps.compute.solve({ case: c.id, operation: o.id, ...body })
+    },
+  })
+}
+
+function priceOf(c: Case): string {
+  const setUp = c.setUp ? ` and ${c.setUp} a call` : ''
+  return `${c.weight} ${c.weight === 1 ? 'point' : 'points'} a number${setUp}, at least 10 a call`
+}
+
+const each = (make: typeof metered) => cases.flatMap((c) => caseOperations.map((o) => make(c, o)))
+
+export const caseOperationList = each(metered)
+export const tryOperations = each(unmetered)

@@ -1,0 +1,24 @@
+import { z } from 'zod'
+import type { Case } from '../../solvers/case.ts'
+import type { CaseOperation } from '../../solvers/operations/index.ts'
+
+const pascal = (id: string) => id.replace(/(^|-)(.)/g, (_, __, letter: string) => letter.toUpperCase())
+
+/* Named once each, so that the documents refer to them by name. */
+const inputs = new Map<string, z.ZodObject>()
+const answers = new Map<string, z.ZodType>()
+
+export function inputOf(c: Case, o: CaseOperation): z.ZodObject {
+  const id = `${pascal(c.id)}${pascal(o.id)}Input`
+  const known = inputs.get(id) ?? o.input(c).meta({ id, example: o.example(c) })
+  inputs.set(id, known)
+  return known
+}
+
+/** The answer in full, or compact where the body asked for that. */
+export function answerOf(c: Case, o: CaseOperation): z.ZodType {
+  const id = `${pascal(c.id)}${pascal(o.id)}Answer`
+  const known = answers.get(id) ?? z.union([o.answer(c).meta({ id }), o.compactAnswer(c).meta({ id: id.replace(/Answer$/, 'CompactAnswer') })])
+  answers.set(id, known)
+  return known
+}

@@ -1,0 +1,63 @@
+import { z } from 'zod'
+import { cautions } from '../../solvers/cautions.ts'
+import { outputNames } from '../../solvers/outputs.ts'
+
+const text = z.string()
+const shape = z.enum(['grid', 'times', 'places', 'single'])
+
+const caseOperationSchema = z.strictObject({
+  id: text,
+  title: text,
+  summary: text,
+  method: z.literal('POST'),
+  path: text.meta({ description: 'Path of the operation under the address of the service.' }),
+})
+
+const summaryShape = {
+  id: text,
+  title: text,
+  summary: text,
+  family: text,
+  sketch: z.strictObject({ body: text, boundary: text }),
+  operations: z.array(caseOperationSchema),
+  weight: z.number().meta({ description: 'Priced points per number of the answer.' }),
+  setUp: z.number().meta({ description: 'Priced points once per call.' }),
+}
+
+export const caseSummarySchema = z.strictObject(summaryShape).meta({ id: 'CaseSummary' })
+export const caseListSchema = z.strictObject({ cases: z.array(caseSummarySchema) }).meta({ id: 'CaseList' })
+
+const fieldSchema = z
+  .strictObject({
+    name: text,
+    required: z.boolean(),
+    title: text.optional(),
+    symbol: text.optional(),
+    unit: text.optional().meta({ description: 'UCUM code of a plain number.' }),
+    hint: text.optional(),
+    accepted: text.optional(),
+    typical: z.array(z.number()).optional().meta({ description: 'Lowest and highest value met in practice.' }),
+    schema: z.record(text, z.unknown()).meta({ description: 'JSON Schema of the field.' }),
+  })
+  .meta({ id: 'CaseField' })
+
+const outputSchema = z
+  .strictObject({ name: z.enum(outputNames), label: text, symbol: text, unit: text, shape, text })
+  .meta({ id: 'CaseOutput' })
+
+export const caseSchema = z
+  .strictObject({
+    ...summaryShape,
+    notes: text,
+    formula: z.array(text).meta({ description: 'The formula in TeX, one entry a line.' }),
+    sources: z.array(text),
+    places: z.enum(['depths', 'none']),
+    fields: z.array(fieldSchema),
+    outputs: z.array(outputSchema),
+    absentOutputs: z.array(z.strictObject({ name: z.enum(outputNames), reason: text })),
+    cautions: z.array(z.strictObject({ id: z.enum(Object.keys(cautions)), version: z.number(), text })),
+    warnings: z.array(z.strictObject({ code: text, title: text, text })),
+    example: z.record(text, z.unknown()),
+    solver: text.meta({ description: 'Version of the numbers.' }),
+  })
+  .meta({ id: 'Case' })

@@ -1,0 +1,20 @@
+import type pg from 'pg'
+import type { Logger } from 'pino'
+import type { Compute } from './compute/compute.ts'
+import type { Config } from './config.ts'
+import type { Database } from './database.ts'
+import type { Limits } from './http/limits.ts'
+import type { Meter } from './metering/meter.ts'
+import type { RequestLog } from './requests/log.ts'
+
+/** What handlers are given. Tests give the same, on a database of their own. */
+export interface Deps {
+  config: Config
+  log: Logger
+  pool: pg.Pool
+  db: Database
+  compute: Compute
+  meter: Meter
+  requestLog: RequestLog
+  limits: Limits
+}

@@ -1,0 +1,21 @@
+import { v7 as uuidv7 } from 'uuid'
+
+type Kind = 'req' | 'acct' | 'prsn' | 'stff' | 'key' | 'aud'
+
+/** Where ids come from: now and chance, unless a seed says otherwise. */
+export interface IdSource {
+  msecs?: number
+  random?: Uint8Array
+}
+
+/** Ids are time-ordered; a request's day is read back from its id. */
+export function newId(kind: Kind, source: IdSource = {}): string {
+  return `${kind}_${uuidv7(source).replaceAll('-', '')}`
+}
+
+const requestId = /^req_[0-9a-f]{12}7[0-9a-f]{3}[89ab][0-9a-f]{15}$/
+
+/** The instant at which a request began, or undefined where the text is no request id. */
+export function instantOf(id: string): Date | undefined {
+  return requestId.test(id) ? new Date(Number.parseInt(id.slice(4, 16), 16)) : undefined
+}

@@ -1,0 +1,46 @@
+import { createHash, randomInt } from 'node:crypto'
+import { crc32 } from 'node:zlib'
+
+const digits = '0123456789ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz'
+const LENGTH = 32
+const form = /^soak_(trial|metered)_([0-9A-Za-z]{32})([0-9A-Za-z]{6})$/
+export type Environment = 'trial'
+
+/** Base62 of the CRC-32, so that scanners and the gate can tell a misspelt key without looking it up. */
+export function checksum(random: string): string {
+  let rest = crc32(random)
+  let text = ''
+  for (let i = 0; i < 6; i++) {
+    text = digits[rest % 62] + text
+    rest = Math.floor(rest / 62)
+  }
+  return text
+}
+
+/** A new key; `pick` chooses digits and is chance unless a test says otherwise. */
+export function newKey(environment: Environment, pick: (below: number) => number = randomInt): string {
+  const random = Array.from({ length: LENGTH }, () => digits[pick(62)]).join('')
+  return `soak_${environment}_${random}${checksum(random)}`
+}
+
+export function isKey(text: string): boolean {
+  const match = form.exec(text)
+  return match !== null && checksum(match[2] as string) === match[3]
+}
+
+/** The only form in which a key is kept. */
+export function hashKey(key: string): Buffer {
+  return createHash('sha256').update(key).digest()
+}
+
+/** What may be shown of a key: its environment and the first six characters. */
+export function prefixOf(key: string): string {
+  return key.replace(/^(soak_[a-z]+_.{6}).*$/, '$1…')
+}
+
+const anyKey = /soak_(trial|metered)_[0-9A-Za-z]{38}/g
+
+/** A text in which no key can be read any more. */
+export function withoutKeys(text: string): string {
+  return text.replace(anyKey, prefixOf)
+}

@@ -1,0 +1,61 @@
+import type pg from 'pg'
+import type { Logger } from 'pino'
+import { databaseIsAway } from '../database.ts'
+import { Problem } from '../problems.ts'
+import { type Charged, chargeAll } from './charge.ts'
+import { gather } from './gather.ts'
+import type { Charge } from './grant.ts'
+import { refundCharge } from './refund.ts'
+import { durably, UnknownOutcome } from './transaction.ts'
+
+/** Transactions a process has under way at once, and charges that go in one. */
+const AT_ONCE = 2
+const MOST = 500
+
+export interface Meter {
+  /** Spends before the work; throws the problem of a refusal. */
+  spend(charge: Charge): Promise<{ remaining: number }>
+  /** Counters the charge of a call that failed after it. */
+  refund(requestId: string): Promise<void>
+}
+
+type Outcome = { charged: Charged } | { error: unknown }
+
+export function createMeter(pool: pg.Pool, log: Logger): Meter {
+  const charge = gather((charges: Charge[]) => chargeGathered(pool, charges), { atOnce: AT_ONCE, most: MOST })
+
+  async function spend(one: Charge): Promise<{ remaining: number }> {
+    const outcome = await charge(one)
+    if ('error' in outcome) {
+      if (outcome.error instanceof UnknownOutcome) log.warn({ requestId: one.requestId }, 'a charge has an unknown outcome')
+      throw outcome.error
+    }
+    const { decision, resetsAt } = outcome.charged
+    if (decision.granted) return { remaining: decision.remaining }
+    const whose = decision.level === 'key' ? 'the key' : 'the account'
+    throw new Problem(
+      'quota-exceeded',
+      `The call needs ${one.points} points; ${whose} has ${decision.remaining} of ${decision.limit} left in this period.`,
+      { resetsAt: resetsAt.toISOString(), headers: { 'Points-Remaining': String(decision.remaining) } },
+    )
+  }
+
+  async function refund(requestId: string): Promise<void> {
+    await durably(pool, (client) => refundCharge(client, requestId))
+  }
+
+  return { spend, refund }
+}
+
+/* One transaction for all. Where it fails for one call's sake the others must not fail with it: call by call then. */
+async function chargeGathered(pool: pg.Pool, charges: Charge[]): Promise<Outcome[]> {
+  try {
+    const all = await durably(pool, (client) => chargeAll(client, charges))
+    return all.map((charged) => ({ charged }))
+  } catch (error) {
+    if (charges.length === 1 || error instanceof UnknownOutcome || databaseIsAway(error)) return charges.map(() => ({ error }))
+    const outcomes: Outcome[] = []
+    for (const one of charges) outcomes.push(...(await chargeGathered(pool, [one])))
+    return outcomes
+  }
+}

@@ -1,0 +1,145 @@
+import { z } from 'zod'
+import { parse } from '../solvers/validate.ts'
+import type { Deps } from './deps.ts'
+import type { Permission, Reach, Role, StaffPermission, StaffRole } from './permissions.ts'
+import type { ProblemCode } from './problems.ts'
+
+export interface KeyCaller {
+  kind: 'key'
+  keyId: string
+  accountId: string
+  environment: 'trial'
+}
+export interface MemberCaller {
+  kind: 'session'
+  personId: string
+  accountId: string
+  role: Role
+  /** How far the operation's permission reaches for this role. */
+  reach: Reach
+}
+export interface StaffCaller {
+  kind: 'staff'
+  staffId: string
+  role: StaffRole
+}
+interface Callers {
+  public: { kind: 'public' }
+  key: KeyCaller
+  session: MemberCaller
+  staff: StaffCaller
+}
+export type Access = keyof Callers
+export type Caller = Callers[Access]
+
+/** What the request log keeps of a call beside status and time; handlers add to it. */
+export interface CallRecord {
+  requestId: string
+  accountId?: string
+  keyId?: string
+  caseId?: string
+  operation?: string
+  points?: number
+  bytesIn?: number
+  problem?: object
+}
+
+/** A session as sign-in and sign-out see it. */
+export interface SessionHandle {
+  start(content: Record<string, string>): Promise<void>
+  end(): Promise<void>
+}
+
+export interface Context<P, Q, B, A extends Access> {
+  params: P
+  query: Q
+  body: B
+  caller: Callers[A]
+  call: CallRecord
+  session: SessionHandle
+  deps: Deps
+}
+
+export interface Reply {
+  body?: unknown
+  /** The body as JSON text, where it was written elsewhere. */
+  text?: string
+  etag?: string
+  headers?: Record<string, string>
+}
+
+export interface Body<B> {
+  schema: z.ZodType
+  /** Throws DomainError. */
+  parse(raw: unknown): B
+}
+
+export type Method = 'get' | 'post'
+export type LimiterName = 'sign-up' | 'sign-in' | 'staff-sign-in' | 'try'
+
+export type Tag = 'Catalogue' | 'Cases' | 'Usage' | 'Requests' | 'Health' | 'Session' | 'Keys' | 'Try'
+
+interface Description<P, Q, B, A extends Access> {
+  id: string
+  document: 'openapi' | 'portal' | 'support'
+  method: Method
+  /** OpenAPI form: `/v1/cases/{caseId}`. */
+  path: string
+  tag: Tag
+  summary: string
+  description?: string
+  access: A
+  permission?: A extends 'session' ? Permission : A extends 'staff' ? StaffPermission : never
+  /** Starts or ends a session although it needs none. */
+  session?: boolean
+  metered?: boolean
+  limiter?: LimiterName
+  params?: z.ZodObject & z.ZodType<P>
+  query?: z.ZodObject & z.ZodType<Q>
+  body?: Body<B>
+  status: 200 | 201 | 204
+  answer?: z.ZodType
+  /** Problems of its own, beside those that follow from access, body and query. */
+  problems?: readonly ProblemCode[]
+  example?: { params?: Record<string, string>; body?: Record<string, unknown> }
+  caseId?: string
+  caseOperation?: string
+  handle(context: Context<P, Q, B, A>): Promise<Reply> | Reply
+}
+
+export type Operation = Omit<Description<unknown, unknown, unknown, Access>, 'handle' | 'permission'> & {
+  permission?: Permission | StaffPermission
+  handle(context: Context<unknown, unknown, unknown, Access>): Promise<Reply> | Reply
+}
+
+/** An endpoint, described once: routes, documents and common tests are made from it. */
+export function operation<P, Q, B, A extends Access>(description: Description<P, Q, B, A>): Operation {
+  const { id, access, permission } = description
+  if ((access === 'session' || access === 'staff') && !permission) throw new Error(`${id} names no permission`)
+  return description as unknown as Operation
+}
+
+/** A JSON body that its schema describes whole. */
+export function jsonBody<S extends z.ZodObject>(schema: S): Body<z.output<S>> {
+  return { schema, parse: (raw) => parse(schema, raw) }
+}
+
+/** Needs the cookie of a session, to read or to change it. */
+export function usesSession(o: Operation): boolean {
+  return o.session === true || o.access === 'session' || o.access === 'staff'
+}
+
+/** Every problem an operation can answer: its own, and those of its access, body, query and limits. */
+export function problemsOf(o: Operation): ProblemCode[] {
+  const codes: ProblemCode[] = ['method-not-allowed', 'not-acceptable', 'internal', 'unavailable', 'malformed-request']
+  codes.push('invalid-parameter', 'header-too-large', 'request-timeout')
+  if (o.access === 'key') codes.push('key-missing', 'key-unknown')
+  if (o.access === 'session' || o.access === 'staff') codes.push('sign-in-needed', 'forbidden')
+  if (usesSession(o) && o.method !== 'get') codes.push('cross-site')
+  if (o.params) codes.push('not-found')
+  if (o.body)
+    codes.push('malformed-json', 'duplicate-name', 'too-deep', 'body-too-large', 'unsupported-media-type', 'invalid-input')
+  if (o.metered) codes.push('quota-exceeded', 'too-many-points', 'solve-too-slow')
+  if (o.limiter) codes.push('rate-limited')
+  return [...new Set([...codes, ...(o.problems ?? [])])].sort()
+}

@@ -1,0 +1,24 @@
+import { accountOperations } from './accounts/operations.ts'
+import { caseOperationList, tryOperations } from './cases/operations.ts'
+import { catalogueOperations } from './catalogue/operations.ts'
+import { healthOperations } from './health/operations.ts'
+import { keyOperations } from './keys/operations.ts'
+import type { Operation } from './operation.ts'
+import { keyRequest, memberRequestOperations } from './requests/operations.ts'
+import { supportOperations } from './support/operations.ts'
+import { keyUsage, memberUsage } from './usage/operations.ts'
+
+/** Every endpoint of the service. Routes, documents and common tests are made from this list. */
+export const operations: readonly Operation[] = [
+  ...catalogueOperations,
+  ...caseOperationList,
+  keyUsage,
+  keyRequest,
+  ...healthOperations,
+  ...accountOperations,
+  ...keyOperations,
+  memberUsage,
+  ...memberRequestOperations,
+  ...tryOperations,
+  ...supportOperations,
+]

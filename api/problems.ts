@@ -1,0 +1,258 @@
+import { type DomainCode, type Issue, domainCodes } from '../solvers/errors.ts'
+
+interface ProblemDescription {
+  status: number
+  title: string
+  text: string
+  /** True where the same call may succeed later without a change. */
+  retryable: boolean
+}
+
+/** Every problem the service can answer. Documents, error handler and the pages of the portal read this table. */
+export const problems = {
+  'malformed-request': {
+    status: 400,
+    title: 'The request cannot be read',
+    text: 'The request line, path or headers are not well-formed HTTP.',
+    retryable: false,
+  },
+  'malformed-json': {
+    status: 400,
+    title: 'The body is not JSON',
+    text: 'The body must be one JSON value in UTF-8.',
+    retryable: false,
+  },
+  'duplicate-name': {
+    status: 400,
+    title: 'A name stands twice in one object',
+    text: 'JSON parsers disagree on which of two equal names counts, so neither is used.',
+    retryable: false,
+  },
+  'too-deep': {
+    status: 400,
+    title: 'The body is nested too deeply',
+    text: 'A body may be nested 32 levels deep. No operation needs more than a few.',
+    retryable: false,
+  },
+  'key-missing': {
+    status: 401,
+    title: 'A key is needed',
+    text: 'Send a key as "Authorization: Bearer <key>". Keys are made in the portal.',
+    retryable: false,
+  },
+  'key-unknown': {
+    status: 401,
+    title: 'The key is not valid',
+    text: 'The key is misspelt, revoked or was never given out. A key that was lost cannot be shown again: make a new one.',
+    retryable: false,
+  },
+  'sign-in-needed': {
+    status: 401,
+    title: 'Sign in first',
+    text: 'The session has ended or was never started.',
+    retryable: false,
+  },
+  'sign-in-refused': {
+    status: 401,
+    title: 'The mail address and password do not fit',
+    text: 'No account has this mail address together with this password.',
+    retryable: false,
+  },
+  forbidden: {
+    status: 403,
+    title: 'Not allowed in this role',
+    text: 'The role in this account does not include this. The owner of the account can change roles.',
+    retryable: false,
+  },
+  'cross-site': {
+    status: 403,
+    title: 'The call comes from another site',
+    text: 'Changes are accepted only from the pages of the portal itself.',
+    retryable: false,
+  },
+  'not-found': {
+    status: 404,
+    title: 'There is nothing here',
+    text: 'The path, or what it names, does not exist or belongs to another account.',
+    retryable: false,
+  },
+  'method-not-allowed': {
+    status: 405,
+    title: 'The method does not apply',
+    text: 'The path exists, and the Allow header lists its methods.',
+    retryable: false,
+  },
+  'not-acceptable': {
+    status: 406,
+    title: 'No acceptable form of answer',
+    text: 'The answer comes as application/json only, and the Accept header excludes it.',
+    retryable: false,
+  },
+  'request-timeout': {
+    status: 408,
+    title: 'The request came too slowly',
+    text: 'The request was not complete in time.',
+    retryable: true,
+  },
+  'mail-in-use': {
+    status: 409,
+    title: 'The mail address is in use',
+    text: 'Somebody signed up with this mail address before. Sign in instead.',
+    retryable: false,
+  },
+  'too-many-keys': {
+    status: 409,
+    title: 'The account has too many keys',
+    text: 'An account may have 100 keys that are not revoked. Revoke one that is no longer used.',
+    retryable: false,
+  },
+  'body-too-large': {
+    status: 413,
+    title: 'The body is too large',
+    text: 'A body may have at most 4 MB, counted after decompression.',
+    retryable: false,
+  },
+  'too-many-points': {
+    status: 413,
+    title: 'Too much for one call',
+    text: 'One call answers at most 200,000 priced points. Ask for fewer times or places, or split the call.',
+    retryable: false,
+  },
+  'too-many-values': {
+    status: 413,
+    title: 'Too much for a trial without a key',
+    text: 'Without a key, one call answers at most 10,000 numbers.',
+    retryable: false,
+  },
+  'unsupported-media-type': {
+    status: 415,
+    title: 'The body is of another kind',
+    text: 'Bodies are application/json in UTF-8.',
+    retryable: false,
+  },
+  'invalid-input': {
+    status: 422,
+    title: 'The input is refused',
+    text: 'Each entry of errors names the field, what is wrong with it and what would be accepted.',
+    retryable: false,
+  },
+  'invalid-parameter': {
+    status: 422,
+    title: 'A parameter is refused',
+    text: 'Each entry of errors names the query parameter, what is wrong with it and what would be accepted.',
+    retryable: false,
+  },
+  'rate-limited': {
+    status: 429,
+    title: 'Too many calls in a short time',
+    text: 'Wait for the time that Retry-After states.',
+    retryable: true,
+  },
+  'quota-exceeded': {
+    status: 429,
+    title: 'The points of this period are used up',
+    text: 'The call needs more points than are left. resetsAt says when the next period starts.',
+    retryable: false,
+  },
+  'header-too-large': {
+    status: 431,
+    title: 'The headers are too large',
+    text: 'The request line and headers together may have at most 16 kB.',
+    retryable: false,
+  },
+  internal: {
+    status: 500,
+    title: 'A fault of ours',
+    text: 'The call failed for a reason that is not yours. It is on record under its request id, and costs nothing.',
+    retryable: false,
+  },
+  'solve-too-slow': {
+    status: 503,
+    title: 'The solve took too long',
+    text: 'A solve may take 10 seconds. The call costs nothing. Try later, or ask for fewer numbers.',
+    retryable: true,
+  },
+  unavailable: {
+    status: 503,
+    title: 'The service is not ready',
+    text: 'A part of the service does not answer just now. The call costs nothing.',
+    retryable: true,
+  },
+} as const satisfies Record<string, ProblemDescription>
+
+export type ProblemCode = keyof typeof problems
+export const problemCodes = Object.keys(problems) as ProblemCode[]
+export { domainCodes }
+
+/** One entry of `errors`: what is refused, where it stands, and what would do. */
+export type ProblemIssue = { code: DomainCode; detail: string; accepted?: string } & (
+  | { pointer: string }
+  | { parameter: string }
+)
+
+interface Extras {
+  errors?: readonly ProblemIssue[]
+  /** Start of the next period. */
+  resetsAt?: string
+  headers?: Record<string, string>
+}
+
+/** A refusal or failure with a name; the error handler answers it as problem details. */
+export class Problem extends Error {
+  readonly code: ProblemCode
+  readonly extras: Extras
+  constructor(code: ProblemCode, detail?: string, extras: Extras = {}) {
+    super(detail ?? problems[code].text)
+    this.name = 'Problem'
+    this.code = code
+    this.extras = extras
+  }
+  get status(): number {
+    return problems[this.code].status
+  }
+}
+
+export interface ProblemDetails {
+  type: string
+  code: ProblemCode
+  title: string
+  status: number
+  detail: string
+  retryable: boolean
+  requestId?: string
+  resetsAt?: string
+  errors?: readonly ProblemIssue[]
+}
+
+/** The body of RFC 9457 for a problem. */
+export function problemDetails(problem: Problem, publicUrl: string, requestId?: string): ProblemDetails {
+  const { status, title, retryable } = problems[problem.code]
+  const { errors, resetsAt } = problem.extras
+  return {
+    type: `${publicUrl}/problems/${problem.code}`,
+    code: problem.code,
+    title,
+    status,
+    detail: problem.message,
+    retryable,
+    ...(requestId ? { requestId } : {}),
+    ...(resetsAt ? { resetsAt } : {}),
+    ...(errors ? { errors } : {}),
+  }
+}
+
+/** A refused body, from the issues of a DomainError. */
+export function invalidInput(issues: readonly Issue[]): Problem {
+  return new Problem('invalid-input', issues[0]?.detail, { errors: issues })
+}
+
+/** Refused query parameters, from the issues of a DomainError. */
+export function invalidParameter(issues: readonly Issue[]): Problem {
+  const errors = issues.map(({ pointer, ...rest }) => ({ parameter: parameterOf(pointer), ...rest }))
+  return new Problem('invalid-parameter', issues[0]?.detail, { errors })
+}
+
+function parameterOf(pointer: string): string {
+  const name = pointer.split('/')[1] ?? ''
+  return name.replaceAll('~1', '/').replaceAll('~0', '~')
+}

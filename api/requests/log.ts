@@ -1,0 +1,90 @@
+import type pg from 'pg'
+import type { Logger } from 'pino'
+import { SOLVER_VERSION } from '../../solvers/version.ts'
+import { gather } from '../metering/gather.ts'
+
+export interface LogEntry {
+  at: Date
+  id: string
+  accountId?: string
+  keyId?: string
+  method: string
+  path: string
+  caseId?: string
+  operation?: string
+  status: number
+  milliseconds: number
+  bytesIn: number
+  bytesOut: number
+  points: number
+  problem?: object
+}
+
+const names = ['at', 'id', 'accountId', 'keyId', 'method', 'path', 'caseId', 'operation', 'status', 'milliseconds'] as const
+const more = ['bytesIn', 'bytesOut', 'points', 'problem'] as const
+
+const insert = {
+  name: 'log-calls',
+  text: `
+    INSERT INTO log (at, id, account_id, key_id, method, path, case_id, operation, status, milliseconds,
+      bytes_in, bytes_out, points, problem, solver)
+    SELECT e.*, $15 FROM unnest($1::timestamptz[], $2::text[], $3::text[], $4::text[], $5::text[], $6::text[], $7::text[],
+      $8::text[], $9::smallint[], $10::real[], $11::int[], $12::int[], $13::bigint[], $14::json[]) e
+    ON CONFLICT DO NOTHING`,
+}
+
+const touchKeys = {
+  name: 'touch-keys',
+  text: `
+    UPDATE keys k SET last_used_at = e.at
+    FROM (SELECT key_id, max(at) AS at FROM unnest($1::text[], $2::timestamptz[]) u(key_id, at) GROUP BY key_id) e
+    WHERE k.id = e.key_id AND (k.last_used_at IS NULL OR k.last_used_at < e.at - interval '5 seconds')`,
+}
+
+/** Writes log rows, and when each key was last used. */
+export async function insertLog(db: pg.Pool | pg.ClientBase, entries: readonly LogEntry[]): Promise<void> {
+  const columns = [...names, ...more].map((name) =>
+    entries.map((e) => (name === 'problem' ? (e.problem ? JSON.stringify(e.problem) : null) : (e[name] ?? null))),
+  )
+  await db.query({ ...insert, values: [...columns, SOLVER_VERSION] })
+  const used = entries.filter((e) => e.keyId)
+  if (used.length > 0) await db.query({ ...touchKeys, values: [used.map((e) => e.keyId), used.map((e) => e.at)] })
+}
+
+/** Rows that wait for the database; more than these are counted and dropped rather than kept in memory. */
+const MOST_WAITING = 20_000
+
+export interface RequestLog {
+  add(entry: LogEntry): void
+  /** Resolves once nothing waits. */
+  flush(): Promise<void>
+}
+
+export function createRequestLog(pool: pg.Pool, log: Logger): RequestLog {
+  const write = gather(
+    async (entries: LogEntry[]) => {
+      await insertLog(pool, entries)
+      return entries
+    },
+    { atOnce: 1, most: 1000 },
+  )
+  const waiting = new Set<Promise<unknown>>()
+
+  function add(entry: LogEntry): void {
+    if (waiting.size >= MOST_WAITING) {
+      log.error({ requestId: entry.id }, 'a call could not be logged: too many wait')
+      return
+    }
+    const written = write(entry)
+      .catch((error: Error) => log.error({ requestId: entry.id, error: error.message }, 'a call could not be logged'))
+      .finally(() => waiting.delete(written))
+    waiting.add(written)
+  }
+
+  return {
+    add,
+    async flush() {
+      await Promise.all(waiting)
+    },
+  }
+}

@@ -1,0 +1,202 @@
+import { sql } from 'drizzle-orm'
+import {
+  type AnyPgColumn,
+  bigint,
+  check,
+  customType,
+  date,
+  index,
+  integer,
+  json,
+  pgTable,
+  primaryKey,
+  real,
+  smallint,
+  text,
+  timestamp,
+  uniqueIndex,
+} from 'drizzle-orm/pg-core'
+
+const bytes = customType<{ data: Buffer }>({ dataType: () => 'bytea' })
+const instant = () => timestamp({ withTimezone: true, mode: 'date' })
+const points = () => bigint({ mode: 'number' })
+const createdAt = () => instant().notNull().defaultNow()
+const oneOf = (name: string, column: AnyPgColumn, values: readonly string[]) =>
+  check(name, sql`${column} in (${sql.raw(values.map((v) => `'${v}'`).join(', '))})`)
+
+export const accounts = pgTable('accounts', {
+  id: text().primaryKey(),
+  name: text().notNull(),
+  /** Points of a new trial period; a period that has begun keeps the limit in its own row. */
+  trialLimit: points().notNull().default(100_000),
+  createdAt: createdAt(),
+})
+
+export const people = pgTable(
+  'people',
+  {
+    id: text().primaryKey(),
+    mail: text().notNull(),
+    name: text().notNull(),
+    passwordHash: text().notNull(),
+    createdAt: createdAt(),
+  },
+  (t) => [uniqueIndex('people_mail').on(t.mail)],
+)
+
+export const memberships = pgTable(
+  'memberships',
+  {
+    accountId: text().notNull().references(() => accounts.id),
+    personId: text().notNull().references(() => people.id),
+    role: text({ enum: ['owner', 'integrator', 'reader'] }).notNull(),
+    createdAt: createdAt(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.accountId, t.personId] }),
+    index('memberships_person').on(t.personId),
+    oneOf('memberships_role', t.role, ['owner', 'integrator', 'reader']),
+  ],
+)
+
+export const staff = pgTable(
+  'staff',
+  {
+    id: text().primaryKey(),
+    mail: text().notNull(),
+    name: text().notNull(),
+    passwordHash: text().notNull(),
+    role: text({ enum: ['support', 'supervisor'] }).notNull(),
+    createdAt: createdAt(),
+  },
+  (t) => [uniqueIndex('staff_mail').on(t.mail), oneOf('staff_role', t.role, ['support', 'supervisor'])],
+)
+
+/* Members and staff never share a session, so they do not share a table. */
+const sessionColumns = () => ({ sid: text().primaryKey(), sess: json().notNull(), expire: instant().notNull() })
+export const sessions = pgTable('sessions', sessionColumns(), (t) => [index('sessions_expire').on(t.expire)])
+export const staffSessions = pgTable('staff_sessions', sessionColumns(), (t) => [
+  index('staff_sessions_expire').on(t.expire),
+])
+
+export const keys = pgTable(
+  'keys',
+  {
+    id: text().primaryKey(),
+    accountId: text().notNull().references(() => accounts.id),
+    environment: text({ enum: ['trial'] }).notNull(),
+    name: text().notNull(),
+    /** SHA-256 of the key; the key itself is kept nowhere. */
+    hash: bytes().notNull(),
+    prefix: text().notNull(),
+    quota: points(),
+    createdBy: text().notNull().references(() => people.id),
+    createdAt: createdAt(),
+    lastUsedAt: instant(),
+    revokedAt: instant(),
+  },
+  (t) => [
+    uniqueIndex('keys_hash').on(t.hash),
+    index('keys_account').on(t.accountId, t.id),
+    index('keys_prefix').on(t.prefix),
+    oneOf('keys_environment', t.environment, ['trial']),
+    check('keys_quota', sql`${t.quota} >= 0`),
+  ],
+)
+
+/** What an account may use and has used; the row is locked while points are spent. */
+export const periods = pgTable(
+  'periods',
+  {
+    accountId: text().notNull().references(() => accounts.id),
+    environment: text({ enum: ['trial'] }).notNull(),
+    period: date({ mode: 'string' }).notNull(),
+    limit: points().notNull(),
+    used: points().notNull().default(0),
+  },
+  (t) => [primaryKey({ columns: [t.accountId, t.environment, t.period] }), check('periods_used', sql`${t.used} >= 0`)],
+)
+
+export const keyPeriods = pgTable(
+  'key_periods',
+  {
+    keyId: text().notNull().references(() => keys.id),
+    period: date({ mode: 'string' }).notNull(),
+    /** Null where the key has no quota of its own. */
+    limit: points(),
+    used: points().notNull().default(0),
+  },
+  (t) => [primaryKey({ columns: [t.keyId, t.period] }), check('key_periods_used', sql`${t.used} >= 0`)],
+)
+
+/** Insert-only, partitioned by month of the period; a refund is a negative entry in its charge's period. */
+export const ledger = pgTable(
+  'ledger',
+  {
+    period: date({ mode: 'string' }).notNull(),
+    requestId: text().notNull(),
+    kind: text({ enum: ['charge', 'refund'] }).notNull(),
+    accountId: text().notNull(),
+    keyId: text().notNull(),
+    environment: text({ enum: ['trial'] }).notNull(),
+    caseId: text(),
+    points: points().notNull(),
+    at: createdAt(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.period, t.requestId, t.kind] }),
+    index('ledger_account').on(t.accountId, t.period),
+    oneOf('ledger_kind', t.kind, ['charge', 'refund']),
+  ],
+)
+
+/** One row a call, partitioned by day; never a body, never a key. */
+export const log = pgTable(
+  'log',
+  {
+    at: instant().notNull(),
+    id: text().notNull(),
+    accountId: text(),
+    keyId: text(),
+    method: text().notNull(),
+    path: text().notNull(),
+    caseId: text(),
+    operation: text(),
+    status: smallint().notNull(),
+    milliseconds: real().notNull(),
+    bytesIn: integer().notNull(),
+    bytesOut: integer().notNull(),
+    points: points().notNull(),
+    problem: json(),
+    solver: text().notNull(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.at, t.id] }),
+    index('log_account').on(t.accountId, t.at, t.id),
+    index('log_key').on(t.keyId, t.at, t.id),
+    index('log_failed').on(t.at).where(sql`${t.status} >= 500`),
+  ],
+)
+
+/** Who did what; ids only, so that a person can be erased and the record stays. */
+export const audit = pgTable(
+  'audit',
+  {
+    id: text().primaryKey(),
+    at: createdAt(),
+    actorKind: text({ enum: ['person', 'staff'] }).notNull(),
+    actorId: text().notNull(),
+    accountId: text(),
+    action: text().notNull(),
+    subject: text(),
+    reason: text(),
+  },
+  (t) => [index('audit_account').on(t.accountId, t.at), oneOf('audit_actor', t.actorKind, ['person', 'staff'])],
+)
+
+/** Counters of calls by address; unlogged, for they may be lost with a crash. */
+export const rateLimits = pgTable('rate_limits', {
+  key: text().primaryKey(),
+  hits: integer().notNull(),
+  resetsAt: instant().notNull(),
+})
