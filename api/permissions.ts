@@ -42,3 +42,8 @@ export function rolesWith(permission: Permission | StaffPermission): string[] {
   const staff = permission in staffPermissions ? staffPermissions[permission as StaffPermission] : []
   return [...Object.keys(entry), ...staff]
 }
+
+/** What a role may do, for the pages that show it. */
+export function permissionsOf(role: Role): Permission[] {
+  return (Object.keys(permissions) as Permission[]).filter((permission) => reachOf(role, permission))
+}

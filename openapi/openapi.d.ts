@@ -259,6 +259,8 @@ export interface components {
             weight: number;
             /** @description Priced points once per call. */
             setUp: number;
+            /** @description Points that a call costs at least. */
+            leastCharge: number;
             notes: string;
             /** @description The formula in TeX, one entry a line. */
             formula: string[];
@@ -340,6 +342,8 @@ export interface components {
             weight: number;
             /** @description Priced points once per call. */
             setUp: number;
+            /** @description Points that a call costs at least. */
+            leastCharge: number;
         };
         Contract: {
             [key: string]: unknown;

@@ -994,6 +994,8 @@ export interface components {
             };
             /** @enum {string} */
             role: "owner" | "integrator" | "reader";
+            /** @description What the role may do. */
+            permissions: string[];
         };
         SignIn: {
             /**

@@ -35,6 +35,7 @@ export const sessionSchema = z
     person: z.strictObject({ name: z.string(), mail: z.string() }),
     account: z.strictObject({ id: z.string(), name: z.string() }),
     role: z.enum(roles),
+    permissions: z.array(z.string()).meta({ description: 'What the role may do.' }),
   })
   .meta({ id: 'Session' })
 

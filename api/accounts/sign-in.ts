@@ -2,6 +2,7 @@ import { and, eq } from 'drizzle-orm'
 import { accounts, memberships, people, staff } from '../../drizzle/schema.ts'
 import type { Database } from '../database.ts'
 import type { Deps } from '../deps.ts'
+import { permissionsOf } from '../permissions.ts'
 import { Problem } from '../problems.ts'
 
 interface Credentials {
@@ -44,7 +45,8 @@ export async function readSession(db: Database, personId: string, accountId: str
     .innerJoin(people, eq(people.id, memberships.personId))
     .innerJoin(accounts, eq(accounts.id, memberships.accountId))
     .where(and(eq(memberships.personId, personId), eq(memberships.accountId, accountId)))
-  return row
+  if (!row) throw new Problem('sign-in-needed')
+  return { ...row, permissions: permissionsOf(row.role) }
 }
 
 export async function staffSession(db: Database, staffId: string) {

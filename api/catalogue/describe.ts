@@ -6,6 +6,7 @@ import { caseOperations } from '../../solvers/operations/index.ts'
 import { solve } from '../../solvers/operations/solve.ts'
 import { SOLVER_VERSION } from '../../solvers/version.ts'
 import { warningCodes } from '../../solvers/warnings.ts'
+import { FLOOR } from '../cases/limits.ts'
 
 /** Where an operation of a case is asked. */
 export function caseOperationPath(caseId: string, operationId: string): string {
@@ -21,7 +22,7 @@ export function summaryOf(c: Case) {
     method: 'POST',
     path: caseOperationPath(id, o.id),
   }))
-  return { id, title, summary, family, sketch, operations, weight, setUp }
+  return { id, title, summary, family, sketch, operations, weight, setUp, leastCharge: FLOOR }
 }
 
 function fieldsOf(c: Case) {

@@ -22,6 +22,7 @@ const summaryShape = {
   operations: z.array(caseOperationSchema),
   weight: z.number().meta({ description: 'Priced points per number of the answer.' }),
   setUp: z.number().meta({ description: 'Priced points once per call.' }),
+  leastCharge: z.number().meta({ description: 'Points that a call costs at least.' }),
 }
 
 export const caseSummarySchema = z.strictObject(summaryShape).meta({ id: 'CaseSummary' })

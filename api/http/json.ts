@@ -1,4 +1,4 @@
-import { SyntaxKind, createScanner } from 'jsonc-parser'
+import { visit } from 'jsonc-parser'
 import { Problem } from '../problems.ts'
 
 /** Bytes of a body, after decompression. */
@@ -40,20 +40,16 @@ function depthOf(text: string): number {
   return deepest
 }
 
-/* A text that is a name is followed by a colon; each object has its own set of names. */
+/* Each open object has its own set of names. Only ever given a text that is JSON and not deep. */
 function refuseEqualNames(text: string): void {
-  const scanner = createScanner(text, true)
-  const open: (Set<string> | null)[] = []
-  let last = ''
-  for (let token = scanner.scan(); token !== SyntaxKind.EOF; token = scanner.scan()) {
-    if (token === SyntaxKind.OpenBraceToken) open.push(new Set())
-    else if (token === SyntaxKind.OpenBracketToken) open.push(null)
-    else if (token === SyntaxKind.CloseBraceToken || token === SyntaxKind.CloseBracketToken) open.pop()
-    else if (token === SyntaxKind.StringLiteral) last = scanner.getTokenValue()
-    else if (token === SyntaxKind.ColonToken) {
+  const open: Set<string>[] = []
+  visit(text, {
+    onObjectBegin: () => void open.push(new Set()),
+    onObjectEnd: () => void open.pop(),
+    onObjectProperty(name) {
       const names = open.at(-1)
-      if (names?.has(last)) throw new Problem('duplicate-name', `"${last.slice(0, 60)}" stands twice in one object.`)
-      names?.add(last)
-    }
-  }
+      if (names?.has(name)) throw new Problem('duplicate-name', `"${name.slice(0, 60)}" stands twice in one object.`)
+      names?.add(name)
+    },
+  })
 }
