@@ -1,0 +1,8 @@
+import type { Report } from './figure.ts'
+import { benchCalls } from './calls.ts'
+import { benchSolves } from './solves.ts'
+
+export async function bench(report: Report): Promise<void> {
+  benchSolves(report)
+  await benchCalls(report)
+}
