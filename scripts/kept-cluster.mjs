@@ -11,25 +11,34 @@ import { postgresPrograms } from './postgres-programs.mjs'
 import { step } from './progress.mjs'
 import { Refusal } from './refusal.mjs'
 
-/** @param {string} dir */
-export async function startKept(dir) {
+/** Seconds; an errand takes a few. */
+export const PATIENCE = 10
+
+/**
+ * @param {string} dir
+ * @param {number} patience seconds to wait for another start, or an errand, to end
+ */
+export async function startKept(dir, patience) {
   ensureFolder(dir)
-  const lock = await takeLock(dir)
+  const lock = await takeLock(dir, patience)
   try {
-    const folder = existingCluster(dir) ?? (await step('Preparing the database', () => makeCluster(dir)))
+    const kept = stateOf(dir)
+    const existing = existingCluster(dir)
+    const { folder, known } = existing
+      ? { folder: existing, known: kept.password }
+      : await step('Preparing the database', () => makeCluster(dir))
     const cluster = { folder, programs: await postgresPrograms(versionOf(folder)), identity: clusterIdentity(folder) }
     if (!canWrite(folder, cluster.identity))
       throw new Refusal(
-        `The database in ${folder} cannot be entered by the user that owns it: open the folders above it to that user, or set SOAKSTONE_DATA to another place.`,
+        `The database in ${folder} cannot be entered by the user that runs it: open the folders above it to that user, or set SOAKSTONE_DATA to another place.`,
       )
-    const state = stateOf(dir)
-    const password = state.password ?? newPassword()
-    if (!state.password) {
+    const password = known ?? newPassword()
+    if (!known) {
       await halt(cluster)
       await setPassword(cluster, password)
     }
     // One that a killed start left behind is whole and answers: it is taken over.
-    const port = (await runningPort(cluster)) ?? (await step('Starting the database', () => boot(cluster, state.port)))
+    const port = (await runningPort(cluster)) ?? (await step('Starting the database', () => boot(cluster, kept.port)))
     writeSecret(stateFile(dir), { port, password })
     const end = async () => {
       await halt(cluster)
@@ -52,7 +61,7 @@ export async function borrowCluster({ dir = dataFolder() } = {}) {
     const lock = existsSync(dir) ? tryLock(lockFile(dir)) : null
     if (!lock || lock.held) {
       if (lock) lock.release()
-      return startKept(dir)
+      return startKept(dir, PATIENCE)
     }
     const state = stateOf(dir)
     const cluster = existingCluster(dir)
@@ -86,15 +95,18 @@ async function makeCluster(dir) {
   await initialise({ folder: draft, programs, identity }, { password })
   writeSecret(stateFile(dir), { password })
   renameSync(draft, folder)
-  return folder
+  return { folder, known: password }
 }
 
-/** @param {string} dir */
-async function takeLock(dir) {
+/**
+ * @param {string} dir
+ * @param {number} patience
+ */
+async function takeLock(dir, patience) {
   for (let n = 0; ; n++) {
     const lock = tryLock(lockFile(dir))
     if (lock.held) return lock
-    if (n === 20)
+    if (n >= patience * 2)
       throw new Refusal(
         `Another start uses ${dir} (process ${lock.by}): stop it first, or set SOAKSTONE_DATA to another folder.`,
       )

@@ -1,5 +1,5 @@
 import { dataFolder } from './folders.mjs'
-import { startKept } from './kept-cluster.mjs'
+import { PATIENCE, startKept } from './kept-cluster.mjs'
 import { startThrowaway } from './throwaway-cluster.mjs'
 
 /**
@@ -12,9 +12,9 @@ import { startThrowaway } from './throwaway-cluster.mjs'
 
 /**
  * Starts a private PostgreSQL: the one kept in a data folder, or a throwaway one that ends with this process.
- * @param {{dir?: string, ephemeral?: boolean, durable?: boolean}} [options] durable: a throwaway one that really writes to disk
+ * @param {{dir?: string, ephemeral?: boolean, durable?: boolean, patience?: number}} [options] durable: a throwaway one that really writes to disk
  * @returns {Promise<Running>}
  */
-export function startCluster({ dir = dataFolder(), ephemeral = false, durable = false } = {}) {
-  return ephemeral ? startThrowaway(durable) : startKept(dir)
+export function startCluster({ dir = dataFolder(), ephemeral = false, durable = false, patience = PATIENCE } = {}) {
+  return ephemeral ? startThrowaway(durable) : startKept(dir, patience)
 }

@@ -57,6 +57,14 @@ test.each([
   expect(refused(file, importsOf(file, text))).toHaveLength(1)
 })
 
+test('commands need no package before they have installed them', () => {
+  const early = sourcesUnder('scripts').filter((file) => file.endsWith('.mjs'))
+  const imports = early.flatMap((file) => importsIn(file).map((one) => ({ file, ...one })))
+  expect(imports.length).toBeGreaterThan(50)
+  const needy = imports.filter(({ target, late }) => !late && !/^(node:|scripts\/[^/]+\.mjs$)/.test(target))
+  expect(needy.map(({ file, target }) => `${file} imports ${target}`)).toEqual([])
+})
+
 test('a formula loads nothing but other formulas and special functions', () => {
   const formulas = sources.filter((file) => /^solvers\/(math\/|cases\/[^/]+\/solve\.ts$)/.test(file))
   expect(formulas.length).toBeGreaterThan(3)
@@ -69,10 +77,4 @@ test('numbers depend on their input alone: no clock, no chance, no surroundings 
   expect(impure.test('const t = Date.now()')).toBe(true)
   const found = sourcesUnder('solvers').filter((file) => impure.test(readFileSync(path.join(root, file), 'utf8')))
   expect(found).toEqual([])
-})
-
-test('printing the contract needs neither the database nor the network', () => {
-  const reached = [...reachOf('openapi/generate.ts')]
-  expect(reached).toContain('api/operations.ts')
-  expect(reached.filter((target) => /^(pg|drizzle-orm.*|express|node:(net|http|https|tls))$/.test(target))).toEqual([])
 })

@@ -10,6 +10,8 @@ export interface Import {
   target: string
   /** Erased before it runs. */
   typeOnly: boolean
+  /** By import(), once it is wanted. */
+  late: boolean
 }
 
 /** Source files under a folder, as paths from the root. */
@@ -25,13 +27,15 @@ export const importsIn = (file: string) => importsOf(file, readFileSync(path.joi
 
 export function importsOf(file: string, text: string): Import[] {
   const found: Import[] = []
-  const add = (specifier: ts.Node | undefined, typeOnly: boolean) => {
-    if (specifier && ts.isStringLiteralLike(specifier)) found.push({ target: resolve(file, specifier.text), typeOnly })
+  const add = (specifier: ts.Node | undefined, typeOnly: boolean, late = false) => {
+    if (specifier && ts.isStringLiteralLike(specifier))
+      found.push({ target: resolve(file, specifier.text), typeOnly, late })
   }
   const visit = (node: ts.Node): void => {
     if (ts.isImportDeclaration(node)) add(node.moduleSpecifier, node.importClause?.isTypeOnly ?? false)
     if (ts.isExportDeclaration(node)) add(node.moduleSpecifier, node.isTypeOnly)
-    if (ts.isCallExpression(node) && node.expression.kind === ts.SyntaxKind.ImportKeyword) add(node.arguments[0], false)
+    if (ts.isCallExpression(node) && node.expression.kind === ts.SyntaxKind.ImportKeyword)
+      add(node.arguments[0], false, true)
     if (ts.isImportTypeNode(node) && ts.isLiteralTypeNode(node.argument)) add(node.argument.literal, true)
     ts.forEachChild(node, visit)
   }
