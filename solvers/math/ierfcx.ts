@@ -24,5 +24,5 @@ export function ierfcx(x: number): number {
 
 /** Levels after which the continued fraction no longer changes in double precision. */
 function fractionDepth(x: number): number {
-  return Math.ceil(8 + 190 / (x * x))
+  return Math.ceil(8 + 62 / x + 110 / (x * x))
 }
