@@ -1,0 +1,16 @@
+import { createDatabase } from '../database.ts'
+import { createKey, listKeys, revokeKey } from '../keys/queries.ts'
+import { withDemo } from './from-environment.ts'
+import { demoOwner } from './seed-demo.ts'
+
+const NAME = 'Command line'
+/** Older keys of this command are revoked, so that asking often does not fill the account. */
+const KEPT = 5
+
+const secret = await withDemo(async (_, pool) => {
+  const db = createDatabase(pool)
+  const made = (await listKeys(db, demoOwner())).filter((key) => key.name === NAME && key.revokedAt === null)
+  for (const old of made.slice(KEPT - 1)) await revokeKey(db, demoOwner(), old.id)
+  return (await createKey(db, demoOwner(), { name: NAME })).secret
+})
+console.log(secret)
