@@ -1,0 +1,73 @@
+/** What the service says of a call it refused or failed. */
+export interface ProblemBody {
+  code: string
+  title: string
+  status: number
+  detail: string
+  retryable: boolean
+  requestId?: string
+  errors?: readonly ProblemIssue[]
+}
+
+export interface ProblemIssue {
+  code: string
+  detail: string
+  accepted?: string
+  pointer?: string
+  parameter?: string
+}
+
+/** The one kind of failure a query or a change can have. */
+export class ApiError extends Error {
+  /** Undefined where no answer arrived. */
+  readonly problem: ProblemBody | undefined
+  /** Seconds to wait before the same call may succeed. */
+  readonly retryAfter: number | undefined
+  constructor(problem: ProblemBody | undefined, retryAfter?: number) {
+    super(problem?.detail ?? 'No answer arrived.')
+    this.name = 'ApiError'
+    this.problem = problem
+    this.retryAfter = retryAfter
+  }
+  get status(): number {
+    return this.problem?.status ?? 0
+  }
+}
+
+interface Result<D> {
+  data?: D
+  error?: unknown
+  response: Response
+}
+
+/** The data of an answer, or an ApiError. */
+export async function unwrap<D>(call: Promise<Result<D>>): Promise<D> {
+  const result = await call.catch((cause: unknown) => {
+    if (cause instanceof DOMException && cause.name === 'AbortError') throw cause
+    throw new ApiError(undefined)
+  })
+  if (result.response.ok) return result.data as D
+  throw new ApiError(problemOf(result.error, result.response), secondsOf(result.response))
+}
+
+function problemOf(error: unknown, response: Response): ProblemBody {
+  if (typeof error === 'object' && error !== null && 'code' in error) return error as ProblemBody
+  const title = `The service answered ${response.status}`
+  return { code: 'unknown', title, status: response.status, detail: `${title}.`, retryable: response.status >= 500 }
+}
+
+function secondsOf(response: Response): number | undefined {
+  const seconds = Number(response.headers.get('retry-after') ?? NaN)
+  return Number.isFinite(seconds) ? seconds : undefined
+}
+
+/** The refusal of each field, by the first part of its pointer. */
+export function issuesByField(error: unknown): Record<string, string> {
+  const issues = error instanceof ApiError ? (error.problem?.errors ?? []) : []
+  const fields: Record<string, string> = {}
+  for (const { pointer, detail, accepted } of issues) {
+    const name = pointer?.split('/')[1] ?? ''
+    fields[name] ??= accepted ? `${detail} Accepted: ${accepted}.` : detail
+  }
+  return fields
+}

@@ -1,0 +1,100 @@
+import type { ReactNode } from 'react'
+import { Link } from 'react-router-dom'
+import { CopyButton } from '../../components/copy-button.tsx'
+import { whole } from '../../components/formats.ts'
+import { jsonText } from '../../components/json-text.ts'
+import { Note } from '../../components/note.tsx'
+import { plain } from '../../figure/measures.ts'
+import { type Answer, type CompactAnswer, isFull } from '../../solving/solve.ts'
+import { Checks } from './checks.tsx'
+import { OutputValues } from './output-values.tsx'
+import type { Case } from './queries.ts'
+
+/** The answer in words: numbers with their error limits, checks, warnings, cautions, sources. */
+export function AnswerView({ description: c, answer }: { description: Case; answer: Answer | CompactAnswer }) {
+  return (
+    <div className="min-w-0" aria-live="polite">
+      <h2 className="mb-3">The answer</h2>
+      <OutputValues description={c} answer={answer} />
+      {isFull(answer) ? (
+        <Whole description={c} answer={answer} />
+      ) : (
+        <>
+          <h3 className="mt-5">Warnings</h3>
+          <p className="prose">{answer.warnings.join(', ') || 'None.'}</p>
+        </>
+      )}
+      <div className="btnrow mt-5">
+        <CopyButton text={jsonText(answer)}>Copy the answer</CopyButton>
+      </div>
+    </div>
+  )
+}
+
+function Whole({ description: c, answer }: { description: Case; answer: Answer }) {
+  const { accuracy, numbers } = answer
+  return (
+    <>
+      <dl className="dl my-5 border-y-[1.5px] border-ink">
+        {Object.entries(numbers).map(([name, value]) => (
+          <Row
+            key={name}
+            name={name}
+            value={(Array.isArray(value) ? value : [value]).map((v) => plain(v as number, 6)).join(' · ')}
+          />
+        ))}
+        <Row
+          name="method"
+          value={`${accuracy.method.join(', ')}${accuracy.terms ? `, ${accuracy.terms} terms` : ''}`}
+        />
+        <Row name="temperature scale" value={`${plain(accuracy.scale, 6)} K`} />
+        <Row name="price" value={<Price points={answer.points} least={c.leastCharge} />} />
+      </dl>
+      <p className="prose">{accuracy.note}</p>
+      {answer.checks.length > 0 && <h3 className="mt-5">Checks</h3>}
+      <Checks checks={answer.checks} />
+      {answer.warnings.length > 0 && <h3 className="mt-5">Warnings</h3>}
+      {answer.warnings.map(({ code, text }) => (
+        <Note key={code} kind="warning">
+          <Link to={`/problems/${code}`}>
+            <code>{code}</code>
+          </Link>
+          <br />
+          {text}
+        </Note>
+      ))}
+      {answer.cautions.length > 0 && <h3 className="mt-5">Cautions</h3>}
+      <div className="grid gap-3 mt-2">
+        {answer.cautions.map(({ id, text }) => (
+          <Note key={id} kind="caution">
+            {text}
+          </Note>
+        ))}
+      </div>
+      <h3 className="mt-5">Sources</h3>
+      {answer.sources.map((source) => (
+        <p key={source} className="prose">
+          {source}
+        </p>
+      ))}
+    </>
+  )
+}
+
+function Row({ name, value }: { name: string; value: ReactNode }) {
+  return (
+    <>
+      <dt>{name}</dt>
+      <dd>{value}</dd>
+    </>
+  )
+}
+
+function Price({ points, least }: { points: number; least: number }) {
+  return (
+    <>
+      {whole(points)} points; a call is charged <span data-charged>{whole(Math.max(points, least))}</span>, at least{' '}
+      {whole(least)}
+    </>
+  )
+}

@@ -1,0 +1,42 @@
+import { CodeBlock } from '../../components/code-block.tsx'
+import { JsonCode } from '../../components/json-code.tsx'
+import { jsonText } from '../../components/json-text.ts'
+import { Tabs } from '../../components/tabs.tsx'
+import { ButtonLink } from '../../components/button.tsx'
+import { isFull } from '../../solving/solve.ts'
+import type { Solved } from './case-sheet.tsx'
+import { SnippetCode } from './snippet-code.tsx'
+import { snippets } from '../../solving/snippets.ts'
+import type { Case } from './queries.ts'
+
+/** Exactly the call that was solved, in two languages, and its answer. */
+export function CallView({ description: c, solved: { body, answer } }: { description: Case; solved: Solved }) {
+  const path = c.operations[0]!.path
+  const tabs = snippets.map(({ name, language, write }) => {
+    const text = write(location.origin + path, body)
+    return {
+      name,
+      content: (
+        <CodeBlock caption="with your numbers" text={text} label={`${name} snippet`}>
+          <SnippetCode text={text} language={language} />
+        </CodeBlock>
+      ),
+    }
+  })
+  const json = jsonText(answer)
+  return (
+    <div className="min-w-0">
+      <h2 className="mb-3">The call</h2>
+      <Tabs label="Language" tabs={tabs} />
+      <p className="prose mt-3">
+        It reads the key from <code>SOAK_KEY</code>.
+      </p>
+      <div className="btnrow mt-3 mb-6">
+        <ButtonLink to="/keys">Get a key</ButtonLink>
+      </div>
+      <CodeBlock caption={`Answer · 200${isFull(answer) ? '' : ' · compact'}`} text={json} label="Answer as JSON" tall>
+        <JsonCode text={json} />
+      </CodeBlock>
+    </div>
+  )
+}

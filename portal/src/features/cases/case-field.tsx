@@ -1,0 +1,101 @@
+import { useId } from 'react'
+import type { UseFormRegisterReturn } from 'react-hook-form'
+import { unitText } from '../../components/formats.ts'
+import { plain } from '../../figure/measures.ts'
+import { kindOf, optionsOf } from './form-values.ts'
+import type { Field } from './queries.ts'
+
+interface Props {
+  field: Field
+  register: UseFormRegisterReturn
+  error: string | undefined
+}
+
+/** One field of the contract, in the control that its schema asks for. */
+export function CaseField({ field, register, error }: Props) {
+  const id = useId()
+  const kind = kindOf(field)
+  const title = field.title ?? field.name
+  const hint = hintOf(field)
+  const grouped = kind === 'several' || (kind === 'choice' && field.required)
+  const described = [hint ? `${id}-hint` : '', error ? `${id}-error` : ''].filter(Boolean).join(' ') || undefined
+  const access = { 'aria-invalid': error ? (true as const) : undefined, 'aria-describedby': described }
+  const parts = (
+    <>
+      <span className="sym" aria-hidden="true">
+        {field.symbol}
+      </span>
+      <span className="label">
+        {grouped ? <span aria-hidden="true">{title}</span> : <label htmlFor={id}>{title}</label>}
+        {hint && (
+          <span id={`${id}-hint`} className="hint">
+            {hint}
+          </span>
+        )}
+      </span>
+      {kind === 'number' && (
+        <>
+          <span className="control">
+            <input id={id} className="box" inputMode="text" autoComplete="off" {...access} {...register} />
+          </span>
+          <span className="unit">{unitText(field.unit ?? '')}</span>
+        </>
+      )}
+      {kind === 'list' && (
+        <span className="control">
+          <input id={id} className="box" autoComplete="off" {...access} {...register} />
+        </span>
+      )}
+      {kind === 'choice' && !grouped && (
+        <span className="control">
+          <select id={id} className="box" {...access} {...register}>
+            <option value="">not given</option>
+            {optionsOf(field).map((option) => (
+              <option key={String(option)}>{String(option)}</option>
+            ))}
+          </select>
+        </span>
+      )}
+      {grouped && (
+        <span className={kind === 'choice' ? 'control seg justify-self-start' : 'control'}>
+          {optionsOf(field).map((option) => (
+            <label key={String(option)} className={kind === 'several' ? 'opt' : undefined}>
+              <input
+                type={kind === 'several' ? 'checkbox' : 'radio'}
+                value={String(option)}
+                {...access}
+                {...register}
+              />
+              {kind === 'several' ? <span className="fig">{String(option)}</span> : String(option)}
+            </label>
+          ))}
+        </span>
+      )}
+      {error && (
+        <p id={`${id}-error`} className="err">
+          {error}
+        </p>
+      )}
+    </>
+  )
+  const name = `field${kind === 'number' ? ' quantity' : ''}${error ? ' bad' : ''}`
+  if (!grouped)
+    return (
+      <div className={name} data-field={field.name}>
+        {parts}
+      </div>
+    )
+  return (
+    <fieldset className={name} data-field={field.name} aria-describedby={described}>
+      <legend className="sr-only">{title}</legend>
+      {parts}
+    </fieldset>
+  )
+}
+
+function hintOf(field: Field): string {
+  const [low, high] = field.typical ?? []
+  const unit = kindOf(field) === 'list' ? unitText(field.unit ?? '') : ''
+  const typical = low !== undefined && high !== undefined ? `usually ${plain(low)} to ${plain(high)}` : ''
+  return [unit ? `in ${unit}, commas between` : '', field.hint ?? '', typical].filter(Boolean).join(' · ')
+}

@@ -1,0 +1,111 @@
+import { useEffect, useRef } from 'react'
+import { useForm, useWatch } from 'react-hook-form'
+import { issuesByField } from '../../api/api-error.ts'
+import { Button, LinkButton } from '../../components/button.tsx'
+import { FormFailure } from '../../components/form-failure.tsx'
+import type { Body } from '../../solving/solve.ts'
+import { CaseField } from './case-field.tsx'
+import { HeatChoice } from './heat-choice.tsx'
+import { type FormValues, bodyOf, isSent, valuesOf, waysOf } from './form-values.ts'
+import type { Case, Field } from './queries.ts'
+
+interface Props {
+  description: Case
+  /** The body that the sheet shows the answer of. */
+  solved: Body | undefined
+  pending: boolean
+  error: unknown
+  onSolve(body: Body): void
+}
+
+/** Every field of the contract. It solves when a field is left changed, and on Solve. */
+export function CaseForm({ description: c, solved, pending, error, onSolve }: Props) {
+  const { control, register, handleSubmit, getValues, reset } = useForm<FormValues>({
+    defaultValues: valuesOf(c, c.example),
+  })
+  const values = useWatch({ control }) as FormValues
+  const form = useRef<HTMLFormElement>(null)
+  const sent = useRef(JSON.stringify(c.example))
+  const errors = issuesByField(error)
+  const shown = c.fields.filter(({ name }) => isSent(c, name, values.heat))
+  const open = shown.filter((field) => isOpen(c, field))
+  const folded = shown.filter((field) => !isOpen(c, field))
+  const stale =
+    solved !== undefined && JSON.stringify(bodyOf(c, values)) !== JSON.stringify(bodyOf(c, valuesOf(c, solved)))
+
+  useEffect(() => {
+    if (error) form.current?.querySelector<HTMLElement>('[aria-invalid=true]')?.focus()
+  }, [error])
+
+  const send = (always: boolean) => {
+    const body = bodyOf(c, getValues())
+    const text = JSON.stringify(body)
+    if (!always && text === sent.current) return
+    sent.current = text
+    onSolve(body)
+  }
+  const fields = (list: readonly Field[]) => {
+    const chosen = waysOf(c).flat()
+    const first = list.findIndex(({ name }) => chosen.includes(name))
+    return list.map((field, i) => (
+      <div key={field.name}>
+        {i === first && <HeatChoice description={c} register={register('heat')} />}
+        <CaseField field={field} error={errors[field.name]} register={register(`fields.${field.name}`)} />
+      </div>
+    ))
+  }
+  const heatIsFolded = waysOf(c).length > 0 && !open.some(({ name }) => waysOf(c).flat().includes(name))
+
+  return (
+    <form
+      ref={form}
+      noValidate
+      aria-labelledby="numbers"
+      className="min-w-0"
+      onSubmit={handleSubmit(() => send(true))}
+      onBlur={(event) => {
+        if (event.target instanceof HTMLInputElement || event.target instanceof HTMLSelectElement) send(false)
+      }}
+    >
+      <h2 id="numbers" className="mb-2">
+        Your numbers
+      </h2>
+      {fields(open)}
+      {folded.length > 0 && (
+        <details className="more" open={folded.some(({ name }) => errors[name])}>
+          <summary>Other ways to give it, and more</summary>
+          {heatIsFolded && folded.every(({ name }) => !waysOf(c).flat().includes(name)) && (
+            <HeatChoice description={c} register={register('heat')} />
+          )}
+          {fields(folded)}
+        </details>
+      )}
+      <FormFailure error={error} fields={shown.map(({ name }) => name)} />
+      <div className="btnrow mt-5">
+        <Button kind="main" type="submit">
+          {pending ? 'Solving' : 'Solve'}
+        </Button>
+        <LinkButton
+          onClick={() => {
+            reset(valuesOf(c, c.example))
+            send(false)
+          }}
+        >
+          Back to the example
+        </LinkButton>
+      </div>
+      <p role="status" className="lab mt-3 min-h-4">
+        {stale && !pending
+          ? 'The numbers below are older than your last change. Solve again.'
+          : 'Free while you try it here.'}
+      </p>
+    </form>
+  )
+}
+
+/** Shown at once: what must be given, and what the example gives. */
+function isOpen(c: Case, { name, required }: Field): boolean {
+  if (required || name in c.example || name === 'outputs') return true
+  const ways = waysOf(c)
+  return ways.some((way) => way.includes(name)) && ways.flat().some((one) => one in c.example)
+}

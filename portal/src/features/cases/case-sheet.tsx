@@ -1,0 +1,82 @@
+import { useMutation, useQuery } from '@tanstack/react-query'
+import { useState } from 'react'
+import { Band, Sheet } from '../../components/sheet.tsx'
+import { Failed, Loading } from '../../components/states.tsx'
+import { TitleBlock } from '../../components/title-block.tsx'
+import { type Answer, type Body, type CompactAnswer, trySolve } from '../../solving/solve.ts'
+import { AnswerView } from './answer-view.tsx'
+import { CallView } from './call-view.tsx'
+import { CaseForm } from './case-form.tsx'
+import { CurveBand } from './curve-band.tsx'
+import { AboutBody } from './about-body.tsx'
+import type { Case } from './queries.ts'
+
+export interface Solved {
+  body: Body
+  answer: Answer | CompactAnswer
+}
+
+/** One case: what it is, its form, the curve, the answer and the call. It opens with its own example solved. */
+export function CaseSheet({ description: c }: { description: Case }) {
+  const example = useQuery({
+    queryKey: ['try', c.id, c.example],
+    queryFn: ({ signal }) => trySolve(c.id, c.example, signal),
+    staleTime: Infinity,
+  })
+  const [own, setOwn] = useState<Solved>()
+  const solve = useMutation({
+    mutationFn: (body: Body) => trySolve(c.id, body),
+    onSuccess: (answer, body) => setOwn({ body, answer }),
+  })
+  const solved = own ?? (example.data && { body: c.example, answer: example.data })
+  return (
+    <Sheet title={c.title}>
+      <TitleBlock
+        title={c.title}
+        facts={[
+          { name: 'Case', value: c.id, full: true },
+          { name: 'Solver', value: c.solver },
+          { name: 'Weight', value: weightOf(c) },
+          { name: 'Operations', value: c.operations.map(({ id }) => id).join(' · '), full: true },
+        ]}
+      >
+        <p className="prose">{c.summary}</p>
+      </TitleBlock>
+      <Band>
+        <div className="two">
+          <AboutBody description={c} />
+          <CaseForm
+            description={c}
+            solved={solved?.body}
+            pending={solve.isPending}
+            error={solve.error}
+            onSolve={(body) => solve.mutate(body)}
+          />
+        </div>
+      </Band>
+      {solved ? (
+        <>
+          <CurveBand description={c} solved={solved} />
+          <Band>
+            <div className="two flip">
+              <AnswerView description={c} answer={solved.answer} />
+              <CallView description={c} solved={solved} />
+            </div>
+          </Band>
+        </>
+      ) : (
+        <Band>
+          {example.isError ? (
+            <Failed error={example.error} retry={() => void example.refetch()} />
+          ) : (
+            <Loading what="Solving the example." />
+          )}
+        </Band>
+      )}
+    </Sheet>
+  )
+}
+
+function weightOf({ weight, setUp }: Case): string {
+  return `${weight} a number${setUp ? `, +${setUp} a call` : ''}`
+}

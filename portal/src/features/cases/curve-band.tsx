@@ -1,0 +1,41 @@
+import { useQuery } from '@tanstack/react-query'
+import { useState } from 'react'
+import { Segmented } from '../../components/segmented.tsx'
+import { Band } from '../../components/sheet.tsx'
+import { QueryView } from '../../components/query-view.tsx'
+import { hatchFor } from '../../figure/sketch.tsx'
+import { type Drawing, curveQuery } from '../../solving/curve-query.ts'
+import type { Solved } from './case-sheet.tsx'
+import { FieldCurve } from './field-curve.tsx'
+import { FieldTable } from './field-table.tsx'
+import { HistoryCurve } from './history-curve.tsx'
+import type { Case } from './queries.ts'
+
+const views = [
+  { value: 'curve', text: 'Curve' },
+  { value: 'table', text: 'Table' },
+] as const
+
+/** The solve drawn, and the same numbers as a table. */
+export function CurveBand({ description: c, solved: { body, answer } }: { description: Case; solved: Solved }) {
+  const query = useQuery(curveQuery(c, body, answer))
+  const [view, setView] = useState<'curve' | 'table'>('curve')
+  return (
+    <Band label="Curve">
+      <div className="btnrow justify-between mb-5">
+        <h2>{c.places === 'depths' ? 'One solve, two cuts' : 'One solve, its history'}</h2>
+        <Segmented label="Show as" options={views} value={view} onChange={(chosen) => setView(chosen)} />
+      </div>
+      <QueryView query={query} what="Solving for the curve.">
+        {(drawing) => <Shown drawing={drawing} view={view} body={c.sketch.body} />}
+      </QueryView>
+    </Band>
+  )
+}
+
+function Shown({ drawing, view, body }: { drawing: Drawing | null; view: 'curve' | 'table'; body: string }) {
+  if (!drawing) return <p className="prose">All times are 0. Ask for a time after the change to see a curve.</p>
+  if (view === 'table') return <FieldTable drawing={drawing} />
+  if (drawing.kind === 'field') return <FieldCurve drawing={drawing} hatch={hatchFor(body)} />
+  return <HistoryCurve drawing={drawing} />
+}

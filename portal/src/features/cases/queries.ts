@@ -1,0 +1,22 @@
+import { queryOptions } from '@tanstack/react-query'
+import { unwrap } from '../../api/api-error.ts'
+import { publicApi } from '../../api/clients.ts'
+import type { components } from '../../../../openapi/openapi.d.ts'
+
+export type CaseSummary = components['schemas']['CaseSummary']
+export type Case = components['schemas']['Case']
+export type Field = components['schemas']['CaseField']
+
+export const casesQuery = () =>
+  queryOptions({
+    queryKey: ['cases'],
+    queryFn: ({ signal }) => unwrap(publicApi.GET('/v1/cases', { signal })),
+    staleTime: Infinity,
+  })
+
+export const caseQuery = (caseId: string) =>
+  queryOptions({
+    queryKey: ['cases', caseId],
+    queryFn: ({ signal }) => unwrap(publicApi.GET('/v1/cases/{caseId}', { params: { path: { caseId } }, signal })),
+    staleTime: Infinity,
+  })

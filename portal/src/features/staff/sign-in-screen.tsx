@@ -1,0 +1,59 @@
+import { useMutation, useQueryClient } from '@tanstack/react-query'
+import { useForm } from 'react-hook-form'
+import { useNavigate } from 'react-router-dom'
+import { issuesByField } from '../../api/api-error.ts'
+import { Button } from '../../components/button.tsx'
+import { FormFailure } from '../../components/form-failure.tsx'
+import { Band, Sheet } from '../../components/sheet.tsx'
+import { TextField } from '../../components/text-field.tsx'
+import { TitleBlock } from '../../components/title-block.tsx'
+import { staffSessionQuery, staffSignIn } from './queries.ts'
+
+export function StaffSignInScreen() {
+  const client = useQueryClient()
+  const navigate = useNavigate()
+  const { register, handleSubmit } = useForm({ defaultValues: { mail: '', password: '' } })
+  const start = useMutation({
+    mutationFn: staffSignIn,
+    onSuccess: async (session) => {
+      client.removeQueries({ queryKey: ['staff'] })
+      client.setQueryData(staffSessionQuery().queryKey, session)
+      await navigate('/staff', { replace: true })
+    },
+  })
+  const errors = issuesByField(start.error)
+  return (
+    <Sheet title="Staff sign-in">
+      <TitleBlock
+        title="Staff sign-in"
+        facts={[{ name: 'Every look', value: 'is on record with its reason', full: true }]}
+      >
+        <p className="prose">For support staff. Accounts of customers sign in elsewhere.</p>
+      </TitleBlock>
+      <Band>
+        <form className="max-w-[680px]" noValidate onSubmit={handleSubmit((body) => start.mutate(body))}>
+          <TextField
+            label="Mail address"
+            type="email"
+            autoComplete="username"
+            error={errors['mail']}
+            {...register('mail')}
+          />
+          <TextField
+            label="Password"
+            type="password"
+            autoComplete="current-password"
+            error={errors['password']}
+            {...register('password')}
+          />
+          <FormFailure error={start.error} fields={['mail', 'password']} />
+          <div className="btnrow mt-5">
+            <Button kind="main" type="submit" disabled={start.isPending}>
+              {start.isPending ? 'Signing in' : 'Sign in'}
+            </Button>
+          </div>
+        </form>
+      </Band>
+    </Sheet>
+  )
+}

@@ -1,0 +1,56 @@
+import { multiples, niceStep } from './steps.ts'
+
+export type Back = 'insulated' | 'mirror' | 'endless'
+
+/** A solved field, as a drawing needs it: temperatures by time and depth, and what surrounds the body. */
+export interface Field {
+  depths: readonly number[]
+  times: readonly number[]
+  /** °C, one row a time. */
+  values: readonly (readonly number[])[]
+  initial: number
+  ambient: number
+  back: Back
+}
+
+/** Where the two sections cut the plan: a row (time) and a column (place). */
+export interface Cut {
+  row: number
+  column: number
+}
+
+export interface Range {
+  low: number
+  high: number
+  step: number
+}
+
+export function temperatureRange(values: readonly number[]): Range {
+  const low = Math.min(...values)
+  const high = Math.max(...values)
+  const span = high - low || 1
+  const step = niceStep(span, 7)
+  return { low: Math.floor(low / step + 1e-9) * step, high: Math.ceil(high / step - 1e-9) * step || step, step }
+}
+
+export function rangeOf(field: Field): Range {
+  return temperatureRange([field.initial, field.ambient, ...field.values.flatMap((row) => [row[0]!, row.at(-1)!])])
+}
+
+export interface Isotherms {
+  levels: readonly number[]
+  /** The level that is drawn thick, with its far side washed: 0 °C, or the one nearest half of the change. */
+  key: number | undefined
+}
+
+export function isothermsOf({ initial, ambient }: Field): Isotherms {
+  const [low, high] = [Math.min(initial, ambient), Math.max(initial, ambient)]
+  if (high - low < 1e-9) return { levels: [], key: undefined }
+  const levels = multiples(niceStep(high - low, 14), low, high).filter((level) => level > low && level < high)
+  const half = (low + high) / 2
+  const near = levels.reduce<number | undefined>(
+    (best, level) => (best === undefined || Math.abs(level - half) < Math.abs(best - half) ? level : best),
+    undefined,
+  )
+  return { levels, key: levels.includes(0) ? 0 : near }
+}

@@ -1,0 +1,81 @@
+import { Drawing, pathOf } from './drawing.tsx'
+import { temperatureRange } from './field.ts'
+import { degrees, inMeasure, plain } from './measures.ts'
+import { multiples } from './steps.ts'
+import { timeAxis } from './time-axis.ts'
+
+interface Props {
+  width: number
+  times: readonly number[]
+  /** °C at each time. */
+  values: readonly number[]
+  /** Temperatures to keep in view beside those of the curve. */
+  levels: readonly number[]
+  row: number
+  title: string
+}
+
+/** A history alone, time to the right. */
+export function HistoryFigure({ width, times, values, levels, row, title }: Props) {
+  const height = width < 620 ? 190 : 300
+  const [left, right, top] = [width < 620 ? 38 : 54, width - 16, 30]
+  const bottom = top + height
+  const end = times.at(-1)!
+  const range = temperatureRange([...levels, ...values])
+  const { measure, ticks } = timeAxis(end)
+  const x = (time: number) => left + ((right - left) * time) / end
+  const y = (value: number) => bottom - (height * (value - range.low)) / (range.high - range.low)
+  const value = values[row]!
+  const at = x(times[row]!)
+  const before = times[row]! > end * 0.7
+  const reading = degrees(value, range.high - range.low)
+  const every = ticks.length > 5 && width < 420 ? 2 : 1
+  return (
+    <Drawing
+      width={width}
+      height={bottom + 34}
+      label={`${title}: ${reading} °C at ${inMeasure(times[row]!, measure)} ${measure.unit}`}
+    >
+      <rect className="w-sheet" x={left} y={top} width={right - left} height={height} />
+      <text x={left - 9} y={top - 12} textAnchor="end">
+        °C
+      </text>
+      {multiples(range.step, range.low, range.high).map((level) => (
+        <g key={level}>
+          <line className="hair" x1={left} x2={right} y1={y(level)} y2={y(level)} />
+          <text x={left - 9} y={y(level) + 4} textAnchor="end">
+            {plain(level)}
+          </text>
+        </g>
+      ))}
+      {ticks.map((tick, i) => (
+        <g key={tick}>
+          <line className="thin" x1={x(tick)} x2={x(tick)} y1={bottom} y2={bottom + 5} />
+          {i % every === 0 && (
+            <text x={x(tick)} y={bottom + 20} textAnchor={x(tick) > right - 20 ? 'end' : 'middle'}>
+              {inMeasure(tick, measure)} {measure.unit}
+            </text>
+          )}
+        </g>
+      ))}
+      {levels.map((level) => (
+        <line key={level} className="dash" x1={left} x2={right} y1={y(level)} y2={y(level)} />
+      ))}
+      <rect className="out" x={left} y={top} width={right - left} height={height} />
+      <line className="chain" x1={at} x2={at} y1={top} y2={bottom} />
+      <path className="now" d={pathOf(values.map((v, i) => [x(times[i]!), y(v)] as const))} />
+      <circle className="ring" cx={at} cy={y(value)} r={5} />
+      <text className="t-clay" x={left} y={top - 12}>
+        {title}
+      </text>
+      <text
+        className="t-clay halo-sheet"
+        x={at + (before ? -10 : 10)}
+        y={y(value) + (y(value) > bottom - 30 ? -12 : 22)}
+        textAnchor={before ? 'end' : 'start'}
+      >
+        {reading} °C
+      </text>
+    </Drawing>
+  )
+}

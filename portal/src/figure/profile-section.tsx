@@ -1,0 +1,150 @@
+import { Dimension } from './dimension.tsx'
+import { pathOf } from './drawing.tsx'
+import type { Cut, Field } from './field.ts'
+import { Film } from './film.tsx'
+import { nearest } from './grid.ts'
+import { type Hatch, hatched } from './hatches.tsx'
+import type { Layout } from './layout.ts'
+import { degrees, inMeasure, lengthMeasure, plain, timeMeasure } from './measures.ts'
+import { multiples } from './steps.ts'
+
+interface Props {
+  field: Field
+  layout: Layout
+  cut: Cut
+  hatch: Hatch
+  material: string
+}
+
+const backs = {
+  insulated: { words: 'insulated: no heat passes', short: 'insulated' },
+  mirror: { words: 'mirrored at the mid-plane', short: 'mid-plane' },
+  endless: { words: 'the body goes on', short: 'goes on' },
+}
+
+/** Parts of the shown time at which past and future profiles are drawn. */
+const others = [0.04, 0.15, 0.35, 0.65, 1]
+
+/** Section A–A: temperature over depth at one time, in the body it belongs to. */
+export function ProfileSection({ field, layout, cut, hatch, material }: Props) {
+  const { left, right, top, bottom, back, axis, size, range, small, x, y } = layout
+  const measure = timeMeasure(field.times.at(-1)!)
+  const time = field.times[cut.row]!
+  const curve = (row: number) => pathOf(field.values[row]!.map((value, i) => [x(field.depths[i]!), y(value)] as const))
+  const at = `${inMeasure(time, measure)} ${measure.unit}`
+  const words = backs[field.back]
+  const extent = field.depths.at(-1)!
+  const length = lengthMeasure(extent)
+  return (
+    <g>
+      <rect className="w-sheet" x={left} y={top} width={right - left} height={size} />
+      <rect fill={hatched(hatch)} opacity={0.55} x={left} y={top} width={right - left} height={size} />
+      <rect
+        fill={hatched(field.back === 'insulated' ? 'wool' : hatch)}
+        opacity={field.back === 'insulated' ? 0.8 : 0.35}
+        x={right}
+        y={top}
+        width={back}
+        height={size}
+      />
+      {multiples(range.step, range.low, range.high).map((level) => (
+        <g key={level}>
+          <line className="thin" x1={axis - 5} x2={axis} y1={y(level)} y2={y(level)} />
+          <line className="hair" x1={axis} x2={right} y1={y(level)} y2={y(level)} />
+          <text x={axis - 9} y={y(level) + 4} textAnchor="end">
+            {plain(level)}
+          </text>
+        </g>
+      ))}
+      <line className="thin" x1={axis} x2={axis} y1={top} y2={bottom} />
+      <text x={axis - 9} y={top - 12} textAnchor="end">
+        °C
+      </text>
+      <text className="t-clay" x={small ? left : axis} y={top - 12}>
+        {small ? `A–A at ${at}` : `Section A–A: profile at ${at}`}
+      </text>
+      <line className="cut" x1={left} x2={left} y1={top} y2={bottom} />
+      <line className={field.back === 'endless' ? 'dash' : 'cut'} x1={right} x2={right} y1={top} y2={bottom} />
+      <path className="thin" d={`M${left} ${top}H${right + back}M${left} ${bottom}H${right + back}`} />
+      <text
+        className="halo"
+        textAnchor="middle"
+        transform={`translate(${right + back / 2 + 4} ${top + size / 2}) rotate(-90)`}
+      >
+        {small ? words.short : words.words}
+      </text>
+      {range.low < 0 && range.high > 0 && <line className="dash" x1={axis} x2={right} y1={y(0)} y2={y(0)} />}
+      <line className="dash" x1={left} x2={right} y1={y(field.initial)} y2={y(field.initial)} />
+      <OtherProfiles field={field} layout={layout} cut={cut} curve={curve} />
+      <Film field={field} layout={layout} face={field.values[cut.row]![0]!} />
+      <path className="now" d={curve(cut.row)} />
+      <Dimension
+        from={left}
+        to={right}
+        y={bottom + 30}
+        reach={26}
+        label={`${inMeasure(extent, length)}${length.unit === 'mm' ? '' : ` ${length.unit}`} ${material}`.trim()}
+      />
+    </g>
+  )
+}
+
+function OtherProfiles({
+  field,
+  layout,
+  cut,
+  curve,
+}: Pick<Props, 'field' | 'layout' | 'cut'> & { curve(row: number): string }) {
+  const { right, top, y } = layout
+  const end = field.times.at(-1)!
+  const measure = timeMeasure(end)
+  const ends = [y(field.values[cut.row]!.at(-1)!)]
+  const rows = others
+    .map((part) => nearest(field.times, end * part))
+    .filter((row) => Math.abs(field.times[row]! - field.times[cut.row]!) > 0.02 * end)
+  return rows.map((row) => {
+    const level = y(field.values[row]!.at(-1)!)
+    const free = ends.every((taken) => Math.abs(taken - level) > 15)
+    if (free) ends.push(level)
+    return (
+      <g key={row}>
+        <path className="past" d={curve(row)} />
+        {free && (
+          <text className="halo-sheet" x={right - 6} y={level < top + 14 ? level + 14 : level - 4} textAnchor="end">
+            {inMeasure(field.times[row]!, measure)} {measure.unit}
+          </text>
+        )}
+      </g>
+    )
+  })
+}
+
+/** The chosen point on the profile, with its reading where no larger one stands. */
+export function ProfileReading({
+  field,
+  layout,
+  cut,
+  history,
+}: Pick<Props, 'field' | 'layout' | 'cut'> & { history: boolean }) {
+  const { x, y, bottom, left, right, beside, range } = layout
+  const value = field.values[cut.row]![cut.column]!
+  const at = x(field.depths[cut.column]!)
+  const before = at > left + (right - left) * 0.62
+  const falling = field.initial > field.ambient
+  return (
+    <g>
+      <line className="proj" x1={at} x2={at} y1={bottom + (history ? 4 : 0)} y2={y(value)} />
+      <circle className="ring" cx={at} cy={y(value)} r={5} />
+      {!beside && (
+        <text
+          className="t-clay halo-sheet"
+          x={at + (before ? -10 : 10)}
+          y={y(value) + (falling ? (y(value) > bottom - 24 ? -12 : 20) : y(value) < layout.top + 20 ? 20 : -12)}
+          textAnchor={before ? 'end' : 'start'}
+        >
+          {degrees(value, range.high - range.low)} °C
+        </text>
+      )}
+    </g>
+  )
+}

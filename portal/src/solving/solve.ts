@@ -1,0 +1,21 @@
+import { unwrap } from '../api/api-error.ts'
+import { portalApi } from '../api/clients.ts'
+import type { paths } from '../../../openapi/portal.d.ts'
+
+type TryPath = Extract<keyof paths, `/portal/v1/try/${string}`>
+type AnyAnswer = paths[TryPath]['post']['responses'][200]['content']['application/json']
+
+/** An answer in full. */
+export type Answer = Extract<AnyAnswer, { case: string }>
+export type CompactAnswer = Exclude<AnyAnswer, { case: string }>
+export type Body = Readonly<Record<string, unknown>>
+
+/** Solves without a key. The path names the case; that its body fits is for the service to say. */
+export function trySolve(caseId: string, body: Body, signal?: AbortSignal): Promise<AnyAnswer> {
+  const path = `/portal/v1/try/${caseId}/solve` as TryPath
+  return unwrap(portalApi.POST(path, { body: body as never, ...(signal ? { signal } : {}) }))
+}
+
+export function isFull(answer: AnyAnswer): answer is Answer {
+  return 'case' in answer
+}

@@ -1,0 +1,14 @@
+import tailwindcss from '@tailwindcss/vite'
+import react from '@vitejs/plugin-react'
+import { defineConfig } from 'vite'
+
+const api = process.env['API_URL'] ?? 'http://127.0.0.1:4600'
+
+export default defineConfig({
+  root: 'portal',
+  plugins: [react(), tailwindcss()],
+  // The server replaces the placeholder in each response.
+  html: { cspNonce: '__CSP_NONCE__' },
+  build: { outDir: '../dist/portal', emptyOutDir: true, manifest: true, chunkSizeWarningLimit: 1600 },
+  server: { proxy: Object.fromEntries(['/v1', '/portal/v1', '/support/v1'].map((path) => [path, { target: api }])) },
+})
