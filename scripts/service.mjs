@@ -8,12 +8,12 @@ import { stopping } from './stopping.mjs'
 /**
  * Starts a long-lived program in a session of its own, so that Ctrl-C reaches this process alone and the order of ending is kept.
  * @param {readonly string[]} args of node
- * @param {{env: NodeJS.ProcessEnv, log?: string}} options log: the file it writes to instead of the terminal
+ * @param {{env: NodeJS.ProcessEnv, log?: string}} options log: the file it writes to instead of stderr
  */
 export function startProgram(args, { env, log }) {
-  const out = log === undefined ? 'inherit' : openSync(log, 'w', 0o600)
+  const out = log === undefined ? 2 : openSync(log, 'w', 0o600)
   const child = spawn(process.execPath, args, { cwd: root, env, detached: true, stdio: ['ignore', out, out] })
-  if (typeof out === 'number') closeSync(out)
+  if (out !== 2) closeSync(out)
   /** @type {Promise<void>} */
   const ended = new Promise((resolve) => {
     child.once('exit', () => resolve())

@@ -46,20 +46,28 @@ function installPackages() {
   })
 }
 
-/**
- * npm writes what it installed into node_modules at the very end, so that an install cut short never fits.
- * @returns {boolean}
- */
+/** npm writes what it installed into node_modules at the very end, so that an install cut short never fits. */
 function packagesFit() {
   const file = path.join(root, 'node_modules', '.package-lock.json')
-  if (!existsSync(file)) return false
-  const { '': _, ...wanted } = readJson(path.join(root, 'package-lock.json')).packages
-  const installed = readJson(file).packages
-  const fits = Object.entries(wanted).every(([name, { version, integrity, optional }]) => {
-    const found = installed[name]
+  return existsSync(file) && sameLock(readJson(path.join(root, 'package-lock.json')), readJson(file))
+}
+
+/**
+ * @typedef {{packages: Record<string, {version?: string, integrity?: string, optional?: boolean}>}} Lock
+ */
+
+/**
+ * Whether the packages installed are the packages wanted; those for other machines may be absent.
+ * @param {Lock} wanted
+ * @param {Lock} installed
+ */
+export function sameLock(wanted, installed) {
+  const { '': _, ...packages } = wanted.packages
+  const fits = Object.entries(packages).every(([name, { version, integrity, optional }]) => {
+    const found = installed.packages[name]
     return found ? found.version === version && found.integrity === integrity : Boolean(optional)
   })
-  return fits && Object.keys(installed).every((name) => name in wanted)
+  return fits && Object.keys(installed.packages).every((name) => name in packages)
 }
 
 /**
