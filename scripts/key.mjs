@@ -1,4 +1,4 @@
-import { freshKey, migrate, seedDemo } from './demo.mjs'
+import { freshKey, migrate } from './demo.mjs'
 import { dataFolder } from './folders.mjs'
 import { borrowCluster } from './kept-cluster.mjs'
 import { runMain } from './refusal.mjs'
@@ -14,7 +14,6 @@ async function main() {
   try {
     const reached = cluster ? { ...env, DATABASE_URL: cluster.url } : env
     await migrate(reached)
-    await seedDemo(reached)
     console.log(await freshKey(reached))
   } finally {
     await cluster?.stop()
