@@ -1414,9 +1414,9 @@ export interface operations {
             content: {
                 /**
                  * @example {
-                 *       "mail": "mara.lindqvist@example.org",
+                 *       "mail": "noor.almqvist@example.org",
                  *       "password": "seven lime washed walls",
-                 *       "name": "Mara Lindqvist",
+                 *       "name": "Noor Almqvist",
                  *       "accountName": "Lime & Larch"
                  *     }
                  */

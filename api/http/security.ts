@@ -5,7 +5,7 @@ import type { Config } from '../config.ts'
 const shared = (config: Config) => ({
   strictTransportSecurity: config.https ? { maxAge: 31_536_000, includeSubDomains: true } : false,
   referrerPolicy: { policy: 'no-referrer' as const },
-  xXssProtection: true,
+  frameguard: { action: 'deny' as const },
 })
 
 /** Headers of every answer that is no page: nothing may be loaded by it or frame it. */
