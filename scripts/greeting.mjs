@@ -8,7 +8,7 @@ export async function greet({ local, publicUrl }, { signIns, key }) {
   const lines = [
     `Soakstone runs at ${publicUrl}`,
     '',
-    'Sign in with:',
+    `Sign in at ${publicUrl}/sign-in, support at ${publicUrl}/staff/sign-in:`,
     ...signIns.map(({ role, mail, password }) => `  ${role.padEnd(10)}  ${mail.padEnd(width)}  ${password}`),
     '',
     'A first call, a wall of 0.2 m that meets the cold on both faces, after 1 and 10 hours:',
