@@ -78,10 +78,12 @@ export function energyFraction(beta: number): number {
  * Beside it stands the library's own error, amplified where two terms are subtracted.
  */
 export function completedError(eta: number): number {
-  return EPS * (70 + 17 * eta * eta)
+  const near = Math.min(eta, FAR)
+  return EPS * (70 + 17 * near * near)
 }
 export function fluxError(eta: number): number {
-  return EPS * (24 + 17 * eta * eta)
+  const near = Math.min(eta, FAR)
+  return EPS * (24 + 17 * near * near)
 }
 export const REMAINING_ERROR = 24 * EPS
 export const ENERGY_ERROR = 36 * EPS

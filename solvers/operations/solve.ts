@@ -1,116 +1,18 @@
 import { createHash } from 'node:crypto'
-import { z } from 'zod'
-import { type Case, type Resolved, outputNamesOf, outputOf, shapeOf } from '../case.ts'
+import type { z } from 'zod'
+import { type Case, type Resolved, outputNamesOf, outputOf } from '../case.ts'
 import { cautions } from '../cautions.ts'
 import { DomainError } from '../errors.ts'
-import { depths, times } from '../fields.ts'
-import { type OutputName, type Shape } from '../outputs.ts'
-import { issuesOf, metaOf } from '../validate.ts'
+import type { OutputName, Shape } from '../outputs.ts'
+import { issuesOf } from '../validate.ts'
 import { SOLVER_VERSION } from '../version.ts'
 import type { Warning } from '../warnings.ts'
 import type { Call, CaseOperation } from './index.ts'
+import { answeredShape, answerSchema, compactSchema, inputOf } from './solve-schemas.ts'
+import { unusualValues } from './unusual-values.ts'
 
 /** Longer series of the input are echoed as count and digest; the axes hold them whole. */
 const ECHO_LIMIT = 100
-
-export const detailField = z.enum(['full', 'compact']).optional().meta({
-  title: 'Detail',
-  description: 'Detail: full, or compact (result, bound and warning codes only).',
-  'x-accepted': 'full or compact',
-})
-
-function inputSchema(c: Case) {
-  const names = outputNamesOf(c)
-  const outputs = z
-    .array(z.enum(names))
-    .min(1)
-    .max(names.length)
-    .default(['temperature'])
-    .meta({
-      title: 'Outputs',
-      description: `Outputs: some of ${names.join(', ')}. Default temperature.`,
-      'x-accepted': names.join(', '),
-    })
-  return z.strictObject({
-    ...c.fields,
-    ...(c.places === 'depths' ? { depths: depths.optional() } : {}),
-    times,
-    outputs,
-    detail: detailField,
-  })
-}
-
-const boundSchema = z.strictObject({ absolute: z.number(), relative: z.number() })
-const valuesSchema: Record<Shape, z.ZodType> = {
-  grid: z.array(z.array(z.number())),
-  times: z.array(z.number()),
-  places: z.array(z.number()),
-  single: z.number(),
-}
-
-/** Cases without places answer a grid output as one row over the times. */
-function answeredShape(c: Case, name: OutputName): Shape {
-  const shape = shapeOf(c, name)
-  if (c.places !== 'none') return shape
-  return shape === 'grid' ? 'times' : shape === 'places' ? 'single' : shape
-}
-
-function answerSchema(c: Case) {
-  const names = outputNamesOf(c)
-  const perOutput = (schemaOf: (name: OutputName) => z.ZodType) =>
-    z.strictObject(Object.fromEntries(names.map((name) => [name, schemaOf(name).optional()])))
-  const result = perOutput((name) => {
-    const o = outputOf(c, name)
-    return valuesSchema[answeredShape(c, name)].meta({
-      title: o.label,
-      description: `${o.text} Unit ${o.unit}.`,
-      'x-ucum': o.unit,
-    })
-  })
-  const series = z.array(z.number())
-  return z.strictObject({
-    case: z.literal(c.id),
-    operation: z.literal('solve'),
-    solver: z.string().meta({ description: 'Version of the numbers.' }),
-    points: z.number().meta({ description: 'Priced points of this answer, before the floor of a call.' }),
-    input: z
-      .record(z.string(), z.unknown())
-      .meta({ description: 'The input as used: SI, with defaults and derived properties.' }),
-    axes: z.strictObject({ times: series, ...(c.places === 'depths' ? { depths: series.optional() } : {}) }),
-    units: z.record(z.string(), z.string()).meta({ description: 'UCUM code of each output and axis.' }),
-    result,
-    accuracy: z.strictObject({
-      method: z.array(z.string()),
-      terms: z.number(),
-      scale: z.number().meta({ description: 'The temperature scale of the case, K.' }),
-      bound: perOutput(() => boundSchema),
-      kind: z.enum(['proved', 'estimated']),
-      scope: z.literal('numerical'),
-      note: z.string(),
-    }),
-    numbers: z.strictObject({
-      biot: z.number().optional(),
-      fourier: series.optional(),
-      length: z.number().optional(),
-      penetrationDepth: z.number().optional(),
-    }),
-    checks: z.array(
-      z.strictObject({ id: z.string(), holds: z.boolean(), value: z.number(), limit: z.number(), text: z.string() }),
-    ),
-    warnings: z.array(z.strictObject({ code: z.string(), text: z.string(), value: z.number() })),
-    cautions: z.array(z.strictObject({ id: z.string(), version: z.number(), text: z.string() })),
-    sources: z.array(z.string()),
-  })
-}
-
-function compactSchema(c: Case) {
-  const full = answerSchema(c)
-  return z.strictObject({
-    result: full.shape.result,
-    accuracy: z.strictObject({ bound: full.shape.accuracy.shape.bound }),
-    warnings: z.array(z.string()),
-  })
-}
 
 function refuseBadInput(c: Case, schema: z.ZodType, error: z.ZodError, body: unknown): never {
   const issues = issuesOf(schema, error).map((issue) => {
@@ -211,31 +113,9 @@ function answer(c: Case, input: Resolved, points: number, compact: boolean) {
   }
 }
 
-/** Values outside what their field calls typical. */
-function unusualValues(c: Case, input: Record<string, unknown>): Warning[] {
-  return Object.entries(c.fields).flatMap(([name, schema]) => {
-    const meta = metaOf(schema as z.ZodType)
-    const typical = meta?.['x-typical'] as [number, number] | undefined
-    const value = input[name]
-    if (!typical || typeof value !== 'number' || (value >= typical[0] && value <= typical[1])) return []
-    const text = `${name} is ${value} ${String(meta!['x-ucum'])}; values from ${typical[0]} to ${typical[1]} are usual.`
-    return [{ code: 'outside-typical-range' as const, text, value }]
-  })
-}
-
 function shortened(value: unknown): unknown {
   if (!Array.isArray(value) || value.length <= ECHO_LIMIT) return value
   return { count: value.length, digest: 'sha-256=' + createHash('sha256').update(JSON.stringify(value)).digest('hex') }
-}
-
-const inputs = new Map<string, ReturnType<typeof inputSchema>>()
-/** Built once a case, since building a schema costs more than a solve. */
-function inputOf(c: Case) {
-  const known = inputs.get(c.id)
-  if (known) return known
-  const schema = inputSchema(c)
-  inputs.set(c.id, schema)
-  return schema
 }
 
 export const solve: CaseOperation = {

@@ -3,7 +3,7 @@ import erf from '@stdlib/math-base-special-erf'
 import erfcx from '@stdlib/math-base-special-erfcx'
 import { describe, expect, it } from 'vitest'
 import { slabEigenvalues } from '../../solvers/math/slab-eigenvalues.ts'
-import { SlabSolver } from '../../solvers/math/slab-film.ts'
+import { SlabFilm } from '../../solvers/math/slab-film.ts'
 import { askSingle } from './ask.ts'
 
 /*
@@ -126,7 +126,7 @@ function surfaceShare(film: number): number {
 function worstOneTerm(fourier: number): number {
   const error = (biot: number) => {
     const z = slabEigenvalues(biot, 1)[0]!
-    const solver = new SlabSolver({ biot, deltas: Float64Array.of(1), inner: Float64Array.of(0) }, fourier)
+    const solver = new SlabFilm({ biot, deltas: Float64Array.of(1), inner: Float64Array.of(0) }, fourier)
     const exact = solver.remaining(0, { fourier, root: Math.sqrt(fourier) }).value
     return Math.abs(firstCoefficient(biot) * Math.exp(-z * z * fourier) - exact)
   }

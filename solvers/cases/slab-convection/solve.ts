@@ -1,4 +1,5 @@
-import { type SlabMoment, SlabSolver } from '../../math/slab-film.ts'
+import type { SlabMoment } from '../../math/slab-body.ts'
+import { SlabFilm } from '../../math/slab-film.ts'
 import type { OutputName } from '../../outputs.ts'
 import type { Solution } from '../../solution.ts'
 import { exactly, scaled, type StepResponse, stepOutputs, untouched } from '../../step-response.ts'
@@ -56,7 +57,7 @@ function momentOf(input: SlabInput, time: number): SlabMoment {
   }
 }
 
-function solverOf(input: SlabInput, moments: readonly SlabMoment[]): SlabSolver {
+function solverOf(input: SlabInput, moments: readonly SlabMoment[]): SlabFilm {
   const length = characteristicLength(input)
   const biot = (input.filmCoefficient * length) / input.conductivity
   // Behind the mid-plane a body with two faces mirrors its front.
@@ -64,14 +65,15 @@ function solverOf(input: SlabInput, moments: readonly SlabMoment[]): SlabSolver 
   const deltas = Float64Array.from([...near, 0], (depth) => Math.min(1, depth / length))
   const inner = Float64Array.from([...near, 0], (depth) => Math.max(0, (length - depth) / length))
   const shortest = moments.reduce((least, m) => Math.min(least, m.fourier), Infinity)
-  return new SlabSolver({ biot, deltas, inner }, shortest)
+  return new SlabFilm({ biot, deltas, inner }, shortest)
 }
 
-function responseOf(input: SlabInput, moments: readonly SlabMoment[], solver: SlabSolver): StepResponse {
+function responseOf(input: SlabInput, moments: readonly SlabMoment[], solver: SlabFilm): StepResponse {
   const { filmCoefficient: h, thickness, exposedFaces } = input
   const face = input.depths.length // the solver's last place is the face itself
   const capacity = input.volumetricHeatCapacity * characteristicLength(input)
   const started = (i: number) => input.times[i]! > 0
+  const isFace = (j: number) => input.depths[j] === 0 || (exposedFaces === 2 && input.depths[j] === thickness)
   const mirrored = (j: number) => (exposedFaces === 2 && input.depths[j]! > thickness / 2 ? -1 : 1)
   return {
     share(i, j) {
@@ -85,7 +87,7 @@ function responseOf(input: SlabInput, moments: readonly SlabMoment[], solver: Sl
     completed: (i, j) => (started(i) ? solver.completed(j, moments[i]!) : exactly(0)),
     flux(i, j) {
       // At time 0 the limit from above: the film's whole flux at the face, none inside.
-      if (!started(i)) return scaled(mirrored(j) * h, exactly(solver.slab.deltas[j] === 0 ? 1 : 0))
+      if (!started(i)) return scaled(mirrored(j) * h, exactly(isFace(j) ? 1 : 0))
       return scaled(mirrored(j) * h, solver.flux(j, moments[i]!))
     },
     surfaceFlux: (i) => scaled(h, started(i) ? solver.remaining(face, moments[i]!) : exactly(1)),

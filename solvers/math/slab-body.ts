@@ -1,0 +1,15 @@
+/** A slab of length 1 from its exposed face to the plane where no heat flows, and the places asked for. */
+export interface SlabBody {
+  biot: number
+  /** Depth over length, 0..1, of each place. */
+  deltas: Float64Array
+  /** Distance to the mid-plane or insulated face over length, computed apart: 1 − δ would lose its digits. */
+  inner: Float64Array
+}
+
+/** Everything at one time that does not depend on the place. */
+export interface SlabMoment {
+  fourier: number
+  /** √Fo, computed without forming Fo, which can vanish. */
+  root: number
+}

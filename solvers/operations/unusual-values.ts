@@ -1,0 +1,35 @@
+import type { z } from 'zod'
+import type { Case } from '../case.ts'
+import { metaOf } from '../validate.ts'
+import type { Warning } from '../warnings.ts'
+
+interface Typical {
+  name: string
+  low: number
+  high: number
+  unit: string
+}
+
+const known = new Map<string, Typical[]>()
+
+function typicalOf(c: Case): Typical[] {
+  const found = known.get(c.id)
+  if (found) return found
+  const list = Object.entries(c.fields).flatMap(([name, schema]) => {
+    const meta = metaOf(schema as z.ZodType)
+    const typical = meta?.['x-typical'] as [number, number] | undefined
+    return typical ? [{ name, low: typical[0], high: typical[1], unit: String(meta!['x-ucum']) }] : []
+  })
+  known.set(c.id, list)
+  return list
+}
+
+/** Warnings for values outside what their field calls typical. */
+export function unusualValues(c: Case, input: Record<string, unknown>): Warning[] {
+  return typicalOf(c).flatMap(({ name, low, high, unit }) => {
+    const value = input[name]
+    if (typeof value !== 'number' || (value >= low && value <= high)) return []
+    const text = `${name} is ${value} ${unit}; values from ${low} to ${high} are usual.`
+    return [{ code: 'outside-typical-range' as const, text, value }]
+  })
+}

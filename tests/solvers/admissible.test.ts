@@ -1,0 +1,72 @@
+import fc from 'fast-check'
+import { describe, expect, it } from 'vitest'
+import { outputNamesOf } from '../../solvers/case.ts'
+import { cases } from '../../solvers/cases/index.ts'
+import { domainCodes, DomainError } from '../../solvers/errors.ts'
+import { solve } from '../../solvers/operations/solve.ts'
+import type { OutputName } from '../../solvers/outputs.ts'
+import { admissible } from './admissible.ts'
+import { proof, seed } from './counts.ts'
+
+const count = Math.ceil((proof ? 1_000_000 : 100_000) / cases.length)
+
+interface Answer {
+  result: Partial<Record<OutputName, number | number[] | number[][]>>
+  accuracy: { bound: Partial<Record<OutputName, { absolute: number; relative: number }>>; scale: number }
+}
+
+const numbers = (values: number | number[] | number[][]): number[] => [values].flat(2)
+
+/** Says what is wrong with an answer, or nothing. */
+function wrongWith(body: Record<string, unknown>, { result, accuracy }: Answer): string | undefined {
+  for (const [name, values] of Object.entries(result))
+    if (!numbers(values).every(Number.isFinite)) return `${name} is not finite`
+  for (const [name, b] of Object.entries(accuracy.bound))
+    if (!(b.absolute >= 0 && b.relative >= 0 && Number.isFinite(b.absolute + b.relative))) return `bound of ${name}`
+  if (!Number.isFinite(accuracy.scale)) return 'scale'
+  for (const name of ['remainingFraction', 'completedFraction', 'heatFraction'] as const)
+    if (!numbers(result[name] ?? []).every((v) => v >= 0 && v <= 1)) return `${name} outside 0..1`
+  if (body['power']) return undefined
+  const ends = [body['initialTemperature'], body['ambientTemperature']] as number[]
+  for (const name of ['temperature', 'meanTemperature'] as const) {
+    const slack = accuracy.bound[name]?.absolute ?? 0
+    if (!numbers(result[name] ?? []).every((v) => v >= Math.min(...ends) - slack && v <= Math.max(...ends) + slack))
+      return `${name} breaks the maximum principle`
+  }
+  return undefined
+}
+
+describe.each(cases.map((c) => [c.id, c] as const))('%s over all admissible inputs', (id, c) => {
+  it(
+    `answers ${count} random ones with finite numbers inside the limits, or refuses by a listed code`,
+    { timeout: 3_600_000 },
+    () => {
+      const arbitrary = admissible[id]
+      if (!arbitrary) throw new Error(`tests/solvers/admissible.ts has no inputs for ${id}`)
+      const names = outputNamesOf(c)
+      let answered = 0
+      const ask = (body: Record<string, unknown>, outputs: OutputName[]): string | undefined => {
+        try {
+          const answer = solve.prepare(c, { ...body, outputs }, 'full').run() as Answer
+          answered++
+          return wrongWith(body, answer)
+        } catch (error) {
+          if (!(error instanceof DomainError)) throw error
+          const unknown = error.issues.find((issue) => !(issue.code in domainCodes))
+          if (unknown) return `unknown code ${unknown.code}`
+          const absent = error.issues.every((issue) => issue.code === 'output-not-defined')
+          if (!absent) return `refused: ${JSON.stringify(error.issues[0])}`
+          const left = outputs.filter((_, i) => !error.issues.some((issue) => issue.pointer === `#/outputs/${i}`))
+          return left.length ? ask(body, left) : undefined
+        }
+      }
+      fc.assert(
+        fc.property(arbitrary, (body) => {
+          expect(ask(body, names)).toBeUndefined()
+        }),
+        { numRuns: count, seed },
+      )
+      expect(answered).toBeGreaterThanOrEqual(count)
+    },
+  )
+})
