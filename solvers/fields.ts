@@ -16,8 +16,8 @@ export const solid = {
     label: 'Conductivity',
     min: 1e-4,
     max: 1e4,
-    typical: [0.02, 3],
-    hint: 'insulation 0.035, brick 0.8, concrete 2',
+    typical: [0.02, 400],
+    hint: 'insulation 0.035, brick 0.8, concrete 2, steel 50',
   }).optional(),
   density: quantity({
     symbol: 'ρ',
@@ -25,7 +25,7 @@ export const solid = {
     label: 'Density',
     min: 1e-2,
     max: 3e4,
-    typical: [10, 2800],
+    typical: [10, 9000],
     hint: 'with specificHeat',
   }).optional(),
   specificHeat: quantity({
@@ -34,7 +34,7 @@ export const solid = {
     label: 'Specific heat',
     min: 0.1,
     max: 1e5,
-    typical: [450, 4200],
+    typical: [380, 4200],
     hint: 'with density',
   }).optional(),
   volumetricHeatCapacity: quantity({
@@ -52,7 +52,7 @@ export const solid = {
     label: 'Diffusivity',
     min: 1e-12,
     max: 1e2,
-    typical: [1e-7, 2e-5],
+    typical: [1e-7, 2e-4],
     hint: 'in place of a heat capacity',
   }).optional(),
 }

@@ -1,0 +1,41 @@
+import { createHash } from 'node:crypto'
+import { fileURLToPath } from 'node:url'
+import { readFileSync, writeFileSync } from 'node:fs'
+import { outputNamesOf } from '../../solvers/case.ts'
+import { cases } from '../../solvers/cases/index.ts'
+import { solve } from '../../solvers/operations/solve.ts'
+import { SOLVER_VERSION } from '../../solvers/version.ts'
+
+/*
+ * Answers as they were when the solver's version was set: their numbers may not change under one version.
+ * Run this file to record them anew, after raising the version.
+ */
+
+const file = new URL('../reference/golden.json', import.meta.url)
+
+export interface Golden {
+  solver: string
+  /** SHA-256 of result and bound of each case's example with all its outputs, over a grid of times. */
+  digests: Record<string, string>
+}
+
+export function compute(): Golden {
+  const times = [0, ...Array.from({ length: 40 }, (_, i) => 10 ** (i / 5))]
+  const digests = cases.map((c) => {
+    const body = { ...c.example, times, outputs: outputNamesOf(c) }
+    const { result, accuracy } = solve.prepare(c, body, 'compact').run() as { result: unknown; accuracy: unknown }
+    return [
+      c.id,
+      createHash('sha256')
+        .update(JSON.stringify([result, accuracy]))
+        .digest('hex'),
+    ] as const
+  })
+  return { solver: SOLVER_VERSION, digests: Object.fromEntries(digests) }
+}
+
+export function recorded(): Golden {
+  return JSON.parse(readFileSync(file, 'utf8')) as Golden
+}
+
+if (process.argv[1] === fileURLToPath(import.meta.url)) writeFileSync(file, JSON.stringify(compute(), null, 2) + '\n')
