@@ -9,6 +9,12 @@ export default defineConfig({
   plugins: [react(), tailwindcss()],
   // The server replaces the placeholder in each response.
   html: { cspNonce: '__CSP_NONCE__' },
-  build: { outDir: '../dist/portal', emptyOutDir: true, manifest: true, chunkSizeWarningLimit: 1600 },
+  build: {
+    assetsInlineLimit: 0,
+    outDir: '../dist/portal',
+    emptyOutDir: true,
+    manifest: true,
+    chunkSizeWarningLimit: 1600,
+  },
   server: { proxy: Object.fromEntries(['/v1', '/portal/v1', '/support/v1'].map((path) => [path, { target: api }])) },
 })

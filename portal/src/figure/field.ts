@@ -39,15 +39,20 @@ export function rangeOf(field: Field): Range {
 
 export interface Isotherms {
   levels: readonly number[]
-  /** The level that is drawn thick, with its far side washed: 0 °C, or the one nearest half of the change. */
+  /** The level that is drawn thick, with its far side washed: 0 °C, or the one nearest the middle of what occurs. */
   key: number | undefined
 }
 
-export function isothermsOf({ initial, ambient }: Field): Isotherms {
+export function isothermsOf({ initial, ambient, values }: Field): Isotherms {
   const [low, high] = [Math.min(initial, ambient), Math.max(initial, ambient)]
   if (high - low < 1e-9) return { levels: [], key: undefined }
-  const levels = multiples(niceStep(high - low, 14), low, high).filter((level) => level > low && level < high)
-  const half = (low + high) / 2
+  const all = values.flat()
+  const [least, most] = [all.reduce((a, b) => Math.min(a, b)), all.reduce((a, b) => Math.max(a, b))]
+  const step = niceStep(high - low, 14)
+  const levels = multiples(step, low, high).filter(
+    (level) => level > Math.max(low, least) && level < Math.min(high, most),
+  )
+  const half = (least + most) / 2
   const near = levels.reduce<number | undefined>(
     (best, level) => (best === undefined || Math.abs(level - half) < Math.abs(best - half) ? level : best),
     undefined,

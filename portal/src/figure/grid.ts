@@ -1,7 +1,7 @@
 /** At most so many numbers are asked for one drawing. */
 const MOST = 10_000
-const COLUMNS = 60
-const ROWS = 120
+const COLUMNS = 50
+const ROWS = 100
 
 interface Wanted {
   extent: number
@@ -11,14 +11,16 @@ interface Wanted {
   times: readonly number[]
   /** Even steps of time, unless the limit allows fewer. */
   rows?: number
+  /** Even steps of depth. */
+  columns?: number
 }
 
 /** The depths and times to solve for, close together just after the change. */
-export function gridOf({ extent, end, depths, times, rows: wanted = ROWS }: Wanted): {
+export function gridOf({ extent, end, depths, times, rows: wanted = ROWS, columns = COLUMNS }: Wanted): {
   depths: number[]
   times: number[]
 } {
-  const across = sorted([...even(extent, COLUMNS), ...depths.filter((d) => d >= 0 && d <= extent).slice(0, 15)])
+  const across = sorted([...even(extent, columns), ...depths.filter((d) => d >= 0 && d <= extent).slice(0, 15)])
   const named = times.filter((t) => t > 0 && t <= end).slice(0, 15)
   const rows = Math.min(wanted, Math.floor(MOST / across.length) - named.length - 5)
   const first = end / rows

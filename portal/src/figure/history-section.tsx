@@ -27,7 +27,7 @@ export function HistorySection({ field, layout, cut }: Props) {
     <g>
       <line className="thin" x1={historyLeft} y1={bottom} x2={right} y2={top} />
       <path className="proj" d={`M${x(depth) + 5} ${y(value)}H${across(value)}V${level}`} />
-      <text x={historyLeft + 6} y={top + 14}>
+      <text className="halo" x={historyLeft + 6} y={top + 14}>
         mitre: carries °C round
       </text>
       <text className="t-ink halo" x={right} y={bottom - 34} textAnchor="end">

@@ -2,9 +2,9 @@ import { Dimension } from './dimension.tsx'
 import { pathOf } from './drawing.tsx'
 import type { Cut, Field } from './field.ts'
 import { Film } from './film.tsx'
-import { nearest } from './grid.ts'
 import { type Hatch, hatched } from './hatches.tsx'
 import type { Layout } from './layout.ts'
+import { OtherProfiles, profileOf } from './other-profiles.tsx'
 import { degrees, inMeasure, lengthMeasure, plain, timeMeasure } from './measures.ts'
 import { multiples } from './steps.ts'
 
@@ -22,15 +22,11 @@ const backs = {
   endless: { words: 'the body goes on', short: 'goes on' },
 }
 
-/** Parts of the shown time at which past and future profiles are drawn. */
-const others = [0.04, 0.15, 0.35, 0.65, 1]
-
 /** Section A–A: temperature over depth at one time, in the body it belongs to. */
 export function ProfileSection({ field, layout, cut, hatch, material }: Props) {
-  const { left, right, top, bottom, back, axis, size, range, small, x, y } = layout
+  const { left, right, top, bottom, back, axis, size, range, small, y } = layout
   const measure = timeMeasure(field.times.at(-1)!)
   const time = field.times[cut.row]!
-  const curve = (row: number) => pathOf(field.values[row]!.map((value, i) => [x(field.depths[i]!), y(value)] as const))
   const at = `${inMeasure(time, measure)} ${measure.unit}`
   const words = backs[field.back]
   const extent = field.depths.at(-1)!
@@ -75,9 +71,9 @@ export function ProfileSection({ field, layout, cut, hatch, material }: Props) {
       </text>
       {range.low < 0 && range.high > 0 && <line className="dash" x1={axis} x2={right} y1={y(0)} y2={y(0)} />}
       <line className="dash" x1={left} x2={right} y1={y(field.initial)} y2={y(field.initial)} />
-      <OtherProfiles field={field} layout={layout} cut={cut} curve={curve} />
+      <OtherProfiles field={field} layout={layout} cut={cut} />
       <Film field={field} layout={layout} face={field.values[cut.row]![0]!} />
-      <path className="now" d={curve(cut.row)} />
+      <path className="now" d={pathOf(profileOf(field, layout, cut.row))} />
       <Dimension
         from={left}
         to={right}
@@ -87,36 +83,6 @@ export function ProfileSection({ field, layout, cut, hatch, material }: Props) {
       />
     </g>
   )
-}
-
-function OtherProfiles({
-  field,
-  layout,
-  cut,
-  curve,
-}: Pick<Props, 'field' | 'layout' | 'cut'> & { curve(row: number): string }) {
-  const { right, top, y } = layout
-  const end = field.times.at(-1)!
-  const measure = timeMeasure(end)
-  const ends = [y(field.values[cut.row]!.at(-1)!)]
-  const rows = others
-    .map((part) => nearest(field.times, end * part))
-    .filter((row) => Math.abs(field.times[row]! - field.times[cut.row]!) > 0.02 * end)
-  return rows.map((row) => {
-    const level = y(field.values[row]!.at(-1)!)
-    const free = ends.every((taken) => Math.abs(taken - level) > 15)
-    if (free) ends.push(level)
-    return (
-      <g key={row}>
-        <path className="past" d={curve(row)} />
-        {free && (
-          <text className="halo-sheet" x={right - 6} y={level < top + 14 ? level + 14 : level - 4} textAnchor="end">
-            {inMeasure(field.times[row]!, measure)} {measure.unit}
-          </text>
-        )}
-      </g>
-    )
-  })
 }
 
 /** The chosen point on the profile, with its reading where no larger one stands. */

@@ -4,6 +4,7 @@ import { ApiError } from '../api/api-error.ts'
 import { QueryView } from '../components/query-view.tsx'
 import { sessionQuery } from '../features/access/queries.ts'
 import { SignOut } from '../features/access/sign-out.tsx'
+import { useSignedIn } from '../session/signed-in.ts'
 import { Masthead } from './masthead.tsx'
 import { Page } from './page.tsx'
 import { Rail } from './rail.tsx'
@@ -16,9 +17,10 @@ const sheets = [
 
 /** The sheets of an account; whoever is not signed in is asked to, and comes back. */
 export function AccountPage() {
-  const query = useQuery(sessionQuery())
+  const signedIn = useSignedIn('member')
+  const query = useQuery({ ...sessionQuery(), enabled: signedIn })
   const { pathname, search } = useLocation()
-  if (query.error instanceof ApiError && query.error.status === 401)
+  if (!signedIn || (query.error instanceof ApiError && query.error.status === 401))
     return <Navigate to={`/sign-in?next=${encodeURIComponent(pathname + search)}`} replace />
   return (
     <Page>

@@ -1,11 +1,11 @@
 import { Link, Outlet } from 'react-router-dom'
 import { ButtonLink } from '../components/button.tsx'
-import { useSignedIn } from '../features/access/signed-in.ts'
+import { useSignedIn } from '../session/signed-in.ts'
 import { Masthead } from './masthead.tsx'
 import { Page } from './page.tsx'
 
 export function PublicPage() {
-  const signedIn = useSignedIn()
+  const signedIn = useSignedIn('member')
   return (
     <Page>
       <Masthead>

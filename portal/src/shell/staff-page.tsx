@@ -4,6 +4,7 @@ import { ApiError } from '../api/api-error.ts'
 import { QueryView } from '../components/query-view.tsx'
 import { staffSessionQuery } from '../features/staff/queries.ts'
 import { StaffSignOut } from '../features/staff/sign-out.tsx'
+import { useSignedIn } from '../session/signed-in.ts'
 import { Masthead } from './masthead.tsx'
 import { Page } from './page.tsx'
 import { Rail } from './rail.tsx'
@@ -11,8 +12,10 @@ import { Rail } from './rail.tsx'
 const sheets = [{ to: '/staff', text: 'Find' }]
 
 export function StaffPage() {
-  const query = useQuery(staffSessionQuery())
-  if (query.error instanceof ApiError && query.error.status === 401) return <Navigate to="/staff/sign-in" replace />
+  const signedIn = useSignedIn('staff')
+  const query = useQuery({ ...staffSessionQuery(), enabled: signedIn })
+  if (!signedIn || (query.error instanceof ApiError && query.error.status === 401))
+    return <Navigate to="/staff/sign-in" replace />
   return (
     <Page>
       <Masthead>

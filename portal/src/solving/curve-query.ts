@@ -56,13 +56,13 @@ async function drawingOf(
   const { detail: _, depths: __, outputs: ___, ...rest } = body
   const first = isFull(answer) ? answer : await trySolve(c.id, { ...body, detail: 'full' }, signal)
   if (!isFull(first)) throw new Error('a full answer was asked for')
-  const time = Math.min(...asked.times.filter((t) => t > 0))
+  const time = asked.times.find((t) => t > 0.05 * end && t < 0.7 * end) ?? end / 4
   if (c.places === 'none') return historyOf(c.id, rest, first, end, time, asked, signal)
   const { extent, back } = shapeOf(c.sketch.body, first, asked.depths)
   const grid = gridOf({ extent, end, ...asked })
   const values = await gridValues(c.id, rest, grid, signal)
   const field = { ...grid, values, back, ...surroundings(first) }
-  const depth = asked.depths.find((d) => d > 0 && d <= extent) ?? asked.depths[0] ?? extent / 2
+  const depth = asked.depths.find((d) => d > 0 && d < extent) ?? extent * 0.32
   return { kind: 'field', field, start: { time, depth }, asked: rounded(asked) }
 }
 

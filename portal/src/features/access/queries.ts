@@ -1,7 +1,7 @@
 import { queryOptions } from '@tanstack/react-query'
 import { ApiError, unwrap } from '../../api/api-error.ts'
 import { portalApi } from '../../api/clients.ts'
-import { noteSignedIn } from './signed-in.ts'
+import { noteSignedIn } from '../../session/signed-in.ts'
 
 export interface SignUp {
   mail: string
@@ -21,10 +21,10 @@ export const sessionQuery = () =>
     queryFn: async ({ signal }) => {
       try {
         const session = await unwrap(portalApi.GET('/portal/v1/session', { signal }))
-        noteSignedIn(true)
+        noteSignedIn('member', true)
         return session
       } catch (error) {
-        if (error instanceof ApiError && error.status === 401) noteSignedIn(false)
+        if (error instanceof ApiError && error.status === 401) noteSignedIn('member', false)
         throw error
       }
     },

@@ -1,6 +1,6 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
 import { signOut } from './queries.ts'
-import { noteSignedIn } from './signed-in.ts'
+import { noteSignedIn } from '../../session/signed-in.ts'
 
 /** Ends the session on the server and forgets what was read; the page starts anew. */
 export function SignOut() {
@@ -8,7 +8,7 @@ export function SignOut() {
   const end = useMutation({
     mutationFn: signOut,
     onSuccess: () => {
-      noteSignedIn(false)
+      noteSignedIn('member', false)
       client.clear()
       location.assign('/')
     },

@@ -1,7 +1,7 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
 import { useNavigate } from 'react-router-dom'
 import { sessionQuery, signIn, signUp } from './queries.ts'
-import { noteSignedIn } from './signed-in.ts'
+import { noteSignedIn } from '../../session/signed-in.ts'
 
 type Start = typeof signUp | typeof signIn
 
@@ -14,7 +14,7 @@ export function useStartSession<B extends Parameters<Start>[0]>(start: (body: B)
     onSuccess: async (session) => {
       client.removeQueries({ predicate: ({ queryKey }) => queryKey[0] !== 'cases' })
       client.setQueryData(sessionQuery().queryKey, session)
-      noteSignedIn(true)
+      noteSignedIn('member', true)
       await navigate(next, { replace: true })
     },
   })

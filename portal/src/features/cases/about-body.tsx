@@ -1,23 +1,39 @@
-import { Sketch } from '../../figure/sketch.tsx'
+import { Note } from '../../components/note.tsx'
+import type { Body } from '../../solving/solve.ts'
+import { BodyDrawing } from './body-drawing.tsx'
+import { kindOf } from './form-values.ts'
 import { Formula } from './formula.tsx'
 import type { Case } from './queries.ts'
 
 /** Sketch, formula and notes. */
-export function AboutBody({ description: c }: { description: Case }) {
+export function AboutBody({ description: c, body }: { description: Case; body: Body }) {
+  const without = c.fields.filter(
+    (field) => field.required && kindOf(field) === 'choice' && !('default' in field.schema),
+  )
   return (
     <div className="min-w-0">
       <h2 className="mb-4">The body</h2>
-      <Sketch sketch={c.sketch} label={`${c.title}: ${c.summary}`} />
+      <BodyDrawing sketch={c.sketch} title={c.title} body={body} />
       <div className="equations" role="region" aria-label="Formula" tabIndex={0}>
         {c.formula.map((tex) => (
           <Formula key={tex} tex={tex} />
         ))}
       </div>
       <p className="prose">{c.notes}</p>
+      {without.map(({ name, schema }) => (
+        <div key={name} className="mt-4">
+          <Note kind="warning">{String(schema['description'])}</Note>
+        </div>
+      ))}
       {c.absentOutputs.length > 0 && (
         <details className="more mt-3">
           <summary>Outputs it cannot have, and why</summary>
           <ul className="pb-3 grid gap-1">
+            {without.map(({ name, schema }) => (
+              <div key={name} className="mt-4">
+                <Note kind="warning">{String(schema['description'])}</Note>
+              </div>
+            ))}
             {c.absentOutputs.map(({ name, reason }) => (
               <li key={name} className="prose">
                 <code>{name}</code> {reason}

@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react'
 import { Link } from 'react-router-dom'
 import { CopyButton } from '../../components/copy-button.tsx'
-import { whole } from '../../components/formats.ts'
+import { counted, whole } from '../../components/formats.ts'
 import { jsonText } from '../../components/json-text.ts'
 import { Note } from '../../components/note.tsx'
 import { plain } from '../../figure/measures.ts'
@@ -39,7 +39,7 @@ function Whole({ description: c, answer }: { description: Case; answer: Answer }
         {Object.entries(numbers).map(([name, value]) => (
           <Row
             key={name}
-            name={name}
+            name={spoken(name)}
             value={(Array.isArray(value) ? value : [value]).map((v) => plain(v as number, 6)).join(' · ')}
           />
         ))}
@@ -93,8 +93,14 @@ function Row({ name, value }: { name: string; value: ReactNode }) {
 function Price({ points, least }: { points: number; least: number }) {
   return (
     <>
-      {whole(points)} points; a call is charged <span data-charged>{whole(Math.max(points, least))}</span>, at least{' '}
-      {whole(least)}
+      {counted(points, 'point')}; charged <span data-charged>{whole(Math.max(points, least))}</span>
+      {points < least ? ', the least a call costs' : ''}
     </>
   )
+}
+
+/** "penetrationDepth" as "penetration depth, m". */
+function spoken(name: string): string {
+  const words = name.replace(/[A-Z]/g, (letter) => ` ${letter.toLowerCase()}`)
+  return /(depth|length)$/.test(words) ? `${words}, m` : words
 }

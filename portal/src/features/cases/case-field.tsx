@@ -57,7 +57,13 @@ export function CaseField({ field, register, error }: Props) {
         </span>
       )}
       {grouped && (
-        <span className={kind === 'choice' ? 'control seg justify-self-start' : 'control'}>
+        <span
+          className={
+            kind === 'choice'
+              ? 'control seg justify-self-start'
+              : 'control grid gap-x-4 grid-cols-[repeat(auto-fit,minmax(190px,1fr))]'
+          }
+        >
           {optionsOf(field).map((option) => (
             <label key={String(option)} className={kind === 'several' ? 'opt' : undefined}>
               <input
@@ -78,7 +84,7 @@ export function CaseField({ field, register, error }: Props) {
       )}
     </>
   )
-  const name = `field${kind === 'number' ? ' quantity' : ''}${error ? ' bad' : ''}`
+  const name = `field${kind === 'number' ? ' quantity' : kind === 'several' ? ' several' : ''}${error ? ' bad' : ''}`
   if (!grouped)
     return (
       <div className={name} data-field={field.name}>
@@ -93,9 +99,14 @@ export function CaseField({ field, register, error }: Props) {
   )
 }
 
+const short = (value: number): string =>
+  Math.abs(value) >= 1e6 || (value !== 0 && Math.abs(value) < 1e-3)
+    ? value.toExponential().replace('e+', 'e')
+    : plain(value)
+
 function hintOf(field: Field): string {
   const [low, high] = field.typical ?? []
   const unit = kindOf(field) === 'list' ? unitText(field.unit ?? '') : ''
-  const typical = low !== undefined && high !== undefined ? `usually ${plain(low)} to ${plain(high)}` : ''
+  const typical = low !== undefined && high !== undefined ? `usually ${short(low)} to ${short(high)}` : ''
   return [unit ? `in ${unit}, commas between` : '', field.hint ?? '', typical].filter(Boolean).join(' · ')
 }

@@ -44,7 +44,7 @@ export function CaseSheet({ description: c }: { description: Case }) {
       </TitleBlock>
       <Band>
         <div className="two">
-          <AboutBody description={c} />
+          <AboutBody description={c} body={solved?.body ?? c.example} />
           <CaseForm
             description={c}
             solved={solved?.body}

@@ -5,9 +5,8 @@ export function Formula({ tex }: { tex: string }) {
   const ref = useRef<HTMLDivElement>(null)
   useEffect(() => {
     let left = false
-    void import('katex').then(({ default: katex }) => {
-      if (!left && ref.current)
-        katex.render(tex, ref.current, { output: 'mathml', displayMode: true, throwOnError: true })
+    void import('./typeset.ts').then(({ typeset }) => {
+      if (!left && ref.current) typeset(tex, ref.current)
     })
     return () => {
       left = true

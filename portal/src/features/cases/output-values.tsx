@@ -54,7 +54,7 @@ function Table({ head, limit, values, axes }: TableProps) {
   const columns =
     rows[0] && Array.isArray(values[0])
       ? Array.from({ length: across }, (_, i) => (axes?.depths ? `${plain(axes.depths[i]!)} m` : `place ${i + 1}`))
-      : ['value']
+      : [head.split(', ')[1] ?? head.toLowerCase()]
   const more = rows.length > SHOWN ? ` The first ${SHOWN} of ${rows.length} times; the rest stands in the JSON.` : ''
   return (
     <NumberTable

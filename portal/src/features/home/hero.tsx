@@ -4,6 +4,7 @@ import { CodeBlock } from '../../components/code-block.tsx'
 import { JsonCode } from '../../components/json-code.tsx'
 import { jsonText } from '../../components/json-text.ts'
 import { Note } from '../../components/note.tsx'
+import { AnswerBlocks } from './answer-blocks.tsx'
 import { QueryView } from '../../components/query-view.tsx'
 import { Slider } from '../../components/slider.tsx'
 import { FieldFigure } from '../../figure/field-figure.tsx'
@@ -29,7 +30,6 @@ interface Props {
 export function Hero({ field, answer, film, hours, position, asked, onPosition, onHours }: Props) {
   const [depth, setDepth] = useState(0.12)
   const request = `POST /v1/cases/${CASE}/solve\n${jsonText(wallBody(...asked))}`
-  const json = answer.data ? jsonText(answer.data) : ''
   return (
     <div className="hero">
       <div className="min-w-0">
@@ -57,6 +57,7 @@ export function Hero({ field, answer, film, hours, position, asked, onPosition, 
           In the plan, hatching marks where the brick is below 0 °C. The plan cut at A{'\u2060'}–{'\u2060'}A is the
           profile above it.
         </p>
+        {answer.data && isFull(answer.data) && <Cautions cautions={answer.data.cautions} />}
       </div>
       <div className="side">
         <div className="grid gap-3 sliders">
@@ -91,29 +92,22 @@ export function Hero({ field, answer, film, hours, position, asked, onPosition, 
           <JsonCode text={request} />
         </CodeBlock>
         <QueryView query={answer} what="Solving at four depths.">
-          {(shown) => (
-            <div className="min-w-0">
-              <CodeBlock
-                caption={answer.isPlaceholderData ? 'Answer · older than the sliders' : 'Answer · 200'}
-                text={json}
-                label="Answer"
-                tall
-              >
-                <JsonCode text={json} />
-              </CodeBlock>
-              {isFull(shown) && (
-                <div className="grid gap-3 mt-4">
-                  {shown.warnings.map(({ code, text }) => (
-                    <Note key={code} kind="warning">
-                      {text}
-                    </Note>
-                  ))}
-                </div>
-              )}
-            </div>
-          )}
+          {(shown) => <AnswerBlocks answer={shown} older={answer.isPlaceholderData} />}
         </QueryView>
       </div>
+    </div>
+  )
+}
+
+/** Beside the figure, so that nobody reads the one without the other. */
+function Cautions({ cautions }: { cautions: Answer['cautions'] }) {
+  return (
+    <div className="grid gap-3 mt-5">
+      {cautions.map(({ id, text }) => (
+        <Note key={id} kind="caution">
+          {text}
+        </Note>
+      ))}
     </div>
   )
 }

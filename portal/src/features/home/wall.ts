@@ -29,7 +29,14 @@ export const wallBody = (filmCoefficient: number, hours: number) => ({
 })
 
 /* Every half hour, and closer just after the change. */
-const grid = gridOf({ extent: wall.thickness, end: END_HOURS * 3600, depths: [], times: [], rows: 2 * END_HOURS })
+const grid = gridOf({
+  extent: wall.thickness,
+  end: END_HOURS * 3600,
+  depths: [],
+  times: [],
+  rows: 2 * END_HOURS,
+  columns: 60,
+})
 
 export const fieldQuery = (filmCoefficient: number) =>
   queryOptions({

@@ -28,7 +28,7 @@ const columns: readonly Column<RequestEntry>[] = [
   {
     header: 'Status',
     cell: ({ status, problem }) => (
-      <span className="fig">
+      <span className={status < 400 ? 'fig' : 'fig text-clay'}>
         {status}
         {problem ? ` ${problem}` : ''}
       </span>

@@ -30,7 +30,7 @@ const columns = (reason: string): readonly Column<Found>[] => [
   {
     header: 'Status',
     cell: ({ status, problem }) => (
-      <span className="fig">
+      <span className={status < 400 ? 'fig' : 'fig text-clay'}>
         {status}
         {problem ? ` ${problem}` : ''}
       </span>

@@ -7,6 +7,7 @@ import { FormFailure } from '../../components/form-failure.tsx'
 import { Band, Sheet } from '../../components/sheet.tsx'
 import { TextField } from '../../components/text-field.tsx'
 import { TitleBlock } from '../../components/title-block.tsx'
+import { noteSignedIn } from '../../session/signed-in.ts'
 import { staffSessionQuery, staffSignIn } from './queries.ts'
 
 export function StaffSignInScreen() {
@@ -17,6 +18,7 @@ export function StaffSignInScreen() {
     mutationFn: staffSignIn,
     onSuccess: async (session) => {
       client.removeQueries({ queryKey: ['staff'] })
+      noteSignedIn('staff', true)
       client.setQueryData(staffSessionQuery().queryKey, session)
       await navigate('/staff', { replace: true })
     },

@@ -1,4 +1,5 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
+import { noteSignedIn } from '../../session/signed-in.ts'
 import { staffSignOut } from './queries.ts'
 
 export function StaffSignOut() {
@@ -6,6 +7,7 @@ export function StaffSignOut() {
   const end = useMutation({
     mutationFn: staffSignOut,
     onSuccess: () => {
+      noteSignedIn('staff', false)
       client.clear()
       location.assign('/staff/sign-in')
     },
