@@ -5,6 +5,11 @@ export interface SlabBody {
   deltas: Float64Array
   /** Distance to the mid-plane or insulated face over length, computed apart: 1 − δ would lose its digits. */
   inner: Float64Array
+  /**
+   * What each δ may be off in units of EPS beyond its relative rounding: a depth behind the mid-plane is reckoned from
+   * the far face, and the difference keeps the rounding of the whole thickness.
+   */
+  shifts: Float64Array
 }
 
 /** Everything at one time that does not depend on the place. */

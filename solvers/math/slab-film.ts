@@ -20,20 +20,22 @@ export class SlabFilm {
 
   /** θ at place j, 1 at the start. */
   remaining(j: number, m: SlabMoment): Estimate {
-    return choose(
+    const found = choose(
       m,
       () => remainingByImages(this.body, j, m),
       () => this.series.remaining(j, m),
     )
+    return this.shifted(found, j, m)
   }
 
   /** 1 − θ at place j, without cancellation. */
   completed(j: number, m: SlabMoment): Estimate {
-    return choose(
+    const found = choose(
       m,
       () => completedByImages(this.body, j, m),
       () => this.series.completed(j, m),
     )
+    return this.shifted(found, j, m)
   }
 
   /** q/(h·ΔT) at place j, positive away from the face. */
@@ -59,6 +61,16 @@ export class SlabFilm {
     if (m.fourier >= IMAGES_TO) return this.series.meanRemaining(m)
     const heat = this.heatFraction(m)
     return { ...heat, value: 1 - heat.value, error: heat.error + EPS }
+  }
+
+  /** Adds what the rounding of the depth itself moves: |∂θ/∂δ| is Bi times the flux. No share can be off by more than 1. */
+  private shifted(found: Estimate, j: number, m: SlabMoment): Estimate {
+    const shift = EPS * this.body.shifts[j]!
+    if (shift === 0) return found
+    // Where the rounding is not small against the depth reached, no slope describes what it does.
+    if (shift > 0.05 * m.root) return { ...found, error: 1 }
+    const flux = this.flux(j, m)
+    return { ...found, error: Math.min(1, found.error + shift * this.body.biot * (Math.abs(flux.value) + flux.error)) }
   }
 
   /** Terms of the series at this time; 0 where only the images are asked. */

@@ -8,6 +8,7 @@ import {
   remaining,
   REMAINING_ERROR,
 } from './convective-half-space.ts'
+import { ierfcx } from './ierfcx.ts'
 import { type Estimate, EPS, TINY } from './rounding.ts'
 import type { SlabBody, SlabMoment } from './slab-body.ts'
 
@@ -57,8 +58,11 @@ export function fluxByImages(body: SlabBody, j: number, m: SlabMoment): Estimate
   const { near, far, beta, truncation } = argumentsAt(body, j, m)
   const a = fluxFraction(near, beta)
   const b = fluxFraction(far, beta)
-  const error = fluxError(near) * a + fluxError(far) * b + 4 * a * truncation + TINY
-  return { value: body.inner[j] === 0 ? 0 : a - b, error, method: 'two-image' }
+  // |∂F/∂δ|, for a depth whose own rounding is not relative to it.
+  const slope = (near * a + (near > 27.5 ? 0 : Math.exp(-near * near)) * ierfcx(near + beta)) / m.root
+  const shift = EPS * body.shifts[j]! * slope
+  const error = fluxError(near) * a + fluxError(far) * b + 4 * a * truncation + shift + TINY
+  return { value: body.inner[j] === 0 ? 0 : a - b, error: Math.min(1, error), method: 'two-image' }
 }
 
 export function heatByImages({ biot }: SlabBody, m: SlabMoment): Estimate {

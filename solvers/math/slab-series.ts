@@ -70,6 +70,7 @@ export class SlabSeries {
   flux(j: number, m: SlabMoment): Estimate {
     const B = this.body.biot
     const delta = this.body.deltas[j]!
+    const shift = this.body.shifts[j]!
     const { roots, weights } = this
     const count = Math.min(termsAt(m.fourier), roots.length - 1)
     let value = 0
@@ -84,7 +85,7 @@ export class SlabSeries {
       error +=
         w *
         ((14 + 16 * decay) * (Math.abs(c) + Math.abs(s)) +
-          6 * z * delta * (Math.abs(this.sines[j]![n]!) + (z / B) * Math.abs(c)))
+          z * (6 * delta + shift) * (Math.abs(this.sines[j]![n]!) + (z / B) * Math.abs(c)))
     }
     const z = roots[count]!
     const size = weights[count]! * z * (1 + (z / B) * Math.min(1, z * delta))

@@ -56,11 +56,13 @@ export function condition(id: string, body: Record<string, unknown>, output: Out
     const list = Array.isArray(given)
     const p = list ? (given[0] as number) : given
     if (typeof p !== 'number' || name === 'exposedFaces' || p === 0) return sum
-    const step = inputsOfTemperature.includes(name) ? 1e-3 * Math.max(1, Math.abs(p)) : 1e-4 * p
-    // A depth at the body's end can only be moved inward.
+    // A depth can only be moved inward, and the body's end only outward.
+    const oneSided = name === 'depths' || name === 'thickness'
+    const step = inputsOfTemperature.includes(name) ? 1e-3 * Math.max(1, Math.abs(p)) : p * (oneSided ? 1e-7 : 1e-4)
     const up = name === 'depths' ? p : p + step
+    const down = name === 'thickness' ? p : p - step
     const wrap = (v: number) => ({ [name]: list ? [v] : v })
-    const slope = (at(wrap(up)) - at(wrap(p - step))) / (up - p + step)
+    const slope = (at(wrap(up)) - at(wrap(down))) / (up - down)
     return sum + Math.abs(p * slope)
   }, 0)
 }

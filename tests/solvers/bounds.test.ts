@@ -39,7 +39,7 @@ describe.each(Object.entries(randomRows))('bounds of %s', (_id, arbitrary) => {
 
 describe('a planted error', () => {
   it('of 1e-10 in the first coefficient of the series breaks a bound', () => {
-    const slab = { biot: 2, deltas: Float64Array.of(0.4), inner: Float64Array.of(0.6) }
+    const slab = { biot: 2, deltas: Float64Array.of(0.4), inner: Float64Array.of(0.6), shifts: Float64Array.of(0) }
     const moment = { fourier: 0.25, root: 0.5 }
     const exact = exactSlab(new D(2), new D('0.25'), new D('0.4'))
     const solver = new SlabFilm(slab, moment.fourier)

@@ -126,7 +126,10 @@ function surfaceShare(film: number): number {
 function worstOneTerm(fourier: number): number {
   const error = (biot: number) => {
     const z = slabEigenvalues(biot, 1)[0]!
-    const solver = new SlabFilm({ biot, deltas: Float64Array.of(1), inner: Float64Array.of(0) }, fourier)
+    const solver = new SlabFilm(
+      { biot, deltas: Float64Array.of(1), inner: Float64Array.of(0), shifts: Float64Array.of(0) },
+      fourier,
+    )
     const exact = solver.remaining(0, { fourier, root: Math.sqrt(fourier) }).value
     return Math.abs(firstCoefficient(biot) * Math.exp(-z * z * fourier) - exact)
   }

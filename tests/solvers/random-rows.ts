@@ -30,7 +30,10 @@ const temperature = fc
   .tuple(uniform, uniform)
   .map(([u, v]) => new D(u).mul(100).minus(50).plus(new D(v).mul('1e-16')).toSignificantDigits(20))
 /** A share of a length, its ends included. */
-const share = uniform.map((u) => Math.min(1, Math.max(0, 1.3 * u - 0.15)))
+const share = fc.oneof(
+  { weight: 4, arbitrary: uniform.map((u) => Math.min(1, Math.max(0, 1.3 * u - 0.15))) },
+  { weight: 1, arbitrary: decades(1e-17, 1).map((d) => d.toNumber()) },
+)
 
 const solidArbitrary = fc.record({ k: decades(0.01, 100), density: decades(10, 5e3), specificHeat: decades(100, 5e3) })
 const common = { solid: solidArbitrary, initial: temperature, ambient: temperature, share }
@@ -41,6 +44,7 @@ const slab = fc
     ...common,
     d: decades(1e-3, 10),
     faces: fc.constantFrom(1, 2),
+    behind: fc.boolean(),
     biot: decades(1e-14, 1e15),
     fourier: fc.oneof(decades(1e-3, 1), decades(1e-9, 1e3)),
   })
@@ -50,10 +54,13 @@ const slab = fc
     const capacity = density.mul(specificHeat)
     const film = r.biot.mul(k).div(length).toSignificantDigits(20)
     const time = r.fourier.mul(length).mul(length).mul(capacity).div(k).toSignificantDigits(20)
-    const depth = D.min(length, length.mul(r.share).toSignificantDigits(20))
+    const near = D.min(length, length.mul(r.share).toSignificantDigits(20))
+    // Behind the mid-plane of a body with two exposed faces, now and then very close to its far face.
+    const mirrored = r.faces === 2 && r.behind
+    const depth = mirrored ? r.d.minus(near) : near
     const biot = film.mul(length).div(k)
     const fourier = k.mul(time).div(capacity).div(length).div(length)
-    const at = exactSlab(biot, fourier, depth.div(length))
+    const at = exactSlab(biot, fourier, near.div(length))
     const face = exactSlab(biot, fourier, new D(0))
     const step = r.ambient.minus(r.initial)
     return {
@@ -65,7 +72,10 @@ const slab = fc
         remainingFraction: at.remaining,
         completedFraction: at.completed,
         heatFraction: at.heat,
-        heatFlux: film.mul(step).mul(at.flux),
+        heatFlux: film
+          .mul(step)
+          .mul(at.flux)
+          .mul(mirrored ? -1 : 1),
         surfaceHeatFlux: film.mul(step).mul(face.remaining),
         heatGained: capacity.mul(length).mul(step).mul(at.heat),
       },

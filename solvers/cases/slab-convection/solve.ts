@@ -57,15 +57,21 @@ function momentOf(input: SlabInput, time: number): SlabMoment {
   }
 }
 
+/** Behind the mid-plane a body with two exposed faces mirrors its front. */
+function placeOf({ thickness, exposedFaces }: SlabInput, depth: number): { near: number; mirrored: boolean } {
+  const mirrored = exposedFaces === 2 && depth > thickness / 2
+  return { near: mirrored ? thickness - depth : depth, mirrored }
+}
+
 function solverOf(input: SlabInput, moments: readonly SlabMoment[]): SlabFilm {
   const length = characteristicLength(input)
   const biot = (input.filmCoefficient * length) / input.conductivity
-  // Behind the mid-plane a body with two faces mirrors its front.
-  const near = input.depths.map((depth) => Math.min(depth, input.exposedFaces === 2 ? input.thickness - depth : depth))
-  const deltas = Float64Array.from([...near, 0], (depth) => Math.min(1, depth / length))
-  const inner = Float64Array.from([...near, 0], (depth) => Math.max(0, (length - depth) / length))
+  const places = [...input.depths, 0].map((depth) => placeOf(input, depth))
+  const deltas = Float64Array.from(places, ({ near }) => Math.min(1, near / length))
+  const inner = Float64Array.from(places, ({ near }) => Math.max(0, (length - near) / length))
+  const shifts = Float64Array.from(places, ({ mirrored }) => (mirrored ? 6 : 0))
   const shortest = moments.reduce((least, m) => Math.min(least, m.fourier), Infinity)
-  return new SlabFilm({ biot, deltas, inner }, shortest)
+  return new SlabFilm({ biot, deltas, inner, shifts }, shortest)
 }
 
 function responseOf(input: SlabInput, moments: readonly SlabMoment[], solver: SlabFilm): StepResponse {
