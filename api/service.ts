@@ -1,5 +1,6 @@
 import { type Server, createServer } from 'node:http'
-import type { AddressInfo } from 'node:net'
+import { type AddressInfo, Server as NetServer } from 'node:net'
+import { setTimeout as sleep } from 'node:timers/promises'
 import type { Logger } from 'pino'
 import { createApp } from './app.ts'
 import { createCompute } from './compute/compute.ts'
@@ -14,6 +15,7 @@ import { keepHouse } from './housekeeping.ts'
 
 /** Calls under way at the end of the service have so long. */
 const LAST_CALLS = 20_000
+const LAST_WORDS = 300
 
 export interface Service {
   port: number
@@ -61,11 +63,18 @@ function listen(server: Server, { host, port }: Config): Promise<void> {
   return new Promise((resolve, reject) => server.once('error', reject).listen(port, host, () => resolve()))
 }
 
+/*
+ * Idle connections are closed only after a while in which each answer asks for it: a client may be about to use one,
+ * and would find its call cut off. The close of http would drop them at once.
+ */
 async function finish(server: Server): Promise<void> {
   server.prependListener('request', (_req, res) => res.setHeader('Connection', 'close'))
-  const closed = new Promise<void>((resolve) => server.close(() => resolve()))
+  const closed = new Promise<void>((resolve) => NetServer.prototype.close.call(server, () => resolve()))
+  await sleep(LAST_WORDS)
   server.closeIdleConnections()
   const late = setTimeout(() => server.closeAllConnections(), LAST_CALLS)
+  const idle = setInterval(() => server.closeIdleConnections(), LAST_WORDS)
   await closed
+  clearInterval(idle)
   clearTimeout(late)
 }

@@ -1,0 +1,60 @@
+import { afterAll, beforeAll, expect, test } from 'vitest'
+import lumped from '../../solvers/cases/lumped-convection/case.ts'
+import { Client } from './harness/client.ts'
+import { PASSWORD, makeKey, query, signUp } from './harness/people.ts'
+import { type TestService, startTestService } from './harness/service.ts'
+
+let service: TestService
+beforeAll(async () => {
+  service = await startTestService()
+})
+afterAll(() => service.close())
+
+test('no log line and no table holds a key, a password or a cookie', async () => {
+  const { client, mail } = await signUp(service.url)
+  const key = await makeKey(client)
+  const other = new Client(service.url)
+  await other.post('/portal/v1/sign-in', { mail, password: PASSWORD })
+  await other.post('/portal/v1/sign-in', { mail, password: PASSWORD, [PASSWORD]: PASSWORD })
+  await client.solve(lumped.id, key.secret, lumped.example)
+  await client.solve(lumped.id, key.secret, { ...lumped.example, [key.secret]: 1 })
+  await client.solve(lumped.id, key.secret, `{"${key.secret}"`)
+  await client.call(`/v1/${key.secret}?key=${key.secret}`)
+  await client.call(`/v1/cases/${key.secret}`)
+  await client.call(`/v1/usage?key=${key.secret}`, { headers: { authorization: `Bearer ${key.secret}` } })
+  await client.call(`/v1/requests/${key.secret}`, { headers: { authorization: `Bearer ${key.secret}` } })
+  const { compute, requestLog } = service.service.deps
+  const { solve } = compute
+  compute.solve = (task) => Promise.reject(Object.assign(new Error('planted'), { task, password: PASSWORD, authorization: key.secret }))
+  await client.solve(lumped.id, key.secret, lumped.example).finally(() => (compute.solve = solve))
+  await requestLog.flush()
+
+  const cookies = [...client.cookies.values(), ...other.cookies.values()].map((value) => decodeURIComponent(value))
+  const secrets = [key.secret, key.secret.slice(-20), PASSWORD, ...cookies, ...cookies.map((c) => c.split('.')[1] ?? c)]
+  const tables = await query<{ name: string }>(
+    service.databaseUrl,
+    "SELECT quote_ident(tablename) AS name FROM pg_tables WHERE schemaname = 'public' AND tablename NOT IN ('log', 'ledger')",
+  )
+  const dump = await Promise.all(tables.map(({ name }) => query(service.databaseUrl, `SELECT t::text FROM ${name} t`)))
+  const kept = JSON.stringify(dump)
+  expect(kept).toContain(key.id)
+  expect(service.lines.length).toBeGreaterThan(10)
+  for (const secret of secrets) {
+    expect(service.lines.join('\n')).not.toContain(secret)
+    expect(kept).not.toContain(secret)
+  }
+})
+
+test('a fault is logged with its request id, and its answer hides the reason', async () => {
+  const { client } = await signUp(service.url)
+  const { db } = service.service.deps
+  const { select } = db
+  db.select = (() => {
+    throw new Error('a reason that is nobody\'s business')
+  }) as unknown as typeof db.select
+  const answer = await client.call('/portal/v1/session').finally(() => (db.select = select))
+  expect(answer.json).toMatchObject({ status: 500, code: 'internal' })
+  expect(answer.text).not.toContain('business')
+  const line = service.lines.find((l) => l.includes('business')) ?? ''
+  expect(line).toContain(answer.json.requestId)
+})
