@@ -1,5 +1,5 @@
 import { createHash } from 'node:crypto'
-import { accessSync, constants, mkdirSync } from 'node:fs'
+import { accessSync, constants, existsSync, mkdirSync } from 'node:fs'
 import path from 'node:path'
 import { fileURLToPath } from 'node:url'
 import { me } from './identity.mjs'
@@ -21,12 +21,22 @@ export const sharedFolder = (/** @type {string} */ dir) =>
  */
 export function ensureFolder(folder) {
   try {
-    // Others may pass through to reach the database; what is secret inside is a file of mode 600.
-    mkdirSync(folder, { recursive: true, mode: 0o711 })
+    makeFolder(folder)
     accessSync(folder, constants.W_OK | constants.X_OK)
   } catch {
     throw new Refusal(
       `The folder ${folder} cannot be written by ${me()}: make it writable, or set SOAKSTONE_DATA to a folder that is.`,
     )
   }
+}
+
+/**
+ * One level after the other: Node's recursive form never returns where the system refuses as /proc does.
+ * @param {string} folder
+ */
+function makeFolder(folder) {
+  if (existsSync(folder)) return
+  makeFolder(path.dirname(folder))
+  // Others may pass through to reach the database; what is secret inside is a file of mode 600.
+  mkdirSync(folder, { mode: 0o711 })
 }
