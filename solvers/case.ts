@@ -56,6 +56,8 @@ export interface CaseDescription<Shape_ extends z.ZodRawShape, R extends Resolve
   fields: Shape_
   /** Where the answer has places: depths inward from the exposed face, or none. */
   places: 'depths' | 'none'
+  /** The field that says where the body ends, so that no depth may lie beyond; absent where it has no end. */
+  depthsEndAt?: string & keyof Shape_
   outputs: Partial<Record<OutputName, Partial<Pick<OutputDescription, 'unit' | 'shape'>>>>
   /** Outputs that a reader would expect and the case cannot have, each with the reason. */
   absentOutputs: Partial<Record<OutputName, string>>
@@ -64,6 +66,8 @@ export interface CaseDescription<Shape_ extends z.ZodRawShape, R extends Resolve
   setUp: number
   cautions: readonly CautionId[]
   example: Record<string, unknown>
+  /** Other ways to state the case, each a whole input; the common tests vary their numbers as they do the example's. */
+  variants?: readonly { title: string; input: Record<string, unknown> }[]
   /** SI, defaults and every refusal of the domain; pushes an issue for each thing refused. */
   resolve(input: ParsedInput<Shape_>, refuse: (issue: Issue) => void): R
   solve(input: R): Solution
@@ -83,7 +87,8 @@ export type ParsedInput<S extends z.ZodRawShape> = z.infer<z.ZodObject<S>> & {
 }
 
 /** A case with its types hidden, as the lists and operations hold it. */
-export type Case = Omit<CaseDescription<z.ZodRawShape, Resolved>, 'resolve'> & {
+export type Case = Omit<CaseDescription<z.ZodRawShape, Resolved>, 'resolve' | 'depthsEndAt'> & {
+  depthsEndAt?: string
   /** Throws DomainError. */
   resolve(input: Record<string, unknown>): Resolved
 }

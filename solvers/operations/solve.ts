@@ -49,10 +49,22 @@ function prepare(c: Case, body: unknown, defaultDetail: 'full' | 'compact'): Cal
         accepted: 'a list of depths in m, inward from the exposed face',
       },
     ])
+  refuseOutside(c, input)
   const resolved = c.resolve(input)
   const values = countValues(c, resolved)
   const points = c.weight * values + c.setUp
   return { values, points, run: () => answer(c, resolved, points, detail === 'compact') }
+}
+
+function refuseOutside(c: Case, input: Record<string, unknown> & { depths?: number[] }): void {
+  const end = c.depthsEndAt && input[c.depthsEndAt]
+  if (typeof end !== 'number') return
+  const issues = (input.depths ?? []).flatMap((depth, j) => {
+    if (depth <= end) return []
+    const detail = `The body ends at ${end} m; this depth is ${depth} m.`
+    return [{ pointer: `#/depths/${j}`, code: 'depth-outside-body' as const, detail, accepted: `0 to ${end} m` }]
+  })
+  if (issues.length > 0) throw new DomainError(issues)
 }
 
 function countValues(c: Case, input: Resolved): number {

@@ -18,6 +18,9 @@ interface LumpedResolved extends LumpedInput, Resolved {
   body: LumpedBody
 }
 
+/** What the variants share. */
+const outside = { filmCoefficient: 12, initialTemperature: 60, ambientTemperature: 20, times: [600, 7200] }
+
 const fields = {
   heatCapacity: quantity({
     symbol: 'C',
@@ -107,6 +110,55 @@ export default defineCase<typeof fields, LumpedResolved>({
     ambientTemperature: 20,
     times: [3600, 36000],
   },
+  variants: [
+    {
+      title: 'A heated tank by its volume',
+      input: {
+        volume: 0.15,
+        volumetricHeatCapacity: 4.18e6,
+        area: 1.8,
+        power: 400,
+        ...outside,
+        outputs: ['temperature', 'heatGained', 'steadyTemperature', 'timeConstant'],
+      },
+    },
+    {
+      title: 'A steel ball with the mean correction',
+      input: {
+        body: 'sphere',
+        radius: 0.02,
+        conductivity: 15,
+        density: 7800,
+        specificHeat: 460,
+        correction: 'mean',
+        ...outside,
+      },
+    },
+    {
+      title: 'A rod by its diffusivity',
+      input: {
+        body: 'cylinder',
+        radius: 0.01,
+        conductivity: 15,
+        diffusivity: 4e-6,
+        ...outside,
+        outputs: ['temperature', 'remainingFraction', 'completedFraction', 'heatFraction'],
+      },
+    },
+    {
+      title: 'A sheet exposed at both faces',
+      input: {
+        body: 'slab',
+        thickness: 0.004,
+        exposedFaces: 2,
+        conductivity: 50,
+        density: 7800,
+        specificHeat: 450,
+        ...outside,
+        outputs: ['temperature', 'heatGained'],
+      },
+    },
+  ],
   resolve(input, refuse): LumpedResolved {
     const { filmCoefficient, initialTemperature, ambientTemperature, times, outputs, power = 0 } = input
     const body = resolveBody(input, refuse) ?? nothing

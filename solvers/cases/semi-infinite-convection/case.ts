@@ -51,6 +51,21 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
     depths: [0, 0.5, 1],
     times: [86400, 864000],
   },
+  variants: [
+    {
+      title: 'Heat drawn from the ground, by its diffusivity',
+      input: {
+        conductivity: 2,
+        diffusivity: 1e-6,
+        filmCoefficient: 12,
+        initialTemperature: 10,
+        ambientTemperature: -5,
+        depths: [0, 0.3],
+        times: [3600, 86400],
+        outputs: ['temperature', 'heatFlux', 'surfaceHeatFlux', 'heatGained', 'remainingFraction', 'completedFraction'],
+      },
+    },
+  ],
   resolve(input, refuse): HalfSpaceResolved {
     const body = resolveSolid(input, refuse)
     const { filmCoefficient, initialTemperature, ambientTemperature, times, outputs } = input

@@ -26,6 +26,7 @@ export default defineCase<typeof fields, SlabResolved>({
   sketch: { body: 'slab', boundary: 'convection' },
   fields,
   places: 'depths',
+  depthsEndAt: 'thickness',
   outputs: {
     temperature: {},
     heatFlux: {},
@@ -55,16 +56,48 @@ export default defineCase<typeof fields, SlabResolved>({
     depths: [0, 0.1],
     times: [3600, 36000],
   },
+  variants: [
+    {
+      title: 'One face insulated, all outputs',
+      input: {
+        conductivity: 0.81,
+        diffusivity: 4.5e-7,
+        thickness: 0.36,
+        exposedFaces: 1,
+        filmCoefficient: 25,
+        initialTemperature: 20,
+        ambientTemperature: -10,
+        depths: [0, 0.12, 0.36],
+        times: [3600, 86400],
+        outputs: [
+          'temperature',
+          'heatFlux',
+          'surfaceHeatFlux',
+          'heatGained',
+          'meanTemperature',
+          'remainingFraction',
+          'completedFraction',
+          'heatFraction',
+        ],
+      },
+    },
+    {
+      title: 'A volumetric heat capacity, heat and mean only: no depths',
+      input: {
+        conductivity: 2,
+        volumetricHeatCapacity: 2.4e6,
+        thickness: 1,
+        exposedFaces: 2,
+        filmCoefficient: 7.7,
+        initialTemperature: 30,
+        ambientTemperature: 10,
+        times: [86400],
+        outputs: ['heatGained', 'meanTemperature', 'heatFraction'],
+      },
+    },
+  ],
   resolve(input, refuse): SlabResolved {
     const body = resolveSolid(input, refuse)
-    const deep = (input.depths ?? []).findIndex((depth) => depth > input.thickness)
-    if (deep >= 0)
-      refuse({
-        pointer: `#/depths/${deep}`,
-        code: 'depth-outside-body',
-        detail: `The body ends at ${input.thickness} m; this depth is ${input.depths![deep]} m.`,
-        accepted: `0 to ${input.thickness} m`,
-      })
     const { exposedFaces, thickness, filmCoefficient, initialTemperature, ambientTemperature, times, outputs } = input
     const own = { thickness, exposedFaces, filmCoefficient, initialTemperature, ambientTemperature }
     return { ...body!, ...own, depths: input.depths ?? [], times, outputs }
