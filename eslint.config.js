@@ -34,7 +34,7 @@ export default tseslint.config(
   { files: ['portal/**/*.{ts,tsx}'], extends: [reactHooks.configs.flat.recommended] },
   {
     // Where an index comes from the length, the compiler cannot see that the element is there.
-    files: ['solvers/**', 'tests/**'],
+    files: ['portal/**', 'solvers/**', 'tests/**'],
     rules: { '@typescript-eslint/no-non-null-assertion': 'off' },
   },
 )

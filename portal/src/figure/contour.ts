@@ -1,4 +1,4 @@
-import type { Point } from './drawing.tsx'
+import type { Point } from './points.ts'
 
 /* Lines of equal value over a grid, by marching squares: cells are cut edge to edge, the cuts joined to lines. */
 

@@ -17,9 +17,3 @@ export function Drawing({ width, height, label, children, ...rest }: Props) {
     </svg>
   )
 }
-
-export type Point = readonly [number, number]
-
-export function pathOf(points: readonly Point[]): string {
-  return points.map(([x, y], i) => `${i ? 'L' : 'M'}${x.toFixed(1)} ${y.toFixed(1)}`).join('')
-}

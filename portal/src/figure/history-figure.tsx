@@ -1,4 +1,5 @@
-import { Drawing, pathOf } from './drawing.tsx'
+import { Drawing } from './drawing.tsx'
+import { pathOf } from './points.ts'
 import { temperatureRange } from './field.ts'
 import { degrees, inMeasure, plain } from './measures.ts'
 import { multiples } from './steps.ts'

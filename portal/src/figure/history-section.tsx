@@ -1,4 +1,4 @@
-import { pathOf } from './drawing.tsx'
+import { pathOf } from './points.ts'
 import type { Cut, Field } from './field.ts'
 import type { Layout } from './layout.ts'
 import { degrees, inMeasure, lengthMeasure, plain, timeMeasure } from './measures.ts'

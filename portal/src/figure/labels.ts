@@ -1,4 +1,4 @@
-import type { Point } from './drawing.tsx'
+import type { Point } from './points.ts'
 import type { Layout } from './layout.ts'
 
 interface Drawn {

@@ -1,4 +1,4 @@
-import { type Point, pathOf } from './drawing.tsx'
+import { type Point, pathOf } from './points.ts'
 import type { Cut, Field } from './field.ts'
 import { nearest } from './grid.ts'
 import type { Layout } from './layout.ts'

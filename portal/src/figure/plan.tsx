@@ -1,6 +1,6 @@
 import { useMemo } from 'react'
 import { contour, region } from './contour.ts'
-import { type Point, pathOf } from './drawing.tsx'
+import { type Point, pathOf } from './points.ts'
 import { type Cut, type Field, isothermsOf } from './field.ts'
 import { hatched } from './hatches.tsx'
 import { placeLabels } from './labels.ts'
@@ -46,7 +46,7 @@ export function Plan({ field, layout, cut, history }: Props) {
         y={bottom + 20}
         textAnchor={small && history && !named ? 'end' : 'start'}
       >
-        Plan: isotherms, °C
+        {small && history ? 'Plan, °C' : 'Plan: isotherms, °C'}
       </text>
       {right - left > 420 && !named && (
         <text x={right} y={bottom + 20} textAnchor="end">

@@ -1,5 +1,5 @@
 import { Dimension } from './dimension.tsx'
-import { pathOf } from './drawing.tsx'
+import { pathOf } from './points.ts'
 import type { Cut, Field } from './field.ts'
 import { Film } from './film.tsx'
 import { type Hatch, hatched } from './hatches.tsx'

@@ -11,6 +11,8 @@ import type { Case, Field } from './queries.ts'
 
 interface Props {
   description: Case
+  /** The body that was last sent. */
+  asked: Body
   /** The body that the sheet shows the answer of. */
   solved: Body | undefined
   pending: boolean
@@ -19,19 +21,17 @@ interface Props {
 }
 
 /** Every field of the contract. It solves when a field is left changed, and on Solve. */
-export function CaseForm({ description: c, solved, pending, error, onSolve }: Props) {
+export function CaseForm({ description: c, asked, solved, pending, error, onSolve }: Props) {
   const { control, register, handleSubmit, getValues, reset } = useForm<FormValues>({
     defaultValues: valuesOf(c, c.example),
   })
   const values = useWatch({ control }) as FormValues
   const form = useRef<HTMLFormElement>(null)
-  const sent = useRef(JSON.stringify(c.example))
   const errors = issuesByField(error)
   const shown = c.fields.filter(({ name }) => isSent(c, name, values.heat))
   const open = shown.filter((field) => isOpen(c, field))
   const folded = shown.filter((field) => !isOpen(c, field))
-  const stale =
-    solved !== undefined && JSON.stringify(bodyOf(c, values)) !== JSON.stringify(bodyOf(c, valuesOf(c, solved)))
+  const stale = solved !== undefined && !same(bodyOf(c, values), bodyOf(c, valuesOf(c, solved)))
 
   useEffect(() => {
     if (error) form.current?.querySelector<HTMLElement>('[aria-invalid=true]')?.focus()
@@ -39,10 +39,7 @@ export function CaseForm({ description: c, solved, pending, error, onSolve }: Pr
 
   const send = (always: boolean) => {
     const body = bodyOf(c, getValues())
-    const text = JSON.stringify(body)
-    if (!always && text === sent.current) return
-    sent.current = text
-    onSolve(body)
+    if (always || !same(body, bodyOf(c, valuesOf(c, asked)))) onSolve(body)
   }
   const fields = (list: readonly Field[]) => {
     const chosen = waysOf(c).flat()
@@ -102,6 +99,8 @@ export function CaseForm({ description: c, solved, pending, error, onSolve }: Pr
     </form>
   )
 }
+
+const same = (a: Body, b: Body): boolean => JSON.stringify(a) === JSON.stringify(b)
 
 /** Shown at once: what must be given, and what the example gives. */
 function isOpen(c: Case, { name, required }: Field): boolean {

@@ -47,6 +47,7 @@ export function CaseSheet({ description: c }: { description: Case }) {
           <AboutBody description={c} body={solved?.body ?? c.example} />
           <CaseForm
             description={c}
+            asked={solve.variables ?? c.example}
             solved={solved?.body}
             pending={solve.isPending}
             error={solve.error}

@@ -32,7 +32,7 @@ export function Hero({ field, answer, film, hours, position, asked, onPosition, 
   const request = `POST /v1/cases/${CASE}/solve\n${jsonText(wallBody(...asked))}`
   return (
     <div className="hero">
-      <div className="min-w-0">
+      <div className="drawing-cell min-w-0">
         <h2>A brick wall meets the cold</h2>
         <p className="prose mt-1 mb-5">
           360 mm of solid brick at 20 °C, insulated on the room side. At hour 0 the air outside drops to {'\u2212'}10
@@ -57,7 +57,6 @@ export function Hero({ field, answer, film, hours, position, asked, onPosition, 
           In the plan, hatching marks where the brick is below 0 °C. The plan cut at A{'\u2060'}–{'\u2060'}A is the
           profile above it.
         </p>
-        {answer.data && isFull(answer.data) && <Cautions cautions={answer.data.cautions} />}
       </div>
       <div className="side">
         <div className="grid gap-3 sliders">
@@ -95,6 +94,7 @@ export function Hero({ field, answer, film, hours, position, asked, onPosition, 
           {(shown) => <AnswerBlocks answer={shown} older={answer.isPlaceholderData} />}
         </QueryView>
       </div>
+      {answer.data && isFull(answer.data) && <Cautions cautions={answer.data.cautions} />}
     </div>
   )
 }
@@ -102,7 +102,7 @@ export function Hero({ field, answer, film, hours, position, asked, onPosition, 
 /** Beside the figure, so that nobody reads the one without the other. */
 function Cautions({ cautions }: { cautions: Answer['cautions'] }) {
   return (
-    <div className="grid gap-3 mt-5">
+    <div className="cautions grid gap-3">
       {cautions.map(({ id, text }) => (
         <Note key={id} kind="caution">
           {text}
