@@ -30,7 +30,13 @@ export function createApp(deps: Deps, portalFolder = builtPortal): App {
   app.set('query parser', false)
   app.use(recordCalls(deps), secureAnswers(deps.config))
   for (const document of ['openapi', 'portal', 'support'] as const)
-    app.use(mount(operations.filter((o) => o.document === document), deps, sessions))
+    app.use(
+      mount(
+        operations.filter((o) => o.document === document),
+        deps,
+        sessions,
+      ),
+    )
   app.use(portalFiles(portalFolder))
   app.use(() => {
     throw new Problem('not-found', 'No operation has this path.')

@@ -20,7 +20,10 @@ const settings = z.object({
     .optional()
     .describe('the address under which clients reach the service, such as https://api.example.org'),
   SESSION_SECRET: z.string().min(32).max(1024).describe('a secret text of at least 32 characters'),
-  NODE_ENV: z.enum(['production', 'development', 'test']).default('production').describe('production, development or test'),
+  NODE_ENV: z
+    .enum(['production', 'development', 'test'])
+    .default('production')
+    .describe('production, development or test'),
   LOG_LEVEL: z
     .enum(['silent', 'fatal', 'error', 'warn', 'info', 'debug', 'trace'])
     .default('info')
@@ -60,10 +63,15 @@ export function parseConfig(env: Readonly<Record<string, string | undefined>>): 
   }
   const s = parsed.data
   const loopback = LOOPBACK.has(s.HOST)
-  const publicUrl = (s.PUBLIC_URL ?? `http://${s.HOST.includes(':') ? `[${s.HOST}]` : s.HOST}:${s.PORT}`).replace(/\/+$/, '')
+  const publicUrl = (s.PUBLIC_URL ?? `http://${s.HOST.includes(':') ? `[${s.HOST}]` : s.HOST}:${s.PORT}`).replace(
+    /\/+$/,
+    '',
+  )
   const https = publicUrl.startsWith('https:')
   if (https && s.TRUST_PROXY === 0)
-    throw new Error('TRUST_PROXY is wrong: with an https PUBLIC_URL it must be the number of proxies that end TLS, at least 1.')
+    throw new Error(
+      'TRUST_PROXY is wrong: with an https PUBLIC_URL it must be the number of proxies that end TLS, at least 1.',
+    )
   const local = ['127.0.0.1', 'localhost', '[::1]'].map((host) => `http://${host}:${s.PORT}`)
   return {
     port: s.PORT,

@@ -18,7 +18,9 @@ export function keepHouse({ pool, log }: Deps): () => Promise<void> {
   const doAll = () => {
     round = round.then(async () => {
       for (const [name, chore] of Object.entries(chores))
-        await chore().catch((error: Error) => log.warn({ chore: name, error: error.message }, 'a chore failed and waits for its next turn'))
+        await chore().catch((error: Error) =>
+          log.warn({ chore: name, error: error.message }, 'a chore failed and waits for its next turn'),
+        )
     })
   }
   doAll()

@@ -14,7 +14,7 @@ export async function migrateDatabase(connectionString: string): Promise<void> {
   try {
     await client.query('SELECT pg_advisory_lock($1)', [LOCK])
     await migrate(drizzle(client), { migrationsFolder })
-    await client.query("SELECT create_partitions(current_date - 1, current_date + 7)")
+    await client.query('SELECT create_partitions(current_date - 1, current_date + 7)')
   } finally {
     await client.end()
   }

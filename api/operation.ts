@@ -138,7 +138,14 @@ export function problemsOf(o: Operation): ProblemCode[] {
   if (usesSession(o) && o.method !== 'get') codes.push('cross-site')
   if (o.params) codes.push('not-found')
   if (o.body)
-    codes.push('malformed-json', 'duplicate-name', 'too-deep', 'body-too-large', 'unsupported-media-type', 'invalid-input')
+    codes.push(
+      'malformed-json',
+      'duplicate-name',
+      'too-deep',
+      'body-too-large',
+      'unsupported-media-type',
+      'invalid-input',
+    )
   if (o.metered) codes.push('quota-exceeded', 'too-many-points', 'solve-too-slow')
   if (o.limiter) codes.push('rate-limited')
   return [...new Set([...codes, ...(o.problems ?? [])])].sort()

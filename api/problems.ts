@@ -186,8 +186,7 @@ export { domainCodes }
 
 /** One entry of `errors`: what is refused, where it stands, and what would do. */
 export type ProblemIssue = { code: DomainCode; detail: string; accepted?: string } & (
-  | { pointer: string }
-  | { parameter: string }
+  { pointer: string } | { parameter: string }
 )
 
 interface Extras {

@@ -14,7 +14,8 @@ function read(): Config {
 const config = read()
 const log = createLog(config.logLevel)
 const service = await startService(config, log).catch((error: Error & { code?: string }) => {
-  const reason = error.code === 'EADDRINUSE' ? `port ${config.port} of ${config.host} is in use; set PORT to another` : error.message
+  const reason =
+    error.code === 'EADDRINUSE' ? `port ${config.port} of ${config.host} is in use; set PORT to another` : error.message
   console.error(`The service cannot start: ${reason}.`)
   process.exit(1)
 })

@@ -41,7 +41,10 @@ export function createDeps(config: Config, log: Logger, limits: Limits = default
 export async function startService(config: Config, log: Logger, limits?: Limits): Promise<Service> {
   const deps = createDeps(config, log, limits)
   const { app, close: closeSessions } = createApp(deps)
-  const server = createServer({ maxHeaderSize: 16_384, headersTimeout: 10_000, requestTimeout: 60_000, keepAliveTimeout: 65_000 }, app)
+  const server = createServer(
+    { maxHeaderSize: 16_384, headersTimeout: 10_000, requestTimeout: 60_000, keepAliveTimeout: 65_000 },
+    app,
+  )
   refuseRaw(server, config.publicUrl)
   const stopHousekeeping = keepHouse(deps)
   await listen(server, config)

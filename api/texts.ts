@@ -11,7 +11,11 @@ export function storedText(label: string, max: number, min = 1) {
     .refine((text) => stored.test(text) && text === text.trim(), {
       error: `${label} has control characters, or blanks at its ends.`,
     })
-    .meta({ title: label, description: `${label}: ${min} to ${max} characters.`, 'x-accepted': `${min} to ${max} characters` })
+    .meta({
+      title: label,
+      description: `${label}: ${min} to ${max} characters.`,
+      'x-accepted': `${min} to ${max} characters`,
+    })
 }
 
 /** A mail address, kept in lower case. */
@@ -22,4 +26,6 @@ export const mailField = z
   .meta({ title: 'Mail address', description: 'Mail address, 254 characters at most.', 'x-accepted': 'a mail address' })
 
 export const instantSchema = z.iso.datetime().meta({ description: 'An instant in UTC, RFC 3339.' })
-export const dayField = z.iso.date().meta({ description: 'A UTC day, such as 2026-03-31.', 'x-accepted': 'a day such as 2026-03-31' })
+export const dayField = z.iso
+  .date()
+  .meta({ description: 'A UTC day, such as 2026-03-31.', 'x-accepted': 'a day such as 2026-03-31' })

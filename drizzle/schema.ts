@@ -47,8 +47,12 @@ export const people = pgTable(
 export const memberships = pgTable(
   'memberships',
   {
-    accountId: text().notNull().references(() => accounts.id),
-    personId: text().notNull().references(() => people.id),
+    accountId: text()
+      .notNull()
+      .references(() => accounts.id),
+    personId: text()
+      .notNull()
+      .references(() => people.id),
     role: text({ enum: ['owner', 'integrator', 'reader'] }).notNull(),
     createdAt: createdAt(),
   },
@@ -83,14 +87,18 @@ export const keys = pgTable(
   'keys',
   {
     id: text().primaryKey(),
-    accountId: text().notNull().references(() => accounts.id),
+    accountId: text()
+      .notNull()
+      .references(() => accounts.id),
     environment: text({ enum: ['trial'] }).notNull(),
     name: text().notNull(),
     /** SHA-256 of the key; the key itself is kept nowhere. */
     hash: bytes().notNull(),
     prefix: text().notNull(),
     quota: points(),
-    createdBy: text().notNull().references(() => people.id),
+    createdBy: text()
+      .notNull()
+      .references(() => people.id),
     createdAt: createdAt(),
     lastUsedAt: instant(),
     revokedAt: instant(),
@@ -108,7 +116,9 @@ export const keys = pgTable(
 export const periods = pgTable(
   'periods',
   {
-    accountId: text().notNull().references(() => accounts.id),
+    accountId: text()
+      .notNull()
+      .references(() => accounts.id),
     environment: text({ enum: ['trial'] }).notNull(),
     period: date({ mode: 'string' }).notNull(),
     limit: points().notNull(),
@@ -120,7 +130,9 @@ export const periods = pgTable(
 export const keyPeriods = pgTable(
   'key_periods',
   {
-    keyId: text().notNull().references(() => keys.id),
+    keyId: text()
+      .notNull()
+      .references(() => keys.id),
     period: date({ mode: 'string' }).notNull(),
     /** Null where the key has no quota of its own. */
     limit: points(),
@@ -174,7 +186,9 @@ export const log = pgTable(
     primaryKey({ columns: [t.at, t.id] }),
     index('log_account').on(t.accountId, t.at, t.id),
     index('log_key').on(t.keyId, t.at, t.id),
-    index('log_failed').on(t.at).where(sql`${t.status} >= 500`),
+    index('log_failed')
+      .on(t.at)
+      .where(sql`${t.status} >= 500`),
   ],
 )
 

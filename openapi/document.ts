@@ -9,9 +9,19 @@ type Json = Record<string, unknown>
 type DocumentName = Operation['document']
 
 const about: Record<DocumentName, { title: string; description: string }> = {
-  openapi: { title: 'Soakstone', description: 'Transient heat conduction: how temperature moves through a body over time, and how sure the answer is.' },
-  portal: { title: 'Soakstone portal', description: 'What the pages of the portal call, with the session of a person.' },
-  support: { title: 'Soakstone support', description: 'What staff call, with a session of their own. Every look at an account is on record.' },
+  openapi: {
+    title: 'Soakstone',
+    description:
+      'Transient heat conduction: how temperature moves through a body over time, and how sure the answer is.',
+  },
+  portal: {
+    title: 'Soakstone portal',
+    description: 'What the pages of the portal call, with the session of a person.',
+  },
+  support: {
+    title: 'Soakstone support',
+    description: 'What staff call, with a session of their own. Every look at an account is on record.',
+  },
 }
 
 const tags: Record<Tag, string> = {
@@ -34,12 +44,20 @@ const security: Record<Operation['access'], Json[]> = {
 const schemes: Json = {
   key: { type: 'http', scheme: 'bearer', description: 'A key, made in the portal: soak_trial_ and 38 characters.' },
   session: { type: 'apiKey', in: 'cookie', name: 'soakstone', description: 'With https the name is __Host-soakstone.' },
-  staffSession: { type: 'apiKey', in: 'cookie', name: 'soakstone-staff', description: 'With https the name is __Host-soakstone-staff.' },
+  staffSession: {
+    type: 'apiKey',
+    in: 'cookie',
+    name: 'soakstone-staff',
+    description: 'With https the name is __Host-soakstone-staff.',
+  },
 }
 
 const issueSchema = z
   .strictObject({
-    pointer: z.string().optional().meta({ description: 'Where in the body, as an RFC 6901 pointer such as #/times/3.' }),
+    pointer: z
+      .string()
+      .optional()
+      .meta({ description: 'Where in the body, as an RFC 6901 pointer such as #/times/3.' }),
     parameter: z.string().optional().meta({ description: 'Which query parameter.' }),
     code: z.enum(Object.keys(domainCodes) as (keyof typeof domainCodes)[]),
     detail: z.string(),
@@ -56,7 +74,10 @@ const problemSchema = z
     detail: z.string(),
     retryable: z.boolean().meta({ description: 'The same call may succeed later without a change.' }),
     requestId: z.string().optional(),
-    resetsAt: z.iso.datetime().optional().meta({ description: 'Start of the next period, where the points of this one are used up.' }),
+    resetsAt: z.iso
+      .datetime()
+      .optional()
+      .meta({ description: 'Start of the next period, where the points of this one are used up.' }),
     errors: z.array(issueSchema).max(50).optional(),
   })
   .meta({ id: 'Problem', description: 'RFC 9457 problem details.' })
@@ -69,7 +90,12 @@ export function documentOf(name: DocumentName, operations: readonly Operation[],
   refer(problemSchema, 'output')
   const paths: Record<string, Json> = {}
   for (const o of own) paths[o.path] = { ...paths[o.path], [o.method]: operationObject(o, refer) }
-  const used = new Set(own.map((o) => o.access).filter((access) => access !== 'public').map((access) => Object.keys(security[access][0] ?? {})[0]))
+  const used = new Set(
+    own
+      .map((o) => o.access)
+      .filter((access) => access !== 'public')
+      .map((access) => Object.keys(security[access][0] ?? {})[0]),
+  )
   return {
     openapi: '3.1.0',
     info: { ...about[name], version, license: { name: 'Proprietary', identifier: 'LicenseRef-Soakstone' } },
@@ -81,7 +107,9 @@ export function documentOf(name: DocumentName, operations: readonly Operation[],
       securitySchemes: Object.fromEntries(Object.entries(schemes).filter(([scheme]) => used.has(scheme))),
       headers,
     },
-    ...(name === 'openapi' ? { 'x-problems': problems, 'x-error-codes': domainCodes, 'x-warnings': warningCodes, 'x-cautions': cautions } : {}),
+    ...(name === 'openapi'
+      ? { 'x-problems': problems, 'x-error-codes': domainCodes, 'x-warnings': warningCodes, 'x-cautions': cautions }
+      : {}),
   }
 }
 
@@ -95,11 +123,16 @@ const headers: Json = {
   Allow: header('Methods of the path.'),
   'WWW-Authenticate': header('How to authenticate.'),
 }
-const referHeaders = (...names: string[]) => Object.fromEntries(names.map((n) => [n, { $ref: `#/components/headers/${n}` }]))
+const referHeaders = (...names: string[]) =>
+  Object.fromEntries(names.map((n) => [n, { $ref: `#/components/headers/${n}` }]))
 
 /* Named schemas move to the components; the rest stays where it stands. */
 function schemaOf(schema: z.ZodType, io: 'input' | 'output', schemas: Json): Json {
-  const { $schema: _, $defs = {}, ...whole } = z.toJSONSchema(schema, { io, target: 'draft-2020-12' }) as Json & { $defs?: Json }
+  const {
+    $schema: _,
+    $defs = {},
+    ...whole
+  } = z.toJSONSchema(schema, { io, target: 'draft-2020-12' }) as Json & { $defs?: Json }
   for (const [id, definition] of Object.entries($defs)) schemas[id] = rebase(definition)
   const id = schema.meta()?.id
   if (!id || '$ref' in whole) return rebase(whole) as Json
@@ -129,7 +162,12 @@ function operationObject(o: Operation, refer: Refer): Json {
     security: security[o.access],
     ...parametersOf(o, refer),
     ...(o.body
-      ? { requestBody: { required: true, content: { 'application/json': { schema: refer(o.body.schema, 'input'), example: o.example?.body } } } }
+      ? {
+          requestBody: {
+            required: true,
+            content: { 'application/json': { schema: refer(o.body.schema, 'input'), example: o.example?.body } },
+          },
+        }
       : {}),
     responses: { [o.status]: success(o, refer), ...failures(codes) },
     'x-problem-codes': codes,
@@ -157,7 +195,11 @@ function parametersOf(o: Operation, refer: Refer): Json {
 }
 
 function success(o: Operation, refer: Refer): Json {
-  const names = ['Request-Id', ...(o.answer ? ['ETag'] : []), ...(o.metered ? ['Points-Charged', 'Points-Remaining'] : [])]
+  const names = [
+    'Request-Id',
+    ...(o.answer ? ['ETag'] : []),
+    ...(o.metered ? ['Points-Charged', 'Points-Remaining'] : []),
+  ]
   return {
     description: o.status === 204 ? 'Done.' : o.status === 201 ? 'Made.' : 'The answer.',
     headers: referHeaders(...names),
@@ -170,8 +212,17 @@ function failures(codes: readonly ProblemCode[]): Json {
   for (const code of codes) (byStatus[problems[code].status] ??= []).push(code)
   return Object.fromEntries(
     Object.entries(byStatus).map(([status, list]) => {
-      const extra = status === '401' ? ['WWW-Authenticate'] : status === '405' ? ['Allow'] : ['429', '503'].includes(status) ? ['Retry-After'] : []
-      const narrowed = { allOf: [{ $ref: '#/components/schemas/Problem' }, { type: 'object', properties: { code: { enum: list } } }] }
+      const extra =
+        status === '401'
+          ? ['WWW-Authenticate']
+          : status === '405'
+            ? ['Allow']
+            : ['429', '503'].includes(status)
+              ? ['Retry-After']
+              : []
+      const narrowed = {
+        allOf: [{ $ref: '#/components/schemas/Problem' }, { type: 'object', properties: { code: { enum: list } } }],
+      }
       return [
         status,
         {

@@ -35,7 +35,10 @@ function lint(): number {
   const documents = names.map((name) => fileURLToPath(place(`${name}.json`)))
   const config = fileURLToPath(place('redocly.lint.yaml'))
   const env = { ...process.env, REDOCLY_TELEMETRY: 'off', REDOCLY_SUPPRESS_UPDATE_NOTICE: 'true' }
-  return spawnSync(process.execPath, [program, 'lint', '--config', config, ...documents], { stdio: 'inherit', env }).status ?? 1
+  return (
+    spawnSync(process.execPath, [program, 'lint', '--config', config, ...documents], { stdio: 'inherit', env })
+      .status ?? 1
+  )
 }
 
 const files = await generated()

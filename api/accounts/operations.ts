@@ -20,7 +20,9 @@ const signUpOperation = operation({
   status: 201,
   answer: sessionSchema,
   problems: ['mail-in-use'],
-  example: { body: { ...example, mail: 'noor.almqvist@example.org', name: 'Noor Almqvist', accountName: 'Lime & Larch' } },
+  example: {
+    body: { ...example, mail: 'noor.almqvist@example.org', name: 'Noor Almqvist', accountName: 'Lime & Larch' },
+  },
   async handle({ body, session, deps }) {
     const { personId, accountId } = await signUp(deps, body)
     await session.start({ personId, accountId })

@@ -7,7 +7,9 @@ const newPassword = z
   .string()
   .min(MIN_PASSWORD)
   .max(MAX_PASSWORD_BYTES)
-  .refine((text) => Buffer.byteLength(text) <= MAX_PASSWORD_BYTES, { error: `password has more than ${MAX_PASSWORD_BYTES} bytes.` })
+  .refine((text) => Buffer.byteLength(text) <= MAX_PASSWORD_BYTES, {
+    error: `password has more than ${MAX_PASSWORD_BYTES} bytes.`,
+  })
   .meta({
     title: 'Password',
     description: `Password: ${MIN_PASSWORD} characters at least, ${MAX_PASSWORD_BYTES} bytes at most; any characters.`,

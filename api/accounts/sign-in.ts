@@ -26,8 +26,12 @@ export async function signIn({ db, compute }: Deps, { mail, password }: Credenti
 
 /** Staff have no second step yet, so they sign in only from the machine itself. */
 export async function staffSignIn({ db, compute, config }: Deps, { mail, password }: Credentials) {
-  if (!config.loopback) throw new Problem('forbidden', 'Staff sign in only where the service listens on its own machine alone.')
-  const [agent] = await db.select({ id: staff.id, passwordHash: staff.passwordHash }).from(staff).where(eq(staff.mail, mail))
+  if (!config.loopback)
+    throw new Problem('forbidden', 'Staff sign in only where the service listens on its own machine alone.')
+  const [agent] = await db
+    .select({ id: staff.id, passwordHash: staff.passwordHash })
+    .from(staff)
+    .where(eq(staff.mail, mail))
   const fits = await compute.checkPassword(password, agent?.passwordHash)
   if (!agent || !fits) throw new Problem('sign-in-refused')
   return agent.id

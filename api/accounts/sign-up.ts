@@ -33,7 +33,9 @@ export async function signUp({ db, compute }: Deps, { mail, password, name, acco
       await tx.insert(people).values({ id: personId, mail, name, passwordHash })
       await tx.insert(accounts).values({ id: accountId, name: accountName })
       await tx.insert(memberships).values({ accountId, personId, role: 'owner' })
-      await tx.insert(audit).values({ id: newId('aud'), actorKind: 'person', actorId: personId, accountId, action: 'account opened' })
+      await tx
+        .insert(audit)
+        .values({ id: newId('aud'), actorKind: 'person', actorId: personId, accountId, action: 'account opened' })
     })
   } catch (error) {
     if (errorCode(error) === UNIQUE_VIOLATION) throw new Problem('mail-in-use')

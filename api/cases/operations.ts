@@ -38,7 +38,10 @@ function metered(c: Case, o: CaseOperation) {
     caseOperation: o.id,
     handle({ body, caller, call, deps }) {
       if (body.call.points > MAX_POINTS)
-        throw new Problem('too-many-points', `The call needs ${body.call.points} points; one call may need ${MAX_POINTS}.`)
+        throw new Problem(
+          'too-many-points',
+          `The call needs ${body.call.points} points; one call may need ${MAX_POINTS}.`,
+        )
       return solveMetered({ case: c.id, operation: o.id, ...body }, caller, call, deps)
     },
   })
@@ -64,7 +67,10 @@ function unmetered(c: Case, o: CaseOperation) {
     caseOperation: o.id,
     handle({ body, deps }) {
       if (body.call.values > MAX_TRY_VALUES)
-        throw new Problem('too-many-values', `The call asks for ${body.call.values} numbers; ${MAX_TRY_VALUES} are answered without a key.`)
+        throw new Problem(
+          'too-many-values',
+          `The call asks for ${body.call.values} numbers; ${MAX_TRY_VALUES} are answered without a key.`,
+        )
       return deps.compute.solve({ case: c.id, operation: o.id, ...body })
     },
   })

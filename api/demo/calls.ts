@@ -41,10 +41,19 @@ function oneCall(key: (typeof keys)[number], at: Date, random: Random, publicUrl
   const faulty = between(random, 1, FAULTY) === 1
   const times = Array.from({ length: count }, (_, i) => (faulty && i === count - 1 ? -60 : (i + 1) * 600))
   const body = { ...c.example, times }
-  const id = newId('req', { msecs: at.getTime(), random: Uint8Array.from({ length: 16 }, () => between(random, 0, 255)) })
+  const id = newId('req', {
+    msecs: at.getTime(),
+    random: Uint8Array.from({ length: 16 }, () => between(random, 0, 255)),
+  })
   const shared = { at, id, accountId: account.id, keyId: key.id, method: 'POST', path: caseOperationPath(c.id, o.id) }
   const bytesIn = Buffer.byteLength(JSON.stringify(body))
-  const started = { ...shared, caseId: c.id, operation: o.id, bytesIn, milliseconds: between(random, 1200, 4800) / 1000 }
+  const started = {
+    ...shared,
+    caseId: c.id,
+    operation: o.id,
+    bytesIn,
+    milliseconds: between(random, 1200, 4800) / 1000,
+  }
   try {
     const call = o.prepare(c, body, 'full')
     const points = priceOf(call.points)
@@ -56,6 +65,14 @@ function oneCall(key: (typeof keys)[number], at: Date, random: Random, publicUrl
   } catch (error) {
     if (!(error instanceof DomainError)) throw error
     const problem = readable(problemDetails(invalidInput(error.issues), publicUrl, id))
-    return { entry: { ...started, status: problem.status, points: 0, bytesOut: Buffer.byteLength(JSON.stringify(problem)), problem } }
+    return {
+      entry: {
+        ...started,
+        status: problem.status,
+        points: 0,
+        bytesOut: Buffer.byteLength(JSON.stringify(problem)),
+        problem,
+      },
+    }
   }
 }

@@ -21,25 +21,37 @@ export async function layOutFirm(db: Database, secrets: DemoSecrets): Promise<vo
   await db.insert(accounts).values(account).onConflictDoNothing()
   for (const { role, ...person } of members) {
     const hash = { passwordHash: passwordHash(role) }
-    await db.insert(people).values({ ...person, ...hash }).onConflictDoUpdate({ target: people.id, set: hash })
+    await db
+      .insert(people)
+      .values({ ...person, ...hash })
+      .onConflictDoUpdate({ target: people.id, set: hash })
     await db.insert(memberships).values({ accountId: account.id, personId: person.id, role }).onConflictDoNothing()
   }
   for (const agent of agents) {
     const hash = { passwordHash: passwordHash(agent.role) }
-    await db.insert(staff).values({ ...agent, ...hash }).onConflictDoUpdate({ target: staff.id, set: hash })
+    await db
+      .insert(staff)
+      .values({ ...agent, ...hash })
+      .onConflictDoUpdate({ target: staff.id, set: hash })
   }
   for (const { id, name, by, quota } of keys) {
     const secret = id === givenKey.id ? secrets.key : newKey('trial')
     const createdAt = sql`now() - interval '${sql.raw(String(DAYS + 1))} days'`
     const maker = members[by]?.id ?? ''
     const shown = { id, name, quota, accountId: account.id, environment: 'trial' as const, createdBy: maker, createdAt }
-    await db.insert(keyTable).values({ ...shown, hash: hashKey(secret), prefix: prefixOf(secret) }).onConflictDoNothing()
+    await db
+      .insert(keyTable)
+      .values({ ...shown, hash: hashKey(secret), prefix: prefixOf(secret) })
+      .onConflictDoNothing()
   }
 }
 
 /** True where the key opens the demo's account. */
 export async function keyWorks(db: Database, key: string): Promise<boolean> {
-  const rows = await db.select({ revokedAt: keyTable.revokedAt, accountId: keyTable.accountId }).from(keyTable).where(eq(keyTable.hash, hashKey(key)))
+  const rows = await db
+    .select({ revokedAt: keyTable.revokedAt, accountId: keyTable.accountId })
+    .from(keyTable)
+    .where(eq(keyTable.hash, hashKey(key)))
   return rows.some((row) => row.revokedAt === null && row.accountId === account.id)
 }
 
@@ -57,9 +69,16 @@ export async function layOutUsage(pool: pg.Pool, publicUrl: string): Promise<voi
     for (let back = DAYS; back >= 1; back--) {
       const day = new Date(today - back * DAY)
       const calls = callsOf(day, random, publicUrl)
-      const charged = await chargeAll(client, calls.flatMap((call) => call.charge ?? []), day.toISOString().slice(0, 10))
+      const charged = await chargeAll(
+        client,
+        calls.flatMap((call) => call.charge ?? []),
+        day.toISOString().slice(0, 10),
+      )
       if (charged.some((one) => !one.decision.granted)) throw new Error('the demo asks for more than its limit')
-      await insertLog(client, calls.map((call) => call.entry))
+      await insertLog(
+        client,
+        calls.map((call) => call.entry),
+      )
     }
   })
 }

@@ -36,6 +36,10 @@ export async function seedDemo({ pool, folder, publicUrl }: Wish): Promise<Demo>
     secrets.key = (await createKey(db, demoOwner(), { name: 'Demo' })).secret
     await keepSecrets(folder, secrets)
   }
-  const signIns = [...members, ...agents].map(({ role, mail }) => ({ role, mail, password: secrets.signIns[role]?.password ?? '' }))
+  const signIns = [...members, ...agents].map(({ role, mail }) => ({
+    role,
+    mail,
+    password: secrets.signIns[role]?.password ?? '',
+  }))
   return { signIns, key: secrets.key }
 }

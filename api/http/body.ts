@@ -7,7 +7,9 @@ const readRaw = express.raw({ type: () => true, limit: BODY_LIMIT })
 /** The body of a request as a JSON value; its size is counted after decompression. */
 export async function readJson(req: Request, res: Response): Promise<unknown> {
   refuseOtherKinds(req)
-  await new Promise<void>((resolve, reject) => readRaw(req, res, (error?: unknown) => (error ? reject(error) : resolve())))
+  await new Promise<void>((resolve, reject) =>
+    readRaw(req, res, (error?: unknown) => (error ? reject(error) : resolve())),
+  )
   const bytes: unknown = req.body
   if (!Buffer.isBuffer(bytes) || bytes.length === 0) throw new Problem('malformed-json', 'The body is empty.')
   return parseJson(decode(bytes))

@@ -29,7 +29,8 @@ export function errorHandler({ log, config }: Deps): ErrorRequestHandler {
   return (error: unknown, req, res, _next) => {
     const problem = problemOf(error)
     const { call } = res.locals
-    if (problem.status >= 500) log.error({ requestId: call.requestId, code: problem.code, error: told(error) }, 'a call failed')
+    if (problem.status >= 500)
+      log.error({ requestId: call.requestId, code: problem.code, error: told(error) }, 'a call failed')
     if (res.headersSent) {
       res.destroy()
       return

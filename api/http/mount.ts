@@ -29,7 +29,10 @@ function otherMethods(own: readonly Operation[]): RequestHandler {
   const allow = own.flatMap((o) => (o.method === 'get' ? ['GET', 'HEAD'] : [o.method.toUpperCase()]))
   const Allow = [...allow, 'OPTIONS'].join(', ')
   return (req, res) => {
-    if (req.method !== 'OPTIONS') throw new Problem('method-not-allowed', `${req.method.slice(0, 20)} is not among: ${Allow}.`, { headers: { Allow } })
+    if (req.method !== 'OPTIONS')
+      throw new Problem('method-not-allowed', `${req.method.slice(0, 20)} is not among: ${Allow}.`, {
+        headers: { Allow },
+      })
     res.set('Allow', Allow).status(204).end()
   }
 }

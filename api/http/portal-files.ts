@@ -10,7 +10,10 @@ const notPages = /^\/(v1|portal\/v1|support\/v1|assets|healthz|readyz)(\/|$)/
 /** The built portal: named files for ever, and its one page, with a fresh nonce, for every address of a page. */
 export function portalFiles(folder: string): Router {
   const router = express.Router()
-  router.use('/assets', express.static(path.join(folder, 'assets'), { immutable: true, maxAge: '1y', index: false, redirect: false }))
+  router.use(
+    '/assets',
+    express.static(path.join(folder, 'assets'), { immutable: true, maxAge: '1y', index: false, redirect: false }),
+  )
   router.use(express.static(folder, { maxAge: '1h', index: false, redirect: false, setHeaders: refusePage }))
   router.get('/{*path}', page(path.join(folder, 'index.html')))
   return router

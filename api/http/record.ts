@@ -23,7 +23,15 @@ export function recordCalls({ log, requestLog }: Deps): RequestHandler {
       if (!path.startsWith('/v1/')) return
       const { requestId: id, points = 0, ...rest } = call
       const at = instantOf(id) as Date
-      requestLog.add({ ...rest, ...line, id, at, points, bytesIn: bytesOf(req.headers['content-length']), bytesOut: sentBytes(res) })
+      requestLog.add({
+        ...rest,
+        ...line,
+        id,
+        at,
+        points,
+        bytesIn: bytesOf(req.headers['content-length']),
+        bytesOut: sentBytes(res),
+      })
     })
     next()
   }

@@ -52,7 +52,9 @@ const noParameters = z.strictObject({})
 function readQuery(o: Operation, req: Request): unknown {
   const given = new URLSearchParams(req.url.split('?')[1] ?? '')
   const names = [...new Set(given.keys())]
-  const query = Object.fromEntries(names.map((name) => [name, given.getAll(name).length > 1 ? given.getAll(name) : given.get(name)]))
+  const query = Object.fromEntries(
+    names.map((name) => [name, given.getAll(name).length > 1 ? given.getAll(name) : given.get(name)]),
+  )
   try {
     return parse(o.query ?? noParameters, query)
   } catch (error) {

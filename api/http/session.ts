@@ -20,7 +20,10 @@ const kinds = {
 } as const
 
 /** Sessions of one kind. They end a fixed time after sign-in, so that reading one writes nothing. */
-export function sessionsOf(kind: keyof typeof kinds, { pool, config, log }: Deps): { handler: RequestHandler; close(): void } {
+export function sessionsOf(
+  kind: keyof typeof kinds,
+  { pool, config, log }: Deps,
+): { handler: RequestHandler; close(): void } {
   const { cookie, tableName, hours } = kinds[kind]
   const store = new PgStore({
     pool,

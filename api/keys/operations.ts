@@ -11,7 +11,9 @@ const keySchema = z
   .strictObject({
     id: z.string(),
     name: z.string(),
-    prefix: z.string().meta({ description: 'Environment and the first six characters; more of a key is never shown again.' }),
+    prefix: z
+      .string()
+      .meta({ description: 'Environment and the first six characters; more of a key is never shown again.' }),
     environment: z.literal('trial'),
     quota: count.nullable().meta({ description: 'Points a period of this key alone, or null.' }),
     used: count.meta({ description: 'Points used in this period.' }),
@@ -54,11 +56,11 @@ const create = operation({
     z
       .strictObject({
         name: storedText('Name', 80),
-        quota: count
-          .min(0)
-          .max(1_000_000_000)
-          .optional()
-          .meta({ title: 'Own quota', description: 'Points a period for this key alone.', 'x-accepted': 'a whole number from 0 to 1000000000' }),
+        quota: count.min(0).max(1_000_000_000).optional().meta({
+          title: 'Own quota',
+          description: 'Points a period for this key alone.',
+          'x-accepted': 'a whole number from 0 to 1000000000',
+        }),
       })
       .meta({ id: 'NewKey' }),
   ),

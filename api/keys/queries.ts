@@ -51,7 +51,11 @@ export function listKeys(db: Database, caller: MemberCaller) {
 }
 
 /** Makes a trial key; its secret is in what this gives back and nowhere else. */
-export async function createKey(db: Database, caller: MemberCaller, wish: { name: string; quota?: number | undefined }) {
+export async function createKey(
+  db: Database,
+  caller: MemberCaller,
+  wish: { name: string; quota?: number | undefined },
+) {
   const secret = newKey('trial')
   const id = newId('key')
   const { accountId, personId } = caller
@@ -79,7 +83,11 @@ export async function createKey(db: Database, caller: MemberCaller, wish: { name
 export async function revokeKey(db: Database, caller: MemberCaller, id: string) {
   return db.transaction(async (tx) => {
     const where = and(reached(caller), eq(keys.id, id))
-    const revoked = await tx.update(keys).set({ revokedAt: sql`now()` }).where(and(where, isNull(keys.revokedAt))).returning({ id: keys.id })
+    const revoked = await tx
+      .update(keys)
+      .set({ revokedAt: sql`now()` })
+      .where(and(where, isNull(keys.revokedAt)))
+      .returning({ id: keys.id })
     if (revoked.length > 0) await tx.insert(audit).values(entry(caller, 'key revoked', id))
     const [key] = await select(tx, caller, id)
     return key

@@ -19,8 +19,7 @@ export interface Counters {
 }
 
 export type Decision =
-  | { granted: true; remaining: number }
-  | { granted: false; level: 'account' | 'key'; limit: number; remaining: number }
+  { granted: true; remaining: number } | { granted: false; level: 'account' | 'key'; limit: number; remaining: number }
 
 /** Grants charges in the order they came, each only if account and key both allow; a refusal consumes nothing. */
 export function grant(charges: readonly Charge[], counters: readonly Counters[]): Decision[] {
@@ -31,7 +30,12 @@ export function grant(charges: readonly Charge[], counters: readonly Counters[])
     const key = keys.get(keyId)
     if (!account || !key) throw new Error(`no counters for ${keyId}`)
     if (account.used + points > account.limit)
-      return { granted: false, level: 'account', limit: account.limit, remaining: Math.max(0, account.limit - account.used) }
+      return {
+        granted: false,
+        level: 'account',
+        limit: account.limit,
+        remaining: Math.max(0, account.limit - account.used),
+      }
     if (key.used + points > key.limit)
       return { granted: false, level: 'key', limit: key.limit, remaining: Math.max(0, key.limit - key.used) }
     account.used += points

@@ -27,7 +27,8 @@ export function createMeter(pool: pg.Pool, log: Logger): Meter {
   async function spend(one: Charge): Promise<{ remaining: number }> {
     const outcome = await charge(one)
     if ('error' in outcome) {
-      if (outcome.error instanceof UnknownOutcome) log.warn({ requestId: one.requestId }, 'a charge has an unknown outcome')
+      if (outcome.error instanceof UnknownOutcome)
+        log.warn({ requestId: one.requestId }, 'a charge has an unknown outcome')
       throw outcome.error
     }
     const { decision, resetsAt } = outcome.charged
@@ -53,7 +54,8 @@ async function chargeGathered(pool: pg.Pool, charges: Charge[]): Promise<Outcome
     const all = await durably(pool, (client) => chargeAll(client, charges))
     return all.map((charged) => ({ charged }))
   } catch (error) {
-    if (charges.length === 1 || error instanceof UnknownOutcome || databaseIsAway(error)) return charges.map(() => ({ error }))
+    if (charges.length === 1 || error instanceof UnknownOutcome || databaseIsAway(error))
+      return charges.map(() => ({ error }))
     const outcomes: Outcome[] = []
     for (const one of charges) outcomes.push(...(await chargeGathered(pool, [one])))
     return outcomes

@@ -20,7 +20,18 @@ export interface LogEntry {
   problem?: object
 }
 
-const names = ['at', 'id', 'accountId', 'keyId', 'method', 'path', 'caseId', 'operation', 'status', 'milliseconds'] as const
+const names = [
+  'at',
+  'id',
+  'accountId',
+  'keyId',
+  'method',
+  'path',
+  'caseId',
+  'operation',
+  'status',
+  'milliseconds',
+] as const
 const more = ['bytesIn', 'bytesOut', 'points', 'problem'] as const
 
 const insert = {

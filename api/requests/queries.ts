@@ -90,7 +90,15 @@ export async function readRequest(pool: pg.Pool, id: string, accountId?: string)
   const row = rows[0]
   if (!row) return undefined
   const { bytes_in: bytesIn, bytes_out: bytesOut, solver, problem } = row
-  return { ...toEntry(row), bytesIn, bytesOut, problem, ledger: await entriesOf(pool, id, at), solver, account: accountOf(row) }
+  return {
+    ...toEntry(row),
+    bytesIn,
+    bytesOut,
+    problem,
+    ledger: await entriesOf(pool, id, at),
+    solver,
+    account: accountOf(row),
+  }
 }
 
 /* A charge's day is the database's, which a process's own clock may miss by a little. */

@@ -6,7 +6,11 @@ import type { StaffCaller } from '../operation.ts'
 import { readRequest, requestsOfPrefix } from '../requests/queries.ts'
 
 /** Finds calls of any account. The look is on record before its result is seen. */
-export async function findRequests({ db, pool }: Deps, caller: StaffCaller, { query, reason }: { query: string; reason: string }) {
+export async function findRequests(
+  { db, pool }: Deps,
+  caller: StaffCaller,
+  { query, reason }: { query: string; reason: string },
+) {
   const subject = withoutKeys(query)
   await db.insert(audit).values({ ...look(caller, 'requests found', reason), subject })
   if (!instantOf(subject)) return requestsOfPrefix(pool, subject.endsWith('…') ? subject : `${subject}…`)

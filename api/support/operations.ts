@@ -98,7 +98,8 @@ const read = operation({
   path: '/support/v1/requests/{requestId}/read',
   tag: 'Requests',
   summary: 'Read one request of any account',
-  description: 'A call as it was logged, with its account, key and entries in the ledger. The look is put on record with its reason.',
+  description:
+    'A call as it was logged, with its account, key and entries in the ledger. The look is put on record with its reason.',
   access: 'staff',
   permission: 'any-request:read',
   params: requestParams,

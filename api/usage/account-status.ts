@@ -13,5 +13,9 @@ const query = {
 /** Where the account stands in this period. */
 export async function accountStatus(pool: pg.Pool, accountId: string) {
   const { rows } = await pool.query({ ...query, values: [accountId] })
-  return { limit: Number(rows[0].limit), used: Number(rows[0].used), resetsAt: (rows[0].resets_at as Date).toISOString() }
+  return {
+    limit: Number(rows[0].limit),
+    used: Number(rows[0].used),
+    resetsAt: (rows[0].resets_at as Date).toISOString(),
+  }
 }

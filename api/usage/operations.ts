@@ -8,7 +8,8 @@ const shared = {
   method: 'get',
   tag: 'Usage',
   summary: 'Read the usage of the account',
-  description: 'Sums of the ledger by UTC day, key and case, and calls that were refused. The total is the sum of the rows.',
+  description:
+    'Sums of the ledger by UTC day, key and case, and calls that were refused. The total is the sum of the rows.',
   query: usageQuery,
   status: 200,
   answer: usageSchema,
@@ -18,7 +19,14 @@ async function handle(context: { query: z.output<typeof usageQuery>; caller: Key
   return { body: await readUsage(context.deps.pool, context.caller.accountId, context.query) }
 }
 
-export const keyUsage = operation({ ...shared, id: 'readUsage', document: 'openapi', path: '/v1/usage', access: 'key', handle })
+export const keyUsage = operation({
+  ...shared,
+  id: 'readUsage',
+  document: 'openapi',
+  path: '/v1/usage',
+  access: 'key',
+  handle,
+})
 
 export const memberUsage = operation({
   ...shared,

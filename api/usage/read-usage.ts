@@ -54,13 +54,18 @@ function dayOf(date: Date): string {
   return new Date(date.getTime() - date.getTimezoneOffset() * 60_000).toISOString().slice(0, 10)
 }
 
-function rangeOf(query: { from?: string | undefined; to?: string | undefined }, today: string): { from: string; to: string } {
+function rangeOf(
+  query: { from?: string | undefined; to?: string | undefined },
+  today: string,
+): { from: string; to: string } {
   const to = query.to ?? today
   const from = query.from ?? new Date(Date.parse(to) - 29 * DAY).toISOString().slice(0, 10)
   const days = (Date.parse(to) - Date.parse(from)) / DAY + 1
   if (days >= 1 && days <= MAX_DAYS) return { from, to }
   const detail = days < 1 ? 'from is later than to.' : `The range has ${days} days.`
   throw invalidParameter(
-    new DomainError([{ pointer: '#/from', code: 'out-of-range', detail, accepted: `at most ${MAX_DAYS} days, ending with to` }]).issues,
+    new DomainError([
+      { pointer: '#/from', code: 'out-of-range', detail, accepted: `at most ${MAX_DAYS} days, ending with to` },
+    ]).issues,
   )
 }

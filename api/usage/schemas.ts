@@ -14,18 +14,29 @@ export const statusSchema = z
 const groups = ['day', 'key', 'case'] as const
 export type Group = (typeof groups)[number]
 
-export const usageQuery = z
-  .strictObject({
-    from: dayField.optional().meta({ description: 'First UTC day; 29 days before `to` unless given.', 'x-accepted': 'a day such as 2026-03-31' }),
-    to: dayField.optional().meta({ description: 'Last UTC day, included; today unless given.', 'x-accepted': 'a day such as 2026-03-31' }),
-    groupBy: z
-      .string()
-      .regex(/^(day|key|case)(,(day|key|case)){0,2}$/)
-      .default('day')
-      .meta({ description: 'One or more of day, key and case, with commas between.', 'x-accepted': 'day, key, case, or several with commas between' }),
-  })
+export const usageQuery = z.strictObject({
+  from: dayField.optional().meta({
+    description: 'First UTC day; 29 days before `to` unless given.',
+    'x-accepted': 'a day such as 2026-03-31',
+  }),
+  to: dayField
+    .optional()
+    .meta({ description: 'Last UTC day, included; today unless given.', 'x-accepted': 'a day such as 2026-03-31' }),
+  groupBy: z
+    .string()
+    .regex(/^(day|key|case)(,(day|key|case)){0,2}$/)
+    .default('day')
+    .meta({
+      description: 'One or more of day, key and case, with commas between.',
+      'x-accepted': 'day, key, case, or several with commas between',
+    }),
+})
 
-const figures = { calls: count, points: count, refused: count.meta({ description: 'Calls that were refused or failed; they cost nothing.' }) }
+const figures = {
+  calls: count,
+  points: count,
+  refused: count.meta({ description: 'Calls that were refused or failed; they cost nothing.' }),
+}
 
 export const usageSchema = z
   .strictObject({

@@ -52,11 +52,15 @@ test('its sign-ins and its key work, and a key that was revoked is replaced', as
     expect(answer.json).toMatchObject({ role })
     expect(mail).toMatch(/\.example$/)
   }
-  expect((await new Client(service.url).call('/v1/usage', { headers: { authorization: `Bearer ${key}` } })).json.total.calls).toBeGreaterThan(300)
+  expect(
+    (await new Client(service.url).call('/v1/usage', { headers: { authorization: `Bearer ${key}` } })).json.total.calls,
+  ).toBeGreaterThan(300)
   await query(service.databaseUrl, 'UPDATE keys SET revoked_at = now()')
   const again = await seed()
   expect(again.key).not.toBe(key)
-  expect((await new Client(service.url).call('/v1/usage', { headers: { authorization: `Bearer ${again.key}` } })).status).toBe(200)
+  expect(
+    (await new Client(service.url).call('/v1/usage', { headers: { authorization: `Bearer ${again.key}` } })).status,
+  ).toBe(200)
 })
 
 test('lost passwords are made anew', async () => {

@@ -24,7 +24,10 @@ interface Change {
   method?: string
 }
 
-function ask(o: Operation, { headers = {}, path = pathIn(world, o), method = o.method.toUpperCase(), ...change }: Change = {}) {
+function ask(
+  o: Operation,
+  { headers = {}, path = pathIn(world, o), method = o.method.toUpperCase(), ...change }: Change = {},
+) {
   const caller = callerOf(world, o)
   const body = 'body' in change ? change.body : o.body ? o.example?.body : undefined
   return caller.client.call(path, { method, headers: { ...caller.headers, ...headers }, body })
@@ -77,7 +80,11 @@ describe.each(each(operations.filter((o) => o.access === 'key')))('%s', (_, o) =
     ['an empty header', '', 'key-unknown'],
   ] as const)('refuses %s', async (__, authorization, code) => {
     const headers: Record<string, string> = authorization === undefined ? {} : { authorization }
-    const answer = await world.nobody.call(pathIn(world, o), { method: o.method.toUpperCase(), headers, body: o.example?.body })
+    const answer = await world.nobody.call(pathIn(world, o), {
+      method: o.method.toUpperCase(),
+      headers,
+      body: o.example?.body,
+    })
     expectProblem(o, answer, code)
     expect(answer.headers.get('www-authenticate')).toMatch(/^Bearer realm="soakstone"/)
   })
@@ -99,10 +106,15 @@ describe.each(each(operations.filter((o) => o.body)))('%s', (_, o) => {
   })
 
   test('names a field that it does not have, and no prototype is touched', async () => {
-    const given = JSON.stringify(o.example?.body).replace(/^\{/, '{"__proto__":{"polluted":1},"constructor":{},"nonsense":1,')
+    const given = JSON.stringify(o.example?.body).replace(
+      /^\{/,
+      '{"__proto__":{"polluted":1},"constructor":{},"nonsense":1,',
+    )
     const answer = await ask(o, { body: given })
     expectProblem(o, answer, 'invalid-input')
-    const unknown = answer.json.errors.filter((e: { code: string }) => e.code === 'unknown-field').map((e: { pointer: string }) => e.pointer)
+    const unknown = answer.json.errors
+      .filter((e: { code: string }) => e.code === 'unknown-field')
+      .map((e: { pointer: string }) => e.pointer)
     expect(unknown.sort()).toEqual(['#/__proto__', '#/constructor', '#/nonsense'])
     expect(({} as Record<string, unknown>)['polluted']).toBeUndefined()
   })
@@ -114,7 +126,11 @@ describe.each(each(operations.filter((o) => o.body)))('%s', (_, o) => {
   test('refuses another kind of body', async () => {
     const body = JSON.stringify(o.example?.body)
     expectProblem(o, await ask(o, { body, headers: { 'content-type': 'text/plain' } }), 'unsupported-media-type')
-    expectProblem(o, await ask(o, { body, headers: { 'content-type': 'application/json; charset=latin1' } }), 'unsupported-media-type')
+    expectProblem(
+      o,
+      await ask(o, { body, headers: { 'content-type': 'application/json; charset=latin1' } }),
+      'unsupported-media-type',
+    )
   })
 
   test('lists at most 50 faults', async () => {
@@ -140,7 +156,9 @@ describe.each(each(operations.filter((o) => usesSession(o) && o.method !== 'get'
 describe.each(each(operations.filter((o) => o.metered)))('%s', (_, o) => {
   test('refuses more than one call may ask, before any work', async () => {
     const times = Array.from({ length: 100_000 }, (__, i) => i + 1)
-    const places = o.example?.body?.['depths'] ? { depths: [0, 0.001, 0.002] } : { outputs: ['temperature', 'remainingFraction', 'completedFraction'] }
+    const places = o.example?.body?.['depths']
+      ? { depths: [0, 0.001, 0.002] }
+      : { outputs: ['temperature', 'remainingFraction', 'completedFraction'] }
     expectProblem(o, await ask(o, { body: { ...o.example?.body, ...places, times } }), 'too-many-points')
   })
 

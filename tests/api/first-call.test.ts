@@ -36,10 +36,18 @@ test('a person signs up, makes a key, solves a wall and sees that very call', as
 
   await service.service.deps.requestLog.flush()
   const seen = await client.call(`/portal/v1/requests/${requestId}`)
-  expect(seen.json).toMatchObject({ id: requestId, status: 200, points: 10, case: 'slab-convection', key: { id, name: 'First' } })
+  expect(seen.json).toMatchObject({
+    id: requestId,
+    status: 200,
+    points: 10,
+    case: 'slab-convection',
+    key: { id, name: 'First' },
+  })
   expect(seen.json.ledger).toMatchObject([{ kind: 'charge', points: 10 }])
   const usage = await client.call('/portal/v1/usage?groupBy=day,key,case')
-  expect(usage.json.rows).toMatchObject([{ keyId: id, keyName: 'First', case: 'slab-convection', calls: 1, points: 10, refused: 0 }])
+  expect(usage.json.rows).toMatchObject([
+    { keyId: id, keyName: 'First', case: 'slab-convection', calls: 1, points: 10, refused: 0 },
+  ])
   expect(usage.json.account).toMatchObject({ limit: 100_000, used: 10 })
   const keys = await client.call('/portal/v1/keys')
   expect(keys.json.keys).toMatchObject([{ id, used: 10, createdBy: 'Jo Tester', prefix: `${secret.slice(0, 17)}…` }])
@@ -51,7 +59,10 @@ test('a person signs up, makes a key, solves a wall and sees that very call', as
 test('equal calls have equal bytes and tags', async () => {
   const { client } = await signUp(service.url)
   const { secret } = await makeKey(client)
-  const [one, two] = [await client.solve('slab-convection', secret, wall), await client.solve('slab-convection', secret, wall)]
+  const [one, two] = [
+    await client.solve('slab-convection', secret, wall),
+    await client.solve('slab-convection', secret, wall),
+  ]
   expect(two.text).toBe(one.text)
   expect(two.headers.get('etag')).toBe(one.headers.get('etag'))
 })

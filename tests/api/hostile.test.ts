@@ -23,13 +23,34 @@ beforeAll(async () => {
 afterAll(() => service.close())
 
 /* Texts, since JSON.stringify writes none of these. */
-const numbers = ['1e999', '-1e999', '1e308', '-1e308', '5e-324', '-0', '9007199254740993', '"12"', '0', '-1', 'null', 'true', '[]', '{}', '1e400', '"NaN"', '0.1e-400']
+const numbers = [
+  '1e999',
+  '-1e999',
+  '1e308',
+  '-1e308',
+  '5e-324',
+  '-0',
+  '9007199254740993',
+  '"12"',
+  '0',
+  '-1',
+  'null',
+  'true',
+  '[]',
+  '{}',
+  '1e400',
+  '"NaN"',
+  '0.1e-400',
+]
 
 describe.each(cases.map((c) => [c.id, c] as const))('%s', (_, c) => {
   const fields = Object.keys(c.example)
   test.each(fields)('answers or refuses any number as %s, and never NaN', async (field) => {
     for (const number of numbers) {
-      const body = JSON.stringify({ ...c.example, [field]: '@' }).replace('"@"', Array.isArray(c.example[field]) ? `[${number}]` : number)
+      const body = JSON.stringify({ ...c.example, [field]: '@' }).replace(
+        '"@"',
+        Array.isArray(c.example[field]) ? `[${number}]` : number,
+      )
       const answer = await client.solve(c.id, secret, body)
       expect([200, 422], `${field}: ${number} ${answer.text.slice(0, 300)}`).toContain(answer.status)
       expect(answer.text).not.toMatch(/NaN|Infinity/)
@@ -41,7 +62,11 @@ describe.each(cases.map((c) => [c.id, c] as const))('%s', (_, c) => {
 
 test('no body whatever gives a fault of ours', async () => {
   const bodies = operations.filter((o) => o.body && (o.access === 'key' || o.access === 'public'))
-  const junk = fc.oneof(fc.json({ maxDepth: 40 }), fc.string({ unit: 'binary' }), mutated(bodies.map((o) => o.example?.body)))
+  const junk = fc.oneof(
+    fc.json({ maxDepth: 40 }),
+    fc.string({ unit: 'binary' }),
+    mutated(bodies.map((o) => o.example?.body)),
+  )
   await fc.assert(
     fc.asyncProperty(fc.constantFrom(...bodies), junk, async (o, body) => {
       const answer = await client.call(o.path, { method: 'POST', body, headers: { authorization: `Bearer ${secret}` } })
@@ -67,7 +92,11 @@ test.each([
   ['a byte that is not UTF-8', Buffer.from([0x22, 0xff, 0x22]), 'malformed-json'],
   ['half a surrogate pair', '{"\\ud800": 1}', 'invalid-input'],
   ['NUL in a name', '{"\\u0000": 1}', 'invalid-input'],
-  ['a hundred thousand names', JSON.stringify(Object.fromEntries(Array.from({ length: 100_000 }, (_, i) => [i, i]))), 'invalid-input'],
+  [
+    'a hundred thousand names',
+    JSON.stringify(Object.fromEntries(Array.from({ length: 100_000 }, (_, i) => [i, i]))),
+    'invalid-input',
+  ],
   ['two hundred thousand wrong entries', JSON.stringify({ times: Array(200_000).fill('x') }), 'invalid-input'],
 ])('refuses %s quickly', async (_, body, code) => {
   const started = performance.now()
@@ -109,12 +138,17 @@ test.each([
   expect(answer.json).toMatchObject({ status, requestId: expect.stringMatching(/^req_/) })
 })
 
-test.each(['/v1/requests/req_%00', '/v1/requests/x', `/v1/requests/req_${'f'.repeat(32)}`, '/v1/requests/%27%20OR%201=1'])(
-  'finds nothing at %s',
-  async (path) => {
-    expect((await client.call(path, { headers: { authorization: `Bearer ${secret}` } })).json).toMatchObject({ status: 404, code: 'not-found' })
-  },
-)
+test.each([
+  '/v1/requests/req_%00',
+  '/v1/requests/x',
+  `/v1/requests/req_${'f'.repeat(32)}`,
+  '/v1/requests/%27%20OR%201=1',
+])('finds nothing at %s', async (path) => {
+  expect((await client.call(path, { headers: { authorization: `Bearer ${secret}` } })).json).toMatchObject({
+    status: 404,
+    code: 'not-found',
+  })
+})
 
 test.each([
   ['from=2026-02-30', 'from'],
@@ -129,12 +163,18 @@ test.each([
   expect(answer.json).toMatchObject({ status: 422, code: 'invalid-parameter', errors: [{ parameter: name }] })
 })
 
-test.each(['cursor=x', 'cursor=%00', `cursor=${Buffer.from('req_1').toString('base64url')}`, 'status=bad', `keyId=${'x'.repeat(61)}`])(
-  'refuses the requests of %s',
-  async (parameters) => {
-    expect((await client.call(`/portal/v1/requests?${parameters}`)).json).toMatchObject({ status: 422, code: 'invalid-parameter' })
-  },
-)
+test.each([
+  'cursor=x',
+  'cursor=%00',
+  `cursor=${Buffer.from('req_1').toString('base64url')}`,
+  'status=bad',
+  `keyId=${'x'.repeat(61)}`,
+])('refuses the requests of %s', async (parameters) => {
+  expect((await client.call(`/portal/v1/requests?${parameters}`)).json).toMatchObject({
+    status: 422,
+    code: 'invalid-parameter',
+  })
+})
 
 test('what a field name says is kept without control characters and keys', async () => {
   const body = `{"${secret}": 1, "\\u0000\\ud800<script>": 2}`
@@ -151,14 +191,32 @@ const raw = (bytes: string) =>
   new Promise<string>((resolve, reject) => {
     const socket = connect(service.service.port, '127.0.0.1', () => socket.end(bytes))
     let text = ''
-    socket.on('data', (chunk) => (text += String(chunk))).on('close', () => resolve(text)).on('error', reject)
+    socket
+      .on('data', (chunk) => (text += String(chunk)))
+      .on('close', () => resolve(text))
+      .on('error', reject)
   })
 
 test.each([
   ['what is no HTTP', 'hello\r\n\r\n', 400, 'malformed-request'],
-  ['headers that are too large', `GET /healthz HTTP/1.1\r\nHost: x\r\nA: ${'x'.repeat(17_000)}\r\n\r\n`, 431, 'header-too-large'],
-  ['two lengths', 'POST /healthz HTTP/1.1\r\nHost: x\r\nContent-Length: 1\r\nContent-Length: 2\r\n\r\na', 400, 'malformed-request'],
-  ['a length and chunks', 'POST /healthz HTTP/1.1\r\nHost: x\r\nContent-Length: 1\r\nTransfer-Encoding: chunked\r\n\r\n0\r\n\r\n', 400, 'malformed-request'],
+  [
+    'headers that are too large',
+    `GET /healthz HTTP/1.1\r\nHost: x\r\nA: ${'x'.repeat(17_000)}\r\n\r\n`,
+    431,
+    'header-too-large',
+  ],
+  [
+    'two lengths',
+    'POST /healthz HTTP/1.1\r\nHost: x\r\nContent-Length: 1\r\nContent-Length: 2\r\n\r\na',
+    400,
+    'malformed-request',
+  ],
+  [
+    'a length and chunks',
+    'POST /healthz HTTP/1.1\r\nHost: x\r\nContent-Length: 1\r\nTransfer-Encoding: chunked\r\n\r\n0\r\n\r\n',
+    400,
+    'malformed-request',
+  ],
 ])('refuses %s as a problem', async (_, bytes, status, code) => {
   const [head = '', body = ''] = (await raw(bytes)).split('\r\n\r\n')
   expect(head).toMatch(new RegExp(`^HTTP/1.1 ${status} `))

@@ -13,13 +13,15 @@ test('new keys are of the form, differ, and any misspelling is told', () => {
   for (const key of keys) {
     expect(key).toMatch(/^soak_trial_[0-9A-Za-z]{38}$/)
     expect(isKey(key)).toBe(true)
-    for (let at = 11; at < key.length; at += 3) expect(isKey(key.slice(0, at) + (key[at] === 'a' ? 'b' : 'a') + key.slice(at + 1))).toBe(false)
+    for (let at = 11; at < key.length; at += 3)
+      expect(isKey(key.slice(0, at) + (key[at] === 'a' ? 'b' : 'a') + key.slice(at + 1))).toBe(false)
   }
 })
 
 test('digits are drawn evenly', () => {
   const counts = new Map<string, number>()
-  for (let n = 0; n < 600; n++) for (const digit of newKey('trial').slice(11, 43)) counts.set(digit, (counts.get(digit) ?? 0) + 1)
+  for (let n = 0; n < 600; n++)
+    for (const digit of newKey('trial').slice(11, 43)) counts.set(digit, (counts.get(digit) ?? 0) + 1)
   expect(counts.size).toBe(62)
   for (const count of counts.values()) expect(Math.abs(count - 310)).toBeLessThan(110)
 })

@@ -19,11 +19,15 @@ afterAll(async () => {
   await service.close()
 })
 
-const sql = <R extends object>(text: string, values: unknown[] = []) => query<R & Record<string, unknown>>(service.databaseUrl, text, values)
+const sql = <R extends object>(text: string, values: unknown[] = []) =>
+  query<R & Record<string, unknown>>(service.databaseUrl, text, values)
 const sumOf = async (keyId: string) =>
   Number((await sql<{ sum: string | null }>('SELECT sum(points) FROM ledger WHERE key_id = $1', [keyId]))[0]?.sum ?? 0)
 const usedOf = async (accountId: string) =>
-  Number((await sql<{ sum: string | null }>('SELECT sum(used) FROM periods WHERE account_id = $1', [accountId]))[0]?.sum ?? 0)
+  Number(
+    (await sql<{ sum: string | null }>('SELECT sum(used) FROM periods WHERE account_id = $1', [accountId]))[0]?.sum ??
+      0,
+  )
 
 const CLIENTS = 64
 const CALLS_EACH = 4
@@ -78,8 +82,15 @@ test('one faulty charge of a gather fails alone', async () => {
   const { client, accountId } = await signUp(service.url)
   const key = await makeKey(client)
   const twice = newId('req')
-  const charge = (requestId: string) => service.service.deps.meter.spend({ requestId, accountId, keyId: key.id, caseId: lumped.id, points: 10 })
-  const outcomes = await Promise.allSettled([charge(newId('req')), charge(newId('req')), charge(twice), charge(twice), charge(newId('req'))])
+  const charge = (requestId: string) =>
+    service.service.deps.meter.spend({ requestId, accountId, keyId: key.id, caseId: lumped.id, points: 10 })
+  const outcomes = await Promise.allSettled([
+    charge(newId('req')),
+    charge(newId('req')),
+    charge(twice),
+    charge(twice),
+    charge(newId('req')),
+  ])
   expect(outcomes.map((o) => o.status).filter((s) => s === 'rejected')).toHaveLength(1)
   expect(await usedOf(accountId)).toBe(40)
   expect(await sumOf(key.id)).toBe(40)
@@ -105,7 +116,10 @@ test('what fails after the charge costs nothing', async () => {
   const answer = await client.solve(lumped.id, key.secret, lumped.example).finally(() => (compute.solve = solve))
   expect(answer.json).toMatchObject({ status: 500, code: 'internal' })
   expect(answer.text).not.toContain('planted')
-  const entries = await sql('SELECT kind, points::int, period = (SELECT min(period) FROM ledger WHERE key_id = $1) AS same FROM ledger WHERE key_id = $1 ORDER BY kind', [key.id])
+  const entries = await sql(
+    'SELECT kind, points::int, period = (SELECT min(period) FROM ledger WHERE key_id = $1) AS same FROM ledger WHERE key_id = $1 ORDER BY kind',
+    [key.id],
+  )
   expect(entries).toEqual([
     { kind: 'charge', points: 10, same: true },
     { kind: 'refund', points: -10, same: true },
@@ -160,12 +174,15 @@ test('a commit of unknown outcome answers 503, and the sweep gives back what was
     const ask = real.query.bind(real) as (...args: unknown[]) => Promise<unknown>
     real.query = (async (...args: unknown[]) => {
       const result = await ask(...args)
-      if (args[0] === 'COMMIT' && faults++ === 0) throw Object.assign(new Error('read ECONNRESET'), { code: 'ECONNRESET' })
+      if (args[0] === 'COMMIT' && faults++ === 0)
+        throw Object.assign(new Error('read ECONNRESET'), { code: 'ECONNRESET' })
       return result
     }) as typeof real.query
     return real
   }) as unknown as typeof pool.connect
-  const answer = await client.solve(lumped.id, key.secret, lumped.example).finally(() => (pool.connect = connect as typeof pool.connect))
+  const answer = await client
+    .solve(lumped.id, key.secret, lumped.example)
+    .finally(() => (pool.connect = connect as typeof pool.connect))
   expect(answer.json).toMatchObject({ status: 503, code: 'unavailable', retryable: true })
   expect(answer.headers.get('retry-after')).toBe('2')
   expect(await sumOf(key.id)).toBe(10)
@@ -176,7 +193,12 @@ test('a commit of unknown outcome answers 503, and the sweep gives back what was
 })
 
 test('the ledger takes no change', async () => {
-  for (const text of ['UPDATE ledger SET points = 0', 'DELETE FROM ledger', 'UPDATE audit SET reason = $$other$$', 'DELETE FROM audit'])
+  for (const text of [
+    'UPDATE ledger SET points = 0',
+    'DELETE FROM ledger',
+    'UPDATE audit SET reason = $$other$$',
+    'DELETE FROM audit',
+  ])
     await expect(sql(text)).rejects.toThrow(/insert-only/)
 })
 

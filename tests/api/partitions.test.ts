@@ -8,13 +8,15 @@ beforeAll(async () => {
   database = await createTestDatabase()
 })
 afterAll(() => database.drop())
-const sql = <R extends object>(text: string, values: unknown[] = []) => query<R & Record<string, unknown>>(database.url, text, values)
+const sql = <R extends object>(text: string, values: unknown[] = []) =>
+  query<R & Record<string, unknown>>(database.url, text, values)
 
 const entry = `INSERT INTO ledger (period, request_id, kind, account_id, key_id, environment, points) VALUES ($1, $2, 'charge', 'a', 'k', 'trial', 10)`
 const line = `INSERT INTO log (at, id, method, path, status, milliseconds, bytes_in, bytes_out, points, solver)
   VALUES ($1, $2, 'GET', '/', 200, 1, 0, 0, 0, '1')`
 const placeOf = async (table: string, id: string, column: string) =>
-  (await sql<{ place: string }>(`SELECT tableoid::regclass::text AS place FROM ${table} WHERE ${column} = $1`, [id]))[0]?.place
+  (await sql<{ place: string }>(`SELECT tableoid::regclass::text AS place FROM ${table} WHERE ${column} = $1`, [id]))[0]
+    ?.place
 
 test('the coming week has its partitions from the start', async () => {
   const [row] = await sql<{ n: string }>(
@@ -28,9 +30,15 @@ test('rows without a partition are caught, and move when it is made', async () =
   await sql(entry, ['2031-05-14', 'req_far'])
   await sql(line, ['2031-05-14T23:59:59.999Z', 'req_far'])
   await sql(line, ['2031-05-15T00:00:00Z', 'req_next'])
-  expect([await placeOf('ledger', 'req_far', 'request_id'), await placeOf('log', 'req_far', 'id')]).toEqual(['ledger_default', 'log_default'])
+  expect([await placeOf('ledger', 'req_far', 'request_id'), await placeOf('log', 'req_far', 'id')]).toEqual([
+    'ledger_default',
+    'log_default',
+  ])
   expect((await sql<{ made: number }>("SELECT create_partitions('2031-05-14', '2031-05-14') AS made"))[0]?.made).toBe(2)
-  expect([await placeOf('ledger', 'req_far', 'request_id'), await placeOf('log', 'req_far', 'id')]).toEqual(['ledger_203105', 'log_20310514'])
+  expect([await placeOf('ledger', 'req_far', 'request_id'), await placeOf('log', 'req_far', 'id')]).toEqual([
+    'ledger_203105',
+    'log_20310514',
+  ])
   expect(await placeOf('log', 'req_next', 'id')).toBe('log_default')
   expect((await sql<{ made: number }>("SELECT create_partitions('2031-05-14', '2031-05-14') AS made"))[0]?.made).toBe(0)
   await expect(sql(entry, ['2031-05-14', 'req_far'])).rejects.toThrow(/duplicate key/)
@@ -47,7 +55,11 @@ test('days are those of UTC, whatever the zone of the connection', async () => {
 })
 
 test('many processes may make them at once', async () => {
-  const made = await Promise.all(Array.from({ length: 8 }, () => sql<{ made: number }>("SELECT create_partitions('2033-01-01', '2033-01-20') AS made")))
+  const made = await Promise.all(
+    Array.from({ length: 8 }, () =>
+      sql<{ made: number }>("SELECT create_partitions('2033-01-01', '2033-01-20') AS made"),
+    ),
+  )
   expect(made.map(([row]) => row?.made).sort()).toEqual([0, 0, 0, 0, 0, 0, 0, 21])
 })
 

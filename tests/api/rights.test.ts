@@ -53,7 +53,11 @@ describe.each(guarded.map((o) => [o.id, o] as const))('%s', (_, o) => {
   test('a key is no session, and the session of one side is none of the other', async () => {
     const headers = { authorization: `Bearer ${world.key.secret}` }
     const method = o.method.toUpperCase()
-    const answer = await world.nobody.call(pathIn(world, o), { method, headers, body: o.body ? o.example?.body : undefined })
+    const answer = await world.nobody.call(pathIn(world, o), {
+      method,
+      headers,
+      body: o.body ? o.example?.body : undefined,
+    })
     expect(answer.status).toBe(401)
     const other = new Client(service.url)
     for (const [name, value] of (o.access === 'session' ? world.staff.support : world.members.owner).cookies)
@@ -64,12 +68,22 @@ describe.each(guarded.map((o) => [o.id, o] as const))('%s', (_, o) => {
 
 describe.each(operations.filter((o) => o.access === 'session').map((o) => [o.id, o] as const))('%s', (_, o) => {
   test('shows and changes nothing of another account', async () => {
-    const before = await query(service.databaseUrl, 'SELECT id, revoked_at FROM keys WHERE account_id = $1 ORDER BY id', [world.accountId])
+    const before = await query(
+      service.databaseUrl,
+      'SELECT id, revoked_at FROM keys WHERE account_id = $1 ORDER BY id',
+      [world.accountId],
+    )
     const answer = await ask(world.stranger, o, { keyId: world.key.id })
     expect(answer.status).toBe(o.params ? 404 : o.status)
-    for (const word of [world.accountId, world.key.id, world.requestId].filter((id) => !answer.json.detail?.includes(id)))
+    for (const word of [world.accountId, world.key.id, world.requestId].filter(
+      (id) => !answer.json.detail?.includes(id),
+    ))
       expect(answer.text.replaceAll(answer.json.requestId ?? ' ', '')).not.toContain(word)
-    expect(await query(service.databaseUrl, 'SELECT id, revoked_at FROM keys WHERE account_id = $1 ORDER BY id', [world.accountId])).toEqual(before)
+    expect(
+      await query(service.databaseUrl, 'SELECT id, revoked_at FROM keys WHERE account_id = $1 ORDER BY id', [
+        world.accountId,
+      ]),
+    ).toEqual(before)
   })
 })
 
@@ -79,9 +93,11 @@ test('the key of one account reads no request of another', async () => {
   expect(answer.status).toBe(404)
 })
 
-test('what is missing and what is another account\'s look the same', async () => {
+test("what is missing and what is another account's look the same", async () => {
   const [others, missing] = await Promise.all(
-    [world.requestId, 'req_019283746570700080000123456789ab'].map((id) => world.stranger.call(`/portal/v1/requests/${id}`)),
+    [world.requestId, 'req_019283746570700080000123456789ab'].map((id) =>
+      world.stranger.call(`/portal/v1/requests/${id}`),
+    ),
   )
   expect({ ...others?.json, requestId: '' }).toEqual({ ...missing?.json, requestId: '' })
 })
@@ -97,7 +113,8 @@ test('an integrator lists and revokes own keys only, the owner all', async () =>
 })
 
 test('a role that changes counts at the next call', async () => {
-  const set = (role: string) => query(service.databaseUrl, 'UPDATE memberships SET role = $1 WHERE person_id = $2', [role, 'prsn_reader'])
+  const set = (role: string) =>
+    query(service.databaseUrl, 'UPDATE memberships SET role = $1 WHERE person_id = $2', [role, 'prsn_reader'])
   await set('integrator')
   expect((await world.members.reader.call('/portal/v1/keys')).status).toBe(200)
   await set('reader')
@@ -121,7 +138,11 @@ test('every look of staff is on record with its reason, and shows no secret and 
   const byId = await world.staff.support.post('/support/v1/find', { query: world.requestId, reason })
   expect(byId.json.requests).toHaveLength(1)
   const read = await world.staff.support.post(`/support/v1/requests/${world.requestId}/read`, { reason })
-  expect(read.json).toMatchObject({ id: world.requestId, account: { id: world.accountId }, ledger: [{ kind: 'charge' }] })
+  expect(read.json).toMatchObject({
+    id: world.requestId,
+    account: { id: world.accountId },
+    ledger: [{ kind: 'charge' }],
+  })
   for (const answer of [found, pasted, byId, read]) {
     expect(answer.text).not.toContain(world.key.secret)
     expect(answer.text).not.toContain('@')

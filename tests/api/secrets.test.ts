@@ -25,7 +25,8 @@ test('no log line and no table holds a key, a password or a cookie', async () =>
   await client.call(`/v1/requests/${key.secret}`, { headers: { authorization: `Bearer ${key.secret}` } })
   const { compute, requestLog } = service.service.deps
   const { solve } = compute
-  compute.solve = (task) => Promise.reject(Object.assign(new Error('planted'), { task, password: PASSWORD, authorization: key.secret }))
+  compute.solve = (task) =>
+    Promise.reject(Object.assign(new Error('planted'), { task, password: PASSWORD, authorization: key.secret }))
   await client.solve(lumped.id, key.secret, lumped.example).finally(() => (compute.solve = solve))
   await requestLog.flush()
 
@@ -50,7 +51,7 @@ test('a fault is logged with its request id, and its answer hides the reason', a
   const { db } = service.service.deps
   const { select } = db
   db.select = (() => {
-    throw new Error('a reason that is nobody\'s business')
+    throw new Error("a reason that is nobody's business")
   }) as unknown as typeof db.select
   const answer = await client.call('/portal/v1/session').finally(() => (db.select = select))
   expect(answer.json).toMatchObject({ status: 500, code: 'internal' })

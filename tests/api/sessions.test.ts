@@ -9,7 +9,8 @@ beforeAll(async () => {
 })
 afterAll(() => service.close())
 
-const signIn = (client: Client, mail: string, password = PASSWORD) => client.post('/portal/v1/sign-in', { mail, password })
+const signIn = (client: Client, mail: string, password = PASSWORD) =>
+  client.post('/portal/v1/sign-in', { mail, password })
 
 describe('a session', () => {
   test('gets a new id at sign-in, and a planted one dies', async () => {
@@ -36,7 +37,9 @@ describe('a session', () => {
     const { mail } = await signUp(service.url)
     const answer = await signIn(new Client(service.url), mail)
     expect(answer.headers.getSetCookie()).toHaveLength(1)
-    expect(answer.headers.getSetCookie()[0]).toMatch(/^soakstone=[^;]+; Path=\/; Expires=[^;]+; HttpOnly; SameSite=Lax$/)
+    expect(answer.headers.getSetCookie()[0]).toMatch(
+      /^soakstone=[^;]+; Path=\/; Expires=[^;]+; HttpOnly; SameSite=Lax$/,
+    )
   })
 
   test('writes nothing when it is read', async () => {
@@ -51,7 +54,11 @@ describe('a session', () => {
   test('shows who is signed in and what the role may do', async () => {
     const { client, mail, accountId } = await signUp(service.url)
     const { json } = await client.call('/portal/v1/session')
-    expect(json).toMatchObject({ person: { mail, name: 'Jo Tester' }, account: { id: accountId, name: 'Test House' }, role: 'owner' })
+    expect(json).toMatchObject({
+      person: { mail, name: 'Jo Tester' },
+      account: { id: accountId, name: 'Test House' },
+      role: 'owner',
+    })
     expect(json.permissions).toContain('keys:create')
   })
 
@@ -70,7 +77,9 @@ test('behind https the cookie is bound to the host and secure', async () => {
     const { mail } = await signUp(service.url)
     const headers = { origin: 'https://soakstone.example', 'x-forwarded-proto': 'https' }
     const answer = await new Client(secure.url).post('/portal/v1/sign-in', { mail, password: PASSWORD }, headers)
-    expect(answer.headers.getSetCookie()[0]).toMatch(/^__Host-soakstone=[^;]+; Path=\/; Expires=[^;]+; HttpOnly; Secure; SameSite=Lax$/)
+    expect(answer.headers.getSetCookie()[0]).toMatch(
+      /^__Host-soakstone=[^;]+; Path=\/; Expires=[^;]+; HttpOnly; Secure; SameSite=Lax$/,
+    )
     expect(answer.headers.get('strict-transport-security')).toMatch(/max-age=31536000/)
   } finally {
     await secure.close()
@@ -80,7 +89,10 @@ test('behind https the cookie is bound to the host and secure', async () => {
 test('staff sign in only where the service is reached from its own machine alone', async () => {
   const open = await startTestService({ databaseUrl: service.databaseUrl, env: { HOST: '0.0.0.0' } })
   try {
-    const answer = await new Client(open.url).post('/support/v1/sign-in', { mail: 'support@example.org', password: PASSWORD })
+    const answer = await new Client(open.url).post('/support/v1/sign-in', {
+      mail: 'support@example.org',
+      password: PASSWORD,
+    })
     expect(answer.json).toMatchObject({ status: 403, code: 'forbidden' })
   } finally {
     await open.close()
@@ -96,7 +108,11 @@ describe('sign-in', () => {
     for (let n = 0; n < 6; n++)
       for (const kind of ['known', 'unknown'] as const) {
         const started = performance.now()
-        const answer = await signIn(client, kind === 'known' ? mail : `nobody-${n}@example.org`, 'not the password at all')
+        const answer = await signIn(
+          client,
+          kind === 'known' ? mail : `nobody-${n}@example.org`,
+          'not the password at all',
+        )
         times[kind].push(performance.now() - started)
         expect(answer.status).toBe(401)
         texts.add(JSON.stringify({ ...answer.json, requestId: '' }))
@@ -151,15 +167,20 @@ describe('sign-up', () => {
     expect(answer.json.errors[0].pointer).toBe('#/name')
   })
 
-  test.each(['Zoë Ångström-李', '👩‍🔬 emoji', 'e\u0301 decomposed', '<script>alert(1)</script>'])('keeps the name %s as it is', async (name) => {
-    const client = new Client(service.url)
-    await client.post('/portal/v1/sign-up', { ...wish, mail: `n${Math.random()}@example.org`, name })
-    expect((await client.call('/portal/v1/session')).json.person.name).toBe(name)
-  })
+  test.each(['Zoë Ångström-李', '👩‍🔬 emoji', 'e\u0301 decomposed', '<script>alert(1)</script>'])(
+    'keeps the name %s as it is',
+    async (name) => {
+      const client = new Client(service.url)
+      await client.post('/portal/v1/sign-up', { ...wish, mail: `n${Math.random()}@example.org`, name })
+      expect((await client.call('/portal/v1/session')).json.person.name).toBe(name)
+    },
+  )
 
   test('takes no field that would give rights', async () => {
     for (const field of ['role', 'trialLimit', 'id', 'accountId'])
-      expect((await signUpWith({ mail: 'rights@example.org', [field]: 'owner' })).json.errors[0]).toMatchObject({ code: 'unknown-field' })
+      expect((await signUpWith({ mail: 'rights@example.org', [field]: 'owner' })).json.errors[0]).toMatchObject({
+        code: 'unknown-field',
+      })
   })
 })
 
@@ -167,7 +188,10 @@ test('an account has at most 100 living keys', async () => {
   const { client } = await signUp(service.url)
   const made = []
   for (let n = 0; n < 100; n++) made.push(await makeKey(client))
-  expect((await client.post('/portal/v1/keys', { name: 'one more' })).json).toMatchObject({ status: 409, code: 'too-many-keys' })
+  expect((await client.post('/portal/v1/keys', { name: 'one more' })).json).toMatchObject({
+    status: 409,
+    code: 'too-many-keys',
+  })
   await client.post(`/portal/v1/keys/${made[0]?.id}/revoke`)
   expect((await client.post('/portal/v1/keys', { name: 'one more' })).status).toBe(201)
 })

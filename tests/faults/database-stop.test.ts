@@ -44,16 +44,24 @@ test('a database that dies answers 503, the process lives, and each acknowledged
   expect((await client.call('/v1/cases')).status).toBe(200)
   await cluster.restart()
   const before = answered.length
-  for (let n = 0; n < 100 && answered.length < before + 20; n++) await new Promise((resolve) => setTimeout(resolve, 100))
+  for (let n = 0; n < 100 && answered.length < before + 20; n++)
+    await new Promise((resolve) => setTimeout(resolve, 100))
   stopped = true
   await Promise.all(load)
   expect(answered.length).toBeGreaterThanOrEqual(before + 20)
   expect([...statuses].sort()).toEqual([200, 503])
   expect(api.child.exitCode).toBeNull()
 
-  const rows = await query<{ request_id: string }>(cluster.url, "SELECT request_id FROM ledger WHERE key_id = $1 AND kind = 'charge'", [key.id])
+  const rows = await query<{ request_id: string }>(
+    cluster.url,
+    "SELECT request_id FROM ledger WHERE key_id = $1 AND kind = 'charge'",
+    [key.id],
+  )
   const charged = new Set(rows.map((row) => row.request_id))
   expect(answered.filter((id) => !charged.has(id))).toEqual([])
-  const [sums] = await query(cluster.url, 'SELECT (SELECT sum(points)::int FROM ledger) AS ledger, (SELECT sum(used)::int FROM periods) AS used')
+  const [sums] = await query(
+    cluster.url,
+    'SELECT (SELECT sum(points)::int FROM ledger) AS ledger, (SELECT sum(used)::int FROM periods) AS used',
+  )
   expect(sums?.['ledger']).toBe(sums?.['used'])
 })

@@ -42,7 +42,12 @@ export class Client {
     }
     const answered = await response.text()
     const isJson = response.headers.get('content-type')?.includes('json')
-    return { status: response.status, headers: response.headers, text: answered, json: isJson ? JSON.parse(answered) : undefined }
+    return {
+      status: response.status,
+      headers: response.headers,
+      text: answered,
+      json: isJson ? JSON.parse(answered) : undefined,
+    }
   }
 
   post(path: string, body?: unknown, headers: Record<string, string> = {}): Promise<Answer> {

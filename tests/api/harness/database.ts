@@ -17,7 +17,11 @@ const named = (url: string, name: string) => Object.assign(new URL(url), { pathn
 export async function createTestDatabase(): Promise<TestDatabase> {
   const server = process.env['TEST_DATABASE_URL']
   if (!server) throw new Error('TEST_DATABASE_URL is missing: run the tests by npm test.')
-  const schema = createHash('sha256').update(readFileSync(migrations)).update(readFileSync(first)).digest('hex').slice(0, 12)
+  const schema = createHash('sha256')
+    .update(readFileSync(migrations))
+    .update(readFileSync(first))
+    .digest('hex')
+    .slice(0, 12)
   const template = `soakstone_template_${schema}`
   const name = `soakstone_test_${randomBytes(6).toString('hex')}`
   await onServer(server, async (client) => {

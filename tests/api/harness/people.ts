@@ -10,19 +10,31 @@ let people = 0
 export async function signUp(url: string): Promise<{ client: Client; mail: string; accountId: string }> {
   const client = new Client(url)
   const mail = `person-${++people}-${randomBytes(3).toString('hex')}@example.org`
-  const answer = await client.post('/portal/v1/sign-up', { mail, password: PASSWORD, name: 'Jo Tester', accountName: 'Test House' })
+  const answer = await client.post('/portal/v1/sign-up', {
+    mail,
+    password: PASSWORD,
+    name: 'Jo Tester',
+    accountName: 'Test House',
+  })
   if (answer.status !== 201) throw new Error(`sign-up answered ${answer.status}: ${answer.text}`)
   return { client, mail, accountId: answer.json.account.id }
 }
 
-export async function makeKey(client: Client, wish: { name?: string; quota?: number } = {}): Promise<{ id: string; secret: string }> {
+export async function makeKey(
+  client: Client,
+  wish: { name?: string; quota?: number } = {},
+): Promise<{ id: string; secret: string }> {
   const answer = await client.post('/portal/v1/keys', { name: 'Test key', ...wish })
   if (answer.status !== 201) throw new Error(`making a key answered ${answer.status}: ${answer.text}`)
   return { id: answer.json.key.id, secret: answer.json.secret }
 }
 
 /** Runs one statement on a database. */
-export async function query<R extends pg.QueryResultRow>(databaseUrl: string, text: string, values: unknown[] = []): Promise<R[]> {
+export async function query<R extends pg.QueryResultRow>(
+  databaseUrl: string,
+  text: string,
+  values: unknown[] = [],
+): Promise<R[]> {
   const client = new pg.Client({ connectionString: databaseUrl })
   await client.connect()
   try {

@@ -16,8 +16,20 @@ export interface ApiProcess {
 
 /** The service as a process of its own, on a free port. */
 export async function startProcess(databaseUrl: string, env: Record<string, string> = {}): Promise<ApiProcess> {
-  const settings = { PORT: '0', DATABASE_URL: databaseUrl, PUBLIC_URL, SESSION_SECRET, NODE_ENV: 'test', LOG_LEVEL: 'warn', ...env }
-  const child = spawn(process.execPath, ['--import', 'tsx', 'api/server.ts'], { cwd: root, env: { ...process.env, ...settings }, stdio: 'pipe' })
+  const settings = {
+    PORT: '0',
+    DATABASE_URL: databaseUrl,
+    PUBLIC_URL,
+    SESSION_SECRET,
+    NODE_ENV: 'test',
+    LOG_LEVEL: 'warn',
+    ...env,
+  }
+  const child = spawn(process.execPath, ['--import', 'tsx', 'api/server.ts'], {
+    cwd: root,
+    env: { ...process.env, ...settings },
+    stdio: 'pipe',
+  })
   let output = ''
   const url = await new Promise<string>((resolve, reject) => {
     const read = (chunk: Buffer) => {

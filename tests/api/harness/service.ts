@@ -27,9 +27,20 @@ interface Options {
 }
 
 /** The service as it runs, on a free port and a database of its own unless one is given. */
-export async function startTestService({ limits = generous, env = {}, databaseUrl }: Options = {}): Promise<TestService> {
+export async function startTestService({
+  limits = generous,
+  env = {},
+  databaseUrl,
+}: Options = {}): Promise<TestService> {
   const database = databaseUrl ? { url: databaseUrl, drop: async () => undefined } : await createTestDatabase()
-  const config = parseConfig({ PORT: '0', DATABASE_URL: database.url, PUBLIC_URL, SESSION_SECRET, NODE_ENV: 'test', ...env })
+  const config = parseConfig({
+    PORT: '0',
+    DATABASE_URL: database.url,
+    PUBLIC_URL,
+    SESSION_SECRET,
+    NODE_ENV: 'test',
+    ...env,
+  })
   const lines: string[] = []
   const log = createLog('trace', { write: (line: string) => void lines.push(line) })
   const service = await startService(config, log, limits)

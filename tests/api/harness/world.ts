@@ -19,7 +19,8 @@ export interface World {
   strangersKey: { id: string; secret: string }
 }
 
-const exampleOf = (id: string) => operations.find((o) => o.id === id)?.example?.body as { mail: string; password: string }
+const exampleOf = (id: string) =>
+  operations.find((o) => o.id === id)?.example?.body as { mail: string; password: string }
 
 export async function createWorld({ url, databaseUrl, service }: TestService): Promise<World> {
   const sql = (text: string, values: unknown[]) => query(databaseUrl, text, values)
@@ -38,7 +39,13 @@ export async function createWorld({ url, databaseUrl, service }: TestService): P
   const agent = exampleOf('staffSignIn')
   for (const role of staffRoles) {
     const address = role === 'support' ? agent.mail : `${role}@example.org`
-    await sql('INSERT INTO staff (id, mail, name, password_hash, role) VALUES ($1, $2, $3, $4, $5)', [`stff_${role}`, address, role, hash, role])
+    await sql('INSERT INTO staff (id, mail, name, password_hash, role) VALUES ($1, $2, $3, $4, $5)', [
+      `stff_${role}`,
+      address,
+      role,
+      hash,
+      role,
+    ])
     staff[role] = await signIn(url, '/support/v1/sign-in', { mail: address, password: member.password })
   }
   const { client: stranger } = await signUp(url)
@@ -47,7 +54,17 @@ export async function createWorld({ url, databaseUrl, service }: TestService): P
   if (answer.status !== 200) throw new Error(`the first call answered ${answer.status}: ${answer.text}; ${mail}`)
   await service.deps.requestLog.flush()
   const requestId = answer.headers.get('request-id') as string
-  return { members, staff, stranger, nobody: new Client(url), accountId, key, requestId, spareKey: await makeKey(owner), strangersKey: await makeKey(stranger) }
+  return {
+    members,
+    staff,
+    stranger,
+    nobody: new Client(url),
+    accountId,
+    key,
+    requestId,
+    spareKey: await makeKey(owner),
+    strangersKey: await makeKey(stranger),
+  }
 }
 
 async function signIn(url: string, path: string, body: object): Promise<Client> {
@@ -59,7 +76,12 @@ async function signIn(url: string, path: string, body: object): Promise<Client> 
 
 /** The path of an operation with the ids of what the world holds. */
 export function pathIn(world: World, o: Operation, ids: Record<string, string> = {}): string {
-  const known: Record<string, string> = { ...o.example?.params, requestId: world.requestId, keyId: world.spareKey.id, ...ids }
+  const known: Record<string, string> = {
+    ...o.example?.params,
+    requestId: world.requestId,
+    keyId: world.spareKey.id,
+    ...ids,
+  }
   return o.path.replace(/\{(\w+)\}/g, (_, name: string) => known[name] ?? `no-${name}`)
 }
 
