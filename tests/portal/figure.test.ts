@@ -1,0 +1,89 @@
+import fc from 'fast-check'
+import { expect, test } from 'vitest'
+import { contour, region } from '../../portal/src/figure/contour.ts'
+import { gridOf, nearest } from '../../portal/src/figure/grid.ts'
+import { multiples, niceCeiling, niceStep } from '../../portal/src/figure/steps.ts'
+import { jsonText } from '../../portal/src/components/json-text.ts'
+
+const xs = Array.from({ length: 21 }, (_, i) => i)
+const ys = Array.from({ length: 31 }, (_, i) => i)
+const plane = (a: number, b: number) => ys.map((y) => xs.map((x) => a * x + b * y))
+
+test('a contour of a plane is the straight line, from edge to edge', () => {
+  const lines = contour(xs, ys, plane(1, 2), 20.5)
+  expect(lines).toHaveLength(1)
+  for (const [x, y] of lines[0] ?? []) expect(x + 2 * y).toBeCloseTo(20.5, 9)
+  const ends = [lines[0]?.[0], lines[0]?.at(-1)].map((point) => point?.join()).sort()
+  expect(ends).toEqual(['0,10.25', '20,0.25'])
+})
+
+test('a level that is never reached has no contour', () => {
+  expect(contour(xs, ys, plane(1, 2), 1000)).toEqual([])
+  expect(region(xs, ys, plane(1, 2), 1000)).toEqual([])
+})
+
+test('the outline of a region is closed and encloses its area', () => {
+  const [outline = []] = region(xs, ys, plane(1, 0), 12)
+  expect(outline[0]).toEqual(outline.at(-1))
+  const area = outline.slice(1).reduce((sum, [x, y], i) => sum + (outline[i]![0] * y - x * outline[i]![1]) / 2, 0)
+  expect(Math.abs(area)).toBeCloseTo(8 * 30, 6)
+})
+
+test('every point of a contour has the level, for any field', () => {
+  fc.assert(
+    fc.property(
+      fc.array(fc.array(fc.double({ min: -5, max: 5, noNaN: true }), { minLength: 4, maxLength: 4 }), {
+        minLength: 4,
+        maxLength: 4,
+      }),
+      (values) => {
+        const line = [0, 1, 2, 3]
+        for (const [x, y] of contour(line, line, values, 0.1234567).flat()) {
+          const [c, r] = [Math.min(2, Math.floor(x)), Math.min(2, Math.floor(y))]
+          const [u, v] = [x - c, y - r]
+          const at =
+            (values[r]![c]! * (1 - u) + values[r]![c + 1]! * u) * (1 - v) +
+            (values[r + 1]![c]! * (1 - u) + values[r + 1]![c + 1]! * u) * v
+          expect(at).toBeCloseTo(0.1234567, 6)
+        }
+      },
+    ),
+  )
+})
+
+test('a grid stays within its limit, is ordered, and holds what was asked for', () => {
+  const size = fc.double({ min: 1e-3, max: 1e9, noNaN: true })
+  const parts = fc.array(fc.double({ min: 0.001, max: 1, noNaN: true }), { maxLength: 40 })
+  fc.assert(
+    fc.property(size, size, parts, parts, (extent, end, d, t) => {
+      const wanted = { depths: d.map((part) => part * extent), times: t.map((part) => part * end) }
+      const { depths, times } = gridOf({ extent, end, ...wanted })
+      expect(depths.length * times.length).toBeLessThanOrEqual(10_000)
+      for (const axis of [depths, times]) expect(axis).toEqual([...axis].sort((a, b) => a - b))
+      for (const time of wanted.times.slice(0, 15)) expect(times).toContain(Number(time.toPrecision(12)))
+      for (const depth of wanted.depths.slice(0, 15)) expect(depths).toContain(Number(depth.toPrecision(12)))
+      expect(depths.at(-1)).toBeCloseTo(extent, 3)
+    }),
+  )
+  expect(nearest([0, 1, 4], 2.4)).toBe(1)
+})
+
+test('steps are 1, 2, 2.5 or 5 times a power of ten, and enough of them', () => {
+  fc.assert(
+    fc.property(fc.double({ min: 1e-9, max: 1e12, noNaN: true }), (span) => {
+      const step = niceStep(span, 14)
+      expect(span / step).toBeLessThanOrEqual(14 + 1e-6)
+      expect(span / step).toBeGreaterThan(4.9)
+      expect(niceCeiling(span)).toBeGreaterThanOrEqual(span * (1 - 1e-9))
+    }),
+  )
+  expect(multiples(2.5, -10, 10)).toEqual([-10, -7.5, -5, -2.5, 0, 2.5, 5, 7.5, 10])
+})
+
+test('laid-out JSON is the same JSON', () => {
+  fc.assert(
+    fc.property(fc.jsonValue(), (value) => {
+      expect(JSON.parse(jsonText(value))).toEqual(JSON.parse(JSON.stringify(value)))
+    }),
+  )
+})
