@@ -16,7 +16,9 @@ export const migrate = (env) =>
   runService(
     'api/migrate.ts',
     env,
-    'The database could not be brought up to date: mend what is named above, then start again.',
+    process.env['DATABASE_URL']
+      ? 'The database that DATABASE_URL names could not be brought up to date, as shown above: mend the address or the server, then start again.'
+      : 'The database could not be brought up to date: mend what is named above, then start again.',
   )
 
 /**
