@@ -9,6 +9,7 @@ import { createDatabase, createPool } from './database.ts'
 import type { Deps } from './deps.ts'
 import { type Limits, defaultLimits } from './http/limits.ts'
 import { refuseRaw } from './http/refuse-raw.ts'
+import { createFindKey } from './keys/authenticate.ts'
 import { createMeter } from './metering/meter.ts'
 import { createRequestLog } from './requests/log.ts'
 import { keepHouse } from './housekeeping.ts'
@@ -31,6 +32,7 @@ export function createDeps(config: Config, log: Logger, limits: Limits = default
     log,
     pool,
     db: createDatabase(pool),
+    findKey: createFindKey(pool),
     compute: createCompute(config.solveThreads),
     meter: createMeter(pool, log),
     requestLog: createRequestLog(pool, log),

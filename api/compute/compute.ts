@@ -4,7 +4,7 @@ import { type Rendered, render } from '../http/render.ts'
 import { Problem } from '../problems.ts'
 
 /** Calls of more numbers go to a thread: below it, the way there costs more than the solve. */
-export const INLINE_VALUES = 5000
+export const INLINE_VALUES = 2000
 const SOLVE_LIMIT = 10_000
 const WAITING_SOLVES = 64
 const WAITING_PASSWORDS = 64

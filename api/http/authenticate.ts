@@ -12,7 +12,7 @@ type Gate = (o: Operation, req: Request, deps: Deps) => Promise<Caller>
 /** How each kind of access is proved. Rights are read anew for each call, so that a change counts at once. */
 const gates: Record<Access, Gate> = {
   public: async () => ({ kind: 'public' }),
-  key: (_, req, { pool }) => authenticateKey(pool, req.headers.authorization),
+  key: (_, req, { findKey }) => authenticateKey(findKey, req.headers.authorization),
   session: async (o, req, { db }) => {
     const { personId, accountId } = req.session
     if (!personId || !accountId) throw new Problem('sign-in-needed')

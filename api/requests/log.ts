@@ -1,7 +1,7 @@
 import type pg from 'pg'
 import type { Logger } from 'pino'
 import { SOLVER_VERSION } from '../../solvers/version.ts'
-import { gather } from '../metering/gather.ts'
+import { gather } from '../gather.ts'
 
 export interface LogEntry {
   at: Date

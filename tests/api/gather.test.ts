@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest'
-import { gather } from '../../api/metering/gather.ts'
+import { gather } from '../../api/gather.ts'
 import { grant } from '../../api/metering/grant.ts'
 
 test('what comes while work is under way goes together, in order, and each gets its own result', async () => {

@@ -59,3 +59,15 @@ test('a fault is logged with its request id, and its answer hides the reason', a
   const line = service.lines.find((l) => l.includes('business')) ?? ''
   expect(line).toContain(answer.json.requestId)
 })
+
+test('a statement that fails is logged without the values that it was given', async () => {
+  const { mail } = await signUp(service.url)
+  await query(service.databaseUrl, 'ALTER TABLE people RENAME TO people_gone')
+  const answer = await new Client(service.url)
+    .post('/portal/v1/sign-in', { mail, password: PASSWORD })
+    .finally(() => query(service.databaseUrl, 'ALTER TABLE people_gone RENAME TO people'))
+  expect(answer.json).toMatchObject({ status: 500, code: 'internal' })
+  const lines = service.lines.join('\n')
+  expect(lines).toContain(answer.json.requestId)
+  expect(lines).not.toContain(mail)
+})
