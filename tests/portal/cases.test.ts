@@ -6,7 +6,6 @@ import { promisify } from 'node:util'
 import type { Page } from 'playwright-core'
 import { afterAll, beforeAll, expect, test } from 'vitest'
 import { cases } from '../../solvers/cases/index.ts'
-import { makeKey, signUp } from '../api/harness/people.ts'
 import { type Browser, openBrowser } from './harness/browser.ts'
 import { root } from './harness/built.ts'
 import { type Portal, startPortal } from './harness/portal.ts'
@@ -19,11 +18,10 @@ let browser: Browser
 let folder: string
 let key: string
 beforeAll(async () => {
-  portal = await startPortal()
+  portal = await startPortal({ demo: true })
   browser = await openBrowser({ width: 1440 })
   folder = await mkdtemp(path.join(tmpdir(), 'soakstone-snippet-'))
-  const { client } = await signUp(portal.url)
-  key = (await makeKey(client)).secret
+  key = portal.demo?.key ?? ''
 })
 afterAll(async () => {
   await browser.close()
@@ -64,6 +62,7 @@ test.each(cases.map(({ id }) => id))(
     await page.goto(`${portal.url}/cases/${id}`)
     await page.getByRole('region', { name: 'Answer as JSON' }).waitFor()
 
+    await page.getByText('Other ways to give it').click()
     const shown = await page
       .locator('[data-field]')
       .evaluateAll((list) => list.map((e) => e.getAttribute('data-field')))

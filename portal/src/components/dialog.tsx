@@ -1,4 +1,4 @@
-import { type ReactNode, useEffect, useId, useRef } from 'react'
+import { type ReactNode, useLayoutEffect, useId, useRef } from 'react'
 import { LinkButton } from './button.tsx'
 
 interface Props {
@@ -13,7 +13,8 @@ interface Props {
 export function Dialog({ title, onClose, closable = true, children }: Props) {
   const ref = useRef<HTMLDialogElement>(null)
   const id = useId()
-  useEffect(() => {
+  // Closed before it is taken away: a dialog that vanishes open gives no focus back.
+  useLayoutEffect(() => {
     const dialog = ref.current
     dialog?.showModal()
     return () => dialog?.close()

@@ -1,4 +1,4 @@
-import { useEffect, useRef } from 'react'
+import { Fragment, useEffect, useRef } from 'react'
 import { useForm, useWatch } from 'react-hook-form'
 import { issuesByField } from '../../api/api-error.ts'
 import { Button, LinkButton } from '../../components/button.tsx'
@@ -28,9 +28,9 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
   const values = useWatch({ control }) as FormValues
   const form = useRef<HTMLFormElement>(null)
   const errors = issuesByField(error)
-  const shown = c.fields.filter(({ name }) => isSent(c, name, values.heat))
-  const open = shown.filter((field) => isOpen(c, field))
-  const folded = shown.filter((field) => !isOpen(c, field))
+  const sent = (name: string) => isSent(c, name, values.heat)
+  const open = c.fields.filter((field) => isOpen(c, field))
+  const folded = c.fields.filter((field) => !isOpen(c, field))
   const stale = solved !== undefined && !same(bodyOf(c, values), bodyOf(c, valuesOf(c, solved)))
 
   useEffect(() => {
@@ -41,17 +41,17 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
     const body = bodyOf(c, getValues())
     if (always || !same(body, bodyOf(c, valuesOf(c, asked)))) onSolve(body)
   }
-  const fields = (list: readonly Field[]) => {
-    const chosen = waysOf(c).flat()
-    const first = list.findIndex(({ name }) => chosen.includes(name))
-    return list.map((field, i) => (
-      <div key={field.name}>
-        {i === first && <HeatChoice description={c} register={register('heat')} />}
-        <CaseField field={field} error={errors[field.name]} register={register(`fields.${field.name}`)} />
-      </div>
+  const ways = waysOf(c).flat()
+  const firstWay = c.fields.find(({ name }) => ways.includes(name))
+  const fields = (list: readonly Field[]) =>
+    list.map((field) => (
+      <Fragment key={field.name}>
+        {field === firstWay && <HeatChoice description={c} register={register('heat')} />}
+        {sent(field.name) && (
+          <CaseField field={field} error={errors[field.name]} register={register(`fields.${field.name}`)} />
+        )}
+      </Fragment>
     ))
-  }
-  const heatIsFolded = waysOf(c).length > 0 && !open.some(({ name }) => waysOf(c).flat().includes(name))
 
   return (
     <form
@@ -71,13 +71,10 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
       {folded.length > 0 && (
         <details className="more" open={folded.some(({ name }) => errors[name])}>
           <summary>Other ways to give it, and more</summary>
-          {heatIsFolded && folded.every(({ name }) => !waysOf(c).flat().includes(name)) && (
-            <HeatChoice description={c} register={register('heat')} />
-          )}
           {fields(folded)}
         </details>
       )}
-      <FormFailure error={error} fields={shown.map(({ name }) => name)} />
+      <FormFailure error={error} fields={c.fields.map(({ name }) => name).filter(sent)} />
       <div className="btnrow mt-5">
         <Button kind="main" type="submit">
           {pending ? 'Solving' : 'Solve'}
