@@ -78,3 +78,10 @@ test('numbers depend on their input alone: no clock, no chance, no surroundings 
   const found = sourcesUnder('solvers').filter((file) => impure.test(readFileSync(path.join(root, file), 'utf8')))
   expect(found).toEqual([])
 })
+
+test('the environment of the process is read where a program starts, and nowhere else', () => {
+  const readers = ['solvers', 'api', 'drizzle']
+    .flatMap(sourcesUnder)
+    .filter((file) => readFileSync(path.join(root, file), 'utf8').includes('process.env'))
+  expect(readers).toEqual(['api/demo/from-environment.ts', 'api/migrate.ts', 'api/server.ts'])
+})
