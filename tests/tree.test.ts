@@ -12,9 +12,10 @@ const files = execFileSync('git', ['ls-files', '--cached', '--others', '--exclud
   .split('\0')
   .filter((name) => name && !/\.(png|woff2|ico)$/.test(name))
 
-const DOCUMENTED_KEY = '0123456789ABCDEFGHIJKLMNOPQRSTUV1ggZdL'
+/** The documented example: no key is ever made of it, whatever checksum follows. */
+const EXAMPLE = '0123456789ABCDEFGHIJKLMNOPQRSTUV'
 const found: Record<string, RegExp> = {
-  'a key that could work': new RegExp(`soak_(trial|metered)_(?!${DOCUMENTED_KEY})[0-9A-Za-z]{38}`),
+  'a key that could work': new RegExp(`soak_(trial|metered)_(?!${EXAMPLE})[0-9A-Za-z]{38}`),
   'a private key': /-----BEGIN [A-Z ]*PRIVATE KEY-----/,
   'a database password': /postgres(ql)?:\/\/[^\s:/@'"`$]+:[0-9a-f]{16,}@/,
   'the home of somebody': /(^|[^A-Za-z0-9_.])\/(root|home|work|farm|Users)\/[A-Za-z.]/m,
@@ -41,7 +42,7 @@ test('each of these would be found', () => {
     'test' + '.skip(',
   ]
   expect(planted.map(finds)).toEqual(Object.keys(found).map((name) => [name]))
-  expect(finds(`soak_trial_${DOCUMENTED_KEY}`)).toEqual([])
+  expect(finds(`soak_trial_${EXAMPLE}1ggZdL`)).toEqual([])
 })
 
 test('the lock of the packages names no address to download from', () => {
