@@ -3,6 +3,7 @@ import { cautions } from '../solvers/cautions.ts'
 import { warningCodes } from '../solvers/warnings.ts'
 import { type Operation, type Tag, problemsOf } from '../api/operation.ts'
 import { rolesWith } from '../api/permissions.ts'
+import { type SessionKind, cookieName } from '../api/session-kinds.ts'
 import { type ProblemCode, domainCodes, problemCodes, problems } from '../api/problems.ts'
 
 type Json = Record<string, unknown>
@@ -43,13 +44,13 @@ const security: Record<Operation['access'], Json[]> = {
 }
 const schemes: Json = {
   key: { type: 'http', scheme: 'bearer', description: 'A key, made in the portal: soak_trial_ and 38 characters.' },
-  session: { type: 'apiKey', in: 'cookie', name: 'soakstone', description: 'With https the name is __Host-soakstone.' },
-  staffSession: {
-    type: 'apiKey',
-    in: 'cookie',
-    name: 'soakstone-staff',
-    description: 'With https the name is __Host-soakstone-staff.',
-  },
+  session: cookieScheme('member'),
+  staffSession: cookieScheme('staff'),
+}
+
+function cookieScheme(kind: SessionKind): Json {
+  const description = `With https the name is ${cookieName(kind, true)}.`
+  return { type: 'apiKey', in: 'cookie', name: cookieName(kind, false), description }
 }
 
 const issueSchema = z

@@ -595,7 +595,7 @@ export interface components {
             radius?: number;
             /**
              * Conductivity
-             * @description Conductivity: insulation 0.035, brick 0.8, concrete 2. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K).
+             * @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K).
              */
             conductivity?: number;
             /**
@@ -942,7 +942,7 @@ export interface components {
         SemiInfiniteConvectionSolveInput: {
             /**
              * Conductivity
-             * @description Conductivity: insulation 0.035, brick 0.8, concrete 2. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K).
+             * @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K).
              */
             conductivity?: number;
             /**
@@ -1242,7 +1242,7 @@ export interface components {
         SlabConvectionSolveInput: {
             /**
              * Conductivity
-             * @description Conductivity: insulation 0.035, brick 0.8, concrete 2. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K).
+             * @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K).
              */
             conductivity?: number;
             /**

@@ -55,6 +55,8 @@ export function createLimiter(pool: pg.Pool, name: LimiterName, limits: Limits):
     standardHeaders: 'draft-8',
     legacyHeaders: false,
     store: createStore(pool, name, windowSeconds),
+    /* Which proxies are trusted is a setting, checked with the others. */
+    validate: { xForwardedForHeader: false },
     keyGenerator: (req) => ipKeyGenerator(req.ip ?? '', 56),
     handler: (_req, _res, next) => next(new Problem('rate-limited')),
   })

@@ -3,6 +3,7 @@ import type { Request, RequestHandler } from 'express'
 import session from 'express-session'
 import type { Deps } from '../deps.ts'
 import type { SessionHandle } from '../operation.ts'
+import { type SessionKind, cookieName, sessionKinds } from '../session-kinds.ts'
 
 declare module 'express-session' {
   interface SessionData {
@@ -14,17 +15,9 @@ declare module 'express-session' {
 
 const PgStore = connectPgSimple(session)
 const HOURS = 3_600_000
-const kinds = {
-  member: { cookie: 'soakstone', tableName: 'sessions', hours: 12 },
-  staff: { cookie: 'soakstone-staff', tableName: 'staff_sessions', hours: 8 },
-} as const
-
 /** Sessions of one kind. They end a fixed time after sign-in, so that reading one writes nothing. */
-export function sessionsOf(
-  kind: keyof typeof kinds,
-  { pool, config, log }: Deps,
-): { handler: RequestHandler; close(): void } {
-  const { cookie, tableName, hours } = kinds[kind]
+export function sessionsOf(kind: SessionKind, { pool, config, log }: Deps): { handler: RequestHandler; close(): void } {
+  const { tableName, hours } = sessionKinds[kind]
   const store = new PgStore({
     pool,
     tableName,
@@ -33,7 +26,7 @@ export function sessionsOf(
     errorLog: (...words: unknown[]) => log.warn({ words: words.map(String) }, 'the session store met an error'),
   })
   const handler = session({
-    name: config.https ? `__Host-${cookie}` : cookie,
+    name: cookieName(kind, config.https),
     secret: config.sessionSecret,
     store,
     resave: false,

@@ -15,11 +15,11 @@ const usage = (groups: readonly Group[]) => {
     SELECT ${by}, sum(calls)::int AS calls, sum(points)::bigint AS points, sum(refused)::int AS refused
       ${groups.includes('key') ? ', (SELECT name FROM keys k WHERE k.id = u.key_id) AS key_name' : ''}
     FROM (
-      SELECT period AS day, key_id, case_id, sum(CASE kind WHEN 'charge' THEN 1 ELSE -1 END) AS calls,
+      SELECT period::text AS day, key_id, case_id, sum(CASE kind WHEN 'charge' THEN 1 ELSE -1 END) AS calls,
         sum(points) AS points, 0 AS refused
       FROM ledger WHERE account_id = $1 AND period BETWEEN $2 AND $3 GROUP BY period, key_id, case_id
       UNION ALL
-      SELECT (at AT TIME ZONE 'UTC')::date, key_id, case_id, 0, 0, count(*)
+      SELECT (at AT TIME ZONE 'UTC')::date::text, key_id, case_id, 0, 0, count(*)
       FROM log WHERE account_id = $1 AND status >= 400 AND status <> 499
         AND at >= $2::date::timestamp AT TIME ZONE 'UTC' AND at < ($3::date + 1)::timestamp AT TIME ZONE 'UTC'
       GROUP BY 1, key_id, case_id
@@ -37,7 +37,7 @@ export async function readUsage(pool: pg.Pool, accountId: string, query: z.outpu
     pool.query(usage(groups), [accountId, from, to]),
   ])
   const rows = result.rows.map((row) => ({
-    ...(groups.includes('day') ? { day: dayOf(row.day) } : {}),
+    ...(groups.includes('day') ? { day: row.day as string } : {}),
     ...(groups.includes('key') ? { keyId: row.key_id as string | null, keyName: row.key_name as string | null } : {}),
     ...(groups.includes('case') ? { case: row.case_id as string | null } : {}),
     calls: row.calls as number,
@@ -47,11 +47,6 @@ export async function readUsage(pool: pg.Pool, accountId: string, query: z.outpu
   const sum = (name: 'calls' | 'points' | 'refused') => rows.reduce((total, row) => total + row[name], 0)
   const total = { calls: sum('calls'), points: sum('points'), refused: sum('refused') }
   return { from, to, asOf: now.rows[0].now.toISOString(), groupBy: groups, account: status, rows, total }
-}
-
-/* pg gives a date as local midnight. */
-function dayOf(date: Date): string {
-  return new Date(date.getTime() - date.getTimezoneOffset() * 60_000).toISOString().slice(0, 10)
 }
 
 function rangeOf(
