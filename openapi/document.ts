@@ -1,6 +1,5 @@
 import { z } from 'zod'
-import { cautions } from '../solvers/cautions.ts'
-import { warningCodes } from '../solvers/warnings.ts'
+import { cautions, warningCodes } from '../api/catalogue/codes.ts'
 import { type Operation, type Tag, problemsOf } from '../api/operation.ts'
 import { rolesWith } from '../api/permissions.ts'
 import { type SessionKind, cookieName } from '../api/session-kinds.ts'

@@ -1,0 +1,3 @@
+/* Codes that solvers speak in, for those who may know the API but no solver. */
+export { cautions } from '../../solvers/cautions.ts'
+export { warningCodes } from '../../solvers/warnings.ts'
