@@ -43,7 +43,7 @@ export function SignUpScreen() {
           />
           <TextField
             label="Password"
-            hint="long; any characters"
+            hint="a few words; any characters"
             type="password"
             autoComplete="new-password"
             error={errors['password']}
