@@ -5,9 +5,8 @@ import { Problem } from '../problems.ts'
 
 /** Calls of more numbers go to a thread: below it, the way there costs more than the solve. */
 export const INLINE_VALUES = 2000
-const SOLVE_LIMIT = 10_000
-const WAITING_SOLVES = 64
-const WAITING_PASSWORDS = 64
+/** Milliseconds of a solve in a thread, and calls that may wait for one. */
+const usual = { limit: 10_000, waiting: 64 }
 
 export interface SolveTask {
   case: string
@@ -38,9 +37,9 @@ function createPool(name: string, threads: number, maxQueue: number): Piscina {
 }
 
 /** Threads for what would hold up the event loop: large solves, and passwords on threads of their own. */
-export function createCompute(threads: number, limit = SOLVE_LIMIT): Compute {
-  const solves = createPool('solve-worker', threads, WAITING_SOLVES)
-  const passwords = createPool('password-worker', 1, WAITING_PASSWORDS)
+export function createCompute(threads: number, { limit, waiting } = usual): Compute {
+  const solves = createPool('solve-worker', threads, waiting)
+  const passwords = createPool('password-worker', 1, waiting)
 
   async function solve({ call, raw, ...names }: SolveTask): Promise<Rendered> {
     if (call.values <= INLINE_VALUES) return render(call.run())

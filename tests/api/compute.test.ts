@@ -35,7 +35,7 @@ test('a solve that takes too long is ended, costs nothing, and the next one work
   const { client, accountId } = await signUp(service.url)
   await query(service.databaseUrl, 'UPDATE accounts SET trial_limit = 1000000 WHERE id = $1', [accountId])
   const { secret } = await makeKey(client)
-  const hasty = createCompute(1, 5)
+  const hasty = createCompute(1, { limit: 5, waiting: 1 })
   const { compute } = service.service.deps
   const { solve } = compute
   compute.solve = hasty.solve
@@ -47,13 +47,13 @@ test('a solve that takes too long is ended, costs nothing, and the next one work
 })
 
 test('more than can wait is refused rather than kept', async () => {
-  const compute = createCompute(1)
+  const compute = createCompute(1, { limit: 10_000, waiting: 2 })
   const asked = await Promise.allSettled(
-    Array.from({ length: 80 }, () => compute.hashPassword('a password of the test')),
+    Array.from({ length: 10 }, () => compute.hashPassword('a password of the test')),
   )
   await compute.close()
   const refused = asked.filter((a) => a.status === 'rejected').map((a) => a.reason as Error)
   expect(refused.length).toBeGreaterThan(0)
-  expect(refused.length).toBeLessThan(80)
+  expect(refused.length).toBeLessThan(10)
   for (const reason of refused) expect(reason).toMatchObject({ code: 'unavailable' })
 })

@@ -105,7 +105,7 @@ test.each([
   const response = await fetch(service.url + path, { method: 'POST', body, headers })
   const problem = (await response.json()) as { code: string }
   expect(problem.code).toBe(code)
-  expect(performance.now() - started).toBeLessThan(2000)
+  expect(performance.now() - started).toBeLessThan(10_000)
 })
 
 test('counts a body after decompression, and knows the usual compression', async () => {

@@ -33,7 +33,7 @@ test('a database that dies answers 503, the process lives, and each acknowledged
       else await new Promise((resolve) => setTimeout(resolve, 50))
     }
   })
-  await new Promise((resolve) => setTimeout(resolve, 700))
+  while (answered.length < 50) await new Promise((resolve) => setTimeout(resolve, 20))
   await cluster.crash()
   const away = await client.solve(lumped.id, key.secret, lumped.example)
   expect(away.json).toMatchObject({ status: 503, code: 'unavailable', retryable: true })
@@ -44,7 +44,7 @@ test('a database that dies answers 503, the process lives, and each acknowledged
   expect((await client.call('/v1/cases')).status).toBe(200)
   await cluster.restart()
   const before = answered.length
-  for (let n = 0; n < 100 && answered.length < before + 20; n++)
+  for (let n = 0; n < 300 && answered.length < before + 20; n++)
     await new Promise((resolve) => setTimeout(resolve, 100))
   stopped = true
   await Promise.all(load)

@@ -32,12 +32,13 @@ test.each(['SIGTERM', 'SIGINT'] as const)(
           stopped = true
         }
     })
-    await new Promise((resolve) => setTimeout(resolve, 800))
+    while (answered.length < 50 && !stopped) await new Promise((resolve) => setTimeout(resolve, 20))
     expect(await api.end(signal)).toBe(0)
     await Promise.all(clients)
-    expect(answered.length).toBeGreaterThan(20)
+    expect(answered.length).toBeGreaterThanOrEqual(50)
+    /* The kernel resets connections that it took but the service never did; a call that was read is answered. */
     expect(
-      refused.every((code) => code === 'ECONNREFUSED'),
+      refused.every((code) => ['ECONNREFUSED', 'ECONNRESET'].includes(code)),
       refused.join(' '),
     ).toBe(true)
     const charged = await query<{ request_id: string }>(
