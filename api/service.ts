@@ -16,7 +16,8 @@ import { keepHouse } from './housekeeping.ts'
 
 /** Calls under way at the end of the service have so long. */
 const LAST_CALLS = 20_000
-const LAST_WORDS = 300
+/** Clients with an open connection have so long to be told that it will close. */
+const LAST_WORDS = 2000
 
 export interface Service {
   port: number
@@ -75,7 +76,7 @@ function listen(server: Server, { host, port }: Config): Promise<void> {
 async function finish(server: Server): Promise<void> {
   server.prependListener('request', (_req, res) => res.setHeader('Connection', 'close'))
   const closed = new Promise<void>((resolve) => NetServer.prototype.close.call(server, () => resolve()))
-  await sleep(LAST_WORDS)
+  await Promise.race([closed, sleep(LAST_WORDS)])
   server.closeIdleConnections()
   const late = setTimeout(() => server.closeAllConnections(), LAST_CALLS)
   const idle = setInterval(() => server.closeIdleConnections(), LAST_WORDS)
