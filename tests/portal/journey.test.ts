@@ -94,7 +94,7 @@ test('a person signs up, makes a key, calls with it and finds the call; support 
   expect(seen, 'never a mail address').not.toContain('jo.tester@example.org')
   expect(faults).toEqual([])
   await page.close()
-})
+}, 120_000)
 
 test('a revoked key is refused, and the dialog says so before', async () => {
   const page = await browser.context.newPage()

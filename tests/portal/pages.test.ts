@@ -74,7 +74,7 @@ describe.each([390, 1440])('at %d px, light and dark', (width) => {
     await page.locator(ready).first().waitFor()
     await page.evaluate('document.fonts.ready.then(() => undefined)')
     expect(await page.title()).toContain('Soakstone')
-    expect(await page.locator('h1').count(), 'one title').toBe(1)
+    expect(await page.getByRole('heading', { level: 1 }).count(), 'one title').toBe(1)
     for (const theme of themes) {
       await page.emulateMedia({ colorScheme: theme })
       if (shots) await page.screenshot({ path: path.join(shots, nameOf(address, width, theme)), fullPage: true })
@@ -84,17 +84,17 @@ describe.each([390, 1440])('at %d px, light and dark', (width) => {
     expect(faults.splice(0)).toEqual([])
   }
 
-  test.each(strangers)('$path', look)
+  test.each(strangers)('$path', look, 120_000)
 
   test('the sheets of an account', async () => {
     await signInAs(page, portal, 'owner')
     for (const sheet of [...owners, ...calls.map((call) => ({ path: call, ready: '.drawing' }))]) await look(sheet)
-  })
+  }, 240_000)
 
   test('the sheets of staff', async () => {
     await signInAs(page, portal, 'support')
     for (const sheet of [...staff, { path: `/staff${calls[1]}`, ready: 'form' }]) await look(sheet)
-  })
+  }, 240_000)
 })
 
 test('no page scrolls sideways at 320 px, at the breaks, and on a very wide screen', async () => {
@@ -104,7 +104,7 @@ test('no page scrolls sideways at 320 px, at the breaks, and on a very wide scre
   for (const { path: address, ready } of [
     ...strangers,
     ...owners,
-    ...calls.map((call) => ({ path: call, ready: 'svg' })),
+    ...calls.map((call) => ({ path: call, ready: '.drawing' })),
   ]) {
     await page.setViewportSize({ width: 320, height: 900 })
     await page.goto(portal.url + address)
@@ -115,7 +115,7 @@ test('no page scrolls sideways at 320 px, at the breaks, and on a very wide scre
     }
   }
   await browser.close()
-})
+}, 240_000)
 
 const overflow = (page: Page) => page.evaluate<number>('document.documentElement.scrollWidth - innerWidth')
 
