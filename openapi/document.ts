@@ -1,3 +1,9 @@
+import {
+  extendZodWithOpenApi,
+  OpenApiGeneratorV31,
+  OpenAPIRegistry,
+  type RouteConfig,
+} from '@asteasolutions/zod-to-openapi'
 import { z } from 'zod'
 import { cautions, warningCodes } from '../api/catalogue/codes.ts'
 import { type Operation, type Tag, problemsOf } from '../api/operation.ts'
@@ -5,7 +11,13 @@ import { rolesWith } from '../api/permissions.ts'
 import { type SessionKind, cookieName } from '../api/session-kinds.ts'
 import { type ProblemCode, domainCodes, problemCodes, problems } from '../api/problems.ts'
 
+// Schemas say their names and more by .meta(); only a schema that no operation refers to needs registering.
+extendZodWithOpenApi(z)
+
 type Json = Record<string, unknown>
+type SecurityScheme = { description: string } & (
+  { type: 'http'; scheme: 'bearer' } | { type: 'apiKey'; in: 'cookie'; name: string }
+)
 type DocumentName = Operation['document']
 
 const about: Record<DocumentName, { title: string; description: string }> = {
@@ -35,19 +47,19 @@ const tags: Record<Tag, string> = {
   Try: 'Questions asked of a case without a key, for the pages of the portal.',
 }
 
-const security: Record<Operation['access'], Json[]> = {
+const security: Record<Operation['access'], Record<string, string[]>[]> = {
   public: [],
   key: [{ key: [] }],
   session: [{ session: [] }],
   staff: [{ staffSession: [] }],
 }
-const schemes: Json = {
+const schemes: Record<string, SecurityScheme> = {
   key: { type: 'http', scheme: 'bearer', description: 'A key, made in the portal: soak_trial_ and 38 characters.' },
   session: cookieScheme('member'),
   staffSession: cookieScheme('staff'),
 }
 
-function cookieScheme(kind: SessionKind): Json {
+function cookieScheme(kind: SessionKind): SecurityScheme {
   const description = `With https the name is ${cookieName(kind, true)}.`
   return { type: 'apiKey', in: 'cookie', name: cookieName(kind, false), description }
 }
@@ -85,36 +97,30 @@ const problemSchema = z
 /** One of the three OpenAPI documents, from the list of operations. */
 export function documentOf(name: DocumentName, operations: readonly Operation[], version: string): Json {
   const own = operations.filter((o) => o.document === name)
-  const schemas: Json = {}
-  const refer = (schema: z.ZodType, io: 'input' | 'output') => schemaOf(schema, io, schemas)
-  refer(problemSchema, 'output')
-  const paths: Record<string, Json> = {}
-  for (const o of own) paths[o.path] = { ...paths[o.path], [o.method]: operationObject(o, refer) }
-  const used = new Set(
-    own
-      .map((o) => o.access)
-      .filter((access) => access !== 'public')
-      .map((access) => Object.keys(security[access][0] ?? {})[0]),
-  )
-  return {
+  const registry = new OpenAPIRegistry()
+  registry.register('Problem', problemSchema)
+  for (const scheme of new Set(own.flatMap((o) => security[o.access].flatMap(Object.keys))))
+    registry.registerComponent('securitySchemes', scheme, schemes[scheme]!)
+  for (const [header, description] of Object.entries(headers))
+    registry.registerComponent('headers', header, description)
+  for (const o of own) registry.registerPath(routeOf(o))
+  const document = new OpenApiGeneratorV31(registry.definitions).generateDocument({
     openapi: '3.1.0',
     info: { ...about[name], version, license: { name: 'Proprietary', identifier: 'LicenseRef-Soakstone' } },
     servers: [{ url: '/' }],
-    tags: [...new Set(own.map((o) => o.tag))].map((name) => ({ name, description: tags[name] })),
-    paths,
-    components: {
-      schemas: Object.fromEntries(Object.entries(schemas).sort(([a], [b]) => (a < b ? -1 : 1))),
-      securitySchemes: Object.fromEntries(Object.entries(schemes).filter(([scheme]) => used.has(scheme))),
-      headers,
-    },
-    ...(name === 'openapi'
-      ? { 'x-problems': problems, 'x-error-codes': domainCodes, 'x-warnings': warningCodes, 'x-cautions': cautions }
-      : {}),
+    tags: [...new Set(own.map((o) => o.tag))].map((tag) => ({ name: tag, description: tags[tag] })),
+  })
+  const codes = {
+    'x-problems': problems,
+    'x-error-codes': domainCodes,
+    'x-warnings': warningCodes,
+    'x-cautions': cautions,
   }
+  return { ...document, ...(name === 'openapi' ? codes : {}) }
 }
 
-const header = (description: string, type = 'string'): Json => ({ description, schema: { type } })
-const headers: Json = {
+const header = (description: string, type: 'string' | 'integer' = 'string') => ({ description, schema: { type } })
+const headers = {
   'Request-Id': header('Names the call, for its record and for support.'),
   ETag: header('Names the body by its bytes: equal answers have equal tags.'),
   'Points-Charged': header('Points that the call cost.', 'integer'),
@@ -126,75 +132,41 @@ const headers: Json = {
 const referHeaders = (...names: string[]) =>
   Object.fromEntries(names.map((n) => [n, { $ref: `#/components/headers/${n}` }]))
 
-/* Named schemas move to the components; the rest stays where it stands. */
-function schemaOf(schema: z.ZodType, io: 'input' | 'output', schemas: Json): Json {
-  const {
-    $schema: _,
-    $defs = {},
-    ...whole
-  } = z.toJSONSchema(schema, { io, target: 'draft-2020-12' }) as Json & { $defs?: Json }
-  for (const [id, definition] of Object.entries($defs)) schemas[id] = rebase(definition)
-  const id = schema.meta()?.id
-  if (!id || '$ref' in whole) return rebase(whole) as Json
-  schemas[id] = rebase(whole)
-  return { $ref: `#/components/schemas/${id}` }
-}
-
-function rebase(value: unknown): unknown {
-  if (Array.isArray(value)) return value.map(rebase)
-  if (typeof value !== 'object' || value === null) return value
-  return Object.fromEntries(
-    Object.entries(value).map(([name, part]) =>
-      name === '$ref' ? [name, String(part).replace('#/$defs/', '#/components/schemas/')] : [name, rebase(part)],
-    ),
-  )
-}
-
-type Refer = (schema: z.ZodType, io: 'input' | 'output') => Json
-
-function operationObject(o: Operation, refer: Refer): Json {
+function routeOf(o: Operation): RouteConfig {
   const codes = problemsOf(o)
   return {
+    method: o.method,
+    path: o.path,
     operationId: o.id,
     tags: [o.tag],
     summary: o.summary,
     ...(o.description ? { description: o.description } : {}),
     security: security[o.access],
-    ...parametersOf(o, refer),
-    ...(o.body
-      ? {
-          requestBody: {
-            required: true,
-            content: { 'application/json': { schema: refer(o.body.schema, 'input'), example: o.example?.body } },
-          },
-        }
-      : {}),
-    responses: { [o.status]: success(o, refer), ...failures(codes) },
+    request: requestOf(o),
+    responses: { [o.status]: success(o), ...failures(codes) },
     'x-problem-codes': codes,
     ...(o.permission ? { 'x-roles': rolesWith(o.permission) } : {}),
     ...(o.caseId ? { 'x-case': o.caseId, 'x-case-operation': o.caseOperation } : {}),
   }
 }
 
-function parametersOf(o: Operation, refer: Refer): Json {
-  const list = (place: 'path' | 'query', object: z.ZodObject | undefined) =>
-    Object.entries(object?.shape ?? {}).map(([name, schema]) => {
-      const { description, ...rest } = refer(schema as z.ZodType, 'input')
-      const example = place === 'path' ? o.example?.params?.[name] : undefined
-      return {
-        name,
-        in: place,
-        required: place === 'path',
-        ...(description ? { description } : {}),
-        schema: rest,
-        ...(example ? { example } : {}),
-      }
-    })
-  const parameters = [...list('path', o.params), ...list('query', o.query)]
-  return parameters.length ? { parameters } : {}
+function requestOf(o: Operation): NonNullable<RouteConfig['request']> {
+  const params = o.params && withExamples(o.params, o.example?.params ?? {})
+  const example = o.example?.body
+  const body = o.body && { required: true, content: { 'application/json': { schema: o.body.schema, example } } }
+  return { ...(params ? { params } : {}), ...(o.query ? { query: o.query } : {}), ...(body ? { body } : {}) }
 }
 
-function success(o: Operation, refer: Refer): Json {
+function withExamples(params: z.ZodObject, examples: Record<string, string>): z.ZodObject {
+  const shape = Object.entries(params.shape as Record<string, z.ZodType>)
+  return z.object(
+    Object.fromEntries(
+      shape.map(([name, schema]) => [name, schema.meta({ ...schema.meta(), param: { example: examples[name] } })]),
+    ),
+  )
+}
+
+function success(o: Operation): RouteConfig['responses'][string] {
   const names = [
     'Request-Id',
     ...(o.answer ? ['ETag'] : []),
@@ -203,11 +175,11 @@ function success(o: Operation, refer: Refer): Json {
   return {
     description: o.status === 204 ? 'Done.' : o.status === 201 ? 'Made.' : 'The answer.',
     headers: referHeaders(...names),
-    ...(o.answer ? { content: { 'application/json': { schema: refer(o.answer, 'output') } } } : {}),
+    ...(o.answer ? { content: { 'application/json': { schema: o.answer } } } : {}),
   }
 }
 
-function failures(codes: readonly ProblemCode[]): Json {
+function failures(codes: readonly ProblemCode[]): RouteConfig['responses'] {
   const byStatus: Record<string, ProblemCode[]> = {}
   for (const code of codes) (byStatus[problems[code].status] ??= []).push(code)
   return Object.fromEntries(
@@ -221,7 +193,10 @@ function failures(codes: readonly ProblemCode[]): Json {
               ? ['Retry-After']
               : []
       const narrowed = {
-        allOf: [{ $ref: '#/components/schemas/Problem' }, { type: 'object', properties: { code: { enum: list } } }],
+        allOf: [
+          { $ref: '#/components/schemas/Problem' },
+          { type: 'object' as const, properties: { code: { enum: list } } },
+        ],
       }
       return [
         status,

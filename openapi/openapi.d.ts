@@ -222,20 +222,69 @@ export interface paths {
 export type webhooks = Record<string, never>;
 export interface components {
     schemas: {
-        AccountStatus: {
-            /** @description Points of the period. */
-            limit: number;
-            /** @description Points used in the period. */
-            used: number;
+        /** @description RFC 9457 problem details. */
+        Problem: {
+            /**
+             * Format: uri
+             * @description Address of a page about this problem.
+             */
+            type: string;
+            /**
+             * @description What clients match.
+             * @enum {string}
+             */
+            code: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
+            title: string;
+            status: number;
+            detail: string;
+            /** @description The same call may succeed later without a change. */
+            retryable: boolean;
+            requestId?: string;
             /**
              * Format: date-time
-             * @description An instant in UTC, RFC 3339.
+             * @description Start of the next period, where the points of this one are used up.
              */
-            resetsAt: string;
+            resetsAt?: string;
+            errors?: components["schemas"]["ProblemIssue"][];
         };
-        Alive: {
-            /** @constant */
-            status: "alive";
+        ProblemIssue: {
+            /** @description Where in the body, as an RFC 6901 pointer such as #/times/3. */
+            pointer?: string;
+            /** @description Which query parameter. */
+            parameter?: string;
+            /** @enum {string} */
+            code: "missing-field" | "unknown-field" | "wrong-type" | "out-of-range" | "not-in-list" | "wrong-length" | "wrong-form" | "conflicting-fields" | "depth-outside-body" | "output-not-defined" | "singular-at-time-zero";
+            detail: string;
+            /** @description What would be accepted instead. */
+            accepted?: string;
+        };
+        CaseList: {
+            cases: components["schemas"]["CaseSummary"][];
+        };
+        CaseSummary: {
+            id: string;
+            title: string;
+            summary: string;
+            family: string;
+            sketch: {
+                body: string;
+                boundary: string;
+            };
+            operations: {
+                id: string;
+                title: string;
+                summary: string;
+                /** @enum {string} */
+                method: "POST";
+                /** @description Path of the operation under the address of the service. */
+                path: string;
+            }[];
+            /** @description Priced points per number of the answer. */
+            weight: number;
+            /** @description Priced points once per call. */
+            setUp: number;
+            /** @description Points that a call costs at least. */
+            leastCharge: number;
         };
         Case: {
             id: string;
@@ -250,7 +299,7 @@ export interface components {
                 id: string;
                 title: string;
                 summary: string;
-                /** @constant */
+                /** @enum {string} */
                 method: "POST";
                 /** @description Path of the operation under the address of the service. */
                 path: string;
@@ -307,9 +356,6 @@ export interface components {
                 [key: string]: unknown;
             };
         };
-        CaseList: {
-            cases: components["schemas"]["CaseSummary"][];
-        };
         CaseOutput: {
             /** @enum {string} */
             name: "temperature" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "meanTemperature" | "remainingFraction" | "completedFraction" | "heatFraction" | "steadyTemperature" | "timeConstant";
@@ -320,38 +366,13 @@ export interface components {
             shape: "grid" | "times" | "places" | "single";
             text: string;
         };
-        CaseSummary: {
-            id: string;
-            title: string;
-            summary: string;
-            family: string;
-            sketch: {
-                body: string;
-                boundary: string;
-            };
-            operations: {
-                id: string;
-                title: string;
-                summary: string;
-                /** @constant */
-                method: "POST";
-                /** @description Path of the operation under the address of the service. */
-                path: string;
-            }[];
-            /** @description Priced points per number of the answer. */
-            weight: number;
-            /** @description Priced points once per call. */
-            setUp: number;
-            /** @description Points that a call costs at least. */
-            leastCharge: number;
-        };
         Contract: {
             [key: string]: unknown;
         };
         LumpedConvectionSolveAnswer: {
-            /** @constant */
+            /** @enum {string} */
             case: "lumped-convection";
-            /** @constant */
+            /** @enum {string} */
             operation: "solve";
             /** @description Version of the numbers. */
             solver: string;
@@ -369,40 +390,19 @@ export interface components {
                 [key: string]: string;
             };
             result: {
-                /**
-                 * Temperature
-                 * @description Temperature at each time and place. Unit Cel.
-                 */
+                /** @description Temperature at each time and place. Unit Cel. */
                 temperature?: number[];
-                /**
-                 * Heat gained
-                 * @description Energy stored since time 0; negative where the body cools. Unit J.
-                 */
+                /** @description Energy stored since time 0; negative where the body cools. Unit J. */
                 heatGained?: number[];
-                /**
-                 * Remaining fraction
-                 * @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1.
-                 */
+                /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[];
-                /**
-                 * Completed fraction
-                 * @description Share of the change that is done, computed without cancellation. Unit 1.
-                 */
+                /** @description Share of the change that is done, computed without cancellation. Unit 1. */
                 completedFraction?: number[];
-                /**
-                 * Heat fraction
-                 * @description Heat gained as a share of what the body gains in all. Unit 1.
-                 */
+                /** @description Heat gained as a share of what the body gains in all. Unit 1. */
                 heatFraction?: number[];
-                /**
-                 * Steady temperature
-                 * @description The end state. Unit Cel.
-                 */
+                /** @description The end state. Unit Cel. */
                 steadyTemperature?: number;
-                /**
-                 * Time constant
-                 * @description Time in which the difference to the end state falls to 1/e. Unit s.
-                 */
+                /** @description Time in which the difference to the end state falls to 1/e. Unit s. */
                 timeConstant?: number;
             };
             accuracy: {
@@ -442,7 +442,7 @@ export interface components {
                 };
                 /** @enum {string} */
                 kind: "proved" | "estimated";
-                /** @constant */
+                /** @enum {string} */
                 scope: "numerical";
                 note: string;
             };
@@ -473,40 +473,19 @@ export interface components {
         };
         LumpedConvectionSolveCompactAnswer: {
             result: {
-                /**
-                 * Temperature
-                 * @description Temperature at each time and place. Unit Cel.
-                 */
+                /** @description Temperature at each time and place. Unit Cel. */
                 temperature?: number[];
-                /**
-                 * Heat gained
-                 * @description Energy stored since time 0; negative where the body cools. Unit J.
-                 */
+                /** @description Energy stored since time 0; negative where the body cools. Unit J. */
                 heatGained?: number[];
-                /**
-                 * Remaining fraction
-                 * @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1.
-                 */
+                /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[];
-                /**
-                 * Completed fraction
-                 * @description Share of the change that is done, computed without cancellation. Unit 1.
-                 */
+                /** @description Share of the change that is done, computed without cancellation. Unit 1. */
                 completedFraction?: number[];
-                /**
-                 * Heat fraction
-                 * @description Heat gained as a share of what the body gains in all. Unit 1.
-                 */
+                /** @description Heat gained as a share of what the body gains in all. Unit 1. */
                 heatFraction?: number[];
-                /**
-                 * Steady temperature
-                 * @description The end state. Unit Cel.
-                 */
+                /** @description The end state. Unit Cel. */
                 steadyTemperature?: number;
-                /**
-                 * Time constant
-                 * @description Time in which the difference to the end state falls to 1/e. Unit s.
-                 */
+                /** @description Time in which the difference to the end state falls to 1/e. Unit s. */
                 timeConstant?: number;
             };
             accuracy: {
@@ -557,100 +536,49 @@ export interface components {
          *     }
          */
         LumpedConvectionSolveInput: {
-            /**
-             * Heat capacity of the body
-             * @description Heat capacity of the body: with area. Unit J/K; a number from 1e-12 to 1e15 J/K.
-             */
+            /** @description Heat capacity of the body: with area. Unit J/K; a number from 1e-12 to 1e15 J/K. */
             heatCapacity?: number;
-            /**
-             * Volume
-             * @description Volume: with area and the heat capacity of the solid. Unit m3; a number from 1e-27 to 1e15 m3.
-             */
+            /** @description Volume: with area and the heat capacity of the solid. Unit m3; a number from 1e-27 to 1e15 m3. */
             volume?: number;
-            /**
-             * Exchanging area
-             * @description Exchanging area. Unit m2; a number from 1e-18 to 1e10 m2.
-             */
+            /** @description Exchanging area. Unit m2; a number from 1e-18 to 1e10 m2. */
             area?: number;
             /**
-             * Body
              * @description Body: slab (with thickness and exposedFaces), cylinder or sphere (with radius), in place of heatCapacity or volume with area.
              * @enum {string}
              */
             body?: "slab" | "cylinder" | "sphere";
-            /**
-             * Thickness
-             * @description Thickness: whole, never half. Unit m; a number from 1e-9 to 100000 m.
-             */
+            /** @description Thickness: whole, never half. Unit m; a number from 1e-9 to 100000 m. */
             thickness?: number;
-            /**
-             * Exposed faces
-             * @description Exposed faces: 1 (the far face is insulated) or 2 (both alike). No default: the wrong one changes every time by a factor of four.
-             */
+            /** @description Exposed faces: 1 (the far face is insulated) or 2 (both alike). No default: the wrong one changes every time by a factor of four. */
             exposedFaces?: 1 | 2;
-            /**
-             * Radius
-             * @description Radius. Unit m; a number from 1e-9 to 100000 m.
-             */
+            /** @description Radius. Unit m; a number from 1e-9 to 100000 m. */
             radius?: number;
-            /**
-             * Conductivity
-             * @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K).
-             */
+            /** @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K). */
             conductivity?: number;
-            /**
-             * Density
-             * @description Density: with specificHeat. Unit kg/m3; a number from 0.01 to 30000 kg/m3.
-             */
+            /** @description Density: with specificHeat. Unit kg/m3; a number from 0.01 to 30000 kg/m3. */
             density?: number;
-            /**
-             * Specific heat
-             * @description Specific heat: with density. Unit J/(kg.K); a number from 0.1 to 100000 J/(kg.K).
-             */
+            /** @description Specific heat: with density. Unit J/(kg.K); a number from 0.1 to 100000 J/(kg.K). */
             specificHeat?: number;
-            /**
-             * Volumetric heat capacity
-             * @description Volumetric heat capacity: in place of density and specificHeat, or of diffusivity. Unit J/(m3.K); a number from 0.1 to 1e9 J/(m3.K).
-             */
+            /** @description Volumetric heat capacity: in place of density and specificHeat, or of diffusivity. Unit J/(m3.K); a number from 0.1 to 1e9 J/(m3.K). */
             volumetricHeatCapacity?: number;
-            /**
-             * Diffusivity
-             * @description Diffusivity: in place of a heat capacity. Unit m2/s; a number from 1e-12 to 100 m2/s.
-             */
+            /** @description Diffusivity: in place of a heat capacity. Unit m2/s; a number from 1e-12 to 100 m2/s. */
             diffusivity?: number;
             /**
-             * Correction
              * @description Correction: none (default) or mean, with body only.
              * @enum {string}
              */
             correction?: "none" | "mean";
-            /**
-             * Heat source
-             * @description Heat source: released inside; without body only. Unit W; a number from -1e15 to 1e15 W.
-             */
+            /** @description Heat source: released inside; without body only. Unit W; a number from -1e15 to 1e15 W. */
             power?: number;
-            /**
-             * Initial temperature
-             * @description Initial temperature: the same everywhere at time 0. Unit Cel; a number from -273.15 to 10000 Cel.
-             */
+            /** @description Initial temperature: the same everywhere at time 0. Unit Cel; a number from -273.15 to 10000 Cel. */
             initialTemperature: number;
-            /**
-             * Ambient temperature
-             * @description Ambient temperature: of the fluid, not of the face. Unit Cel; a number from -273.15 to 10000 Cel.
-             */
+            /** @description Ambient temperature: of the fluid, not of the face. Unit Cel; a number from -273.15 to 10000 Cel. */
             ambientTemperature: number;
-            /**
-             * Film coefficient
-             * @description Film coefficient: total, radiation included; room 7.7, outside 25, water 100 to 3000. Unit W/(m2.K); 0, or a number from 1e-9 to 1e9 W/(m2.K).
-             */
+            /** @description Film coefficient: total, radiation included; room 7.7, outside 25, water 100 to 3000. Unit W/(m2.K); 0, or a number from 1e-9 to 1e9 W/(m2.K). */
             filmCoefficient: number;
-            /**
-             * Times
-             * @description Times: after the change. Unit s; 1 to 100000 values, each a number from 0 to 1e17 s.
-             */
+            /** @description Times: after the change. Unit s; 1 to 100000 values, each a number from 0 to 1e17 s. */
             times: number[];
             /**
-             * Outputs
              * @description Outputs: some of temperature, heatGained, remainingFraction, completedFraction, heatFraction, steadyTemperature, timeConstant. Default temperature.
              * @default [
              *       "temperature"
@@ -658,94 +586,15 @@ export interface components {
              */
             outputs: ("temperature" | "heatGained" | "remainingFraction" | "completedFraction" | "heatFraction" | "steadyTemperature" | "timeConstant")[];
             /**
-             * Detail
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
              */
             detail?: "full" | "compact";
         };
-        /** @description RFC 9457 problem details. */
-        Problem: {
-            /**
-             * Format: uri
-             * @description Address of a page about this problem.
-             */
-            type: string;
-            /**
-             * @description What clients match.
-             * @enum {string}
-             */
-            code: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
-            title: string;
-            status: number;
-            detail: string;
-            /** @description The same call may succeed later without a change. */
-            retryable: boolean;
-            requestId?: string;
-            /**
-             * Format: date-time
-             * @description Start of the next period, where the points of this one are used up.
-             */
-            resetsAt?: string;
-            errors?: components["schemas"]["ProblemIssue"][];
-        };
-        ProblemIssue: {
-            /** @description Where in the body, as an RFC 6901 pointer such as #/times/3. */
-            pointer?: string;
-            /** @description Which query parameter. */
-            parameter?: string;
-            /** @enum {string} */
-            code: "missing-field" | "unknown-field" | "wrong-type" | "out-of-range" | "not-in-list" | "wrong-length" | "wrong-form" | "conflicting-fields" | "depth-outside-body" | "output-not-defined" | "singular-at-time-zero";
-            detail: string;
-            /** @description What would be accepted instead. */
-            accepted?: string;
-        };
-        Ready: {
-            /** @constant */
-            status: "ready";
-        };
-        Request: {
-            id: string;
-            /**
-             * Format: date-time
-             * @description An instant in UTC, RFC 3339.
-             */
-            at: string;
-            key: {
-                id: string;
-                name: string;
-                prefix: string;
-            } | null;
-            method: string;
-            path: string;
-            case: string | null;
-            operation: string | null;
-            /** @description Status answered; 499 where the client hung up first. */
-            status: number;
-            milliseconds: number;
-            points: number;
-            /** @description The whole problem as answered. */
-            problem: {
-                [key: string]: unknown;
-            } | null;
-            bytesIn: number;
-            bytesOut: number;
-            ledger: {
-                /** @enum {string} */
-                kind: "charge" | "refund";
-                points: number;
-                /**
-                 * Format: date-time
-                 * @description An instant in UTC, RFC 3339.
-                 */
-                at: string;
-            }[];
-            solver: string;
-        };
         SemiInfiniteConvectionSolveAnswer: {
-            /** @constant */
+            /** @enum {string} */
             case: "semi-infinite-convection";
-            /** @constant */
+            /** @enum {string} */
             operation: "solve";
             /** @description Version of the numbers. */
             solver: string;
@@ -764,35 +613,17 @@ export interface components {
                 [key: string]: string;
             };
             result: {
-                /**
-                 * Temperature
-                 * @description Temperature at each time and place. Unit Cel.
-                 */
+                /** @description Temperature at each time and place. Unit Cel. */
                 temperature?: number[][];
-                /**
-                 * Heat flux
-                 * @description Local heat flux, positive inward from the exposed face. Unit W/m2.
-                 */
+                /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
-                /**
-                 * Surface heat flux
-                 * @description Heat flux conducted into the body at the exposed face. Unit W/m2.
-                 */
+                /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
                 surfaceHeatFlux?: number[];
-                /**
-                 * Heat gained
-                 * @description Energy stored since time 0; negative where the body cools. Unit J/m2.
-                 */
+                /** @description Energy stored since time 0; negative where the body cools. Unit J/m2. */
                 heatGained?: number[];
-                /**
-                 * Remaining fraction
-                 * @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1.
-                 */
+                /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
-                /**
-                 * Completed fraction
-                 * @description Share of the change that is done, computed without cancellation. Unit 1.
-                 */
+                /** @description Share of the change that is done, computed without cancellation. Unit 1. */
                 completedFraction?: number[][];
             };
             accuracy: {
@@ -828,7 +659,7 @@ export interface components {
                 };
                 /** @enum {string} */
                 kind: "proved" | "estimated";
-                /** @constant */
+                /** @enum {string} */
                 scope: "numerical";
                 note: string;
             };
@@ -859,35 +690,17 @@ export interface components {
         };
         SemiInfiniteConvectionSolveCompactAnswer: {
             result: {
-                /**
-                 * Temperature
-                 * @description Temperature at each time and place. Unit Cel.
-                 */
+                /** @description Temperature at each time and place. Unit Cel. */
                 temperature?: number[][];
-                /**
-                 * Heat flux
-                 * @description Local heat flux, positive inward from the exposed face. Unit W/m2.
-                 */
+                /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
-                /**
-                 * Surface heat flux
-                 * @description Heat flux conducted into the body at the exposed face. Unit W/m2.
-                 */
+                /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
                 surfaceHeatFlux?: number[];
-                /**
-                 * Heat gained
-                 * @description Energy stored since time 0; negative where the body cools. Unit J/m2.
-                 */
+                /** @description Energy stored since time 0; negative where the body cools. Unit J/m2. */
                 heatGained?: number[];
-                /**
-                 * Remaining fraction
-                 * @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1.
-                 */
+                /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
-                /**
-                 * Completed fraction
-                 * @description Share of the change that is done, computed without cancellation. Unit 1.
-                 */
+                /** @description Share of the change that is done, computed without cancellation. Unit 1. */
                 completedFraction?: number[][];
             };
             accuracy: {
@@ -940,58 +753,27 @@ export interface components {
          *     }
          */
         SemiInfiniteConvectionSolveInput: {
-            /**
-             * Conductivity
-             * @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K).
-             */
+            /** @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K). */
             conductivity?: number;
-            /**
-             * Density
-             * @description Density: with specificHeat. Unit kg/m3; a number from 0.01 to 30000 kg/m3.
-             */
+            /** @description Density: with specificHeat. Unit kg/m3; a number from 0.01 to 30000 kg/m3. */
             density?: number;
-            /**
-             * Specific heat
-             * @description Specific heat: with density. Unit J/(kg.K); a number from 0.1 to 100000 J/(kg.K).
-             */
+            /** @description Specific heat: with density. Unit J/(kg.K); a number from 0.1 to 100000 J/(kg.K). */
             specificHeat?: number;
-            /**
-             * Volumetric heat capacity
-             * @description Volumetric heat capacity: in place of density and specificHeat, or of diffusivity. Unit J/(m3.K); a number from 0.1 to 1e9 J/(m3.K).
-             */
+            /** @description Volumetric heat capacity: in place of density and specificHeat, or of diffusivity. Unit J/(m3.K); a number from 0.1 to 1e9 J/(m3.K). */
             volumetricHeatCapacity?: number;
-            /**
-             * Diffusivity
-             * @description Diffusivity: in place of a heat capacity. Unit m2/s; a number from 1e-12 to 100 m2/s.
-             */
+            /** @description Diffusivity: in place of a heat capacity. Unit m2/s; a number from 1e-12 to 100 m2/s. */
             diffusivity?: number;
-            /**
-             * Initial temperature
-             * @description Initial temperature: the same everywhere at time 0. Unit Cel; a number from -273.15 to 10000 Cel.
-             */
+            /** @description Initial temperature: the same everywhere at time 0. Unit Cel; a number from -273.15 to 10000 Cel. */
             initialTemperature: number;
-            /**
-             * Ambient temperature
-             * @description Ambient temperature: of the fluid, not of the face. Unit Cel; a number from -273.15 to 10000 Cel.
-             */
+            /** @description Ambient temperature: of the fluid, not of the face. Unit Cel; a number from -273.15 to 10000 Cel. */
             ambientTemperature: number;
-            /**
-             * Film coefficient
-             * @description Film coefficient: total, radiation included; room 7.7, outside 25, water 100 to 3000. Unit W/(m2.K); 0, or a number from 1e-9 to 1e9 W/(m2.K).
-             */
+            /** @description Film coefficient: total, radiation included; room 7.7, outside 25, water 100 to 3000. Unit W/(m2.K); 0, or a number from 1e-9 to 1e9 W/(m2.K). */
             filmCoefficient: number;
-            /**
-             * Depths
-             * @description Depths: inward from the exposed face. Unit m; 1 to 2000 values, each a number from 0 to 100000 m.
-             */
+            /** @description Depths: inward from the exposed face. Unit m; 1 to 2000 values, each a number from 0 to 100000 m. */
             depths?: number[];
-            /**
-             * Times
-             * @description Times: after the change. Unit s; 1 to 100000 values, each a number from 0 to 1e17 s.
-             */
+            /** @description Times: after the change. Unit s; 1 to 100000 values, each a number from 0 to 1e17 s. */
             times: number[];
             /**
-             * Outputs
              * @description Outputs: some of temperature, heatFlux, surfaceHeatFlux, heatGained, remainingFraction, completedFraction. Default temperature.
              * @default [
              *       "temperature"
@@ -999,16 +781,15 @@ export interface components {
              */
             outputs: ("temperature" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "remainingFraction" | "completedFraction")[];
             /**
-             * Detail
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
              */
             detail?: "full" | "compact";
         };
         SlabConvectionSolveAnswer: {
-            /** @constant */
+            /** @enum {string} */
             case: "slab-convection";
-            /** @constant */
+            /** @enum {string} */
             operation: "solve";
             /** @description Version of the numbers. */
             solver: string;
@@ -1027,45 +808,21 @@ export interface components {
                 [key: string]: string;
             };
             result: {
-                /**
-                 * Temperature
-                 * @description Temperature at each time and place. Unit Cel.
-                 */
+                /** @description Temperature at each time and place. Unit Cel. */
                 temperature?: number[][];
-                /**
-                 * Heat flux
-                 * @description Local heat flux, positive inward from the exposed face. Unit W/m2.
-                 */
+                /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
-                /**
-                 * Surface heat flux
-                 * @description Heat flux conducted into the body at the exposed face. Unit W/m2.
-                 */
+                /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
                 surfaceHeatFlux?: number[];
-                /**
-                 * Heat gained
-                 * @description Energy stored since time 0; negative where the body cools. Unit J/m2.
-                 */
+                /** @description Energy stored since time 0; negative where the body cools. Unit J/m2. */
                 heatGained?: number[];
-                /**
-                 * Mean temperature
-                 * @description Mean over the volume. Unit Cel.
-                 */
+                /** @description Mean over the volume. Unit Cel. */
                 meanTemperature?: number[];
-                /**
-                 * Remaining fraction
-                 * @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1.
-                 */
+                /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
-                /**
-                 * Completed fraction
-                 * @description Share of the change that is done, computed without cancellation. Unit 1.
-                 */
+                /** @description Share of the change that is done, computed without cancellation. Unit 1. */
                 completedFraction?: number[][];
-                /**
-                 * Heat fraction
-                 * @description Heat gained as a share of what the body gains in all. Unit 1.
-                 */
+                /** @description Heat gained as a share of what the body gains in all. Unit 1. */
                 heatFraction?: number[];
             };
             accuracy: {
@@ -1109,7 +866,7 @@ export interface components {
                 };
                 /** @enum {string} */
                 kind: "proved" | "estimated";
-                /** @constant */
+                /** @enum {string} */
                 scope: "numerical";
                 note: string;
             };
@@ -1140,45 +897,21 @@ export interface components {
         };
         SlabConvectionSolveCompactAnswer: {
             result: {
-                /**
-                 * Temperature
-                 * @description Temperature at each time and place. Unit Cel.
-                 */
+                /** @description Temperature at each time and place. Unit Cel. */
                 temperature?: number[][];
-                /**
-                 * Heat flux
-                 * @description Local heat flux, positive inward from the exposed face. Unit W/m2.
-                 */
+                /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
-                /**
-                 * Surface heat flux
-                 * @description Heat flux conducted into the body at the exposed face. Unit W/m2.
-                 */
+                /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
                 surfaceHeatFlux?: number[];
-                /**
-                 * Heat gained
-                 * @description Energy stored since time 0; negative where the body cools. Unit J/m2.
-                 */
+                /** @description Energy stored since time 0; negative where the body cools. Unit J/m2. */
                 heatGained?: number[];
-                /**
-                 * Mean temperature
-                 * @description Mean over the volume. Unit Cel.
-                 */
+                /** @description Mean over the volume. Unit Cel. */
                 meanTemperature?: number[];
-                /**
-                 * Remaining fraction
-                 * @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1.
-                 */
+                /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
-                /**
-                 * Completed fraction
-                 * @description Share of the change that is done, computed without cancellation. Unit 1.
-                 */
+                /** @description Share of the change that is done, computed without cancellation. Unit 1. */
                 completedFraction?: number[][];
-                /**
-                 * Heat fraction
-                 * @description Heat gained as a share of what the body gains in all. Unit 1.
-                 */
+                /** @description Heat gained as a share of what the body gains in all. Unit 1. */
                 heatFraction?: number[];
             };
             accuracy: {
@@ -1240,68 +973,31 @@ export interface components {
          *     }
          */
         SlabConvectionSolveInput: {
-            /**
-             * Conductivity
-             * @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K).
-             */
+            /** @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K). */
             conductivity?: number;
-            /**
-             * Density
-             * @description Density: with specificHeat. Unit kg/m3; a number from 0.01 to 30000 kg/m3.
-             */
+            /** @description Density: with specificHeat. Unit kg/m3; a number from 0.01 to 30000 kg/m3. */
             density?: number;
-            /**
-             * Specific heat
-             * @description Specific heat: with density. Unit J/(kg.K); a number from 0.1 to 100000 J/(kg.K).
-             */
+            /** @description Specific heat: with density. Unit J/(kg.K); a number from 0.1 to 100000 J/(kg.K). */
             specificHeat?: number;
-            /**
-             * Volumetric heat capacity
-             * @description Volumetric heat capacity: in place of density and specificHeat, or of diffusivity. Unit J/(m3.K); a number from 0.1 to 1e9 J/(m3.K).
-             */
+            /** @description Volumetric heat capacity: in place of density and specificHeat, or of diffusivity. Unit J/(m3.K); a number from 0.1 to 1e9 J/(m3.K). */
             volumetricHeatCapacity?: number;
-            /**
-             * Diffusivity
-             * @description Diffusivity: in place of a heat capacity. Unit m2/s; a number from 1e-12 to 100 m2/s.
-             */
+            /** @description Diffusivity: in place of a heat capacity. Unit m2/s; a number from 1e-12 to 100 m2/s. */
             diffusivity?: number;
-            /**
-             * Thickness
-             * @description Thickness: whole, never half. Unit m; a number from 1e-9 to 100000 m.
-             */
+            /** @description Thickness: whole, never half. Unit m; a number from 1e-9 to 100000 m. */
             thickness: number;
-            /**
-             * Exposed faces
-             * @description Exposed faces: 1 (the far face is insulated) or 2 (both alike). No default: the wrong one changes every time by a factor of four.
-             */
+            /** @description Exposed faces: 1 (the far face is insulated) or 2 (both alike). No default: the wrong one changes every time by a factor of four. */
             exposedFaces: 1 | 2;
-            /**
-             * Initial temperature
-             * @description Initial temperature: the same everywhere at time 0. Unit Cel; a number from -273.15 to 10000 Cel.
-             */
+            /** @description Initial temperature: the same everywhere at time 0. Unit Cel; a number from -273.15 to 10000 Cel. */
             initialTemperature: number;
-            /**
-             * Ambient temperature
-             * @description Ambient temperature: of the fluid, not of the face. Unit Cel; a number from -273.15 to 10000 Cel.
-             */
+            /** @description Ambient temperature: of the fluid, not of the face. Unit Cel; a number from -273.15 to 10000 Cel. */
             ambientTemperature: number;
-            /**
-             * Film coefficient
-             * @description Film coefficient: total, radiation included; room 7.7, outside 25, water 100 to 3000. Unit W/(m2.K); 0, or a number from 1e-9 to 1e9 W/(m2.K).
-             */
+            /** @description Film coefficient: total, radiation included; room 7.7, outside 25, water 100 to 3000. Unit W/(m2.K); 0, or a number from 1e-9 to 1e9 W/(m2.K). */
             filmCoefficient: number;
-            /**
-             * Depths
-             * @description Depths: inward from the exposed face. Unit m; 1 to 2000 values, each a number from 0 to 100000 m.
-             */
+            /** @description Depths: inward from the exposed face. Unit m; 1 to 2000 values, each a number from 0 to 100000 m. */
             depths?: number[];
-            /**
-             * Times
-             * @description Times: after the change. Unit s; 1 to 100000 values, each a number from 0 to 1e17 s.
-             */
+            /** @description Times: after the change. Unit s; 1 to 100000 values, each a number from 0 to 1e17 s. */
             times: number[];
             /**
-             * Outputs
              * @description Outputs: some of temperature, heatFlux, surfaceHeatFlux, heatGained, meanTemperature, remainingFraction, completedFraction, heatFraction. Default temperature.
              * @default [
              *       "temperature"
@@ -1309,7 +1005,6 @@ export interface components {
              */
             outputs: ("temperature" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "meanTemperature" | "remainingFraction" | "completedFraction" | "heatFraction")[];
             /**
-             * Detail
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
              */
@@ -1353,6 +1048,63 @@ export interface components {
                 /** @description Calls that were refused or failed; they cost nothing. */
                 refused: number;
             };
+        };
+        AccountStatus: {
+            /** @description Points of the period. */
+            limit: number;
+            /** @description Points used in the period. */
+            used: number;
+            /**
+             * Format: date-time
+             * @description An instant in UTC, RFC 3339.
+             */
+            resetsAt: string;
+        };
+        Request: {
+            id: string;
+            /**
+             * Format: date-time
+             * @description An instant in UTC, RFC 3339.
+             */
+            at: string;
+            key: {
+                id: string;
+                name: string;
+                prefix: string;
+            } | null;
+            method: string;
+            path: string;
+            case: string | null;
+            operation: string | null;
+            /** @description Status answered; 499 where the client hung up first. */
+            status: number;
+            milliseconds: number;
+            points: number;
+            /** @description The whole problem as answered. */
+            problem: {
+                [key: string]: unknown;
+            } | null;
+            bytesIn: number;
+            bytesOut: number;
+            ledger: {
+                /** @enum {string} */
+                kind: "charge" | "refund";
+                points: number;
+                /**
+                 * Format: date-time
+                 * @description An instant in UTC, RFC 3339.
+                 */
+                at: string;
+            }[];
+            solver: string;
+        };
+        Alive: {
+            /** @enum {string} */
+            status: "alive";
+        };
+        Ready: {
+            /** @enum {string} */
+            status: "ready";
         };
     };
     responses: never;

@@ -248,6 +248,110 @@ export interface paths {
 export type webhooks = Record<string, never>;
 export interface components {
     schemas: {
+        /** @description RFC 9457 problem details. */
+        Problem: {
+            /**
+             * Format: uri
+             * @description Address of a page about this problem.
+             */
+            type: string;
+            /**
+             * @description What clients match.
+             * @enum {string}
+             */
+            code: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
+            title: string;
+            status: number;
+            detail: string;
+            /** @description The same call may succeed later without a change. */
+            retryable: boolean;
+            requestId?: string;
+            /**
+             * Format: date-time
+             * @description Start of the next period, where the points of this one are used up.
+             */
+            resetsAt?: string;
+            errors?: components["schemas"]["ProblemIssue"][];
+        };
+        ProblemIssue: {
+            /** @description Where in the body, as an RFC 6901 pointer such as #/times/3. */
+            pointer?: string;
+            /** @description Which query parameter. */
+            parameter?: string;
+            /** @enum {string} */
+            code: "missing-field" | "unknown-field" | "wrong-type" | "out-of-range" | "not-in-list" | "wrong-length" | "wrong-form" | "conflicting-fields" | "depth-outside-body" | "output-not-defined" | "singular-at-time-zero";
+            detail: string;
+            /** @description What would be accepted instead. */
+            accepted?: string;
+        };
+        Session: {
+            person: {
+                name: string;
+                mail: string;
+            };
+            account: {
+                id: string;
+                name: string;
+            };
+            /** @enum {string} */
+            role: "owner" | "integrator" | "reader";
+            /** @description What the role may do. */
+            permissions: string[];
+        };
+        SignUp: {
+            /**
+             * Format: email
+             * @description Mail address, 254 characters at most.
+             */
+            mail: string;
+            /** @description Password: 15 characters at least, 72 bytes at most; any characters. */
+            password: string;
+            /** @description Name: 1 to 100 characters. */
+            name: string;
+            /** @description Account name: 1 to 100 characters. */
+            accountName: string;
+        };
+        SignIn: {
+            /**
+             * Format: email
+             * @description Mail address, 254 characters at most.
+             */
+            mail: string;
+            /** @description Password */
+            password: string;
+        };
+        KeyList: {
+            keys: components["schemas"]["Key"][];
+            account: components["schemas"]["AccountStatus"];
+        };
+        Key: {
+            id: string;
+            name: string;
+            /** @description Environment and the first six characters; more of a key is never shown again. */
+            prefix: string;
+            /** @enum {string} */
+            environment: "trial";
+            /** @description Points a period of this key alone, or null. */
+            quota: number | null;
+            /** @description Points used in this period. */
+            used: number;
+            /**
+             * Format: date-time
+             * @description An instant in UTC, RFC 3339.
+             */
+            createdAt: string;
+            createdBy: string;
+            /**
+             * Format: date-time
+             * @description An instant in UTC, RFC 3339.
+             */
+            lastUsedAt: string | null;
+            /**
+             * Format: date-time
+             * @description An instant in UTC, RFC 3339.
+             */
+            revokedAt: string | null;
+        };
         AccountStatus: {
             /** @description Points of the period. */
             limit: number;
@@ -263,34 +367,127 @@ export interface components {
             key: components["schemas"]["Key"];
             secret: string;
         };
-        Key: {
-            id: string;
+        NewKey: {
+            /** @description Name: 1 to 80 characters. */
             name: string;
-            /** @description Environment and the first six characters; more of a key is never shown again. */
-            prefix: string;
-            /** @constant */
-            environment: "trial";
-            /** @description Points a period of this key alone, or null. */
-            quota: number | null;
-            /** @description Points used in this period. */
-            used: number;
+            /** @description Points a period for this key alone. */
+            quota?: number;
+        };
+        RevokedKey: {
+            key: components["schemas"]["Key"];
+        };
+        Usage: {
+            /**
+             * Format: date
+             * @description A UTC day, such as 2026-03-31.
+             */
+            from: string;
+            /**
+             * Format: date
+             * @description A UTC day, such as 2026-03-31.
+             */
+            to: string;
             /**
              * Format: date-time
              * @description An instant in UTC, RFC 3339.
              */
-            createdAt: string;
-            createdBy: string;
-            lastUsedAt: string | null;
-            revokedAt: string | null;
-        };
-        KeyList: {
-            keys: components["schemas"]["Key"][];
+            asOf: string;
+            groupBy: ("day" | "key" | "case")[];
             account: components["schemas"]["AccountStatus"];
+            rows: {
+                /**
+                 * Format: date
+                 * @description A UTC day, such as 2026-03-31.
+                 */
+                day?: string;
+                keyId?: string | null;
+                keyName?: string | null;
+                case?: string | null;
+                calls: number;
+                points: number;
+                /** @description Calls that were refused or failed; they cost nothing. */
+                refused: number;
+            }[];
+            total: {
+                calls: number;
+                points: number;
+                /** @description Calls that were refused or failed; they cost nothing. */
+                refused: number;
+            };
+        };
+        RequestList: {
+            requests: components["schemas"]["RequestEntry"][];
+            /** @description Cursor of the next page, or null on the last. */
+            next: string | null;
+        };
+        RequestEntry: {
+            id: string;
+            /**
+             * Format: date-time
+             * @description An instant in UTC, RFC 3339.
+             */
+            at: string;
+            key: {
+                id: string;
+                name: string;
+                prefix: string;
+            } | null;
+            method: string;
+            path: string;
+            case: string | null;
+            operation: string | null;
+            /** @description Status answered; 499 where the client hung up first. */
+            status: number;
+            milliseconds: number;
+            points: number;
+            /**
+             * @description Code of the problem answered.
+             * @enum {string|null}
+             */
+            problem: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable" | null;
+        };
+        Request: {
+            id: string;
+            /**
+             * Format: date-time
+             * @description An instant in UTC, RFC 3339.
+             */
+            at: string;
+            key: {
+                id: string;
+                name: string;
+                prefix: string;
+            } | null;
+            method: string;
+            path: string;
+            case: string | null;
+            operation: string | null;
+            /** @description Status answered; 499 where the client hung up first. */
+            status: number;
+            milliseconds: number;
+            points: number;
+            /** @description The whole problem as answered. */
+            problem: {
+                [key: string]: unknown;
+            } | null;
+            bytesIn: number;
+            bytesOut: number;
+            ledger: {
+                /** @enum {string} */
+                kind: "charge" | "refund";
+                points: number;
+                /**
+                 * Format: date-time
+                 * @description An instant in UTC, RFC 3339.
+                 */
+                at: string;
+            }[];
+            solver: string;
         };
         LumpedConvectionSolveAnswer: {
-            /** @constant */
+            /** @enum {string} */
             case: "lumped-convection";
-            /** @constant */
+            /** @enum {string} */
             operation: "solve";
             /** @description Version of the numbers. */
             solver: string;
@@ -308,40 +505,19 @@ export interface components {
                 [key: string]: string;
             };
             result: {
-                /**
-                 * Temperature
-                 * @description Temperature at each time and place. Unit Cel.
-                 */
+                /** @description Temperature at each time and place. Unit Cel. */
                 temperature?: number[];
-                /**
-                 * Heat gained
-                 * @description Energy stored since time 0; negative where the body cools. Unit J.
-                 */
+                /** @description Energy stored since time 0; negative where the body cools. Unit J. */
                 heatGained?: number[];
-                /**
-                 * Remaining fraction
-                 * @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1.
-                 */
+                /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[];
-                /**
-                 * Completed fraction
-                 * @description Share of the change that is done, computed without cancellation. Unit 1.
-                 */
+                /** @description Share of the change that is done, computed without cancellation. Unit 1. */
                 completedFraction?: number[];
-                /**
-                 * Heat fraction
-                 * @description Heat gained as a share of what the body gains in all. Unit 1.
-                 */
+                /** @description Heat gained as a share of what the body gains in all. Unit 1. */
                 heatFraction?: number[];
-                /**
-                 * Steady temperature
-                 * @description The end state. Unit Cel.
-                 */
+                /** @description The end state. Unit Cel. */
                 steadyTemperature?: number;
-                /**
-                 * Time constant
-                 * @description Time in which the difference to the end state falls to 1/e. Unit s.
-                 */
+                /** @description Time in which the difference to the end state falls to 1/e. Unit s. */
                 timeConstant?: number;
             };
             accuracy: {
@@ -381,7 +557,7 @@ export interface components {
                 };
                 /** @enum {string} */
                 kind: "proved" | "estimated";
-                /** @constant */
+                /** @enum {string} */
                 scope: "numerical";
                 note: string;
             };
@@ -412,40 +588,19 @@ export interface components {
         };
         LumpedConvectionSolveCompactAnswer: {
             result: {
-                /**
-                 * Temperature
-                 * @description Temperature at each time and place. Unit Cel.
-                 */
+                /** @description Temperature at each time and place. Unit Cel. */
                 temperature?: number[];
-                /**
-                 * Heat gained
-                 * @description Energy stored since time 0; negative where the body cools. Unit J.
-                 */
+                /** @description Energy stored since time 0; negative where the body cools. Unit J. */
                 heatGained?: number[];
-                /**
-                 * Remaining fraction
-                 * @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1.
-                 */
+                /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[];
-                /**
-                 * Completed fraction
-                 * @description Share of the change that is done, computed without cancellation. Unit 1.
-                 */
+                /** @description Share of the change that is done, computed without cancellation. Unit 1. */
                 completedFraction?: number[];
-                /**
-                 * Heat fraction
-                 * @description Heat gained as a share of what the body gains in all. Unit 1.
-                 */
+                /** @description Heat gained as a share of what the body gains in all. Unit 1. */
                 heatFraction?: number[];
-                /**
-                 * Steady temperature
-                 * @description The end state. Unit Cel.
-                 */
+                /** @description The end state. Unit Cel. */
                 steadyTemperature?: number;
-                /**
-                 * Time constant
-                 * @description Time in which the difference to the end state falls to 1/e. Unit s.
-                 */
+                /** @description Time in which the difference to the end state falls to 1/e. Unit s. */
                 timeConstant?: number;
             };
             accuracy: {
@@ -496,100 +651,49 @@ export interface components {
          *     }
          */
         LumpedConvectionSolveInput: {
-            /**
-             * Heat capacity of the body
-             * @description Heat capacity of the body: with area. Unit J/K; a number from 1e-12 to 1e15 J/K.
-             */
+            /** @description Heat capacity of the body: with area. Unit J/K; a number from 1e-12 to 1e15 J/K. */
             heatCapacity?: number;
-            /**
-             * Volume
-             * @description Volume: with area and the heat capacity of the solid. Unit m3; a number from 1e-27 to 1e15 m3.
-             */
+            /** @description Volume: with area and the heat capacity of the solid. Unit m3; a number from 1e-27 to 1e15 m3. */
             volume?: number;
-            /**
-             * Exchanging area
-             * @description Exchanging area. Unit m2; a number from 1e-18 to 1e10 m2.
-             */
+            /** @description Exchanging area. Unit m2; a number from 1e-18 to 1e10 m2. */
             area?: number;
             /**
-             * Body
              * @description Body: slab (with thickness and exposedFaces), cylinder or sphere (with radius), in place of heatCapacity or volume with area.
              * @enum {string}
              */
             body?: "slab" | "cylinder" | "sphere";
-            /**
-             * Thickness
-             * @description Thickness: whole, never half. Unit m; a number from 1e-9 to 100000 m.
-             */
+            /** @description Thickness: whole, never half. Unit m; a number from 1e-9 to 100000 m. */
             thickness?: number;
-            /**
-             * Exposed faces
-             * @description Exposed faces: 1 (the far face is insulated) or 2 (both alike). No default: the wrong one changes every time by a factor of four.
-             */
+            /** @description Exposed faces: 1 (the far face is insulated) or 2 (both alike). No default: the wrong one changes every time by a factor of four. */
             exposedFaces?: 1 | 2;
-            /**
-             * Radius
-             * @description Radius. Unit m; a number from 1e-9 to 100000 m.
-             */
+            /** @description Radius. Unit m; a number from 1e-9 to 100000 m. */
             radius?: number;
-            /**
-             * Conductivity
-             * @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K).
-             */
+            /** @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K). */
             conductivity?: number;
-            /**
-             * Density
-             * @description Density: with specificHeat. Unit kg/m3; a number from 0.01 to 30000 kg/m3.
-             */
+            /** @description Density: with specificHeat. Unit kg/m3; a number from 0.01 to 30000 kg/m3. */
             density?: number;
-            /**
-             * Specific heat
-             * @description Specific heat: with density. Unit J/(kg.K); a number from 0.1 to 100000 J/(kg.K).
-             */
+            /** @description Specific heat: with density. Unit J/(kg.K); a number from 0.1 to 100000 J/(kg.K). */
             specificHeat?: number;
-            /**
-             * Volumetric heat capacity
-             * @description Volumetric heat capacity: in place of density and specificHeat, or of diffusivity. Unit J/(m3.K); a number from 0.1 to 1e9 J/(m3.K).
-             */
+            /** @description Volumetric heat capacity: in place of density and specificHeat, or of diffusivity. Unit J/(m3.K); a number from 0.1 to 1e9 J/(m3.K). */
             volumetricHeatCapacity?: number;
-            /**
-             * Diffusivity
-             * @description Diffusivity: in place of a heat capacity. Unit m2/s; a number from 1e-12 to 100 m2/s.
-             */
+            /** @description Diffusivity: in place of a heat capacity. Unit m2/s; a number from 1e-12 to 100 m2/s. */
             diffusivity?: number;
             /**
-             * Correction
              * @description Correction: none (default) or mean, with body only.
              * @enum {string}
              */
             correction?: "none" | "mean";
-            /**
-             * Heat source
-             * @description Heat source: released inside; without body only. Unit W; a number from -1e15 to 1e15 W.
-             */
+            /** @description Heat source: released inside; without body only. Unit W; a number from -1e15 to 1e15 W. */
             power?: number;
-            /**
-             * Initial temperature
-             * @description Initial temperature: the same everywhere at time 0. Unit Cel; a number from -273.15 to 10000 Cel.
-             */
+            /** @description Initial temperature: the same everywhere at time 0. Unit Cel; a number from -273.15 to 10000 Cel. */
             initialTemperature: number;
-            /**
-             * Ambient temperature
-             * @description Ambient temperature: of the fluid, not of the face. Unit Cel; a number from -273.15 to 10000 Cel.
-             */
+            /** @description Ambient temperature: of the fluid, not of the face. Unit Cel; a number from -273.15 to 10000 Cel. */
             ambientTemperature: number;
-            /**
-             * Film coefficient
-             * @description Film coefficient: total, radiation included; room 7.7, outside 25, water 100 to 3000. Unit W/(m2.K); 0, or a number from 1e-9 to 1e9 W/(m2.K).
-             */
+            /** @description Film coefficient: total, radiation included; room 7.7, outside 25, water 100 to 3000. Unit W/(m2.K); 0, or a number from 1e-9 to 1e9 W/(m2.K). */
             filmCoefficient: number;
-            /**
-             * Times
-             * @description Times: after the change. Unit s; 1 to 100000 values, each a number from 0 to 1e17 s.
-             */
+            /** @description Times: after the change. Unit s; 1 to 100000 values, each a number from 0 to 1e17 s. */
             times: number[];
             /**
-             * Outputs
              * @description Outputs: some of temperature, heatGained, remainingFraction, completedFraction, heatFraction, steadyTemperature, timeConstant. Default temperature.
              * @default [
              *       "temperature"
@@ -597,133 +701,15 @@ export interface components {
              */
             outputs: ("temperature" | "heatGained" | "remainingFraction" | "completedFraction" | "heatFraction" | "steadyTemperature" | "timeConstant")[];
             /**
-             * Detail
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
              */
             detail?: "full" | "compact";
         };
-        NewKey: {
-            /**
-             * Name
-             * @description Name: 1 to 80 characters.
-             */
-            name: string;
-            /**
-             * Own quota
-             * @description Points a period for this key alone.
-             */
-            quota?: number;
-        };
-        /** @description RFC 9457 problem details. */
-        Problem: {
-            /**
-             * Format: uri
-             * @description Address of a page about this problem.
-             */
-            type: string;
-            /**
-             * @description What clients match.
-             * @enum {string}
-             */
-            code: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
-            title: string;
-            status: number;
-            detail: string;
-            /** @description The same call may succeed later without a change. */
-            retryable: boolean;
-            requestId?: string;
-            /**
-             * Format: date-time
-             * @description Start of the next period, where the points of this one are used up.
-             */
-            resetsAt?: string;
-            errors?: components["schemas"]["ProblemIssue"][];
-        };
-        ProblemIssue: {
-            /** @description Where in the body, as an RFC 6901 pointer such as #/times/3. */
-            pointer?: string;
-            /** @description Which query parameter. */
-            parameter?: string;
-            /** @enum {string} */
-            code: "missing-field" | "unknown-field" | "wrong-type" | "out-of-range" | "not-in-list" | "wrong-length" | "wrong-form" | "conflicting-fields" | "depth-outside-body" | "output-not-defined" | "singular-at-time-zero";
-            detail: string;
-            /** @description What would be accepted instead. */
-            accepted?: string;
-        };
-        Request: {
-            id: string;
-            /**
-             * Format: date-time
-             * @description An instant in UTC, RFC 3339.
-             */
-            at: string;
-            key: {
-                id: string;
-                name: string;
-                prefix: string;
-            } | null;
-            method: string;
-            path: string;
-            case: string | null;
-            operation: string | null;
-            /** @description Status answered; 499 where the client hung up first. */
-            status: number;
-            milliseconds: number;
-            points: number;
-            /** @description The whole problem as answered. */
-            problem: {
-                [key: string]: unknown;
-            } | null;
-            bytesIn: number;
-            bytesOut: number;
-            ledger: {
-                /** @enum {string} */
-                kind: "charge" | "refund";
-                points: number;
-                /**
-                 * Format: date-time
-                 * @description An instant in UTC, RFC 3339.
-                 */
-                at: string;
-            }[];
-            solver: string;
-        };
-        RequestEntry: {
-            id: string;
-            /**
-             * Format: date-time
-             * @description An instant in UTC, RFC 3339.
-             */
-            at: string;
-            key: {
-                id: string;
-                name: string;
-                prefix: string;
-            } | null;
-            method: string;
-            path: string;
-            case: string | null;
-            operation: string | null;
-            /** @description Status answered; 499 where the client hung up first. */
-            status: number;
-            milliseconds: number;
-            points: number;
-            /** @description Code of the problem answered. */
-            problem: ("malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable") | null;
-        };
-        RequestList: {
-            requests: components["schemas"]["RequestEntry"][];
-            /** @description Cursor of the next page, or null on the last. */
-            next: string | null;
-        };
-        RevokedKey: {
-            key: components["schemas"]["Key"];
-        };
         SemiInfiniteConvectionSolveAnswer: {
-            /** @constant */
+            /** @enum {string} */
             case: "semi-infinite-convection";
-            /** @constant */
+            /** @enum {string} */
             operation: "solve";
             /** @description Version of the numbers. */
             solver: string;
@@ -742,35 +728,17 @@ export interface components {
                 [key: string]: string;
             };
             result: {
-                /**
-                 * Temperature
-                 * @description Temperature at each time and place. Unit Cel.
-                 */
+                /** @description Temperature at each time and place. Unit Cel. */
                 temperature?: number[][];
-                /**
-                 * Heat flux
-                 * @description Local heat flux, positive inward from the exposed face. Unit W/m2.
-                 */
+                /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
-                /**
-                 * Surface heat flux
-                 * @description Heat flux conducted into the body at the exposed face. Unit W/m2.
-                 */
+                /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
                 surfaceHeatFlux?: number[];
-                /**
-                 * Heat gained
-                 * @description Energy stored since time 0; negative where the body cools. Unit J/m2.
-                 */
+                /** @description Energy stored since time 0; negative where the body cools. Unit J/m2. */
                 heatGained?: number[];
-                /**
-                 * Remaining fraction
-                 * @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1.
-                 */
+                /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
-                /**
-                 * Completed fraction
-                 * @description Share of the change that is done, computed without cancellation. Unit 1.
-                 */
+                /** @description Share of the change that is done, computed without cancellation. Unit 1. */
                 completedFraction?: number[][];
             };
             accuracy: {
@@ -806,7 +774,7 @@ export interface components {
                 };
                 /** @enum {string} */
                 kind: "proved" | "estimated";
-                /** @constant */
+                /** @enum {string} */
                 scope: "numerical";
                 note: string;
             };
@@ -837,35 +805,17 @@ export interface components {
         };
         SemiInfiniteConvectionSolveCompactAnswer: {
             result: {
-                /**
-                 * Temperature
-                 * @description Temperature at each time and place. Unit Cel.
-                 */
+                /** @description Temperature at each time and place. Unit Cel. */
                 temperature?: number[][];
-                /**
-                 * Heat flux
-                 * @description Local heat flux, positive inward from the exposed face. Unit W/m2.
-                 */
+                /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
-                /**
-                 * Surface heat flux
-                 * @description Heat flux conducted into the body at the exposed face. Unit W/m2.
-                 */
+                /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
                 surfaceHeatFlux?: number[];
-                /**
-                 * Heat gained
-                 * @description Energy stored since time 0; negative where the body cools. Unit J/m2.
-                 */
+                /** @description Energy stored since time 0; negative where the body cools. Unit J/m2. */
                 heatGained?: number[];
-                /**
-                 * Remaining fraction
-                 * @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1.
-                 */
+                /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
-                /**
-                 * Completed fraction
-                 * @description Share of the change that is done, computed without cancellation. Unit 1.
-                 */
+                /** @description Share of the change that is done, computed without cancellation. Unit 1. */
                 completedFraction?: number[][];
             };
             accuracy: {
@@ -918,58 +868,27 @@ export interface components {
          *     }
          */
         SemiInfiniteConvectionSolveInput: {
-            /**
-             * Conductivity
-             * @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K).
-             */
+            /** @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K). */
             conductivity?: number;
-            /**
-             * Density
-             * @description Density: with specificHeat. Unit kg/m3; a number from 0.01 to 30000 kg/m3.
-             */
+            /** @description Density: with specificHeat. Unit kg/m3; a number from 0.01 to 30000 kg/m3. */
             density?: number;
-            /**
-             * Specific heat
-             * @description Specific heat: with density. Unit J/(kg.K); a number from 0.1 to 100000 J/(kg.K).
-             */
+            /** @description Specific heat: with density. Unit J/(kg.K); a number from 0.1 to 100000 J/(kg.K). */
             specificHeat?: number;
-            /**
-             * Volumetric heat capacity
-             * @description Volumetric heat capacity: in place of density and specificHeat, or of diffusivity. Unit J/(m3.K); a number from 0.1 to 1e9 J/(m3.K).
-             */
+            /** @description Volumetric heat capacity: in place of density and specificHeat, or of diffusivity. Unit J/(m3.K); a number from 0.1 to 1e9 J/(m3.K). */
             volumetricHeatCapacity?: number;
-            /**
-             * Diffusivity
-             * @description Diffusivity: in place of a heat capacity. Unit m2/s; a number from 1e-12 to 100 m2/s.
-             */
+            /** @description Diffusivity: in place of a heat capacity. Unit m2/s; a number from 1e-12 to 100 m2/s. */
             diffusivity?: number;
-            /**
-             * Initial temperature
-             * @description Initial temperature: the same everywhere at time 0. Unit Cel; a number from -273.15 to 10000 Cel.
-             */
+            /** @description Initial temperature: the same everywhere at time 0. Unit Cel; a number from -273.15 to 10000 Cel. */
             initialTemperature: number;
-            /**
-             * Ambient temperature
-             * @description Ambient temperature: of the fluid, not of the face. Unit Cel; a number from -273.15 to 10000 Cel.
-             */
+            /** @description Ambient temperature: of the fluid, not of the face. Unit Cel; a number from -273.15 to 10000 Cel. */
             ambientTemperature: number;
-            /**
-             * Film coefficient
-             * @description Film coefficient: total, radiation included; room 7.7, outside 25, water 100 to 3000. Unit W/(m2.K); 0, or a number from 1e-9 to 1e9 W/(m2.K).
-             */
+            /** @description Film coefficient: total, radiation included; room 7.7, outside 25, water 100 to 3000. Unit W/(m2.K); 0, or a number from 1e-9 to 1e9 W/(m2.K). */
             filmCoefficient: number;
-            /**
-             * Depths
-             * @description Depths: inward from the exposed face. Unit m; 1 to 2000 values, each a number from 0 to 100000 m.
-             */
+            /** @description Depths: inward from the exposed face. Unit m; 1 to 2000 values, each a number from 0 to 100000 m. */
             depths?: number[];
-            /**
-             * Times
-             * @description Times: after the change. Unit s; 1 to 100000 values, each a number from 0 to 1e17 s.
-             */
+            /** @description Times: after the change. Unit s; 1 to 100000 values, each a number from 0 to 1e17 s. */
             times: number[];
             /**
-             * Outputs
              * @description Outputs: some of temperature, heatFlux, surfaceHeatFlux, heatGained, remainingFraction, completedFraction. Default temperature.
              * @default [
              *       "temperature"
@@ -977,63 +896,15 @@ export interface components {
              */
             outputs: ("temperature" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "remainingFraction" | "completedFraction")[];
             /**
-             * Detail
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
              */
             detail?: "full" | "compact";
         };
-        Session: {
-            person: {
-                name: string;
-                mail: string;
-            };
-            account: {
-                id: string;
-                name: string;
-            };
-            /** @enum {string} */
-            role: "owner" | "integrator" | "reader";
-            /** @description What the role may do. */
-            permissions: string[];
-        };
-        SignIn: {
-            /**
-             * Mail address
-             * Format: email
-             * @description Mail address, 254 characters at most.
-             */
-            mail: string;
-            /** Password */
-            password: string;
-        };
-        SignUp: {
-            /**
-             * Mail address
-             * Format: email
-             * @description Mail address, 254 characters at most.
-             */
-            mail: string;
-            /**
-             * Password
-             * @description Password: 15 characters at least, 72 bytes at most; any characters.
-             */
-            password: string;
-            /**
-             * Name
-             * @description Name: 1 to 100 characters.
-             */
-            name: string;
-            /**
-             * Account name
-             * @description Account name: 1 to 100 characters.
-             */
-            accountName: string;
-        };
         SlabConvectionSolveAnswer: {
-            /** @constant */
+            /** @enum {string} */
             case: "slab-convection";
-            /** @constant */
+            /** @enum {string} */
             operation: "solve";
             /** @description Version of the numbers. */
             solver: string;
@@ -1052,45 +923,21 @@ export interface components {
                 [key: string]: string;
             };
             result: {
-                /**
-                 * Temperature
-                 * @description Temperature at each time and place. Unit Cel.
-                 */
+                /** @description Temperature at each time and place. Unit Cel. */
                 temperature?: number[][];
-                /**
-                 * Heat flux
-                 * @description Local heat flux, positive inward from the exposed face. Unit W/m2.
-                 */
+                /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
-                /**
-                 * Surface heat flux
-                 * @description Heat flux conducted into the body at the exposed face. Unit W/m2.
-                 */
+                /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
                 surfaceHeatFlux?: number[];
-                /**
-                 * Heat gained
-                 * @description Energy stored since time 0; negative where the body cools. Unit J/m2.
-                 */
+                /** @description Energy stored since time 0; negative where the body cools. Unit J/m2. */
                 heatGained?: number[];
-                /**
-                 * Mean temperature
-                 * @description Mean over the volume. Unit Cel.
-                 */
+                /** @description Mean over the volume. Unit Cel. */
                 meanTemperature?: number[];
-                /**
-                 * Remaining fraction
-                 * @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1.
-                 */
+                /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
-                /**
-                 * Completed fraction
-                 * @description Share of the change that is done, computed without cancellation. Unit 1.
-                 */
+                /** @description Share of the change that is done, computed without cancellation. Unit 1. */
                 completedFraction?: number[][];
-                /**
-                 * Heat fraction
-                 * @description Heat gained as a share of what the body gains in all. Unit 1.
-                 */
+                /** @description Heat gained as a share of what the body gains in all. Unit 1. */
                 heatFraction?: number[];
             };
             accuracy: {
@@ -1134,7 +981,7 @@ export interface components {
                 };
                 /** @enum {string} */
                 kind: "proved" | "estimated";
-                /** @constant */
+                /** @enum {string} */
                 scope: "numerical";
                 note: string;
             };
@@ -1165,45 +1012,21 @@ export interface components {
         };
         SlabConvectionSolveCompactAnswer: {
             result: {
-                /**
-                 * Temperature
-                 * @description Temperature at each time and place. Unit Cel.
-                 */
+                /** @description Temperature at each time and place. Unit Cel. */
                 temperature?: number[][];
-                /**
-                 * Heat flux
-                 * @description Local heat flux, positive inward from the exposed face. Unit W/m2.
-                 */
+                /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
-                /**
-                 * Surface heat flux
-                 * @description Heat flux conducted into the body at the exposed face. Unit W/m2.
-                 */
+                /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
                 surfaceHeatFlux?: number[];
-                /**
-                 * Heat gained
-                 * @description Energy stored since time 0; negative where the body cools. Unit J/m2.
-                 */
+                /** @description Energy stored since time 0; negative where the body cools. Unit J/m2. */
                 heatGained?: number[];
-                /**
-                 * Mean temperature
-                 * @description Mean over the volume. Unit Cel.
-                 */
+                /** @description Mean over the volume. Unit Cel. */
                 meanTemperature?: number[];
-                /**
-                 * Remaining fraction
-                 * @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1.
-                 */
+                /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
-                /**
-                 * Completed fraction
-                 * @description Share of the change that is done, computed without cancellation. Unit 1.
-                 */
+                /** @description Share of the change that is done, computed without cancellation. Unit 1. */
                 completedFraction?: number[][];
-                /**
-                 * Heat fraction
-                 * @description Heat gained as a share of what the body gains in all. Unit 1.
-                 */
+                /** @description Heat gained as a share of what the body gains in all. Unit 1. */
                 heatFraction?: number[];
             };
             accuracy: {
@@ -1265,68 +1088,31 @@ export interface components {
          *     }
          */
         SlabConvectionSolveInput: {
-            /**
-             * Conductivity
-             * @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K).
-             */
+            /** @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K). */
             conductivity?: number;
-            /**
-             * Density
-             * @description Density: with specificHeat. Unit kg/m3; a number from 0.01 to 30000 kg/m3.
-             */
+            /** @description Density: with specificHeat. Unit kg/m3; a number from 0.01 to 30000 kg/m3. */
             density?: number;
-            /**
-             * Specific heat
-             * @description Specific heat: with density. Unit J/(kg.K); a number from 0.1 to 100000 J/(kg.K).
-             */
+            /** @description Specific heat: with density. Unit J/(kg.K); a number from 0.1 to 100000 J/(kg.K). */
             specificHeat?: number;
-            /**
-             * Volumetric heat capacity
-             * @description Volumetric heat capacity: in place of density and specificHeat, or of diffusivity. Unit J/(m3.K); a number from 0.1 to 1e9 J/(m3.K).
-             */
+            /** @description Volumetric heat capacity: in place of density and specificHeat, or of diffusivity. Unit J/(m3.K); a number from 0.1 to 1e9 J/(m3.K). */
             volumetricHeatCapacity?: number;
-            /**
-             * Diffusivity
-             * @description Diffusivity: in place of a heat capacity. Unit m2/s; a number from 1e-12 to 100 m2/s.
-             */
+            /** @description Diffusivity: in place of a heat capacity. Unit m2/s; a number from 1e-12 to 100 m2/s. */
             diffusivity?: number;
-            /**
-             * Thickness
-             * @description Thickness: whole, never half. Unit m; a number from 1e-9 to 100000 m.
-             */
+            /** @description Thickness: whole, never half. Unit m; a number from 1e-9 to 100000 m. */
             thickness: number;
-            /**
-             * Exposed faces
-             * @description Exposed faces: 1 (the far face is insulated) or 2 (both alike). No default: the wrong one changes every time by a factor of four.
-             */
+            /** @description Exposed faces: 1 (the far face is insulated) or 2 (both alike). No default: the wrong one changes every time by a factor of four. */
             exposedFaces: 1 | 2;
-            /**
-             * Initial temperature
-             * @description Initial temperature: the same everywhere at time 0. Unit Cel; a number from -273.15 to 10000 Cel.
-             */
+            /** @description Initial temperature: the same everywhere at time 0. Unit Cel; a number from -273.15 to 10000 Cel. */
             initialTemperature: number;
-            /**
-             * Ambient temperature
-             * @description Ambient temperature: of the fluid, not of the face. Unit Cel; a number from -273.15 to 10000 Cel.
-             */
+            /** @description Ambient temperature: of the fluid, not of the face. Unit Cel; a number from -273.15 to 10000 Cel. */
             ambientTemperature: number;
-            /**
-             * Film coefficient
-             * @description Film coefficient: total, radiation included; room 7.7, outside 25, water 100 to 3000. Unit W/(m2.K); 0, or a number from 1e-9 to 1e9 W/(m2.K).
-             */
+            /** @description Film coefficient: total, radiation included; room 7.7, outside 25, water 100 to 3000. Unit W/(m2.K); 0, or a number from 1e-9 to 1e9 W/(m2.K). */
             filmCoefficient: number;
-            /**
-             * Depths
-             * @description Depths: inward from the exposed face. Unit m; 1 to 2000 values, each a number from 0 to 100000 m.
-             */
+            /** @description Depths: inward from the exposed face. Unit m; 1 to 2000 values, each a number from 0 to 100000 m. */
             depths?: number[];
-            /**
-             * Times
-             * @description Times: after the change. Unit s; 1 to 100000 values, each a number from 0 to 1e17 s.
-             */
+            /** @description Times: after the change. Unit s; 1 to 100000 values, each a number from 0 to 1e17 s. */
             times: number[];
             /**
-             * Outputs
              * @description Outputs: some of temperature, heatFlux, surfaceHeatFlux, heatGained, meanTemperature, remainingFraction, completedFraction, heatFraction. Default temperature.
              * @default [
              *       "temperature"
@@ -1334,50 +1120,10 @@ export interface components {
              */
             outputs: ("temperature" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "meanTemperature" | "remainingFraction" | "completedFraction" | "heatFraction")[];
             /**
-             * Detail
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
              */
             detail?: "full" | "compact";
-        };
-        Usage: {
-            /**
-             * Format: date
-             * @description A UTC day, such as 2026-03-31.
-             */
-            from: string;
-            /**
-             * Format: date
-             * @description A UTC day, such as 2026-03-31.
-             */
-            to: string;
-            /**
-             * Format: date-time
-             * @description An instant in UTC, RFC 3339.
-             */
-            asOf: string;
-            groupBy: ("day" | "key" | "case")[];
-            account: components["schemas"]["AccountStatus"];
-            rows: {
-                /**
-                 * Format: date
-                 * @description A UTC day, such as 2026-03-31.
-                 */
-                day?: string;
-                keyId?: string | null;
-                keyName?: string | null;
-                case?: string | null;
-                calls: number;
-                points: number;
-                /** @description Calls that were refused or failed; they cost nothing. */
-                refused: number;
-            }[];
-            total: {
-                calls: number;
-                points: number;
-                /** @description Calls that were refused or failed; they cost nothing. */
-                refused: number;
-            };
         };
     };
     responses: never;

@@ -101,55 +101,6 @@ export interface paths {
 export type webhooks = Record<string, never>;
 export interface components {
     schemas: {
-        Find: {
-            /**
-             * Query
-             * @description A request id, or a key as it is listed: its environment and first six characters.
-             */
-            query: string;
-            /**
-             * Reason
-             * @description Reason: 3 to 300 characters.
-             */
-            reason: string;
-        };
-        FoundRequest: {
-            id: string;
-            /**
-             * Format: date-time
-             * @description An instant in UTC, RFC 3339.
-             */
-            at: string;
-            key: {
-                id: string;
-                name: string;
-                prefix: string;
-            } | null;
-            method: string;
-            path: string;
-            case: string | null;
-            operation: string | null;
-            /** @description Status answered; 499 where the client hung up first. */
-            status: number;
-            milliseconds: number;
-            points: number;
-            /** @description Code of the problem answered. */
-            problem: ("malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable") | null;
-            account: {
-                id: string;
-                name: string;
-            } | null;
-        };
-        FoundRequests: {
-            requests: components["schemas"]["FoundRequest"][];
-        };
-        Look: {
-            /**
-             * Reason
-             * @description Reason: 3 to 300 characters.
-             */
-            reason: string;
-        };
         /** @description RFC 9457 problem details. */
         Problem: {
             /**
@@ -186,15 +137,61 @@ export interface components {
             /** @description What would be accepted instead. */
             accepted?: string;
         };
+        StaffSession: {
+            person: {
+                name: string;
+                mail: string;
+            };
+            /** @enum {string} */
+            role: "support" | "supervisor";
+        };
         SignIn: {
             /**
-             * Mail address
              * Format: email
              * @description Mail address, 254 characters at most.
              */
             mail: string;
-            /** Password */
+            /** @description Password */
             password: string;
+        };
+        FoundRequests: {
+            requests: components["schemas"]["FoundRequest"][];
+        };
+        FoundRequest: {
+            id: string;
+            /**
+             * Format: date-time
+             * @description An instant in UTC, RFC 3339.
+             */
+            at: string;
+            key: {
+                id: string;
+                name: string;
+                prefix: string;
+            } | null;
+            method: string;
+            path: string;
+            case: string | null;
+            operation: string | null;
+            /** @description Status answered; 499 where the client hung up first. */
+            status: number;
+            milliseconds: number;
+            points: number;
+            /**
+             * @description Code of the problem answered.
+             * @enum {string|null}
+             */
+            problem: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable" | null;
+            account: {
+                id: string;
+                name: string;
+            } | null;
+        };
+        Find: {
+            /** @description A request id, or a key as it is listed: its environment and first six characters. */
+            query: string;
+            /** @description Reason: 3 to 300 characters. */
+            reason: string;
         };
         StaffRequest: {
             id: string;
@@ -238,13 +235,9 @@ export interface components {
                 name: string;
             } | null;
         };
-        StaffSession: {
-            person: {
-                name: string;
-                mail: string;
-            };
-            /** @enum {string} */
-            role: "support" | "supervisor";
+        Look: {
+            /** @description Reason: 3 to 300 characters. */
+            reason: string;
         };
     };
     responses: never;
