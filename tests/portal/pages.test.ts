@@ -76,7 +76,8 @@ describe.each([390, 1440])('at %d px, light and dark', (width) => {
     expect(await page.title()).toContain('Soakstone')
     expect(await page.getByRole('heading', { level: 1 }).count(), 'one title').toBe(1)
     for (const theme of themes) {
-      await page.emulateMedia({ colorScheme: theme })
+      // Without motion, so that no colour is looked at half-way.
+      await page.emulateMedia({ colorScheme: theme, reducedMotion: 'reduce' })
       if (shots) await page.screenshot({ path: path.join(shots, nameOf(address, width, theme)), fullPage: true })
       expect(await overflow(page), 'sideways scroll').toBeLessThanOrEqual(0)
       expect(await seriousFaults(page, foreign), theme).toEqual([])
