@@ -316,6 +316,8 @@ export interface components {
             sources: string[];
             /** @enum {string} */
             places: "depths" | "none";
+            /** @description The field that says where the body ends; null where it has no end. */
+            depthsEndAt: string | null;
             fields: components["schemas"]["CaseField"][];
             outputs: components["schemas"]["CaseOutput"][];
             absentOutputs: {
@@ -337,6 +339,13 @@ export interface components {
             example: {
                 [key: string]: unknown;
             };
+            /** @description Other ways to state the case, each a whole input. */
+            variants: {
+                title: string;
+                input: {
+                    [key: string]: unknown;
+                };
+            }[];
             /** @description Version of the numbers. */
             solver: string;
         };

@@ -44,12 +44,14 @@ export function descriptionOf(c: Case) {
     formula: [...c.formula],
     sources: [...c.sources],
     places: c.places,
+    depthsEndAt: c.depthsEndAt ?? null,
     fields: fieldsOf(c),
     outputs: outputNamesOf(c).map((name) => ({ name, ...outputOf(c, name) })),
     absentOutputs: Object.entries(c.absentOutputs).map(([name, reason]) => ({ name, reason })),
     cautions: c.cautions.map((id) => ({ id, ...cautions[id] })),
     warnings: Object.entries(warningCodes).map(([code, entry]) => ({ code, ...entry })),
     example: c.example,
+    variants: (c.variants ?? []).map(({ title, input }) => ({ title, input })),
     solver: SOLVER_VERSION,
   }
 }

@@ -53,12 +53,18 @@ export const caseSchema = z
     formula: z.array(text).meta({ description: 'The formula in TeX, one entry a line.' }),
     sources: z.array(text),
     places: z.enum(['depths', 'none']),
+    depthsEndAt: text
+      .nullable()
+      .meta({ description: 'The field that says where the body ends; null where it has no end.' }),
     fields: z.array(fieldSchema),
     outputs: z.array(outputSchema),
     absentOutputs: z.array(z.strictObject({ name: z.enum(outputNames), reason: text })),
     cautions: z.array(z.strictObject({ id: z.enum(Object.keys(cautions)), version: z.number(), text })),
     warnings: z.array(z.strictObject({ code: text, title: text, text })),
     example: z.record(text, z.unknown()),
+    variants: z
+      .array(z.strictObject({ title: text, input: z.record(text, z.unknown()) }))
+      .meta({ description: 'Other ways to state the case, each a whole input.' }),
     solver: text.meta({ description: 'Version of the numbers.' }),
   })
   .meta({ id: 'Case' })

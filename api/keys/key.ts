@@ -1,5 +1,6 @@
-import { createHash, randomInt } from 'node:crypto'
+import { createHash } from 'node:crypto'
 import { crc32 } from 'node:zlib'
+import { customAlphabet } from 'nanoid'
 
 const digits = '0123456789ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz'
 const LENGTH = 32
@@ -17,9 +18,10 @@ export function checksum(random: string): string {
   return text
 }
 
-/** A new key; `pick` chooses digits and is chance unless a test says otherwise. */
-export function newKey(environment: Environment, pick: (below: number) => number = randomInt): string {
-  const random = Array.from({ length: LENGTH }, () => digits[pick(62)]).join('')
+const draw = customAlphabet(digits, LENGTH)
+
+export function newKey(environment: Environment): string {
+  const random = draw()
   return `soak_${environment}_${random}${checksum(random)}`
 }
 

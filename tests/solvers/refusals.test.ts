@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest'
+import { cases } from '../../solvers/cases/index.ts'
 import { DomainError } from '../../solvers/errors.ts'
 import { solve } from '../../solvers/operations/solve.ts'
 import { ask, askSingle, caseOf } from './ask.ts'
@@ -261,14 +262,14 @@ describe('the answer', () => {
     })
     expect(answer.axes.times).toEqual(times)
   })
-  it('fits the schema it is published with', () => {
-    for (const id of ['slab-convection', 'semi-infinite-convection', 'lumped-convection']) {
-      const c = caseOf(id)
-      const outputs = Object.keys(c.outputs)
-      const full = solve.prepare(c, { ...c.example, outputs }, 'full').run()
-      expect(solve.answer(c).safeParse(full).error?.issues).toBeUndefined()
-      const compact = solve.prepare(c, { ...c.example, outputs }, 'compact').run()
-      expect(solve.compactAnswer(c).safeParse(compact).error?.issues).toBeUndefined()
-    }
+  it.each(
+    cases.flatMap((c) =>
+      [c.example, ...(c.variants ?? []).map((v) => v.input)].map((input) => [c.id, c, input] as const),
+    ),
+  )('of %s fits the schema it is published with', (_id, c, input) => {
+    const full = solve.prepare(c, input, 'full').run()
+    expect(solve.answer(c).safeParse(full).error?.issues).toBeUndefined()
+    const compact = solve.prepare(c, input, 'compact').run()
+    expect(solve.compactAnswer(c).safeParse(compact).error?.issues).toBeUndefined()
   })
 })
