@@ -3,7 +3,7 @@ import path from 'node:path'
 import type { Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, test } from 'vitest'
 import { cases } from '../../solvers/cases/index.ts'
-import { seriousFaults } from './harness/axe.ts'
+import { seriousFaults, seriousRules } from './harness/axe.ts'
 import { type Browser, openBrowser } from './harness/browser.ts'
 import { type Portal, startPortal } from './harness/portal.ts'
 import { signInAs } from './harness/sign-in.ts'
@@ -97,6 +97,23 @@ describe.each([390, 1440])('at %d px, light and dark', (width) => {
     for (const sheet of [...staff, { path: `/staff${calls[1]}`, ready: 'form' }]) await look(sheet)
   }, 240_000)
 })
+
+test('the faults of the foreign explorer are the known ones, opened and closed', async () => {
+  const browser = await openBrowser({ width: 1440 })
+  const page = await browser.context.newPage()
+  const broken = new Set<string>()
+  await page.goto(`${portal.url}/reference`)
+  await page.locator('.explorer .opblock').first().waitFor()
+  for (const theme of themes) {
+    await page.emulateMedia({ colorScheme: theme, reducedMotion: 'reduce' })
+    for (const rule of await seriousRules(page, '.explorer')) broken.add(rule)
+  }
+  await page.locator('.explorer .opblock-post button').first().click()
+  await page.locator('.explorer .opblock-body').first().waitFor()
+  for (const rule of await seriousRules(page, '.explorer')) broken.add(rule)
+  expect([...broken].sort()).toEqual(['color-contrast', 'label', 'nested-interactive', 'select-name'])
+  await browser.close()
+}, 120_000)
 
 test('no page scrolls sideways at 320 px, at the breaks, and on a very wide screen', async () => {
   const browser = await openBrowser({ width: 320 })

@@ -4,7 +4,7 @@ import erfcx from '@stdlib/math-base-special-erfcx'
 import { describe, expect, it } from 'vitest'
 import { slabEigenvalues } from '../../solvers/math/slab-eigenvalues.ts'
 import { SlabFilm } from '../../solvers/math/slab-film.ts'
-import { askSingle } from './ask.ts'
+import { ask as askWhole, askSingle } from './ask.ts'
 
 /*
  * Printed values of textbooks and tables. The source stands in each row and is printed with its test; rows whose value
@@ -191,4 +191,25 @@ describe('printed tables', () => {
   it.each(errors.map((k) => [k.source, k.item, k] as const))('%s (from memory): %s', (_source, _item, k) => {
     expect(printedAs(erf(Number(k.inputs['x'])), k.printed)).toBe(k.printed)
   })
+  it.each(pipeline.map((k) => [k.source, k.item, k] as const))('%s (from memory): %s', (_source, _item, k) => {
+    const given = k.inputs as Record<string, number>
+    const { numbers } = pipelineAnswer(given)
+    expect(printedAs(numbers.fourier[0]!, k.printed)).toBe(k.printed)
+  })
 })
+
+function pipelineAnswer(given: Record<string, number>) {
+  const body = {
+    conductivity: given['conductivity_W_mK'],
+    density: given['density_kg_m3'],
+    specificHeat: given['specific_heat_J_kgK'],
+    thickness: 2 * given['half_thickness_m']!,
+    exposedFaces: 2,
+    filmCoefficient: given['film_W_m2K'],
+    initialTemperature: given['initial_C'],
+    ambientTemperature: given['ambient_C'],
+    depths: [0],
+    times: [given['time_s']],
+  }
+  return askWhole('slab-convection', body) as unknown as { numbers: { fourier: number[] } }
+}
