@@ -224,6 +224,26 @@ export interface paths {
         patch?: never;
         trace?: never;
     };
+    "/portal/v1/try/semi-infinite-surface-temperature/solve": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Half space, fixed surface temperature: solve without a key
+         * @description The same answer as with a key, for at most 10000 numbers. Unmetered and limited per address.
+         */
+        post: operations["try-solve-semi-infinite-surface-temperature"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
     "/portal/v1/try/slab-convection/solve": {
         parameters: {
             query?: never;
@@ -238,6 +258,26 @@ export interface paths {
          * @description The same answer as with a key, for at most 10000 numbers. Unmetered and limited per address.
          */
         post: operations["try-solve-slab-convection"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/portal/v1/try/slab-surface-temperature/solve": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Slab, fixed surface temperature: solve without a key
+         * @description The same answer as with a key, for at most 10000 numbers. Unmetered and limited per address.
+         */
+        post: operations["try-solve-slab-surface-temperature"];
         delete?: never;
         options?: never;
         head?: never;
@@ -901,6 +941,197 @@ export interface components {
              */
             detail?: "full" | "compact";
         };
+        SemiInfiniteSurfaceTemperatureSolveAnswer: {
+            /** @enum {string} */
+            case: "semi-infinite-surface-temperature";
+            /** @enum {string} */
+            operation: "solve";
+            /** @description Version of the numbers. */
+            solver: string;
+            /** @description Priced points of this answer, before the floor of a call. */
+            points: number;
+            /** @description The input as used: SI, with defaults and derived properties. */
+            input: {
+                [key: string]: unknown;
+            };
+            axes: {
+                times: number[];
+                depths?: number[];
+            };
+            /** @description UCUM code of each output and axis. */
+            units: {
+                [key: string]: string;
+            };
+            result: {
+                /** @description Temperature at each time and place. Unit Cel. */
+                temperature?: number[][];
+                /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
+                heatFlux?: number[][];
+                /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
+                surfaceHeatFlux?: number[];
+                /** @description Energy stored since time 0; negative where the body cools. Unit J/m2. */
+                heatGained?: number[];
+                /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
+                remainingFraction?: number[][];
+                /** @description Share of the change that is done, computed without cancellation. Unit 1. */
+                completedFraction?: number[][];
+            };
+            accuracy: {
+                method: string[];
+                terms: number;
+                /** @description The temperature scale of the case, K. */
+                scale: number;
+                bound: {
+                    temperature?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    heatFlux?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    surfaceHeatFlux?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    heatGained?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    remainingFraction?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    completedFraction?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                };
+                /** @enum {string} */
+                kind: "proved" | "estimated";
+                /** @enum {string} */
+                scope: "numerical";
+                note: string;
+            };
+            numbers: {
+                biot?: number;
+                fourier?: number[];
+                length?: number;
+                penetrationDepth?: number;
+            };
+            checks: {
+                id: string;
+                holds: boolean;
+                value: number;
+                limit: number;
+                text: string;
+            }[];
+            warnings: {
+                code: string;
+                text: string;
+                value: number;
+            }[];
+            cautions: {
+                id: string;
+                version: number;
+                text: string;
+            }[];
+            sources: string[];
+        };
+        SemiInfiniteSurfaceTemperatureSolveCompactAnswer: {
+            result: {
+                /** @description Temperature at each time and place. Unit Cel. */
+                temperature?: number[][];
+                /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
+                heatFlux?: number[][];
+                /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
+                surfaceHeatFlux?: number[];
+                /** @description Energy stored since time 0; negative where the body cools. Unit J/m2. */
+                heatGained?: number[];
+                /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
+                remainingFraction?: number[][];
+                /** @description Share of the change that is done, computed without cancellation. Unit 1. */
+                completedFraction?: number[][];
+            };
+            accuracy: {
+                bound: {
+                    temperature?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    heatFlux?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    surfaceHeatFlux?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    heatGained?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    remainingFraction?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    completedFraction?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                };
+            };
+            warnings: string[];
+        };
+        /**
+         * @example {
+         *       "conductivity": 1.5,
+         *       "diffusivity": 6.25e-7,
+         *       "initialTemperature": 9,
+         *       "surfaceTemperature": -12,
+         *       "depths": [
+         *         0.5,
+         *         1,
+         *         1.75
+         *       ],
+         *       "times": [
+         *         86400,
+         *         3888000
+         *       ]
+         *     }
+         */
+        SemiInfiniteSurfaceTemperatureSolveInput: {
+            /** @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K). */
+            conductivity?: number;
+            /** @description Density: with specificHeat. Unit kg/m3; a number from 0.01 to 30000 kg/m3. */
+            density?: number;
+            /** @description Specific heat: with density. Unit J/(kg.K); a number from 0.1 to 100000 J/(kg.K). */
+            specificHeat?: number;
+            /** @description Volumetric heat capacity: in place of density and specificHeat, or of diffusivity. Unit J/(m3.K); a number from 0.1 to 1e9 J/(m3.K). */
+            volumetricHeatCapacity?: number;
+            /** @description Diffusivity: in place of a heat capacity. Unit m2/s; a number from 1e-12 to 100 m2/s. */
+            diffusivity?: number;
+            /** @description Initial temperature: the same everywhere at time 0. Unit Cel; a number from -273.15 to 10000 Cel. */
+            initialTemperature: number;
+            /** @description Surface temperature: of the face itself, from time 0 on. Unit Cel; a number from -273.15 to 10000 Cel. */
+            surfaceTemperature: number;
+            /** @description Depths: inward from the exposed face. Unit m; 1 to 2000 values, each a number from 0 to 100000 m. */
+            depths?: number[];
+            /** @description Times: after the change. Unit s; 1 to 100000 values, each a number from 0 to 1e17 s. */
+            times: number[];
+            /**
+             * @description Outputs: some of temperature, heatFlux, surfaceHeatFlux, heatGained, remainingFraction, completedFraction. Default temperature.
+             * @default [
+             *       "temperature"
+             *     ]
+             */
+            outputs: ("temperature" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "remainingFraction" | "completedFraction")[];
+            /**
+             * @description Detail: full, or compact (result, bound and warning codes only).
+             * @enum {string}
+             */
+            detail?: "full" | "compact";
+        };
         SlabConvectionSolveAnswer: {
             /** @enum {string} */
             case: "slab-convection";
@@ -1108,6 +1339,227 @@ export interface components {
             ambientTemperature: number;
             /** @description Film coefficient: total, radiation included; room 7.7, outside 25, water 100 to 3000. Unit W/(m2.K); 0, or a number from 1e-9 to 1e9 W/(m2.K). */
             filmCoefficient: number;
+            /** @description Depths: inward from the exposed face. Unit m; 1 to 2000 values, each a number from 0 to 100000 m. */
+            depths?: number[];
+            /** @description Times: after the change. Unit s; 1 to 100000 values, each a number from 0 to 1e17 s. */
+            times: number[];
+            /**
+             * @description Outputs: some of temperature, heatFlux, surfaceHeatFlux, heatGained, meanTemperature, remainingFraction, completedFraction, heatFraction. Default temperature.
+             * @default [
+             *       "temperature"
+             *     ]
+             */
+            outputs: ("temperature" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "meanTemperature" | "remainingFraction" | "completedFraction" | "heatFraction")[];
+            /**
+             * @description Detail: full, or compact (result, bound and warning codes only).
+             * @enum {string}
+             */
+            detail?: "full" | "compact";
+        };
+        SlabSurfaceTemperatureSolveAnswer: {
+            /** @enum {string} */
+            case: "slab-surface-temperature";
+            /** @enum {string} */
+            operation: "solve";
+            /** @description Version of the numbers. */
+            solver: string;
+            /** @description Priced points of this answer, before the floor of a call. */
+            points: number;
+            /** @description The input as used: SI, with defaults and derived properties. */
+            input: {
+                [key: string]: unknown;
+            };
+            axes: {
+                times: number[];
+                depths?: number[];
+            };
+            /** @description UCUM code of each output and axis. */
+            units: {
+                [key: string]: string;
+            };
+            result: {
+                /** @description Temperature at each time and place. Unit Cel. */
+                temperature?: number[][];
+                /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
+                heatFlux?: number[][];
+                /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
+                surfaceHeatFlux?: number[];
+                /** @description Energy stored since time 0; negative where the body cools. Unit J/m2. */
+                heatGained?: number[];
+                /** @description Mean over the volume. Unit Cel. */
+                meanTemperature?: number[];
+                /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
+                remainingFraction?: number[][];
+                /** @description Share of the change that is done, computed without cancellation. Unit 1. */
+                completedFraction?: number[][];
+                /** @description Heat gained as a share of what the body gains in all. Unit 1. */
+                heatFraction?: number[];
+            };
+            accuracy: {
+                method: string[];
+                terms: number;
+                /** @description The temperature scale of the case, K. */
+                scale: number;
+                bound: {
+                    temperature?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    heatFlux?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    surfaceHeatFlux?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    heatGained?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    meanTemperature?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    remainingFraction?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    completedFraction?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    heatFraction?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                };
+                /** @enum {string} */
+                kind: "proved" | "estimated";
+                /** @enum {string} */
+                scope: "numerical";
+                note: string;
+            };
+            numbers: {
+                biot?: number;
+                fourier?: number[];
+                length?: number;
+                penetrationDepth?: number;
+            };
+            checks: {
+                id: string;
+                holds: boolean;
+                value: number;
+                limit: number;
+                text: string;
+            }[];
+            warnings: {
+                code: string;
+                text: string;
+                value: number;
+            }[];
+            cautions: {
+                id: string;
+                version: number;
+                text: string;
+            }[];
+            sources: string[];
+        };
+        SlabSurfaceTemperatureSolveCompactAnswer: {
+            result: {
+                /** @description Temperature at each time and place. Unit Cel. */
+                temperature?: number[][];
+                /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
+                heatFlux?: number[][];
+                /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
+                surfaceHeatFlux?: number[];
+                /** @description Energy stored since time 0; negative where the body cools. Unit J/m2. */
+                heatGained?: number[];
+                /** @description Mean over the volume. Unit Cel. */
+                meanTemperature?: number[];
+                /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
+                remainingFraction?: number[][];
+                /** @description Share of the change that is done, computed without cancellation. Unit 1. */
+                completedFraction?: number[][];
+                /** @description Heat gained as a share of what the body gains in all. Unit 1. */
+                heatFraction?: number[];
+            };
+            accuracy: {
+                bound: {
+                    temperature?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    heatFlux?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    surfaceHeatFlux?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    heatGained?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    meanTemperature?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    remainingFraction?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    completedFraction?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                    heatFraction?: {
+                        absolute: number;
+                        relative: number;
+                    };
+                };
+            };
+            warnings: string[];
+        };
+        /**
+         * @example {
+         *       "conductivity": 1.7,
+         *       "density": 2300,
+         *       "specificHeat": 900,
+         *       "thickness": 0.2,
+         *       "exposedFaces": 2,
+         *       "initialTemperature": 20,
+         *       "surfaceTemperature": -10,
+         *       "depths": [
+         *         0.02,
+         *         0.1
+         *       ],
+         *       "times": [
+         *         1800,
+         *         14400
+         *       ]
+         *     }
+         */
+        SlabSurfaceTemperatureSolveInput: {
+            /** @description Conductivity: insulation 0.035, brick 0.8, concrete 2, steel 50. Unit W/(m.K); a number from 1e-4 to 10000 W/(m.K). */
+            conductivity?: number;
+            /** @description Density: with specificHeat. Unit kg/m3; a number from 0.01 to 30000 kg/m3. */
+            density?: number;
+            /** @description Specific heat: with density. Unit J/(kg.K); a number from 0.1 to 100000 J/(kg.K). */
+            specificHeat?: number;
+            /** @description Volumetric heat capacity: in place of density and specificHeat, or of diffusivity. Unit J/(m3.K); a number from 0.1 to 1e9 J/(m3.K). */
+            volumetricHeatCapacity?: number;
+            /** @description Diffusivity: in place of a heat capacity. Unit m2/s; a number from 1e-12 to 100 m2/s. */
+            diffusivity?: number;
+            /** @description Thickness: whole, never half. Unit m; a number from 1e-9 to 100000 m. */
+            thickness: number;
+            /** @description Exposed faces: 1 (the far face is insulated) or 2 (both alike). No default: the wrong one changes every time by a factor of four. */
+            exposedFaces: 1 | 2;
+            /** @description Initial temperature: the same everywhere at time 0. Unit Cel; a number from -273.15 to 10000 Cel. */
+            initialTemperature: number;
+            /** @description Surface temperature: of the face itself, from time 0 on. Unit Cel; a number from -273.15 to 10000 Cel. */
+            surfaceTemperature: number;
             /** @description Depths: inward from the exposed face. Unit m; 1 to 2000 values, each a number from 0 to 100000 m. */
             depths?: number[];
             /** @description Times: after the change. Unit s; 1 to 100000 values, each a number from 0 to 1e17 s. */
@@ -3257,6 +3709,195 @@ export interface operations {
             };
         };
     };
+    "try-solve-semi-infinite-surface-temperature": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "conductivity": 1.5,
+                 *       "diffusivity": 6.25e-7,
+                 *       "initialTemperature": 9,
+                 *       "surfaceTemperature": -12,
+                 *       "depths": [
+                 *         0.5,
+                 *         1,
+                 *         1.75
+                 *       ],
+                 *       "times": [
+                 *         86400,
+                 *         3888000
+                 *       ]
+                 *     }
+                 */
+                "application/json": components["schemas"]["SemiInfiniteSurfaceTemperatureSolveInput"];
+            };
+        };
+        responses: {
+            /** @description The answer. */
+            200: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["SemiInfiniteSurfaceTemperatureSolveAnswer"] | components["schemas"]["SemiInfiniteSurfaceTemperatureSolveCompactAnswer"];
+                };
+            };
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). */
+            400: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep";
+                    };
+                };
+            };
+            /** @description The method does not apply (method-not-allowed). */
+            405: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    Allow: components["headers"]["Allow"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "method-not-allowed";
+                    };
+                };
+            };
+            /** @description No acceptable form of answer (not-acceptable). */
+            406: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "not-acceptable";
+                    };
+                };
+            };
+            /** @description The request came too slowly (request-timeout). */
+            408: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "request-timeout";
+                    };
+                };
+            };
+            /** @description The body is too large (body-too-large). Too much for a trial without a key (too-many-values). */
+            413: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "body-too-large" | "too-many-values";
+                    };
+                };
+            };
+            /** @description The body is of another kind (unsupported-media-type). */
+            415: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "unsupported-media-type";
+                    };
+                };
+            };
+            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
+            422: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "invalid-input" | "invalid-parameter";
+                    };
+                };
+            };
+            /** @description Too many calls in a short time (rate-limited). */
+            429: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    "Retry-After": components["headers"]["Retry-After"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "rate-limited";
+                    };
+                };
+            };
+            /** @description The headers are too large (header-too-large). */
+            431: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "header-too-large";
+                    };
+                };
+            };
+            /** @description A fault of ours (internal). */
+            500: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "internal";
+                    };
+                };
+            };
+            /** @description The solve took too long (solve-too-slow). The service is not ready (unavailable). */
+            503: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    "Retry-After": components["headers"]["Retry-After"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "solve-too-slow" | "unavailable";
+                    };
+                };
+            };
+        };
+    };
     "try-solve-slab-convection": {
         parameters: {
             query?: never;
@@ -3299,6 +3940,197 @@ export interface operations {
                 };
                 content: {
                     "application/json": components["schemas"]["SlabConvectionSolveAnswer"] | components["schemas"]["SlabConvectionSolveCompactAnswer"];
+                };
+            };
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). */
+            400: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep";
+                    };
+                };
+            };
+            /** @description The method does not apply (method-not-allowed). */
+            405: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    Allow: components["headers"]["Allow"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "method-not-allowed";
+                    };
+                };
+            };
+            /** @description No acceptable form of answer (not-acceptable). */
+            406: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "not-acceptable";
+                    };
+                };
+            };
+            /** @description The request came too slowly (request-timeout). */
+            408: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "request-timeout";
+                    };
+                };
+            };
+            /** @description The body is too large (body-too-large). Too much for a trial without a key (too-many-values). */
+            413: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "body-too-large" | "too-many-values";
+                    };
+                };
+            };
+            /** @description The body is of another kind (unsupported-media-type). */
+            415: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "unsupported-media-type";
+                    };
+                };
+            };
+            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
+            422: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "invalid-input" | "invalid-parameter";
+                    };
+                };
+            };
+            /** @description Too many calls in a short time (rate-limited). */
+            429: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    "Retry-After": components["headers"]["Retry-After"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "rate-limited";
+                    };
+                };
+            };
+            /** @description The headers are too large (header-too-large). */
+            431: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "header-too-large";
+                    };
+                };
+            };
+            /** @description A fault of ours (internal). */
+            500: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "internal";
+                    };
+                };
+            };
+            /** @description The solve took too long (solve-too-slow). The service is not ready (unavailable). */
+            503: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    "Retry-After": components["headers"]["Retry-After"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "solve-too-slow" | "unavailable";
+                    };
+                };
+            };
+        };
+    };
+    "try-solve-slab-surface-temperature": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "conductivity": 1.7,
+                 *       "density": 2300,
+                 *       "specificHeat": 900,
+                 *       "thickness": 0.2,
+                 *       "exposedFaces": 2,
+                 *       "initialTemperature": 20,
+                 *       "surfaceTemperature": -10,
+                 *       "depths": [
+                 *         0.02,
+                 *         0.1
+                 *       ],
+                 *       "times": [
+                 *         1800,
+                 *         14400
+                 *       ]
+                 *     }
+                 */
+                "application/json": components["schemas"]["SlabSurfaceTemperatureSolveInput"];
+            };
+        };
+        responses: {
+            /** @description The answer. */
+            200: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["SlabSurfaceTemperatureSolveAnswer"] | components["schemas"]["SlabSurfaceTemperatureSolveCompactAnswer"];
                 };
             };
             /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). */

@@ -33,7 +33,7 @@ export interface Resolved {
 /** Signs for the small drawing of the case. */
 export interface Sketch {
   body: 'half-space' | 'slab' | 'lumped'
-  boundary: 'convection'
+  boundary: 'convection' | 'temperature'
 }
 
 /**
@@ -58,6 +58,8 @@ export interface CaseDescription<Shape_ extends z.ZodRawShape, R extends Resolve
   places: 'depths' | 'none'
   /** The field that says where the body ends, so that no depth may lie beyond; absent where it has no end. */
   depthsEndAt?: string & keyof Shape_
+  /** The field with the temperature that the body is driven to; absent where no one field says it. */
+  drive?: string & keyof Shape_
   outputs: Partial<Record<OutputName, Partial<Pick<OutputDescription, 'unit' | 'shape'>>>>
   /** Outputs that a reader would expect and the case cannot have, each with the reason. */
   absentOutputs: Partial<Record<OutputName, string>>
@@ -87,8 +89,9 @@ export type ParsedInput<S extends z.ZodRawShape> = z.infer<z.ZodObject<S>> & {
 }
 
 /** A case with its types hidden, as the lists and operations hold it. */
-export type Case = Omit<CaseDescription<z.ZodRawShape, Resolved>, 'resolve' | 'depthsEndAt'> & {
+export type Case = Omit<CaseDescription<z.ZodRawShape, Resolved>, 'resolve' | 'depthsEndAt' | 'drive'> & {
   depthsEndAt?: string
+  drive?: string
   /** Throws DomainError. */
   resolve(input: Record<string, unknown>): Resolved
 }

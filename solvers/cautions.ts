@@ -15,6 +15,10 @@ export const cautions = {
     version: 1,
     text: 'Indicative temperatures. Limits such as maximum temperature and core-surface difference (e.g. ACI 301: 70 °C, 19 K) are set by the project specification; cracking also depends on restraint and strength.',
   },
+  burial: {
+    version: 1,
+    text: 'Estimate for uniform ground. Local frost-depth rules, utility standards and site investigation govern.',
+  },
   food: {
     version: 1,
     text: 'Time estimate only. Legal cooling and storage limits apply; verify with a calibrated probe.',

@@ -64,6 +64,13 @@ export const initialTemperature = quantity({
   hint: 'the same everywhere at time 0',
 })
 
+export const surfaceTemperature = quantity({
+  ...temperature,
+  symbol: 'Tₛ',
+  label: 'Surface temperature',
+  hint: 'of the face itself, from time 0 on',
+})
+
 export const film = {
   ambientTemperature: quantity({
     ...temperature,

@@ -45,6 +45,7 @@ export function descriptionOf(c: Case) {
     sources: [...c.sources],
     places: c.places,
     depthsEndAt: c.depthsEndAt ?? null,
+    drive: c.drive ?? null,
     fields: fieldsOf(c),
     outputs: outputNamesOf(c).map((name) => ({ name, ...outputOf(c, name) })),
     absentOutputs: Object.entries(c.absentOutputs).map(([name, reason]) => ({ name, reason })),

@@ -56,6 +56,7 @@ export const caseSchema = z
     depthsEndAt: text
       .nullable()
       .meta({ description: 'The field that says where the body ends; null where it has no end.' }),
+    drive: text.nullable().meta({ description: 'The field with the temperature that the body is driven to.' }),
     fields: z.array(fieldSchema),
     outputs: z.array(outputSchema),
     absentOutputs: z.array(z.strictObject({ name: z.enum(outputNames), reason: text })),

@@ -1,5 +1,6 @@
 import erf from '@stdlib/math-base-special-erf'
 import erfcx from '@stdlib/math-base-special-erfcx'
+import { gauss } from './gauss.ts'
 import { ierfcx } from './ierfcx.ts'
 import { EPS } from './rounding.ts'
 
@@ -20,16 +21,6 @@ const TWO_OVER_SQRT_PI = 1.1283791670955126
 /** e^(−η²) underflows beyond. */
 const FAR = 27.5
 
-/* Gauss-Legendre rule of 12 points on [−1, 1], positive half (Abramowitz & Stegun, table 25.4). */
-const NODES = [
-  0.1252334085114689, 0.3678314989981802, 0.5873179542866175, 0.7699026741943047, 0.9041172563704749,
-  0.9815606342467192,
-]
-const WEIGHTS = [
-  0.2491470458134028, 0.2334925365383548, 0.2031674267230659, 0.1600783285433462, 0.1069393259953184,
-  0.0471753363865118,
-]
-
 /** u(η, β). Relative error within completedError(η). Domain η ≥ 0, β ≥ 0. */
 export function completed(eta: number, beta: number): number {
   if (eta > FAR) return 0
@@ -39,13 +30,7 @@ export function completed(eta: number, beta: number): number {
 /** erfcx(η) − erfcx(η + β), by quadrature of −erfcx′ = 2·ierfcx where the difference would cancel. */
 function scaledDifference(eta: number, beta: number): number {
   if (beta >= Math.max(0.7, eta)) return erfcx(eta) - erfcx(eta + beta)
-  const half = beta / 2
-  let sum = 0
-  for (let i = 0; i < NODES.length; i++) {
-    const step = half * NODES[i]!
-    sum += WEIGHTS[i]! * (ierfcx(eta + half - step) + ierfcx(eta + half + step))
-  }
-  return beta * sum
+  return 2 * gauss(ierfcx, eta, beta)
 }
 
 export function remaining(eta: number, beta: number): number {

@@ -46,7 +46,7 @@ export function solveDirect(id: string, body: Record<string, unknown>): Solution
   return c.solve(c.resolve({ ...body }))
 }
 
-const inputsOfTemperature = ['initialTemperature', 'ambientTemperature']
+const inputsOfTemperature = ['initialTemperature', 'ambientTemperature', 'surfaceTemperature']
 
 /** K = Σ |p ∂y/∂p| over the numbers of the input, by central differences. */
 export function condition(id: string, body: Record<string, unknown>, output: OutputName): number {

@@ -20,7 +20,7 @@ export interface Golden {
 }
 
 export function compute(): Golden {
-  const times = [0, ...Array.from({ length: 40 }, (_, i) => 10 ** (i / 5))]
+  const times = Array.from({ length: 41 }, (_, i) => 10 ** (i / 5))
   const digests = cases.map((c) => {
     const body = { ...c.example, times, outputs: outputNamesOf(c) }
     const { result, accuracy } = solve.prepare(c, body, 'compact').run() as { result: unknown; accuracy: unknown }

@@ -1,7 +1,8 @@
 import fc from 'fast-check'
 import type { OutputName } from '../../solvers/outputs.ts'
-import { D } from './exact/functions.ts'
+import { D, erf, erfc, PI } from './exact/functions.ts'
 import { exactEnergy, exactHalfSpace, exactSlab } from './exact/film.ts'
+import { exactFixedSlab } from './exact/fixed.ts'
 
 /*
  * Random questions with their exact answers. Inputs are decimals of 20 digits, so that rounding them to doubles is
@@ -159,6 +160,80 @@ const lumped = fc
     }
   })
 
+const fixedSlab = fc
+  .record({
+    ...common,
+    d: decades(1e-3, 10),
+    faces: fc.constantFrom(1, 2),
+    behind: fc.boolean(),
+    fourier: fc.oneof(decades(1e-3, 1), decades(1e-9, 1e3)),
+  })
+  .map((r): RandomRow => {
+    const { k, density, specificHeat } = r.solid
+    const length = r.d.div(r.faces)
+    const capacity = density.mul(specificHeat)
+    const time = r.fourier.mul(length).mul(length).mul(capacity).div(k).toSignificantDigits(20)
+    const near = D.min(length, length.mul(r.share).toSignificantDigits(20))
+    const mirrored = r.faces === 2 && r.behind
+    const depth = mirrored ? r.d.minus(near) : near
+    const fourier = k.mul(time).div(capacity).div(length).div(length)
+    const at = exactFixedSlab(fourier, near.div(length))
+    const face = exactFixedSlab(fourier, new D(0))
+    const step = r.ambient.minus(r.initial)
+    const unit = k.mul(step).div(length)
+    return {
+      caseId: 'slab-surface-temperature',
+      body: { ...heldBodyOf(r, time), thickness: number(r.d), exposedFaces: r.faces, depths: [number(depth)] },
+      exact: {
+        temperature: r.ambient.minus(step.mul(at.remaining)),
+        meanTemperature: r.ambient.minus(step.mul(at.mean)),
+        remainingFraction: at.remaining,
+        completedFraction: at.completed,
+        heatFraction: at.heat,
+        heatFlux: unit.mul(at.flux).mul(mirrored ? -1 : 1),
+        surfaceHeatFlux: unit.mul(face.flux),
+        heatGained: capacity.mul(length).mul(step).mul(at.heat),
+      },
+      ...contractOf(r, unit.mul(face.flux)),
+      label: `Fo ${fourier.toPrecision(3)} depth ${near.div(length).toPrecision(3)} of L`,
+    }
+  })
+
+const fixedHalfSpace = fc
+  .record({ ...common, d: decades(1e-3, 10), fourier: decades(1e-3, 1e4) })
+  .map((r): RandomRow => {
+    const { k, density, specificHeat } = r.solid
+    const capacity = density.mul(specificHeat)
+    const time = r.fourier.mul(r.d).mul(r.d).mul(capacity).div(k).toSignificantDigits(20)
+    const depth = r.d.mul(r.share).toSignificantDigits(20)
+    const eta = depth.div(k.mul(time).div(capacity).sqrt().mul(2))
+    const step = r.ambient.minus(r.initial)
+    const surface = k.mul(capacity).div(PI.mul(time)).sqrt().mul(step)
+    return {
+      caseId: 'semi-infinite-surface-temperature',
+      body: { ...heldBodyOf(r, time), depths: [number(depth)] },
+      exact: {
+        temperature: r.initial.plus(step.mul(erfc(eta))),
+        remainingFraction: erf(eta),
+        completedFraction: erfc(eta),
+        heatFlux: surface.mul(eta.mul(eta).neg().exp()),
+        surfaceHeatFlux: surface,
+        heatGained: k.mul(capacity).mul(time).div(PI).sqrt().mul(2).mul(step),
+      },
+      ...contractOf(r, surface),
+      label: `η ${eta.toPrecision(3)}`,
+    }
+  })
+
+function heldBodyOf(r: Drawn, time: D): Record<string, unknown> {
+  const { conductivity, density, specificHeat, initialTemperature, ambientTemperature, times } = bodyOf(
+    r,
+    new D(0),
+    time,
+  )
+  return { conductivity, density, specificHeat, initialTemperature, surfaceTemperature: ambientTemperature, times }
+}
+
 type Drawn = { solid: { k: D; density: D; specificHeat: D }; initial: D; ambient: D }
 
 function bodyOf(r: Drawn, film: D, time: D): Record<string, unknown> {
@@ -185,4 +260,6 @@ export const randomRows = {
   'slab-convection': slab,
   'semi-infinite-convection': halfSpace,
   'lumped-convection': lumped,
+  'slab-surface-temperature': fixedSlab,
+  'semi-infinite-surface-temperature': fixedHalfSpace,
 }

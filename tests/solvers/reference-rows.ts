@@ -37,6 +37,10 @@ const filmOf = (i: Record<string, number>) => ({
   initialTemperature: i['initial_C'],
   ambientTemperature: i['ambient_C'],
 })
+const heldOf = (i: Record<string, number>) => ({
+  initialTemperature: i['initial_C'],
+  surfaceTemperature: i['surface_C'],
+})
 const unitSolid = { conductivity: 1, diffusivity: 1 }
 
 const kinds: Record<string, { file: string; ask: Ask; names: Names }> = {
@@ -75,6 +79,58 @@ const kinds: Record<string, { file: string; ask: Ask; names: Names }> = {
       surface_heat_flux_W_m2: 'surfaceHeatFlux',
       energy_J_m2: 'heatGained',
     },
+  },
+  A1: {
+    file: 'A_semi_infinite',
+    ask: (i) => ({
+      caseId: 'semi-infinite-surface-temperature',
+      body: { ...solidOf(i), ...heldOf(i), depths: [i['position_m']], times: [i['time_s']] },
+    }),
+    names: {
+      temperature_C: 'temperature',
+      change_ratio: 'completedFraction',
+      heat_flux_W_m2: 'heatFlux',
+      surface_heat_flux_W_m2: 'surfaceHeatFlux',
+      energy_J_m2: 'heatGained',
+    },
+  },
+  B1: {
+    file: 'B_slab',
+    ask: (i) => ({
+      caseId: 'slab-surface-temperature',
+      body: {
+        ...solidOf(i),
+        ...heldOf(i),
+        thickness: 2 * i['half_thickness_m']!,
+        exposedFaces: 2,
+        depths: [depthOf(i['half_thickness_m']!, i['position_m']!)],
+        times: [i['time_s']],
+      },
+    }),
+    names: {
+      temperature_C: 'temperature',
+      theta: 'remainingFraction',
+      average_C: 'meanTemperature',
+      heat_fraction: 'heatFraction',
+      surface_heat_flux_W_m2: 'surfaceHeatFlux',
+      energy_J_m2: 'heatGained',
+    },
+  },
+  'I-slabstep': {
+    file: 'I_extremes',
+    ask: (i) => ({
+      caseId: 'slab-surface-temperature',
+      body: {
+        ...unitSolid,
+        thickness: 2,
+        exposedFaces: 2,
+        initialTemperature: 1,
+        surfaceTemperature: 0,
+        times: [i['fourier']],
+        depths: [depthOf(1, i['position_ratio']!)],
+      },
+    }),
+    names: { theta: 'remainingFraction', one_minus_theta: 'completedFraction' },
   },
   D1: {
     file: 'D_lumped',

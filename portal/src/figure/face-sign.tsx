@@ -7,7 +7,7 @@ interface Props {
   turned?: boolean
 }
 
-/** What acts on a face: waves of a fluid, or short ticks where no heat passes. */
+/** What acts on a face: waves of a fluid, a thick line where it is held, or short ticks where no heat passes. */
 export function FaceSign({ at, from, to, kind, turned = false }: Props) {
   const d = turned ? -1 : 1
   const rows = (first: number, every: number, last: number) =>
@@ -21,6 +21,7 @@ export function FaceSign({ at, from, to, kind, turned = false }: Props) {
         ))}
       </g>
     )
+  if (kind === 'temperature') return <line className="now" x1={at - 5 * d} x2={at - 5 * d} y1={from} y2={to} />
   return rows(from + 10, 17, to - 4).map((y) => (
     <path
       key={y}

@@ -9,7 +9,9 @@ export interface Field {
   /** °C, one row a time. */
   values: readonly (readonly number[])[]
   initial: number
-  ambient: number
+  /** Temperature that the body is driven to, and by what: a fluid through its film, or its face held there. */
+  drive: number
+  held: boolean
   back: Back
 }
 
@@ -34,7 +36,7 @@ export function temperatureRange(values: readonly number[]): Range {
 }
 
 export function rangeOf(field: Field): Range {
-  return temperatureRange([field.initial, field.ambient, ...field.values.flatMap((row) => [row[0]!, row.at(-1)!])])
+  return temperatureRange([field.initial, field.drive, ...field.values.flatMap((row) => [row[0]!, row.at(-1)!])])
 }
 
 export interface Isotherms {
@@ -43,8 +45,8 @@ export interface Isotherms {
   key: number | undefined
 }
 
-export function isothermsOf({ initial, ambient, values }: Field): Isotherms {
-  const [low, high] = [Math.min(initial, ambient), Math.max(initial, ambient)]
+export function isothermsOf({ initial, drive, values }: Field): Isotherms {
+  const [low, high] = [Math.min(initial, drive), Math.max(initial, drive)]
   if (high - low < 1e-9) return { levels: [], key: undefined }
   const all = values.flat()
   const [least, most] = [all.reduce((a, b) => Math.min(a, b)), all.reduce((a, b) => Math.max(a, b))]

@@ -5,10 +5,10 @@ import { plain } from './measures.ts'
 /** The fluid before the face: its temperature, and the drop from it to the face. */
 export function Film({ field, layout, face }: { field: Field; layout: Layout; face: number }) {
   const { axis, left, top, bottom, small, y } = layout
-  const cold = field.ambient < field.initial
+  const cold = field.drive < field.initial
   const width = small ? 16 : 30
   const edge = left - width
-  const level = y(field.ambient)
+  const level = y(field.drive)
   const name = cold ? 't-frost' : 't-clay'
   return (
     <g>
@@ -21,7 +21,7 @@ export function Film({ field, layout, face }: { field: Field; layout: Layout; fa
       ) : (
         <>
           <text className={`${name} halo`} x={axis + 6} y={cold ? level - 8 : level + 18}>
-            {`fluid ${plain(field.ambient)} °C`}
+            {`fluid ${plain(field.drive)} °C`}
           </text>
           <text x={edge - 5} y={cold ? top + 20 : bottom - 9} textAnchor="end">
             film

@@ -51,7 +51,7 @@ function rowsOf({ times }: Field, cut: Cut): number[] {
 /** At the end of the profile; in a body without end, where all profiles meet, half-way down the change. */
 function labelPlace(field: Field, { right, top, y }: Layout, curve: readonly Point[]): Point {
   if (field.back === 'endless') {
-    const half = y((field.initial + field.ambient) / 2)
+    const half = y((field.initial + field.drive) / 2)
     const side = Math.sign(y(field.initial) - half)
     const at = curve.find(([, level]) => (level - half) * side >= 0)
     return at ? [at[0] + 4, half + 14] : [right - 6, half]

@@ -63,7 +63,7 @@ function Isotherms({ field, layout, cut }: Omit<Props, 'history'>) {
   const onPaper = (points: readonly Point[]) => points.map(([depth, time]) => [x(depth), z(time)] as const)
   const drawn = lines.levels.map(({ level, parts }) => ({ level, parts: parts.map(onPaper) }))
   const far = lines.far.map((outline) => pathOf(onPaper(outline)) + 'Z').join('')
-  const cold = field.ambient < field.initial
+  const cold = field.drive < field.initial
   const keyed = cold ? 'zero' : 'now'
   const labels = placeLabels(drawn, layout, [x(field.depths[cut.column]!), z(field.times[cut.row]!)])
   return (
@@ -91,7 +91,7 @@ function Isotherms({ field, layout, cut }: Omit<Props, 'history'>) {
 function linesOf(field: Field) {
   const { depths, times, values } = field
   const { levels, key } = isothermsOf(field)
-  const sign = field.ambient < field.initial ? -1 : 1
+  const sign = field.drive < field.initial ? -1 : 1
   const turned = values.map((row) => row.map((value) => sign * value))
   return {
     key,

@@ -2,6 +2,7 @@ import { Dimension } from './dimension.tsx'
 import { pathOf } from './points.ts'
 import type { Cut, Field } from './field.ts'
 import { Film } from './film.tsx'
+import { HeldFace } from './held-face.tsx'
 import { type Hatch, hatched } from './hatches.tsx'
 import type { Layout } from './layout.ts'
 import { OtherProfiles, profileOf } from './other-profiles.tsx'
@@ -72,7 +73,11 @@ export function ProfileSection({ field, layout, cut, hatch, material }: Props) {
       {range.low < 0 && range.high > 0 && <line className="dash" x1={axis} x2={right} y1={y(0)} y2={y(0)} />}
       <line className="dash" x1={left} x2={right} y1={y(field.initial)} y2={y(field.initial)} />
       <OtherProfiles field={field} layout={layout} cut={cut} />
-      <Film field={field} layout={layout} face={field.values[cut.row]![0]!} />
+      {field.held ? (
+        <HeldFace field={field} layout={layout} />
+      ) : (
+        <Film field={field} layout={layout} face={field.values[cut.row]![0]!} />
+      )}
       <path className="now" d={pathOf(profileOf(field, layout, cut.row))} />
       <Dimension
         from={left}
@@ -96,7 +101,7 @@ export function ProfileReading({
   const value = field.values[cut.row]![cut.column]!
   const at = x(field.depths[cut.column]!)
   const before = at > left + (right - left) * 0.62
-  const falling = field.initial > field.ambient
+  const falling = field.initial > field.drive
   return (
     <g>
       <line className="proj" x1={at} x2={at} y1={bottom + (history ? 4 : 0)} y2={y(value)} />

@@ -31,7 +31,9 @@ export type Drawing = FieldDrawing | HistoryDrawing
 interface Drawn {
   id: string
   places: 'depths' | 'none'
-  sketch: { body: string }
+  sketch: { body: string; boundary: string }
+  depthsEndAt: string | null
+  drive: string | null
 }
 
 /** Everything a drawing of a body's answer needs, from one solve on a grid; null where no time lies after the change. */
@@ -57,11 +59,11 @@ async function drawingOf(
   const first = isFull(answer) ? answer : await trySolve(c.id, { ...body, detail: 'full' }, signal)
   if (!isFull(first)) throw new Error('a full answer was asked for')
   const time = asked.times.find((t) => t > 0.05 * end && t < 0.7 * end) ?? end / 4
-  if (c.places === 'none') return historyOf(c.id, rest, first, end, time, asked, signal)
-  const { extent, back } = shapeOf(c.sketch.body, first, asked.depths)
+  if (c.places === 'none') return historyOf(c, rest, first, end, time, asked, signal)
+  const { extent, back } = shapeOf(c, first, asked.depths)
   const grid = gridOf({ extent, end, ...asked })
   const values = await gridValues(c.id, rest, grid, signal)
-  const field = { ...grid, values, back, ...surroundings(first) }
+  const field = { ...grid, values, back, held: c.sketch.boundary === 'temperature', ...surroundings(c, first) }
   const depth = asked.depths.find((d) => d > 0 && d < extent) ?? extent * 0.32
   return { kind: 'field', field, start: { time, depth }, asked: rounded(asked) }
 }
@@ -77,7 +79,7 @@ export async function gridValues(
 }
 
 async function historyOf(
-  caseId: string,
+  c: Drawn,
   rest: Body,
   first: Answer,
   end: number,
@@ -86,31 +88,30 @@ async function historyOf(
   signal: AbortSignal,
 ): Promise<HistoryDrawing> {
   const { times } = gridOf({ extent: 1, end, depths: [], times: asked.times })
-  const answer = await trySolve(caseId, { ...rest, times, outputs: ['temperature'], detail: 'compact' }, signal)
-  const { initial, ambient } = surroundings(first)
+  const answer = await trySolve(c.id, { ...rest, times, outputs: ['temperature'], detail: 'compact' }, signal)
+  const { initial, drive } = surroundings(c, first)
   return {
     kind: 'history',
     times,
     values: answer.result.temperature as number[],
-    levels: [initial, ambient],
+    levels: [initial, drive],
     start: { time },
     asked: rounded(asked),
   }
 }
 
 /** How far the drawing reaches into the body, and what lies behind. */
-function shapeOf(body: string, { input, numbers }: Answer, depths: readonly number[]): { extent: number; back: Back } {
-  const thickness = input['thickness']
-  if (body === 'slab' && typeof thickness === 'number')
-    return input['exposedFaces'] === 2
-      ? { extent: thickness / 2, back: 'mirror' }
-      : { extent: thickness, back: 'insulated' }
+function shapeOf(c: Drawn, { input, numbers }: Answer, depths: readonly number[]): { extent: number; back: Back } {
+  const end = c.depthsEndAt === null ? undefined : input[c.depthsEndAt]
+  if (typeof end === 'number')
+    return input['exposedFaces'] === 2 ? { extent: end / 2, back: 'mirror' } : { extent: end, back: 'insulated' }
   const reach = (numbers as Record<string, unknown>)['penetrationDepth']
   return { extent: niceCeiling(Math.max(...depths, typeof reach === 'number' ? reach : 0) || 1), back: 'endless' }
 }
 
-function surroundings({ input }: Answer): { initial: number; ambient: number } {
-  return { initial: Number(input['initialTemperature']), ambient: Number(input['ambientTemperature']) }
+function surroundings(c: Drawn, { input }: Answer): { initial: number; drive: number } {
+  const initial = Number(input['initialTemperature'])
+  return { initial, drive: c.drive === null ? initial : Number(input[c.drive]) }
 }
 
 const numbersOf = (value: unknown): number[] => (Array.isArray(value) ? value.filter((v) => typeof v === 'number') : [])

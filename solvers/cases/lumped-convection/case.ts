@@ -85,6 +85,7 @@ export default defineCase<typeof fields, LumpedResolved>({
   sketch: { body: 'lumped', boundary: 'convection' },
   fields,
   places: 'none',
+  drive: 'ambientTemperature',
   outputs: {
     temperature: {},
     heatGained: { unit: 'J' },

@@ -24,6 +24,7 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
   sketch: { body: 'half-space', boundary: 'convection' },
   fields,
   places: 'depths',
+  drive: 'ambientTemperature',
   outputs: {
     temperature: {},
     heatFlux: {},

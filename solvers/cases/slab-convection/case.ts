@@ -2,7 +2,8 @@ import { defineCase, type Resolved } from '../../case.ts'
 import { exposedFaces, film, initialTemperature, solid, thickness } from '../../fields.ts'
 import { filmWarnings } from '../../film.ts'
 import { resolveSolid } from '../../solid.ts'
-import { characteristicLength, solve, type SlabInput } from './solve.ts'
+import { characteristicLength } from '../../slab-step.ts'
+import { solve, type SlabInput } from './solve.ts'
 
 type SlabResolved = SlabInput & Resolved
 
@@ -27,6 +28,7 @@ export default defineCase<typeof fields, SlabResolved>({
   fields,
   places: 'depths',
   depthsEndAt: 'thickness',
+  drive: 'ambientTemperature',
   outputs: {
     temperature: {},
     heatFlux: {},

@@ -40,7 +40,7 @@ function Section({ sketch, title, body, place, width }: Props & { place: number;
     <Drawing
       width={width}
       height={slab ? 216 : 186}
-      label={`${title}: film before ${both ? 'both faces' : 'the face'}, one position marked`}
+      label={`${title}: ${sketch.boundary === 'temperature' ? 'temperature held at' : 'film before'} ${both ? 'both faces' : 'the face'}, one position marked`}
     >
       <rect className="w-sheet" x={face} y={top} width={far - face} height={bottom - top} />
       <rect
@@ -87,7 +87,7 @@ function Section({ sketch, title, body, place, width }: Props & { place: number;
         T(x, t)
       </text>
       <text className="t-it" x={8} y={18}>
-        h, Tₐ
+        {sketch.boundary === 'temperature' ? 'Tₛ' : 'h, Tₐ'}
       </text>
       {place > 0 && <Dimension from={face} to={at} y={bottom + 22} reach={14} />}
       <text className="t-it halo" x={(face + at) / 2} y={bottom + 17} textAnchor="middle">

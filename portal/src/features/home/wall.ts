@@ -43,7 +43,14 @@ export const fieldQuery = (filmCoefficient: number) =>
     queryKey: ['try', CASE, 'wall', filmCoefficient],
     queryFn: async ({ signal }): Promise<Field> => {
       const values = await gridValues(CASE, { ...wall, filmCoefficient }, grid, signal)
-      return { ...grid, values, initial: wall.initialTemperature, ambient: wall.ambientTemperature, back: 'insulated' }
+      return {
+        ...grid,
+        values,
+        initial: wall.initialTemperature,
+        drive: wall.ambientTemperature,
+        held: false,
+        back: 'insulated',
+      }
     },
     placeholderData: keepPreviousData,
     staleTime: Infinity,

@@ -1,0 +1,23 @@
+import type { Field } from './field.ts'
+import type { Layout } from './layout.ts'
+import { plain } from './measures.ts'
+
+/** A face held at a temperature: a thick line before it, and its level. */
+export function HeldFace({ field, layout }: { field: Field; layout: Layout }) {
+  const { axis, left, top, bottom, small, y } = layout
+  const cold = field.drive < field.initial
+  const level = y(field.drive)
+  return (
+    <g>
+      <line className={cold ? 'cold' : 'now'} x1={axis} x2={left} y1={level} y2={level} />
+      <line className="now" x1={left - 5} x2={left - 5} y1={top} y2={bottom} />
+      <text
+        className={`${cold ? 't-frost' : 't-clay'} halo`}
+        x={axis + (small ? 2 : 6)}
+        y={cold ? level - 8 : level + 18}
+      >
+        {small ? 'face' : `face ${plain(field.drive)} °C`}
+      </text>
+    </g>
+  )
+}

@@ -1,0 +1,90 @@
+import { defineCase, type Resolved } from '../../case.ts'
+import { initialTemperature, solid, surfaceTemperature } from '../../fields.ts'
+import { penetrationDepth } from '../../half-space-reach.ts'
+import { refuseFluxAtStep } from '../../singular.ts'
+import { resolveSolid } from '../../solid.ts'
+import { solve, type HalfSpaceInput } from './solve.ts'
+
+type HalfSpaceResolved = HalfSpaceInput & Resolved
+
+const fields = { ...solid, initialTemperature, surfaceTemperature }
+
+export default defineCase<typeof fields, HalfSpaceResolved>({
+  id: 'semi-infinite-surface-temperature',
+  title: 'Half space, fixed surface temperature',
+  summary: 'A body too deep for its back to be felt is held at another temperature at its surface.',
+  notes:
+    'For ground, thick concrete and the first minutes of any body whose face temperature is known: measured on the face, or held by a change of phase or a strong film. It holds while the far side has felt nothing: numbers.penetrationDepth is where 1 % of the change has arrived at the last time, and the body must be deeper. Taking a fixed face in place of a film shortens times by about 2/(Bi + 2).',
+  formula: [
+    '\\frac{T - T_s}{T_i - T_s} = \\operatorname{erf}(\\eta), \\qquad \\eta = \\frac{x}{2\\sqrt{at}}',
+    'q = \\frac{\\sqrt{k\\rho c}\\,(T_s - T_i)}{\\sqrt{\\pi t}}\\, e^{-\\eta^2}, \\qquad Q = 2\\sqrt{k\\rho c}\\,(T_s - T_i)\\sqrt{t/\\pi}',
+  ],
+  sources: ['H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, section 2.4'],
+  family: 'half-space',
+  sketch: { body: 'half-space', boundary: 'temperature' },
+  fields,
+  places: 'depths',
+  drive: 'surfaceTemperature',
+  outputs: {
+    temperature: {},
+    heatFlux: {},
+    surfaceHeatFlux: {},
+    heatGained: {},
+    remainingFraction: {},
+    completedFraction: {},
+  },
+  absentOutputs: {
+    meanTemperature: 'The body has no end, so its mean stays the initial temperature.',
+    heatFraction: 'The heat that the body takes up in all is infinite.',
+    steadyTemperature: 'The body ends at the surface temperature, after infinite time.',
+    timeConstant: 'A body without end has no time constant.',
+  },
+  weight: 1,
+  setUp: 0,
+  cautions: ['burial', 'general'],
+  example: {
+    conductivity: 1.5,
+    diffusivity: 6.25e-7,
+    initialTemperature: 9,
+    surfaceTemperature: -12,
+    depths: [0.5, 1, 1.75],
+    times: [86400, 3888000],
+  },
+  variants: [
+    {
+      title: 'A concrete face at once at another temperature, all outputs',
+      input: {
+        conductivity: 1.7,
+        density: 2300,
+        specificHeat: 900,
+        initialTemperature: 20,
+        surfaceTemperature: -10,
+        depths: [0, 0.02],
+        times: [600, 86400],
+        outputs: ['temperature', 'heatFlux', 'surfaceHeatFlux', 'heatGained', 'remainingFraction', 'completedFraction'],
+      },
+    },
+  ],
+  resolve(input, refuse): HalfSpaceResolved {
+    const body = resolveSolid(input, refuse)
+    refuseFluxAtStep(input, (depth) => depth === 0, refuse)
+    const { initialTemperature, surfaceTemperature, times, outputs } = input
+    return { ...body!, initialTemperature, surfaceTemperature, depths: input.depths ?? [], times, outputs }
+  },
+  solve,
+  numbers: (input) => ({ penetrationDepth: penetrationDepth(input.diffusivity, input.times) }),
+  checks(input) {
+    const reach = penetrationDepth(input.diffusivity, input.times)
+    const deepest = input.depths.reduce((most, depth) => Math.max(most, depth), 0)
+    return [
+      {
+        id: 'change-has-arrived',
+        holds: deepest <= reach,
+        value: deepest,
+        limit: reach,
+        text: 'The deepest position lies within the depth that 1 % of a surface step has reached at the last time.',
+      },
+    ]
+  },
+  warnings: () => [],
+})
