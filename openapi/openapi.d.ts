@@ -285,7 +285,7 @@ export interface components {
              * @description What clients match.
              * @enum {string}
              */
-            code: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
+            code: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "too-many-names" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
             title: string;
             status: number;
             detail: string;
@@ -503,7 +503,10 @@ export interface components {
                         relative: number;
                     };
                 };
-                /** @enum {string} */
+                /**
+                 * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
+                 * @enum {string}
+                 */
                 kind: "proved" | "estimated";
                 /** @enum {string} */
                 scope: "numerical";
@@ -720,7 +723,10 @@ export interface components {
                         relative: number;
                     };
                 };
-                /** @enum {string} */
+                /**
+                 * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
+                 * @enum {string}
+                 */
                 kind: "proved" | "estimated";
                 /** @enum {string} */
                 scope: "numerical";
@@ -915,7 +921,10 @@ export interface components {
                         relative: number;
                     };
                 };
-                /** @enum {string} */
+                /**
+                 * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
+                 * @enum {string}
+                 */
                 kind: "proved" | "estimated";
                 /** @enum {string} */
                 scope: "numerical";
@@ -1118,7 +1127,10 @@ export interface components {
                         relative: number;
                     };
                 };
-                /** @enum {string} */
+                /**
+                 * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
+                 * @enum {string}
+                 */
                 kind: "proved" | "estimated";
                 /** @enum {string} */
                 scope: "numerical";
@@ -1342,7 +1354,10 @@ export interface components {
                         relative: number;
                     };
                 };
-                /** @enum {string} */
+                /**
+                 * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
+                 * @enum {string}
+                 */
                 kind: "proved" | "estimated";
                 /** @enum {string} */
                 scope: "numerical";
@@ -2047,7 +2062,7 @@ export interface operations {
                     "application/json": components["schemas"]["LumpedConvectionSolveAnswer"] | components["schemas"]["LumpedConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -2056,7 +2071,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
                     };
                 };
             };
@@ -2254,7 +2269,7 @@ export interface operations {
                     "application/json": components["schemas"]["SemiInfiniteConvectionSolveAnswer"] | components["schemas"]["SemiInfiniteConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -2263,7 +2278,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
                     };
                 };
             };
@@ -2459,7 +2474,7 @@ export interface operations {
                     "application/json": components["schemas"]["SemiInfiniteSurfaceTemperatureSolveAnswer"] | components["schemas"]["SemiInfiniteSurfaceTemperatureSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -2468,7 +2483,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
                     };
                 };
             };
@@ -2667,7 +2682,7 @@ export interface operations {
                     "application/json": components["schemas"]["SlabConvectionSolveAnswer"] | components["schemas"]["SlabConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -2676,7 +2691,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
                     };
                 };
             };
@@ -2874,7 +2889,7 @@ export interface operations {
                     "application/json": components["schemas"]["SlabSurfaceTemperatureSolveAnswer"] | components["schemas"]["SlabSurfaceTemperatureSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -2883,7 +2898,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
                     };
                 };
             };

@@ -299,7 +299,7 @@ export interface components {
              * @description What clients match.
              * @enum {string}
              */
-            code: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
+            code: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "too-many-names" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
             title: string;
             status: number;
             detail: string;
@@ -484,7 +484,7 @@ export interface components {
              * @description Code of the problem answered.
              * @enum {string|null}
              */
-            problem: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable" | null;
+            problem: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "too-many-names" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable" | null;
         };
         Request: {
             id: string;
@@ -595,7 +595,10 @@ export interface components {
                         relative: number;
                     };
                 };
-                /** @enum {string} */
+                /**
+                 * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
+                 * @enum {string}
+                 */
                 kind: "proved" | "estimated";
                 /** @enum {string} */
                 scope: "numerical";
@@ -812,7 +815,10 @@ export interface components {
                         relative: number;
                     };
                 };
-                /** @enum {string} */
+                /**
+                 * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
+                 * @enum {string}
+                 */
                 kind: "proved" | "estimated";
                 /** @enum {string} */
                 scope: "numerical";
@@ -1007,7 +1013,10 @@ export interface components {
                         relative: number;
                     };
                 };
-                /** @enum {string} */
+                /**
+                 * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
+                 * @enum {string}
+                 */
                 kind: "proved" | "estimated";
                 /** @enum {string} */
                 scope: "numerical";
@@ -1210,7 +1219,10 @@ export interface components {
                         relative: number;
                     };
                 };
-                /** @enum {string} */
+                /**
+                 * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
+                 * @enum {string}
+                 */
                 kind: "proved" | "estimated";
                 /** @enum {string} */
                 scope: "numerical";
@@ -1434,7 +1446,10 @@ export interface components {
                         relative: number;
                     };
                 };
-                /** @enum {string} */
+                /**
+                 * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
+                 * @enum {string}
+                 */
                 kind: "proved" | "estimated";
                 /** @enum {string} */
                 scope: "numerical";
@@ -1633,7 +1648,7 @@ export interface operations {
                     "application/json": components["schemas"]["Session"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -1642,7 +1657,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
                     };
                 };
             };
@@ -1837,7 +1852,7 @@ export interface operations {
                     "application/json": components["schemas"]["Session"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -1846,7 +1861,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
                     };
                 };
             };
@@ -2490,7 +2505,7 @@ export interface operations {
                     "application/json": components["schemas"]["CreatedKey"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -2499,7 +2514,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
                     };
                 };
             };
@@ -3370,7 +3385,7 @@ export interface operations {
                     "application/json": components["schemas"]["LumpedConvectionSolveAnswer"] | components["schemas"]["LumpedConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -3379,7 +3394,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
                     };
                 };
             };
@@ -3561,7 +3576,7 @@ export interface operations {
                     "application/json": components["schemas"]["SemiInfiniteConvectionSolveAnswer"] | components["schemas"]["SemiInfiniteConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -3570,7 +3585,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
                     };
                 };
             };
@@ -3750,7 +3765,7 @@ export interface operations {
                     "application/json": components["schemas"]["SemiInfiniteSurfaceTemperatureSolveAnswer"] | components["schemas"]["SemiInfiniteSurfaceTemperatureSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -3759,7 +3774,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
                     };
                 };
             };
@@ -3942,7 +3957,7 @@ export interface operations {
                     "application/json": components["schemas"]["SlabConvectionSolveAnswer"] | components["schemas"]["SlabConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -3951,7 +3966,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
                     };
                 };
             };
@@ -4133,7 +4148,7 @@ export interface operations {
                     "application/json": components["schemas"]["SlabSurfaceTemperatureSolveAnswer"] | components["schemas"]["SlabSurfaceTemperatureSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -4142,7 +4157,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
                     };
                 };
             };

@@ -13,7 +13,7 @@ export const cautions = {
   },
   concrete: {
     version: 1,
-    text: 'Indicative temperatures. Limits such as maximum temperature and core-surface difference (e.g. ACI 301: 70 °C, 19 K) are set by the project specification; cracking also depends on restraint and strength.',
+    text: 'Where the body is concrete: indicative temperatures. Limits such as maximum temperature and core-surface difference (e.g. ACI 301: 70 °C, 19 K) are set by the project specification; cracking also depends on restraint and strength.',
   },
   burial: {
     version: 1,
@@ -21,7 +21,7 @@ export const cautions = {
   },
   food: {
     version: 1,
-    text: 'Time estimate only. Legal cooling and storage limits apply; verify with a calibrated probe.',
+    text: 'Where the body is food: time estimate only. Legal cooling and storage limits apply; verify with a calibrated probe.',
   },
   control: { version: 1, text: 'Do not use as a safety interlock.' },
 } as const

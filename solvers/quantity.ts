@@ -1,4 +1,6 @@
 import { z } from 'zod'
+import { asNumberList } from './number-lists.ts'
+import { figure } from './validate.ts'
 
 /** A physical quantity as a field: how it is named, what it may be and what it usually is. */
 export interface QuantityDescription {
@@ -20,11 +22,6 @@ export interface QuantityDescription {
 export function acceptedOf(d: QuantityDescription): string {
   const unit = d.unit === '1' ? '' : ` ${d.unit}`
   return `${d.zero ? '0, or ' : ''}a number from ${figure(d.min)} to ${figure(d.max)}${unit}`
-}
-
-function figure(value: number): string {
-  const size = Math.abs(value)
-  return size >= 1e6 || (size > 0 && size < 1e-3) ? value.toExponential().replace('e+', 'e') : String(value)
 }
 
 /** A number in SI (temperatures in degrees Celsius), with everything its readers need in its metadata. */
@@ -49,8 +46,9 @@ export function quantity(d: QuantityDescription) {
 
 /** A list of one quantity, kept in the order given. */
 export function quantities(d: QuantityDescription, maximum: number) {
-  return z
-    .array(quantity(d))
+  const element = quantity(d)
+  const schema = z
+    .array(element)
     .min(1)
     .max(maximum)
     .meta({
@@ -62,4 +60,5 @@ export function quantities(d: QuantityDescription, maximum: number) {
       ...(d.hint ? { 'x-hint': d.hint } : {}),
       ...(d.typical ? { 'x-typical': [...d.typical] } : {}),
     })
+  return asNumberList(schema, { element, min: d.min, max: d.max, most: maximum })
 }

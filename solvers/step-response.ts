@@ -123,7 +123,7 @@ function fraction(e: Estimate): Bounded {
 
 function perKelvin(e: Estimate, t: Temperatures, kind: 'absolute' | 'relative'): Bounded {
   const value = t.difference * e.value + 0 // never −0
-  const inputs = EPS * (Math.abs(t.initial) + Math.abs(t.drive)) * Math.abs(e.value)
+  const inputs = EPS * (Math.abs(t.initial) + Math.abs(t.drive)) * Math.abs(e.value) + Number.MIN_VALUE
   const own = Math.abs(t.difference) * e.error
   if (kind === 'absolute' || Math.abs(e.value) < 1e10 * TINY)
     return { value, absolute: inputs + own + lastPlaces(value), relative: 0, method: e.method }

@@ -9,9 +9,21 @@ export function parse<S extends z.ZodType>(schema: S, value: unknown): z.output<
 }
 
 /** The issues of a failed parse, with pointers, codes of ours and what would be accepted. */
-export function issuesOf(schema: z.ZodType, error: z.ZodError): Issue[] {
-  return error.issues.slice(0, MAX_ISSUES).flatMap((issue) => toIssues(schema, issue as RawIssue))
+export function issuesOf(schema: z.ZodType, error: z.ZodError, within: readonly PropertyKey[] = []): Issue[] {
+  return error.issues
+    .slice(0, MAX_ISSUES)
+    .flatMap((issue) => toIssues(schema, { ...issue, path: [...within, ...issue.path] } as RawIssue))
+    .slice(0, MAX_ISSUES)
 }
+
+/** One issue at a place of a schema, with what would be accepted there. */
+export function issueAt(schema: z.ZodType, path: readonly PropertyKey[], code: DomainCode, detail: string): Issue {
+  const accepted = acceptedAt(schema, path)
+  return { pointer: pointerOf(path), code, detail, ...(accepted ? { accepted } : {}) }
+}
+
+/** Names and values are quoted to this length. */
+const QUOTED = 60
 
 type RawIssue = z.core.$ZodIssue & { input?: unknown }
 
@@ -19,16 +31,14 @@ function toIssues(schema: z.ZodType, issue: RawIssue): Issue[] {
   if (issue.code === 'unrecognized_keys') {
     const known = Object.keys(shapeAt(schema, issue.path) ?? {})
     return issue.keys.slice(0, MAX_ISSUES).map((key) => ({
-      pointer: pointerOf([...issue.path, key]),
+      pointer: pointerOf([...issue.path, key.slice(0, 4 * QUOTED)]),
       code: 'unknown-field' as const,
-      detail: `There is no field "${key.slice(0, 60)}" here.`,
+      detail: `There is no field "${key.slice(0, QUOTED)}" here.`,
       accepted: known.length ? known.join(', ') : 'no fields',
     }))
   }
-  const pointer = pointerOf(issue.path)
-  const accepted = acceptedAt(schema, issue.path)
   const [code, detail] = describe(issue)
-  return [{ pointer, code, detail, ...(accepted ? { accepted } : {}) }]
+  return [issueAt(schema, issue.path, code, detail)]
 }
 
 function describe(issue: RawIssue): [DomainCode, string] {
@@ -37,23 +47,27 @@ function describe(issue: RawIssue): [DomainCode, string] {
     case 'invalid_type':
     case 'invalid_union':
       if (issue.input === undefined) return ['missing-field', `${name} is missing.`]
-      if (issue.code === 'invalid_union') return ['not-in-list', `${name} is not one of the values offered.`]
-      if (typeof issue.input === 'number') return ['out-of-range', `${name} is not a finite number.`]
+      if (issue.code === 'invalid_union')
+        return typeof issue.input === 'number'
+          ? ['not-in-list', `${name} is ${issue.input}, which is not one of the values offered.`]
+          : ['wrong-type', `${name} is ${kindOf(issue.input)}, which is not one of the values offered.`]
+      if (typeof issue.input === 'number' && !Number.isFinite(issue.input))
+        return ['out-of-range', `${name} is not a finite number.`]
       return ['wrong-type', `${name} is ${kindOf(issue.input)}; ${article(issue.expected)} is expected.`]
     case 'too_small':
     case 'too_big': {
       const limit = issue.code === 'too_small' ? issue.minimum : issue.maximum
       const side = issue.code === 'too_small' ? 'least' : 'most'
       if (issue.origin === 'number' || issue.origin === 'int')
-        return ['out-of-range', `${name} is ${String(issue.input)}; at ${side} ${limit} is accepted.`]
+        return ['out-of-range', `${name} is ${String(issue.input)}; at ${side} ${figure(Number(limit))} is accepted.`]
       return [
         'wrong-length',
-        `${name} must have at ${side} ${limit} ${issue.origin === 'string' ? 'characters' : 'entries'}.`,
+        `${name} must have at ${side} ${limit} ${issue.origin === 'string' ? 'character' : 'entr'}${endOf(issue.origin, limit)}.`,
       ]
     }
     case 'invalid_value':
       if (issue.input === undefined) return ['missing-field', `${name} is missing.`]
-      return ['not-in-list', `${name} must be ${issue.values.map((v) => JSON.stringify(v)).join(' or ')}.`]
+      return describeChoice(name, issue)
     case 'invalid_format':
       return ['wrong-form', `${name} is not of the required form.`]
     case 'custom':
@@ -65,7 +79,27 @@ function describe(issue: RawIssue): [DomainCode, string] {
   }
 }
 
-function kindOf(value: unknown): string {
+/** A choice that is missed, by its type where that alone is wrong: "2" for 2. */
+function describeChoice(name: string, issue: RawIssue & { code: 'invalid_value' }): [DomainCode, string] {
+  const offered = issue.values.map((v) => (typeof v === 'number' ? `the number ${v}` : JSON.stringify(v))).join(' or ')
+  const wrongType = issue.values.every((v) => typeof v !== typeof issue.input)
+  return [wrongType ? 'wrong-type' : 'not-in-list', `${name} is ${kindOf(issue.input)}; ${offered} is expected.`]
+}
+
+function endOf(origin: string, limit: number | bigint): string {
+  const one = Number(limit) === 1
+  return origin === 'string' ? (one ? '' : 's') : one ? 'y' : 'ies'
+}
+
+/** A number as people write it: 1e17, not its seventeen zeros. */
+export function figure(value: number): string {
+  const size = Math.abs(value)
+  return size >= 1e6 || (size > 0 && size < 1e-3) ? value.toExponential().replace('e+', 'e') : String(value)
+}
+
+/** A value in words, for texts that say what was given. */
+export function kindOf(value: unknown): string {
+  if (typeof value === 'string') return `the text "${value.slice(0, QUOTED)}"`
   if (value === null) return 'null'
   if (Array.isArray(value)) return 'a list'
   return article(typeof value)
@@ -87,7 +121,7 @@ function schemaAt(schema: z.ZodType, path: readonly PropertyKey[]): z.ZodType | 
   return at
 }
 
-function unwrap(schema: z.ZodType): z.ZodType {
+export function unwrap(schema: z.ZodType): z.ZodType {
   let at = schema
   for (let depth = 0; depth < 8; depth++) {
     const inner = (at.def as { innerType?: z.ZodType }).innerType

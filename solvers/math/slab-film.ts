@@ -1,6 +1,6 @@
 import { type Estimate, EPS } from './rounding.ts'
 import type { SlabBody, SlabMoment } from './slab-body.ts'
-import { completedByImages, fluxByImages, heatByImages, remainingByImages } from './slab-images.ts'
+import { completedByImages, fluxByImages, heatByImages, remainingByImages, steepestFlux } from './slab-images.ts'
 import { SlabSeries, termsAt } from './slab-series.ts'
 
 /* Below SERIES_FROM only the images, above IMAGES_TO only the series; between, whichever errs less. */
@@ -63,14 +63,12 @@ export class SlabFilm {
     return { ...heat, value: 1 - heat.value, error: heat.error + EPS }
   }
 
-  /** Adds what the rounding of the depth itself moves: |∂θ/∂δ| is Bi times the flux. No share can be off by more than 1. */
+  /** Adds what the rounding of the depth itself moves: |∂θ/∂δ| is Bi times the flux, which falls with the depth. */
   private shifted(found: Estimate, j: number, m: SlabMoment): Estimate {
     const shift = EPS * this.body.shifts[j]!
     if (shift === 0) return found
-    // Where the rounding is not small against the depth reached, no slope describes what it does.
-    if (shift > 0.05 * m.root) return { ...found, error: 1 }
-    const flux = this.flux(j, m)
-    return { ...found, error: Math.min(1, found.error + shift * this.body.biot * (Math.abs(flux.value) + flux.error)) }
+    const flux = m.fourier < SERIES_FROM ? steepestFlux(this.body, j, m) : Math.abs(this.flux(j, m).value) * 1.01
+    return { ...found, error: Math.min(1, found.error + shift * this.body.biot * flux) }
   }
 
   /** Terms of the series at this time; 0 where only the images are asked. */

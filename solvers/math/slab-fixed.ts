@@ -40,10 +40,10 @@ export class SlabFixed {
     const { near, far } = this.etas(j, m)
     const a = erf(near)
     const b = imagePair(far, near)
-    const shift = EPS * this.body.shifts[j]! * slopeOf(near, m)
+    const shift = EPS * this.body.shifts[j]! * slopeOf(this.nearest(j, m), m)
     return {
       value: Math.min(1, Math.max(0, a - b)),
-      error: 14 * EPS * a + errorOf(far) * b + shift + TINY,
+      error: Math.min(1, 14 * EPS * a + errorOf(far) * b + shift + TINY),
       method: 'two-image',
     }
   }
@@ -57,7 +57,7 @@ export class SlabFixed {
     const a = erfcOf(near)
     const b = erfcOf(far)
     const c = erfcOf((2 + this.body.deltas[j]!) / (2 * m.root))
-    const shift = EPS * this.body.shifts[j]! * slopeOf(near, m)
+    const shift = EPS * this.body.shifts[j]! * slopeOf(this.nearest(j, m), m)
     const error = errorOf(near) * a + errorOf(far) * (b + c) + Math.exp(-4 / m.fourier) * a + shift + TINY
     return { value: Math.min(1, Math.max(0, a + b - c)), error: Math.min(1, error), method: 'two-image' }
   }
@@ -80,7 +80,9 @@ export class SlabFixed {
     const scale = 1 / (SQRT_PI * m.root)
     const value = decayOf(near) - decayOf(far) - decayOf(third)
     const error = errorOf(near) * decayOf(near) + errorOf(far) * 2 * decayOf(far) + Math.exp(-4 / m.fourier)
-    const shift = (EPS * shifts[j]! * near * decayOf(near)) / m.root
+    const nearest = this.nearest(j, m)
+    const shift =
+      EPS * shifts[j]! > 0.05 * m.root ? decayOf(nearest) : (1.2 * EPS * shifts[j]! * near * decayOf(near)) / m.root
     return { value: inner[j] === 0 ? 0 : scale * value, error: scale * (error + shift) + TINY, method: 'two-image' }
   }
 
@@ -108,6 +110,11 @@ export class SlabFixed {
 
   terms(m: SlabMoment): number {
     return m.fourier > SWITCH ? termsAt(m.fourier) : 0
+  }
+
+  /** η at the nearest place within the rounding of a depth that is reckoned from the far face, where slopes are steepest. */
+  private nearest(j: number, m: SlabMoment): number {
+    return Math.max(0, this.body.deltas[j]! - EPS * this.body.shifts[j]!) / (2 * m.root)
   }
 
   private etas(j: number, m: SlabMoment): { near: number; far: number } {

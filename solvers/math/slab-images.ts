@@ -58,11 +58,23 @@ export function fluxByImages(body: SlabBody, j: number, m: SlabMoment): Estimate
   const { near, far, beta, truncation } = argumentsAt(body, j, m)
   const a = fluxFraction(near, beta)
   const b = fluxFraction(far, beta)
-  // |∂F/∂δ|, for a depth whose own rounding is not relative to it.
-  const slope = (near * a + (near > 27.5 ? 0 : Math.exp(-near * near)) * ierfcx(near + beta)) / m.root
-  const shift = EPS * body.shifts[j]! * slope
+  const shift = EPS * body.shifts[j]! && fluxShift(body, j, m, { near, beta, a })
   const error = fluxError(near) * a + fluxError(far) * b + 4 * a * truncation + shift + TINY
   return { value: body.inner[j] === 0 ? 0 : a - b, error: Math.min(1, error), method: 'two-image' }
+}
+
+/** The largest flux within the rounding of a depth that is reckoned from the far face. */
+export function steepestFlux(body: SlabBody, j: number, m: SlabMoment): number {
+  const nearest = Math.max(0, body.deltas[j]! - EPS * body.shifts[j]!)
+  return fluxFraction(nearest / (2 * m.root), body.biot * m.root) * 1.01
+}
+
+/** What that rounding moves the flux by: its slope, or all of it where the rounding is not small against the depth reached. */
+function fluxShift(body: SlabBody, j: number, m: SlabMoment, at: { near: number; beta: number; a: number }): number {
+  const shift = EPS * body.shifts[j]!
+  if (shift > 0.05 * m.root) return steepestFlux(body, j, m)
+  const decay = at.near > 27.5 ? 0 : Math.exp(-at.near * at.near)
+  return (1.2 * shift * (at.near * at.a + decay * ierfcx(at.near + at.beta))) / m.root
 }
 
 export function heatByImages({ biot }: SlabBody, m: SlabMoment): Estimate {

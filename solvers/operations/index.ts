@@ -6,6 +6,8 @@ import { solve } from './solve.ts'
 export interface Call {
   /** Numbers it will answer. */
   values: number
+  /** Numbers it will write: those, or its axes where they are longer. */
+  size: number
   /** Priced points, before the floor of an HTTP call. */
   points: number
   run(): object

@@ -76,7 +76,9 @@ export function answerSchema(c: Case) {
       terms: z.number(),
       scale: z.number().meta({ description: 'The temperature scale of the case, K.' }),
       bound: perOutput(() => boundSchema),
-      kind: z.enum(['proved', 'estimated']),
+      kind: z.enum(['proved', 'estimated']).meta({
+        description: 'How the bound was made: proved, or counted term by term and held by tests (estimated).',
+      }),
       scope: z.literal('numerical'),
       note: z.string(),
     }),

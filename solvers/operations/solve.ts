@@ -1,10 +1,10 @@
 import { createHash } from 'node:crypto'
-import type { z } from 'zod'
 import { type Case, type Resolved, outputNamesOf, outputOf } from '../case.ts'
 import { cautions } from '../cautions.ts'
-import { DomainError } from '../errors.ts'
+import { DomainError, type Issue } from '../errors.ts'
+import { readLists } from '../number-lists.ts'
 import type { OutputName, Shape } from '../outputs.ts'
-import { issuesOf } from '../validate.ts'
+import { issuesOf, kindOf } from '../validate.ts'
 import { SOLVER_VERSION } from '../version.ts'
 import type { Warning } from '../warnings.ts'
 import type { Call, CaseOperation } from './index.ts'
@@ -14,27 +14,27 @@ import { unusualValues } from './unusual-values.ts'
 /** Longer series of the input are echoed as count and digest; the axes hold them whole. */
 const ECHO_LIMIT = 100
 
-function refuseBadInput(c: Case, schema: z.ZodType, error: z.ZodError, body: unknown): never {
-  const issues = issuesOf(schema, error).map((issue) => {
-    const match = /^#\/outputs\/(\d+)$/.exec(issue.pointer)
-    if (!match || issue.code !== 'not-in-list') return issue
-    const name = String((body as { outputs: unknown[] }).outputs[Number(match[1])]).slice(0, 60)
-    const reason = c.absentOutputs[name as OutputName] ?? 'It is no output of this case.'
-    return {
-      ...issue,
-      code: 'output-not-defined' as const,
-      detail: `"${name}": ${reason}`,
-      accepted: outputNamesOf(c).join(', '),
-    }
-  })
-  throw new DomainError(issues)
+/** An output that the case lacks is refused with the reason, and with those it has. */
+function withReason(c: Case, body: unknown, issue: Issue): Issue {
+  const match = /^#\/outputs\/(\d+)$/.exec(issue.pointer)
+  if (!match || issue.code !== 'not-in-list') return issue
+  const given = (body as { outputs: unknown[] }).outputs[Number(match[1])]
+  const name = typeof given === 'string' ? given.slice(0, 60) : kindOf(given)
+  const reason = Object.hasOwn(c.absentOutputs, name)
+    ? c.absentOutputs[name as OutputName]
+    : 'the case has no output of this name.'
+  const accepted = outputNamesOf(c).join(', ')
+  return { ...issue, code: 'output-not-defined', detail: `"${name}": ${reason}`, accepted }
 }
 
 function prepare(c: Case, body: unknown, defaultDetail: 'full' | 'compact'): Call {
   const schema = inputOf(c)
-  const parsed = schema.safeParse(body, { reportInput: true })
-  if (!parsed.success) refuseBadInput(c, schema, parsed.error, body)
-  const { detail = defaultDetail, ...input } = parsed.data as Record<string, unknown> & {
+  const { body: brief, lists, issues } = readLists(schema, body)
+  const parsed = schema.safeParse(brief, { reportInput: true })
+  if (!parsed.success) issues.unshift(...issuesOf(schema, parsed.error).map((issue) => withReason(c, body, issue)))
+  if (!parsed.success || issues.length > 0) throw new DomainError(issues)
+  const { detail = defaultDetail, ...input } = { ...parsed.data, ...lists } as Record<string, unknown> & {
+    detail?: 'full' | 'compact'
     outputs: OutputName[]
     depths?: number[]
   }
@@ -53,7 +53,8 @@ function prepare(c: Case, body: unknown, defaultDetail: 'full' | 'compact'): Cal
   const resolved = c.resolve(input)
   const values = countValues(c, resolved)
   const points = c.weight * values + c.setUp
-  return { values, points, run: () => answer(c, resolved, points, detail === 'compact') }
+  const size = Math.max(values, resolved.times.length, resolved.depths?.length ?? 0)
+  return { values, size, points, run: () => answer(c, resolved, points, detail === 'compact') }
 }
 
 function refuseOutside(c: Case, input: Record<string, unknown> & { depths?: number[] }): void {
@@ -115,7 +116,7 @@ function answer(c: Case, input: Resolved, points: number, compact: boolean) {
       bound,
       kind: 'estimated',
       scope: 'numerical',
-      note: 'Inputs and model decide the real error; see uncertainty.',
+      note: 'Inputs and model decide the real error; this bound is of the arithmetic alone.',
     },
     numbers: c.numbers(input),
     checks: c.checks(input),

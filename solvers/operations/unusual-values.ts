@@ -1,6 +1,6 @@
 import type { z } from 'zod'
 import type { Case } from '../case.ts'
-import { metaOf } from '../validate.ts'
+import { figure, metaOf } from '../validate.ts'
 import type { Warning } from '../warnings.ts'
 
 interface Typical {
@@ -29,7 +29,9 @@ export function unusualValues(c: Case, input: Record<string, unknown>): Warning[
   return typicalOf(c).flatMap(({ name, low, high, unit }) => {
     const value = input[name]
     if (typeof value !== 'number' || (value >= low && value <= high)) return []
-    const text = `${name} is ${value} ${unit}; values from ${low} to ${high} are usual.`
+    const kelvin = unit === 'Cel' && value - 273.15 >= low && value - 273.15 <= high
+    const hint = kelvin ? ' If this is in kelvin: degrees Celsius are expected.' : ''
+    const text = `${name} is ${value} ${unit}; values from ${figure(low)} to ${figure(high)} are usual.${hint}`
     return [{ code: 'outside-typical-range' as const, text, value }]
   })
 }

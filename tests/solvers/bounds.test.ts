@@ -55,3 +55,16 @@ describe('a planted error', () => {
     expect(off().every((share) => share > 1)).toBe(true)
   })
 })
+
+describe('behind the mid-plane', () => {
+  const wall = { conductivity: 2, volumetricHeatCapacity: 2.4e6, thickness: 0.2, exposedFaces: 2 }
+  const film = { ...wall, filmCoefficient: 10, initialTemperature: 20, ambientTemperature: -5 }
+  it.each([5e-324, 1e-30, 1e-27, 1e-20, 1e-9])('a bound stays near the promise at %f s', (time) => {
+    for (const depth of [0.11, 0.15, 0.19999, 0.2]) {
+      const outputs: OutputName[] = ['temperature', 'remainingFraction']
+      const { outputs: found } = solveDirect('slab-convection', { ...film, depths: [depth], times: [time], outputs })
+      expect(found.temperature!.bound.absolute).toBeLessThan(2.5e-10)
+      expect(found.remainingFraction!.bound.relative).toBeLessThan(1e-10)
+    }
+  })
+})

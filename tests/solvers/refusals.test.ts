@@ -121,6 +121,56 @@ describe('fields', () => {
     expect(refusalOf('slab-convection', { ...slab, times: Array.from({ length: 400 }, () => -1) })).toHaveLength(50)
   })
 
+  it('looks at the length of a list before its entries, and stops at the fiftieth that is wrong', () => {
+    const long = Array.from({ length: 99_000 }, () => -1)
+    const started = performance.now()
+    const found = refusalOf('slab-convection', { ...slab, times: long })
+    expect(performance.now() - started).toBeLessThan(200)
+    expect(found).toHaveLength(50)
+    expect(found[49]).toBe('#/times/49 out-of-range')
+    expect(refusalOf('slab-convection', { ...slab, times: [...long, ...long] })).toEqual(['#/times wrong-length'])
+    expect(refusalOf('slab-convection', { ...slab, times: [1, {}], thickness: -1 })).toEqual([
+      '#/thickness out-of-range',
+      '#/times/1 wrong-type',
+    ])
+  })
+
+  it.each([
+    ['an object', [{ toString: 1 }], 'an object'],
+    ['a name that every object has', ['toString'], 'no output of this name'],
+    ['the name of a prototype', ['__proto__'], 'no output of this name'],
+  ])('refuses %s as an output by its own words', (_what, outputs, words) => {
+    try {
+      solve.prepare(caseOf('slab-convection'), { ...slab, outputs }, 'full')
+      expect.unreachable()
+    } catch (error) {
+      const [issue] = (error as DomainError).issues
+      expect(issue!.pointer).toBe('#/outputs/0')
+      expect(issue!.detail).toContain(words)
+      expect(issue!.detail).not.toContain('native code')
+    }
+  })
+
+  it.each([
+    [{ ...slab, depths: 0.1 }, '#/depths wrong-type', 'a number; a list is expected'],
+    [{ ...slab, exposedFaces: '2' }, '#/exposedFaces wrong-type', 'the text "2"'],
+    [{ ...slab, times: [1e999] }, '#/times/0 out-of-range', 'not a finite number'],
+  ])('says what was given and what is expected', (body, where, words) => {
+    expect(refusalOf('slab-convection', body)).toEqual([where])
+    try {
+      solve.prepare(caseOf('slab-convection'), body, 'full')
+    } catch (error) {
+      expect((error as DomainError).issues[0]!.detail).toContain(words)
+    }
+  })
+
+  it('asks whether a temperature is in kelvin', () => {
+    const { warnings } = ask('slab-convection', { ...slab, initialTemperature: 293.15 }) as unknown as {
+      warnings: { text: string }[]
+    }
+    expect(warnings.map((w) => w.text).join()).toContain('kelvin')
+  })
+
   it('needs no depths for outputs without places', () => {
     const { result } = ask('slab-convection', {
       ...without(slab, 'depths'),

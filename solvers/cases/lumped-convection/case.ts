@@ -79,7 +79,7 @@ export default defineCase<typeof fields, LumpedResolved>({
     '\\text{mean correction:}\\quad h \\to \\frac{h}{1 + \\mathrm{Bi}/(n+2)}',
   ],
   sources: [
-    'F. P. Incropera, D. P. DeWitt, Fundamentals of Heat and Mass Transfer, chapter 5, lumped capacitance (from memory)',
+    'F. P. Incropera, D. P. DeWitt, Fundamentals of Heat and Mass Transfer, chapter 5: the lumped capacitance method',
   ],
   family: 'lumped',
   sketch: { body: 'lumped', boundary: 'convection' },

@@ -55,7 +55,7 @@ function responseOf(input: LumpedInput): StepResponse {
   }
   const done = (i: number): Estimate => {
     const value = -Math.expm1(-ratioAt(input, input.times[i]!))
-    return { value, error: value * (RATIO_ERROR + 4 * EPS), method: 'closed-form' }
+    return { value, error: value * (RATIO_ERROR + 4 * EPS) + TINY, method: 'closed-form' }
   }
   return {
     share: (i) => (done(i).value < 0.5 ? { ...done(i), of: 'completed' } : { ...left(i), of: 'remaining' }),

@@ -126,7 +126,10 @@ export default defineCase<typeof fields, SlabResolved>({
         holds: biot > 0.1,
         value: biot,
         limit: 0.1,
-        text: 'The temperature differs across the body (Biot number above 0.1), so this case is needed.',
+        text:
+          biot > 0.1
+            ? 'The temperature differs across the body (Biot number above 0.1), so this case is needed.'
+            : 'The Biot number is at most 0.1: one temperature would do here, and lumped-convection gives it.',
       },
     ]
   },
