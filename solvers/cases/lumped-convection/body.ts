@@ -26,6 +26,8 @@ export interface LumpedBody {
   echo: Record<string, unknown>
 }
 
+const WITHOUT = 'without body'
+
 type Refuse = (issue: Issue) => void
 
 export function resolveBody(input: BodyInput, refuse: Refuse): LumpedBody | undefined {
@@ -39,7 +41,7 @@ function refuseGiven(input: BodyInput, names: readonly (keyof BodyInput)[], reas
         pointer: `#/${name}`,
         code: 'conflicting-fields',
         detail: `${name} cannot stand ${reason}.`,
-        accepted: `no ${name}`,
+        accepted: reason === WITHOUT ? `body (slab, cylinder or sphere) beside it, or no ${name}` : `no ${name}`,
       })
 }
 
@@ -87,9 +89,9 @@ const statements = 'heatCapacity, or volume with the heat capacity of the solid,
 
 /** Any body, by its heat capacity and exchanging area. */
 function byQuantities(input: BodyInput, refuse: Refuse): LumpedBody | undefined {
-  refuseGiven(input, ['thickness', 'exposedFaces', 'radius', 'correction'], 'without body', refuse)
+  refuseGiven(input, ['thickness', 'exposedFaces', 'radius', 'correction'], WITHOUT, refuse)
   const area = require(input, 'area', 'the exchanging area in m2', refuse)
-  refuseGiven(input, ['conductivity', 'diffusivity'], 'without body', refuse)
+  refuseGiven(input, ['conductivity', 'diffusivity'], WITHOUT, refuse)
   const stated = capacityOf(input, refuse)
   if (area === undefined || stated === undefined) return undefined
   return {
