@@ -162,6 +162,11 @@ export const ledger = pgTable(
   ],
 )
 
+/** Charges made before the work whose answer is not there yet; one that stays is refunded. */
+export const openCharges = pgTable('open_charges', { requestId: text().primaryKey(), at: createdAt() }, (t) => [
+  index('open_charges_at').on(t.at),
+])
+
 /** One row a call, partitioned by day; never a body, never a key. */
 export const log = pgTable(
   'log',
@@ -186,9 +191,9 @@ export const log = pgTable(
     primaryKey({ columns: [t.at, t.id] }),
     index('log_account').on(t.accountId, t.at, t.id),
     index('log_key').on(t.keyId, t.at, t.id),
-    index('log_failed')
+    index('log_unanswered')
       .on(t.at)
-      .where(sql`${t.status} >= 500`),
+      .where(sql`${t.status} >= 499 AND ${t.points} = 0`),
   ],
 )
 

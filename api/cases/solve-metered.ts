@@ -1,30 +1,56 @@
+import type { Call } from '../../solvers/operations/index.ts'
 import type { SolveTask } from '../compute/compute.ts'
 import type { Deps } from '../deps.ts'
-import type { CallRecord, KeyCaller, Reply } from '../operation.ts'
+import type { RecordedCall } from '../http/record.ts'
+import type { KeyCaller, Reply } from '../operation.ts'
+import { Problem } from '../problems.ts'
 import { FLOOR } from './limits.ts'
+
+/** Numbers of a call so small that it is solved before it is charged: about a millisecond, no more than its checks. */
+const SMALL = 200
 
 export function priceOf(points: number): number {
   return Math.max(FLOOR, Math.ceil(points))
 }
 
-/** Spends, then solves. A call that cannot be answered after it was charged gets its points back. */
-export async function solveMetered(task: SolveTask, caller: KeyCaller, call: CallRecord, deps: Deps): Promise<Reply> {
+/** Spends and solves. Whenever the process dies, the points of a call that was not answered come back. */
+export async function solveMetered(task: SolveTask, caller: KeyCaller, call: RecordedCall, deps: Deps): Promise<Reply> {
   const points = priceOf(task.call.points)
   const { requestId } = call
-  const { remaining } = await deps.meter.spend({
-    requestId,
-    accountId: caller.accountId,
-    keyId: caller.keyId,
-    caseId: task.case,
-    points,
-  })
+  const { accountId, keyId } = caller
+  const charge = { requestId, accountId, keyId, caseId: task.case, points }
+  const pay = isSmall(task.call) ? solveThenPay : payThenSolve
+  const { answer, remaining } = await pay(task, charge, call, deps)
   call.points = points
+  const headers = { 'Points-Charged': String(points), 'Points-Remaining': String(remaining) }
+  return { ...answer, headers }
+}
+
+const isSmall = ({ size, points }: Call) => Math.max(size, points) <= SMALL
+
+type Charge = Parameters<Deps['meter']['spend']>[0]
+
+/* The answer is there when the charge is committed, so that nothing but its way to the client can be lost. */
+async function solveThenPay(task: SolveTask, charge: Charge, call: RecordedCall, { compute, meter }: Deps) {
+  const answer = await compute.solve(task)
+  refuseGone(call)
+  return { answer, ...(await meter.spend(charge)) }
+}
+
+/* A long solve is paid before; its charge stays open until the answer is there, and an open one is not lost. */
+async function payThenSolve(task: SolveTask, charge: Charge, call: RecordedCall, { compute, meter }: Deps) {
+  refuseGone(call)
+  const spent = await meter.spend({ ...charge, open: true })
   try {
-    const { text, etag } = await deps.compute.solve(task)
-    return { text, etag, headers: { 'Points-Charged': String(points), 'Points-Remaining': String(remaining) } }
+    const answer = await compute.solve(task)
+    await meter.close(charge.requestId)
+    return { answer, ...spent }
   } catch (error) {
-    await deps.meter.refund(requestId)
-    call.points = 0
+    await meter.refund(charge.requestId)
     throw error
   }
+}
+
+function refuseGone({ gone }: RecordedCall): void {
+  if (gone) throw new Problem('malformed-request', 'The client hung up before the call was charged.')
 }

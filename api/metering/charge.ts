@@ -63,6 +63,11 @@ const addEntries = {
       AS e(request_id, account_id, key_id, case_id, points, at)`,
 }
 
+const openCharges = {
+  name: 'open-charges',
+  text: 'INSERT INTO open_charges (request_id) SELECT unnest($1::text[])',
+}
+
 /** Spends for many calls in the transaction of `client`. `day` is the period; the database's own day unless given. */
 export async function chargeAll(client: pg.ClientBase, charges: readonly Charge[], day?: string): Promise<Charged[]> {
   const rows = await lockOrOpen(client, [[...new Set(charges.map((c) => c.keyId))], day ?? null])
@@ -100,4 +105,6 @@ async function record(client: pg.ClientBase, period: string, charges: readonly C
   await client.query({ ...addUsed, values: [period, column('accountId'), column('keyId'), column('points')] })
   const names = ['requestId', 'accountId', 'keyId', 'caseId', 'points', 'at'] as const
   await client.query({ ...addEntries, values: [period, ...names.map(column)] })
+  const open = charges.filter((c) => c.open).map((c) => c.requestId)
+  if (open.length > 0) await client.query({ ...openCharges, values: [open] })
 }

@@ -4,6 +4,8 @@ export interface Charge {
   keyId: string
   caseId: string
   points: number
+  /** Charged before the work: refunded unless it is closed when the answer is there. */
+  open?: boolean
   /** The instant of the entry where it is not now; only a seed gives one. */
   at?: Date
 }

@@ -5,7 +5,7 @@ import { Problem } from '../problems.ts'
 import { type Charged, chargeAll } from './charge.ts'
 import { gather } from '../gather.ts'
 import type { Charge } from './grant.ts'
-import { refundCharge } from './refund.ts'
+import { closeCharges, refundCharge } from './refund.ts'
 import { durably, UnknownOutcome } from './transaction.ts'
 
 /** Transactions a process has under way at once, and charges that go in one. */
@@ -13,8 +13,10 @@ const AT_ONCE = 2
 const MOST = 500
 
 export interface Meter {
-  /** Spends before the work; throws the problem of a refusal. */
+  /** Spends before the answer leaves; throws the problem of a refusal. */
   spend(charge: Charge): Promise<{ remaining: number }>
+  /** Lets an open charge stand, now that its answer is there; throws where it was refunded meanwhile. */
+  close(requestId: string): Promise<void>
   /** Counters the charge of a call that failed after it. */
   refund(requestId: string): Promise<void>
 }
@@ -23,6 +25,7 @@ type Outcome = { charged: Charged } | { error: unknown }
 
 export function createMeter(pool: pg.Pool, log: Logger): Meter {
   const charge = gather((charges: Charge[]) => chargeGathered(pool, charges), { atOnce: AT_ONCE, most: MOST })
+  const closeOne = gather((ids: string[]) => closeGathered(pool, ids), { atOnce: 1, most: MOST })
 
   async function spend(one: Charge): Promise<{ remaining: number }> {
     const outcome = await charge(one)
@@ -41,11 +44,16 @@ export function createMeter(pool: pg.Pool, log: Logger): Meter {
     )
   }
 
+  async function close(requestId: string): Promise<void> {
+    if (!(await closeOne(requestId)))
+      throw new Problem('unavailable', 'The answer took so long that its charge was taken for lost and refunded.')
+  }
+
   async function refund(requestId: string): Promise<void> {
     await durably(pool, (client) => refundCharge(client, requestId))
   }
 
-  return { spend, refund }
+  return { spend, close, refund }
 }
 
 /* One transaction for all. Where it fails for one call's sake the others must not fail with it: call by call then. */
@@ -60,4 +68,9 @@ async function chargeGathered(pool: pg.Pool, charges: Charge[]): Promise<Outcome
     for (const one of charges) outcomes.push(...(await chargeGathered(pool, [one])))
     return outcomes
   }
+}
+
+async function closeGathered(pool: pg.Pool, ids: string[]): Promise<boolean[]> {
+  const closed = await durably(pool, (client) => closeCharges(client, ids))
+  return ids.map((id) => closed.has(id))
 }

@@ -1,4 +1,7 @@
 import type pg from 'pg'
+import { instantOf } from '../ids.ts'
+
+const DAY = 86_400_000
 
 /* Account before key, as charges lock them. */
 const lockForRefund = {
@@ -7,8 +10,7 @@ const lockForRefund = {
     SELECT l.period::text AS period FROM ledger l
     JOIN key_periods kp ON kp.key_id = l.key_id AND kp.period = l.period
     JOIN periods p ON p.account_id = l.account_id AND p.environment = l.environment AND p.period = l.period
-    WHERE l.request_id = $1 AND l.kind = 'charge'
-      AND l.period BETWEEN (now() AT TIME ZONE 'UTC')::date - 2 AND (now() AT TIME ZONE 'UTC')::date
+    WHERE l.request_id = $1 AND l.kind = 'charge' AND l.period = ANY($2::date[])
     FOR UPDATE OF p, kp`,
 }
 
@@ -27,10 +29,29 @@ const giveBack = {
     FROM refund r WHERE p.account_id = r.account_id AND p.environment = r.environment AND p.period = r.period`,
 }
 
-/** Counters a charge of the last two days in its own period, once however often asked. True where it did something. */
+/** Counters a charge in its own period, once however often asked. True where it did something. */
 export async function refundCharge(client: pg.ClientBase, requestId: string): Promise<boolean> {
-  const { rows } = await client.query({ ...lockForRefund, values: [requestId] })
+  await closeCharges(client, [requestId])
+  const { rows } = await client.query({ ...lockForRefund, values: [requestId, periodsOf(requestId)] })
   if (rows.length === 0) return false
   const result = await client.query({ ...giveBack, values: [requestId, rows[0].period] })
   return result.rowCount === 1
+}
+
+/* A charge's day is the database's, which the clock of a process may miss by a little. */
+function periodsOf(requestId: string): string[] {
+  const at = instantOf(requestId)
+  if (!at) throw new Error(`${requestId} is no request id`)
+  return [-DAY, 0, DAY].map((shift) => new Date(at.getTime() + shift).toISOString().slice(0, 10))
+}
+
+const close = {
+  name: 'close-charges',
+  text: 'DELETE FROM open_charges WHERE request_id = ANY($1) RETURNING request_id',
+}
+
+/** Lets open charges stand from now on; gives those that were still open. Of a close and a refund, only one finds it. */
+export async function closeCharges(client: pg.ClientBase, requestIds: readonly string[]): Promise<Set<string>> {
+  const { rows } = await client.query<{ request_id: string }>({ ...close, values: [requestIds] })
+  return new Set(rows.map((row) => row.request_id))
 }

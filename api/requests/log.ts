@@ -1,6 +1,8 @@
+import { setTimeout as sleep } from 'node:timers/promises'
 import type pg from 'pg'
 import type { Logger } from 'pino'
 import { SOLVER_VERSION } from '../../solvers/version.ts'
+import { databaseIsAway } from '../database.ts'
 import { gather } from '../gather.ts'
 
 export interface LogEntry {
@@ -64,38 +66,67 @@ export async function insertLog(db: pg.Pool | pg.ClientBase, entries: readonly L
 
 /** Rows that wait for the database; more than these are counted and dropped rather than kept in memory. */
 const MOST_WAITING = 20_000
+/** Milliseconds between two tries while the database is away, and tries that are left once the service ends. */
+const PAUSE = 500
+const LAST_TRIES = 6
 
 export interface RequestLog {
   add(entry: LogEntry): void
+  /** Makes `flush` wait for a call that will be added when its handler ends. */
+  hold(call: Promise<void>): void
   /** Resolves once nothing waits. */
   flush(): Promise<void>
 }
 
 export function createRequestLog(pool: pg.Pool, log: Logger): RequestLog {
-  const write = gather(
-    async (entries: LogEntry[]) => {
-      await insertLog(pool, entries)
-      return entries
-    },
-    { atOnce: 1, most: 1000 },
-  )
   const waiting = new Set<Promise<unknown>>()
+  let flushes = 0
+  const write = gather((entries: LogEntry[]) => writeGathered(entries), { atOnce: 1, most: 1000 })
+
+  /* A charge of unknown outcome is settled by its row, so rows outlast the database's absence. */
+  async function writeGathered(entries: LogEntry[]): Promise<(Error | undefined)[]> {
+    for (let late = 0; ; late += flushes > 0 ? 1 : 0) {
+      try {
+        await insertLog(pool, entries)
+        return entries.map(() => undefined)
+      } catch (error) {
+        if (!databaseIsAway(error)) return entries.length > 1 ? oneByOne(entries) : [error as Error]
+        if (late >= LAST_TRIES) return entries.map(() => error as Error)
+      }
+      await sleep(PAUSE)
+    }
+  }
+
+  async function oneByOne(entries: LogEntry[]): Promise<(Error | undefined)[]> {
+    const errors = []
+    for (const one of entries) errors.push(...(await writeGathered([one])))
+    return errors
+  }
 
   function add(entry: LogEntry): void {
     if (waiting.size >= MOST_WAITING) {
       log.error({ requestId: entry.id }, 'a call could not be logged: too many wait')
       return
     }
-    const written = write(entry)
-      .catch((error: Error) => log.error({ requestId: entry.id, error: error.message }, 'a call could not be logged'))
-      .finally(() => waiting.delete(written))
-    waiting.add(written)
+    hold(
+      write(entry).then((error) => {
+        if (error) log.error({ requestId: entry.id, error: error.message }, 'a call could not be logged')
+      }),
+    )
+  }
+
+  function hold(work: Promise<void>): void {
+    const held = work.finally(() => waiting.delete(held))
+    waiting.add(held)
   }
 
   return {
     add,
+    hold,
     async flush() {
-      await Promise.all(waiting)
+      flushes++
+      while (waiting.size > 0) await Promise.all(waiting)
+      flushes--
     },
   }
 }
