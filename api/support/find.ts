@@ -1,6 +1,7 @@
 import { audit } from '../../drizzle/schema.ts'
 import type { Deps } from '../deps.ts'
 import { instantOf, newId } from '../ids.ts'
+import { readableText } from '../http/readable.ts'
 import { withoutKeys } from '../keys/key.ts'
 import type { StaffCaller } from '../operation.ts'
 import { readRequest, requestsOfPrefix } from '../requests/queries.ts'
@@ -20,13 +21,12 @@ export async function findRequests(
   return [{ ...entry, problem: problem?.code ?? null }]
 }
 
-/** Reads one call of any account; the look is on record, with the account it concerned. */
+/** Reads one call of any account; the look is on record, with the account it concerned, also where nothing was found. */
 export async function readAnyRequest({ db, pool }: Deps, caller: StaffCaller, requestId: string, reason: string) {
   const request = await readRequest(pool, requestId)
-  if (!request) return undefined
-  await db
-    .insert(audit)
-    .values({ ...look(caller, 'request read', reason), accountId: request.account?.id ?? null, subject: requestId })
+  const subject = readableText(requestId).slice(0, 100)
+  const accountId = request?.account?.id ?? null
+  await db.insert(audit).values({ ...look(caller, 'request read', reason), accountId, subject })
   return request
 }
 
