@@ -2,6 +2,9 @@ import fc from 'fast-check'
 import { expect, test } from 'vitest'
 import { contour, region } from '../../portal/src/figure/contour.ts'
 import { gridOf, nearest } from '../../portal/src/figure/grid.ts'
+import { type Field, rangeOf, temperatureRange, washText } from '../../portal/src/figure/field.ts'
+import { layoutOf } from '../../portal/src/figure/layout.ts'
+import { degrees, markText, plain } from '../../portal/src/figure/measures.ts'
 import { multiples, niceCeiling, niceStep } from '../../portal/src/figure/steps.ts'
 import { jsonText } from '../../portal/src/components/json-text.ts'
 
@@ -60,8 +63,11 @@ test('a grid stays within its limit, is ordered, and holds what was asked for', 
       const { depths, times } = gridOf({ extent, end, ...wanted })
       expect(depths.length * times.length).toBeLessThanOrEqual(10_000)
       for (const axis of [depths, times]) expect(axis).toEqual([...axis].sort((a, b) => a - b))
-      for (const time of wanted.times.slice(0, 15)) expect(times).toContain(Number(time.toPrecision(12)))
-      for (const depth of wanted.depths.slice(0, 15)) expect(depths).toContain(Number(depth.toPrecision(12)))
+      const shown = (value: number, last: number) => Math.min(last, Number(value.toPrecision(12)))
+      for (const time of wanted.times.slice(0, 15)) expect(times).toContain(shown(time, end))
+      for (const depth of wanted.depths.slice(0, 15)) expect(depths).toContain(shown(depth, extent))
+      expect(depths.at(-1), 'the body ends there').toBeLessThanOrEqual(extent)
+      expect(times.at(-1)).toBeLessThanOrEqual(end)
       expect(depths.at(-1)).toBeCloseTo(extent, 3)
     }),
   )
@@ -78,6 +84,66 @@ test('steps are 1, 2, 2.5 or 5 times a power of ten, and enough of them', () => 
     }),
   )
   expect(multiples(2.5, -10, 10)).toEqual([-10, -7.5, -5, -2.5, 0, 2.5, 5, 7.5, 10])
+})
+
+const field = (initial: number, drive: number, values: number[][]): Field => ({
+  depths: values[0]!.map((_, i) => i / 10),
+  times: values.map((_, i) => i * 3600),
+  values,
+  initial,
+  drive,
+  held: false,
+  back: 'insulated',
+})
+
+test('a range is never empty, and all that is drawn from it is finite', () => {
+  expect(temperatureRange([20, 20])).toEqual({ low: 19, high: 21, step: 0.5 })
+  const temperature = fc.double({ min: -273, max: 5000, noNaN: true })
+  const difference = fc.oneof(fc.constant(0), fc.double({ min: 1e-14, max: 1000, noNaN: true }))
+  fc.assert(
+    fc.property(temperature, difference, (initial, more) => {
+      const flat = field(initial, initial + more, [
+        [initial, initial],
+        [initial, initial],
+      ])
+      const { low, high, step } = rangeOf(flat)
+      expect(high).toBeGreaterThan(low)
+      expect(low).toBeLessThanOrEqual(initial + 1e-6 * step)
+      expect(high).toBeGreaterThanOrEqual(initial + more - 1e-6 * step)
+      const marks = multiples(step, low, high).map((level) => markText(level, step))
+      expect(marks.length).toBeGreaterThan(1)
+      expect(marks.length).toBeLessThan(12)
+      expect(new Set(marks).size, marks.join()).toBe(marks.length)
+      const { y, across } = layoutOf(flat, 900, true)
+      for (const place of [y(initial), across(initial + more)]) expect(Number.isFinite(place)).toBe(true)
+      expect(degrees(initial, high - low)).not.toMatch(/NaN/)
+    }),
+  )
+})
+
+test('numbers carry no zeros that only fill up, and a true minus', () => {
+  expect(plain(3168810000)).toBe('3.169 × 10⁹')
+  expect(plain(8333330000000, 6)).toBe('8.33333 × 10¹²')
+  expect(plain(12345)).toBe('12345')
+  expect(plain(86_400)).toBe('86400')
+  expect(plain(-0.00002)).toBe('−2 × 10⁻⁵')
+  expect(plain(-12.5)).toBe('−12.5')
+  expect(plain(0)).toBe('0')
+})
+
+test('the hatching of a plan is said in words', () => {
+  const cooling = [0, 1, 2, 3, 4].map((row) => [20 - 5 * row, 20 - 4 * row, 20 - 2 * row])
+  expect(washText(field(20, -10, cooling))).toBe('Nowhere below 0 °C. Hatched: below 10 °C.')
+  const frozen = cooling.map((row) => row.map((value) => value - 4))
+  expect(washText(field(20, -10, frozen))).toBe('Hatched: below 0 °C.')
+  expect(
+    washText(
+      field(20, 20, [
+        [20, 20],
+        [20, 20],
+      ]),
+    ),
+  ).toBeUndefined()
 })
 
 test('laid-out JSON is the same JSON', () => {

@@ -1,3 +1,5 @@
+import type { Who } from '../session/signed-in.ts'
+
 /** What the service says of a call it refused or failed. */
 export interface ProblemBody {
   code: string
@@ -23,14 +25,26 @@ export class ApiError extends Error {
   readonly problem: ProblemBody | undefined
   /** Seconds to wait before the same call may succeed. */
   readonly retryAfter: number | undefined
-  constructor(problem: ProblemBody | undefined, retryAfter?: number) {
+  /** Whose session the call was made with. */
+  readonly who: Who
+  readonly at = Date.now()
+  constructor(problem: ProblemBody | undefined, retryAfter?: number, who: Who = 'member') {
     super(problem?.detail ?? 'No answer arrived.')
     this.name = 'ApiError'
     this.problem = problem
     this.retryAfter = retryAfter
+    this.who = who
   }
   get status(): number {
     return this.problem?.status ?? 0
+  }
+  /** When the same call may be sent again; 0 for at once. */
+  get notBefore(): number {
+    return this.retryAfter === undefined ? 0 : this.at + this.retryAfter * 1000
+  }
+  /** Whether the very same call may succeed later. */
+  get worthRepeating(): boolean {
+    return !this.problem || this.problem.retryable || this.status >= 500
   }
 }
 
@@ -47,7 +61,11 @@ export async function unwrap<D>(call: Promise<Result<D>>): Promise<D> {
     throw new ApiError(undefined)
   })
   if (result.response.ok) return result.data as D
-  throw new ApiError(problemOf(result.error, result.response), secondsOf(result.response))
+  throw new ApiError(problemOf(result.error, result.response), secondsOf(result.response), whoseCall(result.response))
+}
+
+function whoseCall({ url }: Response): Who {
+  return new URL(url, globalThis.location.origin).pathname.startsWith('/support/') ? 'staff' : 'member'
 }
 
 function problemOf(error: unknown, response: Response): ProblemBody {

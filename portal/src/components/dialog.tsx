@@ -17,6 +17,8 @@ export function Dialog({ title, onClose, closable = true, children }: Props) {
   useLayoutEffect(() => {
     const dialog = ref.current
     dialog?.showModal()
+    // The browser would choose Close, and Enter would then close.
+    dialog?.querySelector<HTMLElement>('.body input.box')?.focus()
     return () => dialog?.close()
   }, [])
   return (

@@ -1,16 +1,24 @@
 import { ApiError, issuesByField } from '../api/api-error.ts'
+import { failureWords } from './failure-words.ts'
+import { useOfflineSince } from './use-online.ts'
 
 /** A refusal that belongs to no field. */
 export function FormFailure({ error, fields }: { error: unknown; fields: readonly string[] }) {
+  const offline = useOfflineSince() !== undefined
   if (!error) return null
   const issues = Object.entries(issuesByField(error))
   const elsewhere = issues.filter(([name]) => !fields.includes(name)).map(([, text]) => text)
   if (issues.length > 0 && elsewhere.length === 0) return null
-  const problem = error instanceof ApiError ? error.problem : undefined
+  const { title, text } = failureWords(error, offline)
+  const requestId = error instanceof ApiError ? error.problem?.requestId : undefined
   return (
     <div role="alert" className="note warning mt-4">
-      <b>{problem?.title ?? 'The answer did not arrive.'}</b>{' '}
-      {elsewhere.length ? elsewhere.join(' ') : (problem?.detail ?? 'What you typed is kept. Send it again.')}
+      <b>{title.replace(/[.]?$/, '.')}</b> {elsewhere.length ? elsewhere.join(' ') : text}
+      {requestId && issues.length === 0 && (
+        <span className="lab block">
+          Request <code>{requestId}</code>
+        </span>
+      )}
     </div>
   )
 }

@@ -1,4 +1,4 @@
-import { MINUS, THIN } from '../figure/measures.ts'
+import { MINUS, THIN, timesTen } from '../figure/measures.ts'
 
 /** A whole number in groups of three. */
 export function whole(value: number): string {
@@ -11,10 +11,7 @@ export function whole(value: number): string {
 export function scientific(value: number, digits = 2): string {
   if (value === 0) return '0'
   const [mantissa, exponent] = value.toExponential(digits - 1).split('e') as [string, string]
-  const power = String(Number(exponent))
-    .replace('-', '⁻')
-    .replace(/\d/g, (d) => '⁰¹²³⁴⁵⁶⁷⁸⁹'[Number(d)]!)
-  return `${mantissa.replace('-', MINUS)} × 10${power}`
+  return timesTen(mantissa, Number(exponent))
 }
 
 const superscripts: Record<string, string> = { 2: '²', 3: '³', 4: '⁴' }

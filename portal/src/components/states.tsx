@@ -1,7 +1,8 @@
 import { type ReactNode, useEffect, useState } from 'react'
 import { ApiError } from '../api/api-error.ts'
-import { useOnline } from './use-online.ts'
-import { Button } from './button.tsx'
+import { failureWords } from './failure-words.ts'
+import { SendButton } from './send-button.tsx'
+import { useOfflineSince } from './use-online.ts'
 import { BrokenBody, ClosedBody, EmptyBody, FillingBody, PartedBodies } from './state-drawings.tsx'
 
 interface Props {
@@ -42,24 +43,58 @@ export function Loading({ what }: { what: string }) {
 
 /** What failed, whether it cost anything, and what to do. */
 export function Failed({ error, retry }: { error: unknown; retry?: () => void }) {
-  const online = useOnline()
+  const since = useOfflineSince()
   const problem = error instanceof ApiError ? error.problem : undefined
   if (problem?.status === 403) return <Denied>{problem.detail}</Denied>
+  if (!problem && since) return <Offline since={since} {...(retry ? { retry } : {})} />
+  const { title, text } = failureWords(error, false)
+  const repeatable = !(error instanceof ApiError) || error.worthRepeating
   return (
-    <div role="alert" className="state">
-      {online ? <BrokenBody /> : <PartedBodies />}
+    <div className="state">
+      <BrokenBody />
       <div className="grid gap-2 justify-items-start">
-        <h3>{problem ? problem.title : online ? 'The answer did not arrive' : 'No connection'}</h3>
-        <p className="prose">{problem ? problem.detail : 'Nothing was charged. What you typed is kept.'}</p>
+        <div role="alert" className="grid gap-2">
+          <h3>{title}</h3>
+          <p className="prose">{text}</p>
+        </div>
         {problem?.requestId && (
           <p className="lab">
             Request <code>{problem.requestId}</code>
           </p>
         )}
-        {retry && (
-          <Button small onClick={retry}>
+        {retry && repeatable && (
+          <SendButton small error={error} onClick={retry}>
             Send again
-          </Button>
+          </SendButton>
+        )}
+      </div>
+    </div>
+  )
+}
+
+interface OfflineProps {
+  since: string
+  /** What is shown meanwhile, and how old it is. */
+  shown?: string | undefined
+  retry?: () => void
+}
+
+/** A gap between two bodies. */
+export function Offline({ since, shown, retry }: OfflineProps) {
+  return (
+    <div className="state">
+      <PartedBodies />
+      <div className="grid gap-2 justify-items-start">
+        <div role="alert" className="grid gap-2">
+          <h3>No connection since {since}</h3>
+          <p className="prose">
+            Nothing was sent or charged. What you typed is kept, and is sent only when you say so.{shown && ` ${shown}`}
+          </p>
+        </div>
+        {retry && (
+          <SendButton small error={undefined} onClick={retry}>
+            Send again
+          </SendButton>
         )}
       </div>
     </div>

@@ -1,14 +1,26 @@
 import { useSyncExternalStore } from 'react'
 
+let lostAt: string | undefined = navigator.onLine ? undefined : clockText(Date.now())
+
+/** "09:40 UTC" */
+export function clockText(instant: number): string {
+  return `${new Date(instant).toISOString().slice(11, 16)} UTC`
+}
+
 function subscribe(changed: () => void) {
-  addEventListener('online', changed)
-  addEventListener('offline', changed)
+  const update = () => {
+    lostAt = navigator.onLine ? undefined : (lostAt ?? clockText(Date.now()))
+    changed()
+  }
+  addEventListener('online', update)
+  addEventListener('offline', update)
   return () => {
-    removeEventListener('online', changed)
-    removeEventListener('offline', changed)
+    removeEventListener('online', update)
+    removeEventListener('offline', update)
   }
 }
 
-export function useOnline(): boolean {
-  return useSyncExternalStore(subscribe, () => navigator.onLine)
+/** Since when there is no connection; undefined while there is one. */
+export function useOfflineSince(): string | undefined {
+  return useSyncExternalStore(subscribe, () => lostAt)
 }

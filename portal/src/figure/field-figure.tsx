@@ -1,7 +1,7 @@
 import type { PointerEvent } from 'react'
 import { CutMarks } from './cut-marks.tsx'
 import { Drawing } from './drawing.tsx'
-import type { Cut, Field } from './field.ts'
+import { type Cut, type Field, washText } from './field.ts'
 import { nearest } from './grid.ts'
 import type { Hatch } from './hatches.tsx'
 import { HistoryFigure } from './history-figure.tsx'
@@ -26,6 +26,7 @@ export function FieldFigure({ field, cut, onCut, hatch, material, history = true
   const [box, width] = useWidth<HTMLDivElement>()
   const layout = layoutOf(field, Math.max(264, width), history)
   const value = field.values[cut.row]![cut.column]!
+  const wash = washText(field)
   const reading = `${degrees(value, layout.range.high - layout.range.low)} °C`
   const label = `Temperature over depth and time. At ${placeOf(field, cut)} and ${timeOf(field.times, cut.row)}: ${reading}`
   const follow = (event: PointerEvent<SVGSVGElement>) => {
@@ -50,6 +51,7 @@ export function FieldFigure({ field, cut, onCut, hatch, material, history = true
           {layout.beside && <HistorySection field={field} layout={layout} cut={cut} />}
         </Drawing>
       )}
+      {wash && <p className="lab mt-2">{wash}</p>}
       {width > 0 && history && !layout.beside && (
         <HistoryFigure
           width={layout.width}

@@ -16,7 +16,7 @@ export function Film({ field, layout, face }: { field: Field; layout: Layout; fa
       <line className="dash" x1={edge} x2={edge} y1={top + 8} y2={bottom} />
       {small ? (
         <text className={name} x={axis + 2} y={cold ? level - 7 : level + 16}>
-          air
+          fluid
         </text>
       ) : (
         <>

@@ -20,20 +20,21 @@ export function gridOf({ extent, end, depths, times, rows: wanted = ROWS, column
   depths: number[]
   times: number[]
 } {
-  const across = sorted([...even(extent, columns), ...depths.filter((d) => d >= 0 && d <= extent).slice(0, 15)])
+  const across = sorted([...even(extent, columns), ...depths.filter((d) => d >= 0 && d <= extent).slice(0, 15)], extent)
   const named = times.filter((t) => t > 0 && t <= end).slice(0, 15)
   const rows = Math.min(wanted, Math.floor(MOST / across.length) - named.length - 5)
   const first = end / rows
   const early = [1 / 64, 1 / 16, 1 / 4, 1 / 2].map((part) => first * part)
-  return { depths: across, times: sorted([...even(end, rows), ...early, ...named]) }
+  return { depths: across, times: sorted([...even(end, rows), ...early, ...named], end) }
 }
 
 function even(end: number, parts: number): number[] {
   return Array.from({ length: parts + 1 }, (_, i) => Number(((end * i) / parts).toPrecision(12)))
 }
 
-function sorted(values: readonly number[]): number[] {
-  return [...new Set(values.map((v) => Number(v.toPrecision(12))))].sort((a, b) => a - b)
+/** In order and rounded, but never past the end: the body has no temperature there. */
+function sorted(values: readonly number[], end: number): number[] {
+  return [...new Set(values.map((v) => Math.min(end, Number(v.toPrecision(12)))))].sort((a, b) => a - b)
 }
 
 /** The index whose value lies nearest. */

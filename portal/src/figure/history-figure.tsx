@@ -1,7 +1,7 @@
 import { Drawing } from './drawing.tsx'
 import { pathOf } from './points.ts'
 import { temperatureRange } from './field.ts'
-import { degrees, inMeasure, plain } from './measures.ts'
+import { degrees, inMeasure, markText } from './measures.ts'
 import { multiples } from './steps.ts'
 import { timeAxis } from './time-axis.ts'
 
@@ -45,7 +45,7 @@ export function HistoryFigure({ width, times, values, levels, row, title }: Prop
         <g key={level}>
           <line className="hair" x1={left} x2={right} y1={y(level)} y2={y(level)} />
           <text x={left - 9} y={y(level) + 4} textAnchor="end">
-            {plain(level)}
+            {markText(level, range.step)}
           </text>
         </g>
       ))}

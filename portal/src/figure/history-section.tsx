@@ -1,7 +1,7 @@
 import { pathOf } from './points.ts'
 import type { Cut, Field } from './field.ts'
 import type { Layout } from './layout.ts'
-import { degrees, inMeasure, lengthMeasure, plain, timeMeasure } from './measures.ts'
+import { degrees, inMeasure, lengthMeasure, markText, timeMeasure } from './measures.ts'
 import { multiples } from './steps.ts'
 import { timeAxis } from './time-axis.ts'
 
@@ -60,7 +60,7 @@ function TemperatureLines({ layout: { range, across, planTop, planHeight } }: { 
       <line className="hair" x1={across(level)} x2={across(level)} y1={planTop} y2={planTop + planHeight} />
       {i % every === 0 && (
         <text x={across(level)} y={planTop - 8} textAnchor="middle">
-          {plain(level)}
+          {markText(level, range.step)}
         </text>
       )}
     </g>

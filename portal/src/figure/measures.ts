@@ -38,8 +38,31 @@ export function lengthMeasure(extent: number): Measure {
 export const MINUS = '\u2212'
 export const THIN = '\u202f'
 
+const SUPERSCRIPTS = '⁰¹²³⁴⁵⁶⁷⁸⁹'
+
+/** A power of ten after a mantissa. */
+export function timesTen(mantissa: string, exponent: number): string {
+  const power = String(exponent)
+    .replace('-', '⁻')
+    .replace(/\d/g, (d) => SUPERSCRIPTS[Number(d)]!)
+  return `${mantissa.replace('-', MINUS)} × 10${power}`
+}
+
+/** So many digits, and never a zero that only fills up: what is very large or small is set with a power of ten. */
 export function plain(value: number, digits = 4): string {
-  return String(Number(value.toPrecision(digits))).replace('-', MINUS)
+  const size = Math.abs(value)
+  if (size >= 1e6 || (size > 0 && size < 1e-4)) {
+    const [mantissa, exponent] = value.toExponential(digits - 1).split('e') as [string, string]
+    return timesTen(String(Number(mantissa)), Number(exponent))
+  }
+  const integers = size >= 1 ? Math.floor(Math.log10(size)) + 1 : 0
+  return String(Number(value.toPrecision(Math.max(digits, integers)))).replace('-', MINUS)
+}
+
+/** A mark of a scale: enough digits to tell it from its neighbour. */
+export function markText(level: number, step: number): string {
+  const digits = level === 0 ? 4 : Math.ceil(Math.log10(Math.abs(level) / step)) + 2
+  return plain(level, Math.min(12, Math.max(4, digits)))
 }
 
 export function inMeasure(value: number, { size }: Measure, digits = 4): string {

@@ -6,7 +6,7 @@ import { HeldFace } from './held-face.tsx'
 import { type Hatch, hatched } from './hatches.tsx'
 import type { Layout } from './layout.ts'
 import { OtherProfiles, profileOf } from './other-profiles.tsx'
-import { degrees, inMeasure, lengthMeasure, plain, timeMeasure } from './measures.ts'
+import { degrees, inMeasure, lengthMeasure, markText, timeMeasure } from './measures.ts'
 import { multiples } from './steps.ts'
 
 interface Props {
@@ -49,7 +49,7 @@ export function ProfileSection({ field, layout, cut, hatch, material }: Props) {
           <line className="thin" x1={axis - 5} x2={axis} y1={y(level)} y2={y(level)} />
           <line className="hair" x1={axis} x2={right} y1={y(level)} y2={y(level)} />
           <text x={axis - 9} y={y(level) + 4} textAnchor="end">
-            {plain(level)}
+            {markText(level, range.step)}
           </text>
         </g>
       ))}

@@ -2,6 +2,7 @@ const leading = [1, 2, 2.5, 5, 10]
 
 /** The smallest step of 1, 2, 2.5 or 5 times a power of ten that cuts a span into at most so many parts. */
 export function niceStep(span: number, most: number): number {
+  if (!(span > 0 && Number.isFinite(span))) throw new RangeError(`no step cuts a span of ${span}`)
   const raw = span / most
   const power = 10 ** Math.floor(Math.log10(raw))
   return (leading.find((l) => l * power >= raw * (1 - 1e-9)) ?? 10) * power

@@ -1,26 +1,7 @@
-import { useSyncExternalStore } from 'react'
-
-let lostAt: string | undefined = navigator.onLine ? undefined : now()
-
-function now(): string {
-  return `${new Date().toISOString().slice(11, 16)} UTC`
-}
-
-function subscribe(changed: () => void) {
-  const update = () => {
-    lostAt = navigator.onLine ? undefined : now()
-    changed()
-  }
-  addEventListener('online', update)
-  addEventListener('offline', update)
-  return () => {
-    removeEventListener('online', update)
-    removeEventListener('offline', update)
-  }
-}
+import { useOfflineSince } from '../components/use-online.ts'
 
 export function ConnectionNote() {
-  const since = useSyncExternalStore(subscribe, () => lostAt)
+  const since = useOfflineSince()
   return (
     <div role="status">
       {since && (

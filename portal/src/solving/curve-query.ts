@@ -34,6 +34,7 @@ interface Drawn {
   sketch: { body: string; boundary: string }
   depthsEndAt: string | null
   drive: string | null
+  fields: readonly { name: string; schema: Readonly<Record<string, unknown>> }[]
 }
 
 /** Everything a drawing of a body's answer needs, from one solve on a grid; null where no time lies after the change. */
@@ -54,7 +55,7 @@ async function drawingOf(
   const asked = { times: numbersOf(body['times']), depths: numbersOf(body['depths']) }
   const last = Math.max(0, ...asked.times)
   if (last === 0) return null
-  const end = asked.times.length > 1 ? last : niceCeiling(2 * last)
+  const end = Math.min(asked.times.length > 1 ? last : niceCeiling(2 * last), largestOf(c, 'times'))
   const { detail: _, depths: __, outputs: ___, ...rest } = body
   const first = isFull(answer) ? answer : await trySolve(c.id, { ...body, detail: 'full' }, signal)
   if (!isFull(first)) throw new Error('a full answer was asked for')
@@ -106,7 +107,14 @@ function shapeOf(c: Drawn, { input, numbers }: Answer, depths: readonly number[]
   if (typeof end === 'number')
     return input['exposedFaces'] === 2 ? { extent: end / 2, back: 'mirror' } : { extent: end, back: 'insulated' }
   const reach = (numbers as Record<string, unknown>)['penetrationDepth']
-  return { extent: niceCeiling(Math.max(...depths, typeof reach === 'number' ? reach : 0) || 1), back: 'endless' }
+  const shown = niceCeiling(Math.max(...depths, typeof reach === 'number' ? reach : 0) || 1)
+  return { extent: Math.min(shown, largestOf(c, 'depths')), back: 'endless' }
+}
+
+/** The largest value that the contract accepts in a list. */
+function largestOf({ fields }: Drawn, name: string): number {
+  const items = fields.find((field) => field.name === name)?.schema['items'] as { maximum?: number } | undefined
+  return items?.maximum ?? Infinity
 }
 
 function surroundings(c: Drawn, { input }: Answer): { initial: number; drive: number } {

@@ -1,7 +1,7 @@
 import { useForm } from 'react-hook-form'
 import { Link, useSearchParams } from 'react-router-dom'
 import { issuesByField } from '../../api/api-error.ts'
-import { Button } from '../../components/button.tsx'
+import { SendButton } from '../../components/send-button.tsx'
 import { Band, Sheet } from '../../components/sheet.tsx'
 import { TextField } from '../../components/text-field.tsx'
 import { TitleBlock } from '../../components/title-block.tsx'
@@ -37,9 +37,9 @@ export function SignInScreen() {
           />
           <FormFailure error={start.error} fields={['mail', 'password']} />
           <div className="btnrow mt-5">
-            <Button kind="main" type="submit" disabled={start.isPending}>
+            <SendButton kind="main" type="submit" error={start.error} disabled={start.isPending}>
               {start.isPending ? 'Signing in' : 'Sign in'}
-            </Button>
+            </SendButton>
             <span>
               No account yet? <Link to="/sign-up">Sign up</Link>
             </span>

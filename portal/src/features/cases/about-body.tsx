@@ -1,3 +1,4 @@
+import { ScrollRegion } from '../../components/scroll-region.tsx'
 import { Note } from '../../components/note.tsx'
 import type { Body } from '../../solving/solve.ts'
 import { BodyDrawing } from './body-drawing.tsx'
@@ -14,11 +15,11 @@ export function AboutBody({ description: c, body }: { description: Case; body: B
     <div className="min-w-0">
       <h2 className="mb-4">The body</h2>
       <BodyDrawing sketch={c.sketch} title={c.title} body={body} />
-      <div className="equations" role="region" aria-label="Formula" tabIndex={0}>
+      <ScrollRegion label="Formula" className="equations">
         {c.formula.map((tex) => (
           <Formula key={tex} tex={tex} />
         ))}
-      </div>
+      </ScrollRegion>
       <p className="prose">{c.notes}</p>
       {without.map(({ name, schema }) => (
         <div key={name} className="mt-4">
@@ -29,11 +30,6 @@ export function AboutBody({ description: c, body }: { description: Case; body: B
         <details className="more mt-3">
           <summary>Outputs it cannot have, and why</summary>
           <ul className="pb-3 grid gap-1">
-            {without.map(({ name, schema }) => (
-              <div key={name} className="mt-4">
-                <Note kind="warning">{String(schema['description'])}</Note>
-              </div>
-            ))}
             {c.absentOutputs.map(({ name, reason }) => (
               <li key={name} className="prose">
                 <code>{name}</code> {reason}

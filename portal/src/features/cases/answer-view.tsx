@@ -9,24 +9,35 @@ import { type Answer, type CompactAnswer, isFull } from '../../solving/solve.ts'
 import { Checks } from './checks.tsx'
 import { OutputValues } from './output-values.tsx'
 import type { Case } from './queries.ts'
+import { type Stale, StaleFrame } from './stale-frame.tsx'
+
+interface Props {
+  description: Case
+  answer: Answer | CompactAnswer
+  stale: Stale | undefined
+}
 
 /** The answer in words: numbers with their error limits, checks, warnings, cautions, sources. */
-export function AnswerView({ description: c, answer }: { description: Case; answer: Answer | CompactAnswer }) {
+export function AnswerView({ description: c, answer, stale }: Props) {
   return (
     <div className="min-w-0" aria-live="polite">
-      <h2 className="mb-3">The answer</h2>
-      <OutputValues description={c} answer={answer} />
-      {isFull(answer) ? (
-        <Whole description={c} answer={answer} />
-      ) : (
-        <>
-          <h3 className="mt-5">Warnings</h3>
-          <p className="prose">{answer.warnings.join(', ') || 'None.'}</p>
-        </>
-      )}
-      <div className="btnrow mt-5">
-        <CopyButton text={jsonText(answer)}>Copy the answer</CopyButton>
-      </div>
+      <h2 className="mb-3">{stale ? 'The answer of the last solve' : 'The answer'}</h2>
+      <StaleFrame stale={stale}>
+        <OutputValues description={c} answer={answer} />
+        {isFull(answer) ? (
+          <Whole description={c} answer={answer} />
+        ) : (
+          <>
+            <h3 className="mt-5">Warnings</h3>
+            <p className="prose">{answer.warnings.join(', ') || 'None.'}</p>
+          </>
+        )}
+        <div className="btnrow mt-5">
+          <CopyButton text={jsonText(answer)}>
+            {stale ? 'Copy the answer of the last solve' : 'Copy the answer'}
+          </CopyButton>
+        </div>
+      </StaleFrame>
     </div>
   )
 }
@@ -40,7 +51,7 @@ function Whole({ description: c, answer }: { description: Case; answer: Answer }
           <Row
             key={name}
             name={spoken(name)}
-            value={(Array.isArray(value) ? value : [value]).map((v) => plain(v as number, 6)).join(' · ')}
+            value={(Array.isArray(value) ? value : [value]).map((v) => plain(v as number, 6)).join(', ')}
           />
         ))}
         <Row

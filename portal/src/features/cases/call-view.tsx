@@ -4,20 +4,33 @@ import { jsonText } from '../../components/json-text.ts'
 import { Tabs } from '../../components/tabs.tsx'
 import { ButtonLink } from '../../components/button.tsx'
 import { isFull } from '../../solving/solve.ts'
-import type { Solved } from './case-sheet.tsx'
 import { SnippetCode } from './snippet-code.tsx'
 import { snippets } from '../../solving/snippets.ts'
 import type { Case } from './queries.ts'
+import { type Stale, StaleFrame } from './stale-frame.tsx'
+import type { Solved } from './use-solve.ts'
+
+interface Props {
+  description: Case
+  solved: Solved
+  stale: Stale | undefined
+}
 
 /** Exactly the call that was solved, in two languages, and its answer. */
-export function CallView({ description: c, solved: { body, answer } }: { description: Case; solved: Solved }) {
+export function CallView({ description: c, solved: { body, answer }, stale }: Props) {
+  const copy = stale ? 'Copy the last solve' : 'Copy'
   const path = c.operations[0]!.path
   const tabs = snippets.map(({ name, language, write }) => {
     const text = write(location.origin + path, body)
     return {
       name,
       content: (
-        <CodeBlock caption="with your numbers" text={text} label={`${name} snippet`}>
+        <CodeBlock
+          caption={stale ? 'of the last solve' : 'with your numbers'}
+          text={text}
+          label={`${name} snippet`}
+          copy={copy}
+        >
           <SnippetCode text={text} language={language} />
         </CodeBlock>
       ),
@@ -26,17 +39,25 @@ export function CallView({ description: c, solved: { body, answer } }: { descrip
   const json = jsonText(answer)
   return (
     <div className="min-w-0">
-      <h2 className="mb-3">The call</h2>
-      <Tabs label="Language" tabs={tabs} />
-      <p className="prose mt-3">
-        It reads the key from <code>SOAK_KEY</code>.
-      </p>
-      <div className="btnrow mt-3 mb-6">
-        <ButtonLink to="/keys">Get a key</ButtonLink>
-      </div>
-      <CodeBlock caption={`Answer · 200${isFull(answer) ? '' : ' · compact'}`} text={json} label="Answer as JSON" tall>
-        <JsonCode text={json} />
-      </CodeBlock>
+      <h2 className="mb-3">{stale ? 'The call of the last solve' : 'The call'}</h2>
+      <StaleFrame stale={stale}>
+        <Tabs label="Language" tabs={tabs} />
+        <p className="prose mt-3">
+          It reads the key from <code>SOAK_KEY</code>.
+        </p>
+        <div className="btnrow mt-3 mb-6">
+          <ButtonLink to="/keys">Get a key</ButtonLink>
+        </div>
+        <CodeBlock
+          caption={`Answer · 200${isFull(answer) ? '' : ' · compact'}${stale ? ' · of the last solve' : ''}`}
+          text={json}
+          label="Answer as JSON"
+          copy={copy}
+          tall
+        >
+          <JsonCode text={json} />
+        </CodeBlock>
+      </StaleFrame>
     </div>
   )
 }

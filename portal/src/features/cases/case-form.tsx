@@ -1,27 +1,35 @@
 import { Fragment, useEffect, useRef } from 'react'
 import { useForm, useWatch } from 'react-hook-form'
-import { issuesByField } from '../../api/api-error.ts'
+import { ApiError, issuesByField } from '../../api/api-error.ts'
 import { Button, LinkButton } from '../../components/button.tsx'
 import { FormFailure } from '../../components/form-failure.tsx'
+import { SendButton } from '../../components/send-button.tsx'
+import { Offline } from '../../components/states.tsx'
+import { clockText, useOfflineSince } from '../../components/use-online.ts'
 import type { Body } from '../../solving/solve.ts'
 import { CaseField } from './case-field.tsx'
+import { FORM_ID } from './form-id.ts'
 import { HeatChoice } from './heat-choice.tsx'
 import { type FormValues, bodyOf, isSent, valuesOf, waysOf } from './form-values.ts'
 import type { Case, Field } from './queries.ts'
+import type { Solved } from './use-solve.ts'
 
 interface Props {
   description: Case
   /** The body that was last sent. */
   asked: Body
   /** The body that the sheet shows the answer of. */
-  solved: Body | undefined
+  solved: Solved | undefined
   pending: boolean
   error: unknown
   onSolve(body: Body): void
+  onCancel(): void
+  /** Told whether the form differs from what was solved. */
+  onChanged(changed: boolean): void
 }
 
 /** Every field of the contract. It solves when a field is left changed, and on Solve. */
-export function CaseForm({ description: c, asked, solved, pending, error, onSolve }: Props) {
+export function CaseForm({ description: c, asked, solved, pending, error, onSolve, onCancel, onChanged }: Props) {
   const { control, register, handleSubmit, getValues, reset } = useForm<FormValues>({
     defaultValues: valuesOf(c, c.example),
   })
@@ -31,7 +39,10 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
   const sent = (name: string) => isSent(c, name, values.heat)
   const open = c.fields.filter((field) => isOpen(c, field))
   const folded = c.fields.filter((field) => !isOpen(c, field))
-  const stale = solved !== undefined && !same(bodyOf(c, values), bodyOf(c, valuesOf(c, solved)))
+  const stale = solved !== undefined && !same(bodyOf(c, values), bodyOf(c, valuesOf(c, solved.body)))
+  const since = useOfflineSince()
+  const unsent = since !== undefined && error instanceof ApiError && !error.problem
+  useEffect(() => onChanged(stale), [stale, onChanged])
 
   useEffect(() => {
     if (error) form.current?.querySelector<HTMLElement>('[aria-invalid=true]')?.focus()
@@ -56,6 +67,7 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
   return (
     <form
       ref={form}
+      id={FORM_ID}
       noValidate
       aria-labelledby="numbers"
       className="min-w-0"
@@ -74,11 +86,16 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
           {fields(folded)}
         </details>
       )}
-      <FormFailure error={error} fields={c.fields.map(({ name }) => name).filter(sent)} />
+      {unsent ? (
+        <Offline since={since} shown={solved && `The numbers below were solved at ${clockText(solved.at)}.`} />
+      ) : (
+        <FormFailure error={error} fields={c.fields.map(({ name }) => name).filter(sent)} />
+      )}
       <div className="btnrow mt-5">
-        <Button kind="main" type="submit">
+        <SendButton kind="main" type="submit" error={error}>
           {pending ? 'Solving' : 'Solve'}
-        </Button>
+        </SendButton>
+        {pending && <Button onClick={onCancel}>Cancel</Button>}
         <LinkButton
           onClick={() => {
             reset(valuesOf(c, c.example))
@@ -89,8 +106,8 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
         </LinkButton>
       </div>
       <p role="status" className="lab mt-3 min-h-4">
-        {stale && !pending
-          ? 'The numbers below are older than your last change. Solve again.'
+        {stale
+          ? `The numbers below are older than your last change.${pending ? '' : ' Solve again.'}`
           : 'Free while you try it here.'}
       </p>
     </form>

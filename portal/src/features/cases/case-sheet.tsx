@@ -1,20 +1,17 @@
-import { useMutation, useQuery } from '@tanstack/react-query'
+import { useQuery } from '@tanstack/react-query'
 import { useState } from 'react'
 import { Band, Sheet } from '../../components/sheet.tsx'
 import { Failed, Loading } from '../../components/states.tsx'
 import { TitleBlock } from '../../components/title-block.tsx'
-import { type Answer, type Body, type CompactAnswer, trySolve } from '../../solving/solve.ts'
+import { trySolve } from '../../solving/solve.ts'
 import { AnswerView } from './answer-view.tsx'
 import { CallView } from './call-view.tsx'
 import { CaseForm } from './case-form.tsx'
 import { CurveBand } from './curve-band.tsx'
 import { AboutBody } from './about-body.tsx'
 import type { Case } from './queries.ts'
-
-export interface Solved {
-  body: Body
-  answer: Answer | CompactAnswer
-}
+import type { Stale } from './stale-frame.tsx'
+import { type Solved, useSolve } from './use-solve.ts'
 
 /** One case: what it is, its form, the curve, the answer and the call. It opens with its own example solved. */
 export function CaseSheet({ description: c }: { description: Case }) {
@@ -23,12 +20,11 @@ export function CaseSheet({ description: c }: { description: Case }) {
     queryFn: ({ signal }) => trySolve(c.id, c.example, signal),
     staleTime: Infinity,
   })
-  const [own, setOwn] = useState<Solved>()
-  const solve = useMutation({
-    mutationFn: (body: Body) => trySolve(c.id, body),
-    onSuccess: (answer, body) => setOwn({ body, answer }),
-  })
-  const solved = own ?? (example.data && { body: c.example, answer: example.data })
+  const own = useSolve(c.id, c.example)
+  const solved: Solved | undefined =
+    own.solved ?? (example.data && { body: c.example, answer: example.data, at: example.dataUpdatedAt })
+  const [changed, setChanged] = useState(false)
+  const stale: Stale | undefined = changed ? (own.error ? 'refused' : 'changed') : undefined
   return (
     <Sheet title={c.title}>
       <TitleBlock
@@ -47,21 +43,23 @@ export function CaseSheet({ description: c }: { description: Case }) {
           <AboutBody description={c} body={solved?.body ?? c.example} />
           <CaseForm
             description={c}
-            asked={solve.variables ?? c.example}
-            solved={solved?.body}
-            pending={solve.isPending}
-            error={solve.error}
-            onSolve={(body) => solve.mutate(body)}
+            asked={own.asked}
+            solved={solved}
+            pending={own.pending}
+            error={own.error}
+            onSolve={own.solve}
+            onCancel={own.cancel}
+            onChanged={setChanged}
           />
         </div>
       </Band>
       {solved ? (
         <>
-          <CurveBand description={c} solved={solved} />
+          <CurveBand description={c} solved={solved} stale={stale} />
           <Band>
             <div className="two flip">
-              <AnswerView description={c} answer={solved.answer} />
-              <CallView description={c} solved={solved} />
+              <AnswerView description={c} answer={solved.answer} stale={stale} />
+              <CallView description={c} solved={solved} stale={stale} />
             </div>
           </Band>
         </>

@@ -15,24 +15,26 @@ export function CatalogueScreen() {
   const words = search.get('q') ?? ''
   const cases = query.data?.cases ?? []
   const found = cases.filter((c) => matches(c, words))
+  const waiting = query.isError ? '–' : 'reading'
   const families = [...new Set(found.map(({ family }) => family))]
   return (
     <Sheet title="Cases">
       <TitleBlock
         title="Cases"
         facts={[
-          { name: 'Cases', value: query.data ? cases.length : 'reading' },
-          { name: 'Shown', value: query.data ? found.length : 'reading' },
+          { name: 'Cases', value: query.data ? cases.length : waiting },
+          { name: 'Shown', value: query.data ? found.length : waiting },
           {
             name: 'Operations',
             value:
-              [...new Set(cases.flatMap(({ operations }) => operations.map(({ id }) => id)))].join(' · ') || 'reading',
+              [...new Set(cases.flatMap(({ operations }) => operations.map(({ id }) => id)))].join(' · ') || waiting,
             full: true,
           },
         ]}
       >
         <p className="prose">
-          Each case is one body with one boundary, solved exactly. Pick what you can see in your problem.
+          Each case is one body with one boundary, solved exactly.
+          {cases.length > 1 && ' Pick what you can see in your problem.'}
         </p>
       </TitleBlock>
       <search className="band tight btnrow">

@@ -5,19 +5,26 @@ import { Band } from '../../components/sheet.tsx'
 import { QueryView } from '../../components/query-view.tsx'
 import { hatchFor } from '../../figure/sketch.tsx'
 import { type Drawing, curveQuery } from '../../solving/curve-query.ts'
-import type { Solved } from './case-sheet.tsx'
 import { FieldCurve } from './field-curve.tsx'
 import { FieldTable } from './field-table.tsx'
 import { HistoryCurve } from './history-curve.tsx'
 import type { Case } from './queries.ts'
+import { type Stale, StaleFrame } from './stale-frame.tsx'
+import type { Solved } from './use-solve.ts'
 
 const views = [
   { value: 'curve', text: 'Curve' },
   { value: 'table', text: 'Table' },
 ] as const
 
+interface Props {
+  description: Case
+  solved: Solved
+  stale: Stale | undefined
+}
+
 /** The solve drawn, and the same numbers as a table. */
-export function CurveBand({ description: c, solved: { body, answer } }: { description: Case; solved: Solved }) {
+export function CurveBand({ description: c, solved: { body, answer }, stale }: Props) {
   const query = useQuery(curveQuery(c, body, answer))
   const [view, setView] = useState<'curve' | 'table'>('curve')
   return (
@@ -26,9 +33,11 @@ export function CurveBand({ description: c, solved: { body, answer } }: { descri
         <h2>{c.places === 'depths' ? 'One solve, two cuts' : 'One solve, its history'}</h2>
         <Segmented label="Show as" options={views} value={view} onChange={(chosen) => setView(chosen)} />
       </div>
-      <QueryView query={query} what="Solving for the curve.">
-        {(drawing) => <Shown drawing={drawing} view={view} body={c.sketch.body} />}
-      </QueryView>
+      <StaleFrame stale={stale}>
+        <QueryView query={query} what="Solving for the curve.">
+          {(drawing) => <Shown drawing={drawing} view={view} body={c.sketch.body} />}
+        </QueryView>
+      </StaleFrame>
     </Band>
   )
 }

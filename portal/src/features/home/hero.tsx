@@ -54,8 +54,7 @@ export function Hero({ field, answer, film, hours, position, asked, onPosition, 
           )}
         </QueryView>
         <p className="prose mt-3">
-          In the plan, hatching marks where the brick is below 0 °C. The plan cut at A{'\u2060'}–{'\u2060'}A is the
-          profile above it.
+          The plan cut at A{'\u2060'}–{'\u2060'}A is the profile above it.
         </p>
       </div>
       <div className="side">

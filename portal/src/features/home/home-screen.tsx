@@ -27,7 +27,7 @@ export function HomeScreen() {
           { name: 'Error of a temperature', value: '≤ 1e-12 of the driving difference', full: true },
           { name: 'Charged by', value: 'evaluated point' },
           { name: 'Refused call', value: '0 points' },
-          { name: 'Solver', value: shown?.solver ?? 'reading' },
+          { name: 'Solver', value: shown?.solver ?? (answer.isError ? '–' : 'reading') },
           { name: 'Trial', value: '100\u202f000 points a day' },
           { name: 'Address', value: `${location.origin}/v1`, full: true },
         ]}

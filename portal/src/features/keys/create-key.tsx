@@ -5,6 +5,7 @@ import { issuesByField } from '../../api/api-error.ts'
 import { Button } from '../../components/button.tsx'
 import { Dialog } from '../../components/dialog.tsx'
 import { FormFailure } from '../../components/form-failure.tsx'
+import { SendButton } from '../../components/send-button.tsx'
 import { TextField } from '../../components/text-field.tsx'
 import { createKey, keysQuery } from './queries.ts'
 import { SecretOnce } from './secret-once.tsx'
@@ -46,9 +47,9 @@ export function CreateKey({ onClose }: { onClose(): void }) {
           <FormFailure error={create.error} fields={['name', 'quota']} />
         </div>
         <div className="acts btnrow">
-          <Button kind="main" type="submit" disabled={create.isPending}>
+          <SendButton kind="main" type="submit" error={create.error} disabled={create.isPending}>
             {create.isPending ? 'Creating' : 'Create and show once'}
-          </Button>
+          </SendButton>
           <Button onClick={onClose}>Cancel</Button>
         </div>
       </form>

@@ -3,10 +3,10 @@ import { useForm } from 'react-hook-form'
 import { Link, useLocation, useNavigate } from 'react-router-dom'
 import { issuesByField } from '../../api/api-error.ts'
 import type { components } from '../../../../openapi/support.d.ts'
-import { Button } from '../../components/button.tsx'
 import { type Column, DataTable } from '../../components/data-table.tsx'
 import { instantText, whole } from '../../components/formats.ts'
 import { FormFailure } from '../../components/form-failure.tsx'
+import { SendButton } from '../../components/send-button.tsx'
 import { Band, Sheet } from '../../components/sheet.tsx'
 import { Empty, Loading } from '../../components/states.tsx'
 import { TextField } from '../../components/text-field.tsx'
@@ -85,9 +85,9 @@ export function FindScreen() {
           />
           <FormFailure error={result.error} fields={['query', 'reason']} />
           <div className="btnrow mt-5">
-            <Button kind="main" type="submit">
+            <SendButton kind="main" type="submit" error={result.error}>
               {result.isFetching ? 'Finding' : 'Find'}
-            </Button>
+            </SendButton>
           </div>
         </form>
       </Band>

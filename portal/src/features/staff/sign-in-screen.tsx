@@ -2,7 +2,7 @@ import { useMutation, useQueryClient } from '@tanstack/react-query'
 import { useForm } from 'react-hook-form'
 import { useNavigate } from 'react-router-dom'
 import { issuesByField } from '../../api/api-error.ts'
-import { Button } from '../../components/button.tsx'
+import { SendButton } from '../../components/send-button.tsx'
 import { FormFailure } from '../../components/form-failure.tsx'
 import { Band, Sheet } from '../../components/sheet.tsx'
 import { TextField } from '../../components/text-field.tsx'
@@ -50,9 +50,9 @@ export function StaffSignInScreen() {
           />
           <FormFailure error={start.error} fields={['mail', 'password']} />
           <div className="btnrow mt-5">
-            <Button kind="main" type="submit" disabled={start.isPending}>
+            <SendButton kind="main" type="submit" error={start.error} disabled={start.isPending}>
               {start.isPending ? 'Signing in' : 'Sign in'}
-            </Button>
+            </SendButton>
           </div>
         </form>
       </Band>

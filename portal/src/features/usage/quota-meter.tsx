@@ -39,7 +39,7 @@ function Wall({ width, limit, used, expected }: { width: number; limit: number; 
   return (
     <Drawing
       width={width}
-      height={bottom + 66}
+      height={bottom + 82}
       label={`Quota ${whole(limit)} points, spent ${whole(used)}, left ${whole(limit - used)}, expected by the end of the day ${whole(expected)}`}
     >
       <rect className="w-sheet" x={x(0)} y={top} width={x(limit) - x(0)} height={height} />
@@ -73,10 +73,18 @@ function Wall({ width, limit, used, expected }: { width: number; limit: number; 
       <text className="t-ink" x={x(limit)} y={top - 20} textAnchor="end">
         quota {whole(limit)}
       </text>
+      {Math.max(expected, used) > limit && (
+        <text className="t-clay halo" x={right} y={top - 4} textAnchor="end">
+          {used > limit ? `spent ${whole(used)}` : `expected ${whole(expected)}`}
+        </text>
+      )}
       <Parts x={x} used={used} limit={limit} y={bottom + 36} small={small} />
     </Drawing>
   )
 }
+
+/** Width of a character of the drawing's figures, a little over. */
+const CHARACTER = 7.5
 
 /** Figures that would not fit over their part stand at its ends instead. */
 function Parts({
@@ -94,34 +102,28 @@ function Parts({
 }) {
   const fits = (from: number, to: number) => !small && x(to) - x(from) > 150
   const both = fits(0, used) && fits(used, limit)
+  const [spent, left] = [`spent ${whole(used)}`, `left ${whole(Math.max(0, limit - used))}`]
+  const apart = x(limit) - x(0) > (spent.length + left.length + 3) * CHARACTER
   return (
     <g>
       {used > 0 && (
-        <Dimension
-          from={x(0)}
-          to={x(Math.min(used, limit))}
-          y={y}
-          reach={28}
-          {...(both ? { label: `spent ${whole(used)}` } : {})}
-        />
+        <Dimension from={x(0)} to={x(Math.min(used, limit))} y={y} reach={28} {...(both ? { label: spent } : {})} />
       )}
-      {used < limit && (
-        <Dimension
-          from={x(used)}
-          to={x(limit)}
-          y={y}
-          reach={28}
-          {...(both ? { label: `left ${whole(limit - used)}` } : {})}
-        />
-      )}
+      {used < limit && <Dimension from={x(used)} to={x(limit)} y={y} reach={28} {...(both ? { label: left } : {})} />}
       {!both && (
         <>
           <text className="t-ink" x={x(0)} y={y + 22}>
-            spent {whole(used)}
+            {spent}
           </text>
-          <text className="t-ink" x={x(limit)} y={y + 22} textAnchor="end">
-            left {whole(limit - used)}
-          </text>
+          {apart ? (
+            <text className="t-ink" x={x(limit)} y={y + 22} textAnchor="end">
+              {left}
+            </text>
+          ) : (
+            <text className="t-ink" x={x(0)} y={y + 40}>
+              {left}
+            </text>
+          )}
         </>
       )}
     </g>
