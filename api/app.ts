@@ -4,6 +4,7 @@ import type { Deps } from './deps.ts'
 import { errorHandler } from './http/errors.ts'
 import { mount } from './http/mount.ts'
 import { portalFiles } from './http/portal-files.ts'
+import { refuseOdd } from './http/refuse-odd.ts'
 import { recordCalls } from './http/record.ts'
 import { secureAnswers } from './http/security.ts'
 import { sessionsOf } from './http/session.ts'
@@ -28,7 +29,7 @@ export function createApp(deps: Deps, portalFolder = builtPortal): App {
   app.set('x-powered-by', false)
   app.set('etag', false)
   app.set('query parser', false)
-  app.use(recordCalls(deps), secureAnswers(deps.config))
+  app.use(recordCalls(deps), secureAnswers(deps.config), refuseOdd)
   for (const document of ['openapi', 'portal', 'support'] as const)
     app.use(
       mount(

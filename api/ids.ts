@@ -1,4 +1,5 @@
 import { v7 as uuidv7 } from 'uuid'
+import { z } from 'zod'
 
 type Kind = 'req' | 'acct' | 'prsn' | 'stff' | 'key' | 'aud'
 
@@ -11,6 +12,14 @@ export interface IdSource {
 /** Ids are time-ordered; a request's day is read back from its id. */
 export function newId(kind: Kind, source: IdSource = {}): string {
   return `${kind}_${uuidv7(source).replaceAll('-', '')}`
+}
+
+/** What an id of a kind looks like; nothing else reaches the database as one. */
+export function idField(kind: Kind) {
+  return z
+    .string()
+    .regex(new RegExp(`^${kind}_[0-9a-f]{32}$`))
+    .meta({ 'x-accepted': `${kind}_ and 32 digits from 0 to f` })
 }
 
 const requestId = /^req_[0-9a-f]{12}7[0-9a-f]{3}[89ab][0-9a-f]{15}$/

@@ -70,8 +70,12 @@ export interface Reply {
 
 export interface Body<B> {
   schema: z.ZodType
+  /** Bytes that it may have, after decompression. */
+  limit: number
   /** Throws DomainError. */
   parse(raw: unknown): B
+  /** Reads the bytes of a long body away from the event loop. Throws what the parser and `parse` throw. */
+  parseLong?(bytes: Uint8Array, deps: Deps): Promise<B>
 }
 
 export type Method = 'get' | 'post'
@@ -119,9 +123,12 @@ export function operation<P, Q, B, A extends Access>(description: Description<P,
   return description as unknown as Operation
 }
 
-/** A JSON body that its schema describes whole. */
+/** Bytes of a form. */
+const SHORT = 16 * 1024
+
+/** A short JSON body that its schema describes whole. */
 export function jsonBody<S extends z.ZodObject>(schema: S): Body<z.output<S>> {
-  return { schema, parse: (raw) => parse(schema, raw) }
+  return { schema, limit: SHORT, parse: (raw) => parse(schema, raw) }
 }
 
 /** Needs the cookie of a session, to read or to change it. */
@@ -132,7 +139,7 @@ export function usesSession(o: Operation): boolean {
 /** Every problem an operation can answer: its own, and those of its access, body, query and limits. */
 export function problemsOf(o: Operation): ProblemCode[] {
   const codes: ProblemCode[] = ['method-not-allowed', 'not-acceptable', 'internal', 'unavailable', 'malformed-request']
-  codes.push('invalid-parameter', 'header-too-large', 'request-timeout')
+  codes.push('invalid-parameter', 'header-too-large', 'request-timeout', 'expectation-failed')
   if (o.access === 'key') codes.push('key-missing', 'key-unknown')
   if (o.access === 'session' || o.access === 'staff') codes.push('sign-in-needed', 'forbidden')
   if (usesSession(o) && o.method !== 'get') codes.push('cross-site')
@@ -142,6 +149,7 @@ export function problemsOf(o: Operation): ProblemCode[] {
       'malformed-json',
       'duplicate-name',
       'too-deep',
+      'too-many-parts',
       'body-too-large',
       'unsupported-media-type',
       'invalid-input',

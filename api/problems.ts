@@ -34,6 +34,12 @@ export const problems = {
     text: 'A body may be nested 32 levels deep. No operation needs more than a few.',
     retryable: false,
   },
+  'too-many-parts': {
+    status: 400,
+    title: 'The body has too many parts',
+    text: 'A body may have 10,000 objects and lists, and each object 10,000 names. No operation needs more than a few.',
+    retryable: false,
+  },
   'key-missing': {
     status: 401,
     title: 'A key is needed',
@@ -109,7 +115,7 @@ export const problems = {
   'body-too-large': {
     status: 413,
     title: 'The body is too large',
-    text: 'A body may have at most 4 MB, counted after decompression.',
+    text: 'Each operation takes bodies up to a size of its own, counted after decompression. Its description states it.',
     retryable: false,
   },
   'too-many-points': {
@@ -128,6 +134,12 @@ export const problems = {
     status: 415,
     title: 'The body is of another kind',
     text: 'Bodies are application/json in UTF-8.',
+    retryable: false,
+  },
+  'expectation-failed': {
+    status: 417,
+    title: 'The expectation cannot be met',
+    text: 'The Expect header may ask for 100-continue and nothing else.',
     retryable: false,
   },
   'invalid-input': {

@@ -45,9 +45,17 @@ export async function startService(config: Config, log: Logger, limits?: Limits)
   const deps = createDeps(config, log, limits)
   const { app, close: closeSessions } = createApp(deps)
   const server = createServer(
-    { maxHeaderSize: 16_384, headersTimeout: 10_000, requestTimeout: 60_000, keepAliveTimeout: 65_000 },
+    {
+      maxHeaderSize: 16_384,
+      headersTimeout: 10_000,
+      requestTimeout: 60_000,
+      keepAliveTimeout: 65_000,
+      connectionsCheckingInterval: 5000,
+      requireHostHeader: false,
+    },
     app,
   )
+  server.on('checkExpectation', app)
   refuseRaw(server, config.publicUrl)
   const stopHousekeeping = keepHouse(deps)
   await listen(server, config)

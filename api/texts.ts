@@ -26,6 +26,10 @@ export const mailField = z
   .meta({ title: 'Mail address', description: 'Mail address, 254 characters at most.', 'x-accepted': 'a mail address' })
 
 export const instantSchema = z.iso.datetime().meta({ description: 'An instant in UTC, RFC 3339.' })
+
+/** The service knows no earlier days; the last is that of four digits. */
+export const FIRST_DAY = '2000-01-01'
 export const dayField = z.iso
-  .date()
+  .date({ abort: true })
+  .refine((day) => day >= FIRST_DAY, { error: `The first day is ${FIRST_DAY}.` })
   .meta({ description: 'A UTC day, such as 2026-03-31.', 'x-accepted': 'a day such as 2026-03-31' })

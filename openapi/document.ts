@@ -6,6 +6,7 @@ import {
 } from '@asteasolutions/zod-to-openapi'
 import { z } from 'zod'
 import { cautions, warningCodes } from '../api/catalogue/codes.ts'
+import { sizeText } from '../api/http/size-text.ts'
 import { type Operation, type Tag, problemsOf } from '../api/operation.ts'
 import { rolesWith } from '../api/permissions.ts'
 import { type SessionKind, cookieName } from '../api/session-kinds.ts'
@@ -144,7 +145,7 @@ function routeOf(o: Operation): RouteConfig {
     ...(o.description ? { description: o.description } : {}),
     security: security[o.access],
     request: requestOf(o),
-    responses: { [o.status]: success(o), ...failures(codes) },
+    responses: { [o.status]: success(o), ...unchanged(o), ...failures(codes) },
     'x-problem-codes': codes,
     ...(o.permission ? { 'x-roles': rolesWith(o.permission) } : {}),
     ...(o.caseId ? { 'x-case': o.caseId, 'x-case-operation': o.caseOperation } : {}),
@@ -154,7 +155,11 @@ function routeOf(o: Operation): RouteConfig {
 function requestOf(o: Operation): NonNullable<RouteConfig['request']> {
   const params = o.params && withExamples(o.params, o.example?.params ?? {})
   const example = o.example?.body
-  const body = o.body && { required: true, content: { 'application/json': { schema: o.body.schema, example } } }
+  const body = o.body && {
+    description: `At most ${sizeText(o.body.limit)}, counted after decompression.`,
+    required: true,
+    content: { 'application/json': { schema: o.body.schema, example } },
+  }
   return { ...(params ? { params } : {}), ...(o.query ? { query: o.query } : {}), ...(body ? { body } : {}) }
 }
 
@@ -180,19 +185,28 @@ function success(o: Operation): RouteConfig['responses'][string] {
   }
 }
 
+function unchanged(o: Operation): RouteConfig['responses'] {
+  if (o.method !== 'get' || !o.answer) return {}
+  const description = 'The answer has not changed: its tag is among those of If-None-Match.'
+  return { 304: { description, headers: referHeaders('Request-Id', 'ETag') } }
+}
+
+const headersOf: Partial<Record<ProblemCode, keyof typeof headers>> = {
+  'key-missing': 'WWW-Authenticate',
+  'key-unknown': 'WWW-Authenticate',
+  'method-not-allowed': 'Allow',
+  'rate-limited': 'Retry-After',
+  'quota-exceeded': 'Points-Remaining',
+  'solve-too-slow': 'Retry-After',
+  unavailable: 'Retry-After',
+}
+
 function failures(codes: readonly ProblemCode[]): RouteConfig['responses'] {
   const byStatus: Record<string, ProblemCode[]> = {}
   for (const code of codes) (byStatus[problems[code].status] ??= []).push(code)
   return Object.fromEntries(
     Object.entries(byStatus).map(([status, list]) => {
-      const extra =
-        status === '401'
-          ? ['WWW-Authenticate']
-          : status === '405'
-            ? ['Allow']
-            : ['429', '503'].includes(status)
-              ? ['Retry-After']
-              : []
+      const extra = new Set(list.flatMap((code) => headersOf[code] ?? []))
       const narrowed = {
         allOf: [
           { $ref: '#/components/schemas/Problem' },

@@ -285,7 +285,7 @@ export interface components {
              * @description What clients match.
              * @enum {string}
              */
-            code: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "too-many-names" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
+            code: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
             title: string;
             status: number;
             detail: string;
@@ -1640,6 +1640,15 @@ export interface operations {
                     "application/json": components["schemas"]["CaseList"];
                 };
             };
+            /** @description The answer has not changed: its tag is among those of If-None-Match. */
+            304: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
             /** @description The request cannot be read (malformed-request). */
             400: {
                 headers: {
@@ -1690,6 +1699,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "request-timeout";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -1774,6 +1796,15 @@ export interface operations {
                     "application/json": components["schemas"]["Case"];
                 };
             };
+            /** @description The answer has not changed: its tag is among those of If-None-Match. */
+            304: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
             /** @description The request cannot be read (malformed-request). */
             400: {
                 headers: {
@@ -1837,6 +1868,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "request-timeout";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -1915,6 +1959,15 @@ export interface operations {
                     "application/json": components["schemas"]["Contract"];
                 };
             };
+            /** @description The answer has not changed: its tag is among those of If-None-Match. */
+            304: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
             /** @description The request cannot be read (malformed-request). */
             400: {
                 headers: {
@@ -1965,6 +2018,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "request-timeout";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -2030,6 +2096,7 @@ export interface operations {
             path?: never;
             cookie?: never;
         };
+        /** @description At most 4 MB, counted after decompression. */
         requestBody: {
             content: {
                 /**
@@ -2062,7 +2129,7 @@ export interface operations {
                     "application/json": components["schemas"]["LumpedConvectionSolveAnswer"] | components["schemas"]["LumpedConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -2071,7 +2138,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
                     };
                 };
             };
@@ -2155,6 +2222,19 @@ export interface operations {
                     };
                 };
             };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
+                    };
+                };
+            };
             /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
             422: {
                 headers: {
@@ -2172,7 +2252,7 @@ export interface operations {
             429: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -2231,6 +2311,7 @@ export interface operations {
             path?: never;
             cookie?: never;
         };
+        /** @description At most 4 MB, counted after decompression. */
         requestBody: {
             content: {
                 /**
@@ -2269,7 +2350,7 @@ export interface operations {
                     "application/json": components["schemas"]["SemiInfiniteConvectionSolveAnswer"] | components["schemas"]["SemiInfiniteConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -2278,7 +2359,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
                     };
                 };
             };
@@ -2362,6 +2443,19 @@ export interface operations {
                     };
                 };
             };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
+                    };
+                };
+            };
             /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
             422: {
                 headers: {
@@ -2379,7 +2473,7 @@ export interface operations {
             429: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -2438,6 +2532,7 @@ export interface operations {
             path?: never;
             cookie?: never;
         };
+        /** @description At most 4 MB, counted after decompression. */
         requestBody: {
             content: {
                 /**
@@ -2474,7 +2569,7 @@ export interface operations {
                     "application/json": components["schemas"]["SemiInfiniteSurfaceTemperatureSolveAnswer"] | components["schemas"]["SemiInfiniteSurfaceTemperatureSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -2483,7 +2578,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
                     };
                 };
             };
@@ -2567,6 +2662,19 @@ export interface operations {
                     };
                 };
             };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
+                    };
+                };
+            };
             /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
             422: {
                 headers: {
@@ -2584,7 +2692,7 @@ export interface operations {
             429: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -2643,6 +2751,7 @@ export interface operations {
             path?: never;
             cookie?: never;
         };
+        /** @description At most 4 MB, counted after decompression. */
         requestBody: {
             content: {
                 /**
@@ -2682,7 +2791,7 @@ export interface operations {
                     "application/json": components["schemas"]["SlabConvectionSolveAnswer"] | components["schemas"]["SlabConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -2691,7 +2800,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
                     };
                 };
             };
@@ -2775,6 +2884,19 @@ export interface operations {
                     };
                 };
             };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
+                    };
+                };
+            };
             /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
             422: {
                 headers: {
@@ -2792,7 +2914,7 @@ export interface operations {
             429: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -2851,6 +2973,7 @@ export interface operations {
             path?: never;
             cookie?: never;
         };
+        /** @description At most 4 MB, counted after decompression. */
         requestBody: {
             content: {
                 /**
@@ -2889,7 +3012,7 @@ export interface operations {
                     "application/json": components["schemas"]["SlabSurfaceTemperatureSolveAnswer"] | components["schemas"]["SlabSurfaceTemperatureSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -2898,7 +3021,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
                     };
                 };
             };
@@ -2982,6 +3105,19 @@ export interface operations {
                     };
                 };
             };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
+                    };
+                };
+            };
             /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
             422: {
                 headers: {
@@ -2999,7 +3135,7 @@ export interface operations {
             429: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -3078,6 +3214,15 @@ export interface operations {
                     "application/json": components["schemas"]["Usage"];
                 };
             };
+            /** @description The answer has not changed: its tag is among those of If-None-Match. */
+            304: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
             /** @description The request cannot be read (malformed-request). */
             400: {
                 headers: {
@@ -3142,6 +3287,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "request-timeout";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -3226,6 +3384,15 @@ export interface operations {
                     "application/json": components["schemas"]["Request"];
                 };
             };
+            /** @description The answer has not changed: its tag is among those of If-None-Match. */
+            304: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
             /** @description The request cannot be read (malformed-request). */
             400: {
                 headers: {
@@ -3306,6 +3473,19 @@ export interface operations {
                     };
                 };
             };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
+                    };
+                };
+            };
             /** @description A parameter is refused (invalid-parameter). */
             422: {
                 headers: {
@@ -3381,6 +3561,15 @@ export interface operations {
                     "application/json": components["schemas"]["Alive"];
                 };
             };
+            /** @description The answer has not changed: its tag is among those of If-None-Match. */
+            304: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
             /** @description The request cannot be read (malformed-request). */
             400: {
                 headers: {
@@ -3431,6 +3620,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "request-timeout";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -3509,6 +3711,15 @@ export interface operations {
                     "application/json": components["schemas"]["Ready"];
                 };
             };
+            /** @description The answer has not changed: its tag is among those of If-None-Match. */
+            304: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
             /** @description The request cannot be read (malformed-request). */
             400: {
                 headers: {
@@ -3559,6 +3770,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "request-timeout";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };

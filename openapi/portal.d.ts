@@ -299,7 +299,7 @@ export interface components {
              * @description What clients match.
              * @enum {string}
              */
-            code: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "too-many-names" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
+            code: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
             title: string;
             status: number;
             detail: string;
@@ -484,7 +484,7 @@ export interface components {
              * @description Code of the problem answered.
              * @enum {string|null}
              */
-            problem: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "too-many-names" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable" | null;
+            problem: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable" | null;
         };
         Request: {
             id: string;
@@ -1623,6 +1623,7 @@ export interface operations {
             path?: never;
             cookie?: never;
         };
+        /** @description At most 16 kB, counted after decompression. */
         requestBody: {
             content: {
                 /**
@@ -1648,7 +1649,7 @@ export interface operations {
                     "application/json": components["schemas"]["Session"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -1657,7 +1658,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
                     };
                 };
             };
@@ -1753,6 +1754,19 @@ export interface operations {
                     };
                 };
             };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
+                    };
+                };
+            };
             /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
             422: {
                 headers: {
@@ -1829,6 +1843,7 @@ export interface operations {
             path?: never;
             cookie?: never;
         };
+        /** @description At most 16 kB, counted after decompression. */
         requestBody: {
             content: {
                 /**
@@ -1852,7 +1867,7 @@ export interface operations {
                     "application/json": components["schemas"]["Session"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -1861,7 +1876,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
                     };
                 };
             };
@@ -1869,7 +1884,6 @@ export interface operations {
             401: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -1955,6 +1969,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "unsupported-media-type";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -2110,6 +2137,19 @@ export interface operations {
                     };
                 };
             };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
+                    };
+                };
+            };
             /** @description A parameter is refused (invalid-parameter). */
             422: {
                 headers: {
@@ -2185,6 +2225,15 @@ export interface operations {
                     "application/json": components["schemas"]["Session"];
                 };
             };
+            /** @description The answer has not changed: its tag is among those of If-None-Match. */
+            304: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
             /** @description The request cannot be read (malformed-request). */
             400: {
                 headers: {
@@ -2202,7 +2251,6 @@ export interface operations {
             401: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -2262,6 +2310,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "request-timeout";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -2340,6 +2401,15 @@ export interface operations {
                     "application/json": components["schemas"]["KeyList"];
                 };
             };
+            /** @description The answer has not changed: its tag is among those of If-None-Match. */
+            304: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
             /** @description The request cannot be read (malformed-request). */
             400: {
                 headers: {
@@ -2357,7 +2427,6 @@ export interface operations {
             401: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -2417,6 +2486,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "request-timeout";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -2482,6 +2564,7 @@ export interface operations {
             path?: never;
             cookie?: never;
         };
+        /** @description At most 16 kB, counted after decompression. */
         requestBody: {
             content: {
                 /**
@@ -2505,7 +2588,7 @@ export interface operations {
                     "application/json": components["schemas"]["CreatedKey"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -2514,7 +2597,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
                     };
                 };
             };
@@ -2522,7 +2605,6 @@ export interface operations {
             401: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -2624,6 +2706,19 @@ export interface operations {
                     };
                 };
             };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
+                    };
+                };
+            };
             /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
             422: {
                 headers: {
@@ -2719,7 +2814,6 @@ export interface operations {
             401: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -2792,6 +2886,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "request-timeout";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -2877,6 +2984,15 @@ export interface operations {
                     "application/json": components["schemas"]["Usage"];
                 };
             };
+            /** @description The answer has not changed: its tag is among those of If-None-Match. */
+            304: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
             /** @description The request cannot be read (malformed-request). */
             400: {
                 headers: {
@@ -2894,7 +3010,6 @@ export interface operations {
             401: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -2954,6 +3069,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "request-timeout";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -3039,6 +3167,15 @@ export interface operations {
                     "application/json": components["schemas"]["RequestList"];
                 };
             };
+            /** @description The answer has not changed: its tag is among those of If-None-Match. */
+            304: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
             /** @description The request cannot be read (malformed-request). */
             400: {
                 headers: {
@@ -3056,7 +3193,6 @@ export interface operations {
             401: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -3116,6 +3252,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "request-timeout";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -3200,6 +3349,15 @@ export interface operations {
                     "application/json": components["schemas"]["Request"];
                 };
             };
+            /** @description The answer has not changed: its tag is among those of If-None-Match. */
+            304: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
             /** @description The request cannot be read (malformed-request). */
             400: {
                 headers: {
@@ -3217,7 +3375,6 @@ export interface operations {
             401: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -3293,6 +3450,19 @@ export interface operations {
                     };
                 };
             };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
+                    };
+                };
+            };
             /** @description A parameter is refused (invalid-parameter). */
             422: {
                 headers: {
@@ -3355,6 +3525,7 @@ export interface operations {
             path?: never;
             cookie?: never;
         };
+        /** @description At most 512 kB, counted after decompression. */
         requestBody: {
             content: {
                 /**
@@ -3385,7 +3556,7 @@ export interface operations {
                     "application/json": components["schemas"]["LumpedConvectionSolveAnswer"] | components["schemas"]["LumpedConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -3394,7 +3565,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
                     };
                 };
             };
@@ -3461,6 +3632,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "unsupported-media-type";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -3540,6 +3724,7 @@ export interface operations {
             path?: never;
             cookie?: never;
         };
+        /** @description At most 512 kB, counted after decompression. */
         requestBody: {
             content: {
                 /**
@@ -3576,7 +3761,7 @@ export interface operations {
                     "application/json": components["schemas"]["SemiInfiniteConvectionSolveAnswer"] | components["schemas"]["SemiInfiniteConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -3585,7 +3770,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
                     };
                 };
             };
@@ -3652,6 +3837,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "unsupported-media-type";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -3731,6 +3929,7 @@ export interface operations {
             path?: never;
             cookie?: never;
         };
+        /** @description At most 512 kB, counted after decompression. */
         requestBody: {
             content: {
                 /**
@@ -3765,7 +3964,7 @@ export interface operations {
                     "application/json": components["schemas"]["SemiInfiniteSurfaceTemperatureSolveAnswer"] | components["schemas"]["SemiInfiniteSurfaceTemperatureSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -3774,7 +3973,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
                     };
                 };
             };
@@ -3841,6 +4040,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "unsupported-media-type";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -3920,6 +4132,7 @@ export interface operations {
             path?: never;
             cookie?: never;
         };
+        /** @description At most 512 kB, counted after decompression. */
         requestBody: {
             content: {
                 /**
@@ -3957,7 +4170,7 @@ export interface operations {
                     "application/json": components["schemas"]["SlabConvectionSolveAnswer"] | components["schemas"]["SlabConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -3966,7 +4179,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
                     };
                 };
             };
@@ -4033,6 +4246,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "unsupported-media-type";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -4112,6 +4338,7 @@ export interface operations {
             path?: never;
             cookie?: never;
         };
+        /** @description At most 512 kB, counted after decompression. */
         requestBody: {
             content: {
                 /**
@@ -4148,7 +4375,7 @@ export interface operations {
                     "application/json": components["schemas"]["SlabSurfaceTemperatureSolveAnswer"] | components["schemas"]["SlabSurfaceTemperatureSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -4157,7 +4384,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
                     };
                 };
             };
@@ -4224,6 +4451,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "unsupported-media-type";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };

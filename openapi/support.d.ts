@@ -112,7 +112,7 @@ export interface components {
              * @description What clients match.
              * @enum {string}
              */
-            code: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "too-many-names" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
+            code: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
             title: string;
             status: number;
             detail: string;
@@ -181,7 +181,7 @@ export interface components {
              * @description Code of the problem answered.
              * @enum {string|null}
              */
-            problem: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "too-many-names" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable" | null;
+            problem: "malformed-request" | "malformed-json" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "invalid-parameter" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable" | null;
             account: {
                 id: string;
                 name: string;
@@ -270,6 +270,7 @@ export interface operations {
             path?: never;
             cookie?: never;
         };
+        /** @description At most 16 kB, counted after decompression. */
         requestBody: {
             content: {
                 /**
@@ -293,7 +294,7 @@ export interface operations {
                     "application/json": components["schemas"]["StaffSession"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -302,7 +303,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
                     };
                 };
             };
@@ -310,7 +311,6 @@ export interface operations {
             401: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -396,6 +396,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "unsupported-media-type";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -551,6 +564,19 @@ export interface operations {
                     };
                 };
             };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
+                    };
+                };
+            };
             /** @description A parameter is refused (invalid-parameter). */
             422: {
                 headers: {
@@ -626,6 +652,15 @@ export interface operations {
                     "application/json": components["schemas"]["StaffSession"];
                 };
             };
+            /** @description The answer has not changed: its tag is among those of If-None-Match. */
+            304: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
             /** @description The request cannot be read (malformed-request). */
             400: {
                 headers: {
@@ -643,7 +678,6 @@ export interface operations {
             401: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -703,6 +737,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "request-timeout";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };
@@ -768,6 +815,7 @@ export interface operations {
             path?: never;
             cookie?: never;
         };
+        /** @description At most 16 kB, counted after decompression. */
         requestBody: {
             content: {
                 /**
@@ -791,7 +839,7 @@ export interface operations {
                     "application/json": components["schemas"]["FoundRequests"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -800,7 +848,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
                     };
                 };
             };
@@ -808,7 +856,6 @@ export interface operations {
             401: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -897,6 +944,19 @@ export interface operations {
                     };
                 };
             };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
+                    };
+                };
+            };
             /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
             422: {
                 headers: {
@@ -965,6 +1025,7 @@ export interface operations {
             };
             cookie?: never;
         };
+        /** @description At most 16 kB, counted after decompression. */
         requestBody: {
             content: {
                 /**
@@ -987,7 +1048,7 @@ export interface operations {
                     "application/json": components["schemas"]["StaffRequest"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). An object has too many names (too-many-names). */
+            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
             400: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
@@ -996,7 +1057,7 @@ export interface operations {
                 content: {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-names";
+                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
                     };
                 };
             };
@@ -1004,7 +1065,6 @@ export interface operations {
             401: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -1103,6 +1163,19 @@ export interface operations {
                     "application/problem+json": components["schemas"]["Problem"] & {
                         /** @enum {unknown} */
                         code?: "unsupported-media-type";
+                    };
+                };
+            };
+            /** @description The expectation cannot be met (expectation-failed). */
+            417: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/problem+json": components["schemas"]["Problem"] & {
+                        /** @enum {unknown} */
+                        code?: "expectation-failed";
                     };
                 };
             };

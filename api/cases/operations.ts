@@ -2,21 +2,27 @@ import type { Case } from '../../solvers/case.ts'
 import { cases } from '../../solvers/cases/index.ts'
 import { type Call, type CaseOperation, caseOperations } from '../../solvers/operations/index.ts'
 import { caseOperationPath } from '../catalogue/describe.ts'
+import { parseJson } from '../http/json.ts'
 import { type Body, operation } from '../operation.ts'
 import { Problem } from '../problems.ts'
-import { MAX_POINTS, MAX_TRY_VALUES } from './limits.ts'
+import { BODY_LIMIT, MAX_POINTS, MAX_TRY_VALUES, TRY_BODY_LIMIT } from './limits.ts'
 import { solveMetered } from './solve-metered.ts'
 import { answerOf, inputOf } from './schemas.ts'
 
-/** A validated call with the body it came from, which a worker thread reads again. */
+/** A validated call with the body it came from, as a value or, where it is long, as bytes: a thread reads it again. */
 export interface PreparedCall {
   call: Call
   raw: unknown
 }
 
-const bodyOf = (c: Case, o: CaseOperation): Body<PreparedCall> => ({
+const bodyOf = (c: Case, o: CaseOperation, limit: number): Body<PreparedCall> => ({
   schema: inputOf(c, o),
+  limit,
   parse: (raw) => ({ call: o.prepare(c, raw, 'full'), raw }),
+  async parseLong(bytes, { compute }) {
+    const priced = await compute.prepare({ case: c.id, operation: o.id, bytes })
+    return { call: { ...priced, run: () => o.prepare(c, parseJson(bytes), 'full').run() }, raw: bytes }
+  },
 })
 
 function metered(c: Case, o: CaseOperation) {
@@ -30,7 +36,7 @@ function metered(c: Case, o: CaseOperation) {
     description: `${o.summary}\n\n${c.summary}\n\n${c.notes}\n\nPrice: ${priceOf(c)}.`,
     access: 'key',
     metered: true,
-    body: bodyOf(c, o),
+    body: bodyOf(c, o, BODY_LIMIT),
     status: 200,
     answer: answerOf(c, o),
     example: { body: o.example(c) },
@@ -58,7 +64,7 @@ function unmetered(c: Case, o: CaseOperation) {
     description: `The same answer as with a key, for at most ${MAX_TRY_VALUES} numbers. Unmetered and limited per address.`,
     access: 'public',
     limiter: 'try',
-    body: bodyOf(c, o),
+    body: bodyOf(c, o, TRY_BODY_LIMIT),
     status: 200,
     answer: answerOf(c, o),
     problems: ['too-many-values', 'solve-too-slow'],
@@ -66,10 +72,10 @@ function unmetered(c: Case, o: CaseOperation) {
     caseId: c.id,
     caseOperation: o.id,
     handle({ body, deps }) {
-      if (body.call.values > MAX_TRY_VALUES)
+      if (body.call.size > MAX_TRY_VALUES)
         throw new Problem(
           'too-many-values',
-          `The call asks for ${body.call.values} numbers; ${MAX_TRY_VALUES} are answered without a key.`,
+          `The call asks for ${body.call.size} numbers; ${MAX_TRY_VALUES} are answered without a key.`,
         )
       return deps.compute.solve({ case: c.id, operation: o.id, ...body })
     },

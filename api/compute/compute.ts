@@ -2,20 +2,29 @@ import { Piscina } from 'piscina'
 import type { Call } from '../../solvers/operations/index.ts'
 import { type Rendered, render } from '../http/render.ts'
 import { Problem } from '../problems.ts'
+import type { Prepared } from './solve-worker.ts'
 
-/** Calls of more numbers go to a thread: below it, the way there costs more than the solve. */
-export const INLINE_VALUES = 2000
+/** Calls that write more numbers go to a thread: below it, the way there costs more than the solve. */
+export const INLINE_SIZE = 2000
+/** Bodies of more bytes are read in a thread. */
+export const INLINE_BYTES = 16 * 1024
 /** Milliseconds of a solve in a thread, and calls that may wait for one. */
 const usual = { limit: 10_000, waiting: 64 }
+
+/** What validating and pricing a call gave. */
+export type Priced = Omit<Call, 'run'>
 
 export interface SolveTask {
   case: string
   operation: string
   call: Call
+  /** The body as a value or, where a thread has read it, as bytes. */
   raw: unknown
 }
 
 export interface Compute {
+  /** Reads, validates and prices a long body. Throws the refusal. */
+  prepare(task: { case: string; operation: string; bytes: Uint8Array }): Promise<Priced>
   solve(task: SolveTask): Promise<Rendered>
   hashPassword(password: string): Promise<string>
   /** Takes as long for an absent hash as for a wrong password. */
@@ -42,15 +51,19 @@ export function createCompute(threads: number, { limit, waiting } = usual): Comp
   const passwords = createPool('password-worker', 1, waiting)
 
   async function solve({ call, raw, ...names }: SolveTask): Promise<Rendered> {
-    if (call.values <= INLINE_VALUES) return render(call.run())
-    try {
-      return await solves.run({ ...names, raw }, { signal: AbortSignal.timeout(limit) })
-    } catch (error) {
-      throw translated(error)
-    }
+    if (call.size <= INLINE_SIZE && !(raw instanceof Uint8Array)) return render(call.run())
+    return solves.run({ ...names, raw }, { signal: AbortSignal.timeout(limit) }).catch(rethrow)
+  }
+
+  async function prepare(task: Parameters<Compute['prepare']>[0]): Promise<Priced> {
+    const options = { name: 'prepare', signal: AbortSignal.timeout(limit) }
+    const prepared: Prepared = await solves.run(task, options).catch(rethrow)
+    if ('refusal' in prepared) throw new Problem(...prepared.refusal)
+    return prepared.call
   }
 
   return {
+    prepare,
     solve,
     hashPassword: (password) => passwords.run({ password }).catch(rethrow),
     checkPassword: (password, hash) => passwords.run({ password, hash: hash ?? null }).catch(rethrow),

@@ -1,31 +1,38 @@
-import express, { type Request, type Response } from 'express'
+import express, { type Request, type RequestHandler, type Response } from 'express'
 import { Problem } from '../problems.ts'
-import { BODY_LIMIT, parseJson } from './json.ts'
+import { sizeText } from './size-text.ts'
 
-const readRaw = express.raw({ type: () => true, limit: BODY_LIMIT })
+const readers = new Map<number, RequestHandler>()
 
-/** The body of a request as a JSON value; its size is counted after decompression. */
-export async function readJson(req: Request, res: Response): Promise<unknown> {
+function readerOf(limit: number): RequestHandler {
+  const known = readers.get(limit) ?? express.raw({ type: () => true, limit })
+  readers.set(limit, known)
+  return known
+}
+
+/** The bytes of a JSON body; their number is limited after decompression. */
+export async function readBody(req: Request, res: Response, limit: number): Promise<Buffer> {
   refuseOtherKinds(req)
   await new Promise<void>((resolve, reject) =>
-    readRaw(req, res, (error?: unknown) => (error ? reject(error) : resolve())),
+    readerOf(limit)(req, res, (error?: unknown) => (error ? reject(translated(error, limit)) : resolve())),
   )
   const bytes: unknown = req.body
   if (!Buffer.isBuffer(bytes) || bytes.length === 0) throw new Problem('malformed-json', 'The body is empty.')
-  return parseJson(decode(bytes))
+  return bytes
 }
 
+function translated(error: unknown, limit: number): unknown {
+  if ((error as { type?: unknown }).type !== 'entity.too.large') return error
+  return new Problem(
+    'body-too-large',
+    `A body of this operation may have ${sizeText(limit)}, counted after decompression.`,
+  )
+}
+
+/* A charset other than UTF-8 is refused however it is written; parameters of other names say nothing here. */
 function refuseOtherKinds(req: Request): void {
   const [type = '', ...parameters] = (req.headers['content-type'] ?? '').toLowerCase().split(';')
-  if (type.trim() !== 'application/json') throw new Problem('unsupported-media-type')
-  const charset = parameters.map((p) => p.trim()).find((p) => p.startsWith('charset='))
-  if (charset && !/^charset="?utf-8"?$/.test(charset)) throw new Problem('unsupported-media-type')
-}
-
-function decode(bytes: Buffer): string {
-  try {
-    return new TextDecoder('utf-8', { fatal: true }).decode(bytes)
-  } catch {
-    throw new Problem('malformed-json', 'The body is not UTF-8.')
-  }
+  const charsets = parameters.map((p) => p.trim()).filter((p) => /^charset\s*=/.test(p))
+  const known = charsets.length < 2 && charsets.every((p) => /^charset=("?)utf-8\1$/.test(p))
+  if (type.trim() !== 'application/json' || !known) throw new Problem('unsupported-media-type')
 }

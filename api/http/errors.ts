@@ -5,10 +5,10 @@ import type { Deps } from '../deps.ts'
 import { UnknownOutcome } from '../metering/transaction.ts'
 import { Problem, type ProblemCode, invalidInput } from '../problems.ts'
 import { sendProblem } from './answer.ts'
+import { readableText } from './readable.ts'
 
 /** Refusals of the body parser and the router, by their `type` or, failing that, their status. */
 const ofParser: Record<string, ProblemCode> = {
-  'entity.too.large': 'body-too-large',
   'encoding.unsupported': 'unsupported-media-type',
   'request.size.invalid': 'malformed-request',
   'request.aborted': 'malformed-request',
@@ -43,6 +43,7 @@ export function errorHandler({ log, config }: Deps): ErrorRequestHandler {
 function told(error: unknown): { name: string; message: string; stack?: string | undefined } {
   let at = error
   while (at instanceof Error && at.cause instanceof Error) at = at.cause
-  if (!(at instanceof Error)) return { name: 'unknown', message: String(at).slice(0, 300) }
-  return { name: at.name, message: at.message.slice(0, 300), stack: at.stack?.slice(0, 3000) }
+  if (!(at instanceof Error)) return { name: 'unknown', message: readableText(String(at).slice(0, 300)) }
+  const stack = at.stack?.slice(0, 3000).split('\n').map(readableText).join('\n')
+  return { name: at.name, message: readableText(at.message.slice(0, 300)), stack }
 }

@@ -3,6 +3,7 @@ import type { Deps } from '../deps.ts'
 import { type Operation, usesSession } from '../operation.ts'
 import { Problem } from '../problems.ts'
 import { createLimiter } from './limits.ts'
+import { refuseCrossSite } from './origin.ts'
 import { run } from './run.ts'
 
 type Sessions = Record<'portal' | 'support', RequestHandler>
@@ -19,10 +20,20 @@ export function mount(operations: readonly Operation[], deps: Deps, sessions: Se
   return router
 }
 
+/* The origin comes before the limiter, so that no other site uses up the calls of who visits it. */
 function stepsOf(o: Operation, deps: Deps, sessions: Sessions): RequestHandler[] {
+  const changes = usesSession(o) && o.method !== 'get'
+  const origin = changes ? [ownPagesOnly(deps)] : []
   const limiter = o.limiter ? [createLimiter(deps.pool, o.limiter, deps.limits)] : []
   const session = usesSession(o) && o.document !== 'openapi' ? [sessions[o.document]] : []
-  return [...limiter, ...session]
+  return [...origin, ...limiter, ...session]
+}
+
+function ownPagesOnly({ config }: Deps): RequestHandler {
+  return (req, _res, next) => {
+    refuseCrossSite(req, config.origins)
+    next()
+  }
 }
 
 function otherMethods(own: readonly Operation[]): RequestHandler {

@@ -40,9 +40,23 @@ export function prefixOf(key: string): string {
   return key.replace(/^(soak_[a-z]+_.{6}).*$/, '$1…')
 }
 
-const anyKey = /soak_(trial|metered)_[0-9A-Za-z]{38}/g
+/* Any length: a part of a key that was cut off somewhere is still a part of a key. */
+const anyKey = /soak_(trial|metered)_[0-9A-Za-z]{7,}/g
+const escape = /%([0-7][0-9a-f])/gi
 
-/** A text in which no key can be read any more. */
+/** A text in which no key can be read any more, not even percent-encoded as in an address. */
 export function withoutKeys(text: string): string {
-  return text.replace(anyKey, prefixOf)
+  const plain = text.replace(anyKey, prefixOf)
+  const decoded = decodedText(plain)
+  return decoded === plain || decoded.search(anyKey) < 0 ? plain : decoded.replace(anyKey, prefixOf)
+}
+
+/* Encoded more often than that, a key is not seen in a text by accident. */
+const ROUNDS = 4
+
+function decodedText(text: string): string {
+  let decoded = text
+  for (let round = 0; round < ROUNDS && decoded.includes('%'); round++)
+    decoded = decoded.replace(escape, (_, code: string) => String.fromCharCode(Number.parseInt(code, 16)))
+  return decoded
 }

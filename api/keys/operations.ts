@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { idField } from '../ids.ts'
 import { jsonBody, operation } from '../operation.ts'
 import { Problem } from '../problems.ts'
 import { instantSchema, storedText } from '../texts.ts'
@@ -81,7 +82,7 @@ const revoke = operation({
   description: 'Takes effect with the next call of the key, in every process. It cannot be undone.',
   access: 'session',
   permission: 'keys:revoke',
-  params: z.strictObject({ keyId: z.string() }),
+  params: z.strictObject({ keyId: idField('key') }),
   status: 200,
   answer: z.strictObject({ key: keySchema }).meta({ id: 'RevokedKey' }),
   example: { params: { keyId: 'key_019283746570700080000123456789ab' } },

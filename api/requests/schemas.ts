@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { idField } from '../ids.ts'
 import { problemCodes } from '../problems.ts'
 import { instantSchema } from '../texts.ts'
 
@@ -29,11 +30,13 @@ const detail = {
 }
 const account = z.strictObject({ id: text, name: text }).nullable()
 
-export const requestParams = z.strictObject({ requestId: text.meta({ description: 'As in the Request-Id header.' }) })
+export const requestParams = z.strictObject({
+  requestId: idField('req').meta({ description: 'As in the Request-Id header.' }),
+})
 
 export const requestListQuery = z.strictObject({
   cursor: text.max(200).optional().meta({ description: 'From `next` of the page before.' }),
-  keyId: text.max(60).optional().meta({ description: 'Only calls of this key.' }),
+  keyId: idField('key').optional().meta({ description: 'Only calls of this key.', 'x-accepted': 'the id of a key' }),
   status: z
     .enum(['ok', 'refused', 'failed'])
     .optional()

@@ -2,6 +2,7 @@ import type pg from 'pg'
 import type { z } from 'zod'
 import { DomainError } from '../../solvers/errors.ts'
 import { invalidParameter } from '../problems.ts'
+import { FIRST_DAY } from '../texts.ts'
 import { accountStatus } from './account-status.ts'
 import type { Group, usageQuery } from './schemas.ts'
 
@@ -54,7 +55,8 @@ function rangeOf(
   today: string,
 ): { from: string; to: string } {
   const to = query.to ?? today
-  const from = query.from ?? new Date(Date.parse(to) - 29 * DAY).toISOString().slice(0, 10)
+  const monthBefore = new Date(Date.parse(to) - 29 * DAY).toISOString().slice(0, 10)
+  const from = query.from ?? (monthBefore < FIRST_DAY ? FIRST_DAY : monthBefore)
   const days = (Date.parse(to) - Date.parse(from)) / DAY + 1
   if (days >= 1 && days <= MAX_DAYS) return { from, to }
   const detail = days < 1 ? 'from is later than to.' : `The range has ${days} days.`

@@ -66,8 +66,26 @@ describe.each(each(operations))('%s', (_, o) => {
     expect(answer.json.errors).toMatchObject([{ parameter: 'nonsense', code: 'unknown-field' }])
   })
 
+  test('refuses a query parameter behind a second question mark', async () => {
+    const answer = await ask(o, { path: `${pathIn(world, o)}??nonsense=1` })
+    expectProblem(o, answer, 'invalid-parameter')
+    expect(answer.json.errors).toMatchObject([{ parameter: '?nonsense', code: 'unknown-field' }])
+  })
+
   test('refuses to answer in another form than JSON', async () => {
     expectProblem(o, await ask(o, { headers: { accept: 'text/csv' } }), 'not-acceptable')
+  })
+})
+
+describe.each(each(operations.filter((o) => o.method === 'get' && o.answer)))('%s', (_, o) => {
+  test('is not sent again to whoever has it', async () => {
+    const first = await ask(o)
+    const headers = { 'if-none-match': first.headers.get('etag') ?? '', 'cache-control': 'max-age=0' }
+    const again = await ask(o, { headers })
+    expect([200, 304]).toContain(again.status)
+    expect(again.status === 304).toBe(again.headers.get('etag') === first.headers.get('etag'))
+    expect(answerFaults(o, again)).toEqual([])
+    expect((await ask(o, { headers: { ...headers, 'if-none-match': '"another"' } })).status).toBe(200)
   })
 })
 
@@ -96,13 +114,24 @@ describe.each(each(operations.filter((o) => o.body)))('%s', (_, o) => {
     ['an empty body', '', 'malformed-json'],
     ['NaN', '{"times": [NaN]}', 'malformed-json'],
     ['a comment', '{"a": 1 /* one */}', 'malformed-json'],
-    ['what is nested too deeply', '['.repeat(100_000) + ']'.repeat(100_000), 'too-deep'],
+    ['what is nested too deeply', '['.repeat(8000) + ']'.repeat(8000), 'too-deep'],
     ['a name that stands twice', '{"a": 1, "\\u0061": 2}', 'duplicate-name'],
     ['a body that is no object', '[]', 'invalid-input'],
     ['null', 'null', 'invalid-input'],
     ['a large body', `"${'x'.repeat(4 * 1024 * 1024)}"`, 'body-too-large'],
   ] as const)('refuses %s', async (__, body, code) => {
     expectProblem(o, await ask(o, { body }), code)
+  })
+
+  test('takes a body of its limit, and names the limit to a larger one', async () => {
+    const body = JSON.stringify(o.example?.body)
+    const limit = o.body?.limit ?? 0
+    const answer = await ask(o, { body: body.padEnd(limit) })
+    expect(answer.status, answer.text).not.toBe(413)
+    expectProblem(o, await ask(o, { body: body.padEnd(limit + 1) }), 'body-too-large')
+    expect((await ask(o, { body: body.padEnd(limit + 1) })).json.detail).toMatch(
+      `${limit < 2 ** 20 ? `${limit / 1024} kB` : `${limit / 2 ** 20} MB`}, counted after decompression`,
+    )
   })
 
   test('names a field that it does not have, and no prototype is touched', async () => {
@@ -133,8 +162,23 @@ describe.each(each(operations.filter((o) => o.body)))('%s', (_, o) => {
     )
   })
 
+  test.each([
+    'charset = utf-16',
+    'charset=utf-8; charset=utf-16',
+    'charset="utf-16"',
+    'charset=',
+    'x=1; Charset=UTF-16',
+  ])('refuses a body with %s', async (parameters) => {
+    const headers = { 'content-type': `application/json; ${parameters}` }
+    expectProblem(o, await ask(o, { body: JSON.stringify(o.example?.body), headers }), 'unsupported-media-type')
+  })
+
+  test('refuses a byte order mark', async () => {
+    expectProblem(o, await ask(o, { body: `\uFEFF${JSON.stringify(o.example?.body)}` }), 'malformed-json')
+  })
+
   test('lists at most 50 faults', async () => {
-    const body = Object.fromEntries(Array.from({ length: 5000 }, (__, i) => [`field${i}`, i]))
+    const body = Object.fromEntries(Array.from({ length: 1000 }, (__, i) => [`f${i}`, i]))
     const answer = await ask(o, { body })
     expectProblem(o, answer, 'invalid-input')
     expect(answer.json.errors.length).toBeLessThanOrEqual(50)

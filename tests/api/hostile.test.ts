@@ -53,7 +53,7 @@ describe.each(cases.map((c) => [c.id, c] as const))('%s', (_, c) => {
       )
       const answer = await client.solve(c.id, secret, body)
       expect([200, 422], `${field}: ${number} ${answer.text.slice(0, 300)}`).toContain(answer.status)
-      expect(answer.text).not.toMatch(/NaN|Infinity/)
+      expect(answer.text.replaceAll('\\"NaN\\"', 'the text given')).not.toMatch(/NaN|Infinity/)
       if (answer.status === 200) expect(JSON.stringify(answer.json.result)).not.toContain('null')
       else expect(answer.json.errors.every((e: { pointer: string }) => e.pointer.startsWith('#'))).toBe(true)
     }
@@ -95,8 +95,9 @@ test.each([
   [
     'a hundred thousand names',
     JSON.stringify(Object.fromEntries(Array.from({ length: 100_000 }, (_, i) => [i, i]))),
-    'invalid-input',
+    'too-many-parts',
   ],
+  ['a hundred thousand objects', `[${'{},'.repeat(100_000)}{}]`, 'too-many-parts'],
   ['two hundred thousand wrong entries', JSON.stringify({ times: Array(200_000).fill('x') }), 'invalid-input'],
 ])('refuses %s quickly', async (_, body, code) => {
   const started = performance.now()
@@ -154,6 +155,11 @@ test.each([
   ['from=2026-02-30', 'from'],
   ['from=2026-03-02&to=2026-03-01', 'from'],
   ['from=1990-01-01', 'from'],
+  ['to=0001-01-01', 'to'],
+  ['to=0000-01-01', 'to'],
+  ['from=0000-01-01', 'from'],
+  ['to=1999-12-31', 'to'],
+  ['to=10000-01-01', 'to'],
   ['groupBy=mail', 'groupBy'],
   ['groupBy=day&groupBy=key', 'groupBy'],
   ['groupBy=', 'groupBy'],
@@ -163,12 +169,33 @@ test.each([
   expect(answer.json).toMatchObject({ status: 422, code: 'invalid-parameter', errors: [{ parameter: name }] })
 })
 
+test.each(['2000-01-01', '9999-12-31'])('knows the day %s', async (to) => {
+  for (const [path, headers] of [
+    ['/portal/v1/usage', {}],
+    ['/v1/usage', { authorization: `Bearer ${secret}` }],
+  ] as const) {
+    const answer = await client.call(`${path}?to=${to}`, { headers })
+    expect(answer.json).toMatchObject({ to, rows: [] })
+    expect(answer.json.from >= '2000-01-01').toBe(true)
+    for (const early of ['to=0001-01-01', 'from=0000-01-01&to=0000-01-02']) {
+      const refused = await client.call(`${path}?${early}`, { headers })
+      expect(refused.json).toMatchObject({ status: 422, code: 'invalid-parameter' })
+    }
+  }
+})
+
+test.each(['%00', 'x', 'key_%00', `key_${'0'.repeat(33)}`])('revokes no key at %s', async (id) => {
+  expect((await client.post(`/portal/v1/keys/${id}/revoke`)).json).toMatchObject({ status: 404, code: 'not-found' })
+})
+
 test.each([
   'cursor=x',
   'cursor=%00',
   `cursor=${Buffer.from('req_1').toString('base64url')}`,
   'status=bad',
   `keyId=${'x'.repeat(61)}`,
+  'keyId=%00',
+  'keyId=key_1',
 ])('refuses the requests of %s', async (parameters) => {
   expect((await client.call(`/portal/v1/requests?${parameters}`)).json).toMatchObject({
     status: 422,
@@ -189,7 +216,7 @@ test('what a field name says is kept without control characters and keys', async
 /** What a bare connection answers to some bytes. */
 const raw = (bytes: string) =>
   new Promise<string>((resolve, reject) => {
-    const socket = connect(service.service.port, '127.0.0.1', () => socket.end(bytes))
+    const socket = connect(service.service.port, '127.0.0.1', () => socket.write(bytes))
     let text = ''
     socket
       .on('data', (chunk) => (text += String(chunk)))
@@ -217,9 +244,21 @@ test.each([
     400,
     'malformed-request',
   ],
+  [
+    'an expectation',
+    'GET /healthz HTTP/1.1\r\nHost: x\r\nConnection: close\r\nExpect: x\r\n\r\n',
+    417,
+    'expectation-failed',
+  ],
+  ['no Host', 'GET /healthz HTTP/1.1\r\nConnection: close\r\n\r\n', 400, 'malformed-request'],
+  ['two Hosts', 'GET /healthz HTTP/1.1\r\nConnection: close\r\nHost: a\r\nHost: b\r\n\r\n', 400, 'malformed-request'],
+  ['headers that come too slowly', 'GET /healthz HTTP/1.1\r\nHost: x\r\n', 408, 'request-timeout'],
 ])('refuses %s as a problem', async (_, bytes, status, code) => {
+  const started = performance.now()
   const [head = '', body = ''] = (await raw(bytes)).split('\r\n\r\n')
   expect(head).toMatch(new RegExp(`^HTTP/1.1 ${status} `))
   expect(head).toContain('application/problem+json')
   expect(JSON.parse(body)).toMatchObject({ status, code })
+  expect(head).toContain(`Request-Id: ${JSON.parse(body).requestId}`)
+  expect(performance.now() - started).toBeLessThan(17_000)
 })

@@ -22,6 +22,17 @@ test('no log line and no table holds a key, a password or a cookie', async () =>
   await client.call(`/v1/${key.secret}?key=${key.secret}`)
   await client.call(`/v1/cases/${key.secret}`)
   await client.call(`/v1/usage?key=${key.secret}`, { headers: { authorization: `Bearer ${key.secret}` } })
+  const encoded = [...key.secret].map((c) => `%${c.charCodeAt(0).toString(16)}`).join('')
+  for (const hidden of [key.secret.replaceAll('_', '%5F'), encoded, encoded.replaceAll('%', '%25')]) {
+    await client.call(`/v1/${hidden}`)
+    await client.call(`/v1/cases/${hidden}`)
+  }
+  for (const before of [0, 20, 30, 40]) {
+    const name = 'x'.repeat(before) + key.secret
+    await client.call(`/v1/cases/${name}`)
+    await client.solve(lumped.id, key.secret, `{"${name}": 1, "${name}": 2}`)
+    await client.solve(lumped.id, key.secret, { ...lumped.example, [name]: 1, outputs: [name] })
+  }
   await client.call(`/v1/requests/${key.secret}`, { headers: { authorization: `Bearer ${key.secret}` } })
   const { compute, requestLog } = service.service.deps
   const { solve } = compute
@@ -31,7 +42,15 @@ test('no log line and no table holds a key, a password or a cookie', async () =>
   await requestLog.flush()
 
   const cookies = [...client.cookies.values(), ...other.cookies.values()].map((value) => decodeURIComponent(value))
-  const secrets = [key.secret, key.secret.slice(-20), PASSWORD, ...cookies, ...cookies.map((c) => c.split('.')[1] ?? c)]
+  const parts = [key.secret.slice(0, 18), key.secret.slice(-20), key.secret.slice(0, 25).replaceAll('_', '%5F')]
+  const secrets = [
+    ...parts,
+    encoded,
+    encoded.replaceAll('%', '%25'),
+    PASSWORD,
+    ...cookies,
+    ...cookies.map((c) => c.split('.')[1] ?? c),
+  ]
   const tables = await query<{ name: string }>(
     service.databaseUrl,
     "SELECT quote_ident(tablename) AS name FROM pg_tables WHERE schemaname = 'public' AND tablename NOT IN ('log', 'ledger')",
