@@ -2,6 +2,7 @@ import { and, eq } from 'drizzle-orm'
 import { accounts, memberships, people, staff } from '../../drizzle/schema.ts'
 import type { Database } from '../database.ts'
 import type { Deps } from '../deps.ts'
+import { countSubject } from '../http/limits.ts'
 import { permissionsOf } from '../permissions.ts'
 import { Problem } from '../problems.ts'
 
@@ -11,7 +12,9 @@ interface Credentials {
 }
 
 /** Who has this mail and password; one answer, after one comparison, whatever does not fit. */
-export async function signIn({ db, compute }: Deps, { mail, password }: Credentials) {
+export async function signIn(deps: Deps, { mail, password }: Credentials) {
+  const { db, compute } = deps
+  await countSubject(deps, 'mail', `person ${mail}`)
   const [person] = await db
     .select({ id: people.id, passwordHash: people.passwordHash, accountId: memberships.accountId })
     .from(people)
@@ -25,9 +28,11 @@ export async function signIn({ db, compute }: Deps, { mail, password }: Credenti
 }
 
 /** Staff have no second step yet, so they sign in only from the machine itself. */
-export async function staffSignIn({ db, compute, config }: Deps, { mail, password }: Credentials) {
+export async function staffSignIn(deps: Deps, { mail, password }: Credentials) {
+  const { db, compute, config } = deps
   if (!config.loopback)
     throw new Problem('forbidden', 'Staff sign in only where the service listens on its own machine alone.')
+  await countSubject(deps, 'mail', `staff ${mail}`)
   const [agent] = await db
     .select({ id: staff.id, passwordHash: staff.passwordHash })
     .from(staff)

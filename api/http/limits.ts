@@ -1,16 +1,20 @@
+import { createHash } from 'node:crypto'
 import { type RateLimitRequestHandler, type Store, ipKeyGenerator, rateLimit } from 'express-rate-limit'
 import type pg from 'pg'
 import type { LimiterName } from '../operation.ts'
 import { Problem } from '../problems.ts'
 
-export type Limits = Readonly<Record<LimiterName, { windowSeconds: number; limit: number }>>
+/** Limits of who or what is asked for, beside those of the address that asks. */
+type SubjectName = 'mail'
+export type Limits = Readonly<Record<LimiterName | SubjectName, { windowSeconds: number; limit: number }>>
 
-/** Calls of one address; an IPv6 address counts with its /56 network. */
+/** Calls of one address, where an IPv6 address counts with its /56 network; and sign-ins of one mail address. */
 export const defaultLimits: Limits = {
   'sign-up': { windowSeconds: 3600, limit: 20 },
   'sign-in': { windowSeconds: 900, limit: 30 },
   'staff-sign-in': { windowSeconds: 900, limit: 20 },
   try: { windowSeconds: 60, limit: 300 },
+  mail: { windowSeconds: 900, limit: 50 },
 }
 
 const count = {
@@ -43,7 +47,22 @@ export function createStore(pool: pg.Pool, name: string, windowSeconds: number):
 
 /** Counters that have run out serve nobody any more. */
 export async function pruneLimits(pool: pg.Pool): Promise<void> {
-  await pool.query("DELETE FROM rate_limits WHERE resets_at < now() - interval '1 hour'")
+  await pool.query('DELETE FROM rate_limits WHERE resets_at < now()')
+}
+
+/** Counts one more call about a subject, known or not, or refuses it. The subject is kept as a hash only. */
+export async function countSubject({ pool, limits }: Counting, name: SubjectName, subject: string): Promise<void> {
+  const { windowSeconds, limit } = limits[name]
+  const key = createHash('sha256').update(subject).digest('base64url')
+  const { totalHits, resetTime } = await createStore(pool, name, windowSeconds).increment(key)
+  if (totalHits <= limit) return
+  const seconds = Math.max(1, Math.ceil(((resetTime?.getTime() ?? 0) - Date.now()) / 1000))
+  throw new Problem('rate-limited', undefined, { headers: { 'Retry-After': String(seconds) } })
+}
+
+interface Counting {
+  pool: pg.Pool
+  limits: Limits
 }
 
 export function createLimiter(pool: pg.Pool, name: LimiterName, limits: Limits): RateLimitRequestHandler {
