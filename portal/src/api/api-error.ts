@@ -1,3 +1,4 @@
+import { type FormWords, inFormWords } from './form-words.ts'
 import type { Who } from '../session/signed-in.ts'
 
 /** What the service says of a call it refused or failed. */
@@ -79,13 +80,13 @@ function secondsOf(response: Response): number | undefined {
   return Number.isFinite(seconds) ? seconds : undefined
 }
 
-/** The refusal of each field, by the first part of its pointer. */
-export function issuesByField(error: unknown): Record<string, string> {
+/** The refusal of each field, by the first part of its pointer, in the words of the form. */
+export function issuesByField(error: unknown, words: FormWords): Record<string, string> {
   const issues = error instanceof ApiError ? (error.problem?.errors ?? []) : []
   const fields: Record<string, string> = {}
   for (const { pointer, detail, accepted } of issues) {
     const name = pointer?.split('/')[1] ?? ''
-    fields[name] ??= accepted ? `${detail} Accepted: ${accepted}.` : detail
+    fields[name] ??= inFormWords(accepted ? `${detail} Accepted: ${accepted}.` : detail, words)
   }
   return fields
 }

@@ -75,3 +75,12 @@ export function degrees(value: number, range: number): string {
   const text = value.toFixed(range > 5 ? 1 : decimals)
   return (Number(text) === 0 ? text.replace('-', '') : text).replace('-', MINUS)
 }
+
+/** A time that was asked for: where it is not round in the unit of the list, with the seconds that were sent. */
+export function sentTime(seconds: number, measure: Measure): string {
+  const value = seconds / measure.size
+  const text = plain(value, 6)
+  const rounded = Math.abs(Number(value.toPrecision(6)) - value) > 1e-12 * Math.abs(value)
+  const odd = rounded || (value !== 0 && Math.abs(value) < 1e-3)
+  return measure.size !== 1 && odd ? `${text} (${plain(seconds, 12)} s)` : text
+}

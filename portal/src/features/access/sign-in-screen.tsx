@@ -9,11 +9,13 @@ import { FormFailure } from '../../components/form-failure.tsx'
 import { type SignIn, signIn } from './queries.ts'
 import { nextOf, useStartSession } from './use-start-session.ts'
 
+const words = { labels: { mail: 'Mail address', password: 'Password' } }
+
 export function SignInScreen() {
   const [search] = useSearchParams()
   const { register, handleSubmit } = useForm<SignIn>()
   const start = useStartSession(signIn, nextOf(search))
-  const errors = issuesByField(start.error)
+  const errors = issuesByField(start.error, words)
   return (
     <Sheet title="Sign in">
       <TitleBlock title="Sign in" facts={[{ name: 'A session lasts', value: '12 hours', full: true }]}>
@@ -35,7 +37,7 @@ export function SignInScreen() {
             error={errors['password']}
             {...register('password')}
           />
-          <FormFailure error={start.error} fields={['mail', 'password']} />
+          <FormFailure error={start.error} words={words} />
           <div className="btnrow mt-5">
             <SendButton kind="main" type="submit" error={start.error} disabled={start.isPending}>
               {start.isPending ? 'Signing in' : 'Sign in'}

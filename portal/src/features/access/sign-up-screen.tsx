@@ -15,10 +15,12 @@ const facts = [
   { name: 'Least charge', value: '10 points a call' },
 ]
 
+const words = { labels: { name: 'Your name', accountName: 'Account name', mail: 'Mail address', password: 'Password' } }
+
 export function SignUpScreen() {
   const { register, handleSubmit } = useForm<SignUp>()
   const start = useStartSession(signUp, '/keys')
-  const errors = issuesByField(start.error)
+  const errors = issuesByField(start.error, words)
   return (
     <Sheet title="Sign up">
       <TitleBlock title="Sign up" facts={facts}>
@@ -43,13 +45,13 @@ export function SignUpScreen() {
           />
           <TextField
             label="Password"
-            hint="a few words; any characters"
+            hint="at least 15 characters, of any kind"
             type="password"
             autoComplete="new-password"
             error={errors['password']}
             {...register('password')}
           />
-          <FormFailure error={start.error} fields={['name', 'accountName', 'mail', 'password']} />
+          <FormFailure error={start.error} words={words} />
           <div className="btnrow mt-5">
             <SendButton kind="main" type="submit" error={start.error} disabled={start.isPending}>
               {start.isPending ? 'Signing up' : 'Sign up'}

@@ -1,4 +1,5 @@
 import { ScrollRegion } from '../../components/scroll-region.tsx'
+import { withMinus } from '../../api/form-words.ts'
 import { Note } from '../../components/note.tsx'
 import type { Body } from '../../solving/solve.ts'
 import { BodyDrawing } from './body-drawing.tsx'
@@ -20,7 +21,7 @@ export function AboutBody({ description: c, body }: { description: Case; body: B
           <Formula key={tex} tex={tex} />
         ))}
       </ScrollRegion>
-      <p className="prose">{c.notes}</p>
+      <p className="prose">{withMinus(c.notes)}</p>
       {without.map(({ name, schema }) => (
         <div key={name} className="mt-4">
           <Note kind="warning">{String(schema['description'])}</Note>

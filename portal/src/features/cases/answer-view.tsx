@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react'
 import { Link } from 'react-router-dom'
+import { withMinus } from '../../api/form-words.ts'
 import { CopyButton } from '../../components/copy-button.tsx'
 import { counted, whole } from '../../components/formats.ts'
 import { jsonText } from '../../components/json-text.ts'
@@ -61,7 +62,7 @@ function Whole({ description: c, answer }: { description: Case; answer: Answer }
         <Row name="temperature scale" value={`${plain(accuracy.scale, 6)} K`} />
         <Row name="price" value={<Price points={answer.points} least={c.leastCharge} />} />
       </dl>
-      <p className="prose">{accuracy.note}</p>
+      <p className="prose">{withMinus(accuracy.note)}</p>
       {answer.checks.length > 0 && <h3 className="mt-5">Checks</h3>}
       <Checks checks={answer.checks} />
       {answer.warnings.length > 0 && <h3 className="mt-5">Warnings</h3>}
@@ -71,14 +72,14 @@ function Whole({ description: c, answer }: { description: Case; answer: Answer }
             <code>{code}</code>
           </Link>
           <br />
-          {text}
+          {withMinus(text)}
         </Note>
       ))}
       {answer.cautions.length > 0 && <h3 className="mt-5">Cautions</h3>}
       <div className="grid gap-3 mt-2">
         {answer.cautions.map(({ id, text }) => (
           <Note key={id} kind="caution">
-            {text}
+            {withMinus(text)}
           </Note>
         ))}
       </div>
@@ -110,8 +111,10 @@ function Price({ points, least }: { points: number; least: number }) {
   )
 }
 
-/** "penetrationDepth" as "penetration depth, m". */
+/** "penetrationDepth" as "penetration depth, m"; numbers with a name of their own by their letters. */
 function spoken(name: string): string {
+  if (name === 'fourier') return 'Fo'
+  if (name === 'biot') return 'Bi'
   const words = name.replace(/[A-Z]/g, (letter) => ` ${letter.toLowerCase()}`)
   return /(depth|length)$/.test(words) ? `${words}, m` : words
 }

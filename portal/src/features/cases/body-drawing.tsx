@@ -1,3 +1,4 @@
+import { SymbolSpans } from '../../components/symbol.tsx'
 import { Dimension } from '../../figure/dimension.tsx'
 import { Drawing } from '../../figure/drawing.tsx'
 import { FaceSign } from '../../figure/face-sign.tsx'
@@ -87,7 +88,7 @@ function Section({ sketch, title, body, place, width }: Props & { place: number;
         T(x, t)
       </text>
       <text className="t-it" x={8} y={18}>
-        {sketch.boundary === 'temperature' ? 'Tₛ' : 'h, Tₐ'}
+        <SymbolSpans of={sketch.boundary === 'temperature' ? 'Tₛ' : 'h, Tₐ'} />
       </text>
       {place > 0 && <Dimension from={face} to={at} y={bottom + 22} reach={14} />}
       <text className="t-it halo" x={(face + at) / 2} y={bottom + 17} textAnchor="middle">

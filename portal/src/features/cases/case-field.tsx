@@ -1,6 +1,8 @@
 import { useId } from 'react'
 import type { UseFormRegisterReturn } from 'react-hook-form'
+import { withMinus } from '../../api/form-words.ts'
 import { unitText } from '../../components/formats.ts'
+import { Symbol } from '../../components/symbol.tsx'
 import { plain } from '../../figure/measures.ts'
 import { kindOf, optionsOf } from './form-values.ts'
 import type { Field } from './queries.ts'
@@ -23,7 +25,7 @@ export function CaseField({ field, register, error }: Props) {
   const parts = (
     <>
       <span className="sym" aria-hidden="true">
-        {field.symbol}
+        <Symbol of={field.symbol ?? ''} />
       </span>
       <span className="label">
         {grouped ? <span aria-hidden="true">{title}</span> : <label htmlFor={id}>{title}</label>}
@@ -101,12 +103,12 @@ export function CaseField({ field, register, error }: Props) {
 
 const short = (value: number): string =>
   Math.abs(value) >= 1e6 || (value !== 0 && Math.abs(value) < 1e-3)
-    ? value.toExponential().replace('e+', 'e')
+    ? withMinus(value.toExponential().replace('e+', 'e'))
     : plain(value)
 
 function hintOf(field: Field): string {
   const [low, high] = field.typical ?? []
   const unit = kindOf(field) === 'list' ? unitText(field.unit ?? '') : ''
   const typical = low !== undefined && high !== undefined ? `usually ${short(low)} to ${short(high)}` : ''
-  return [unit ? `in ${unit}, commas between` : '', field.hint ?? '', typical].filter(Boolean).join(' · ')
+  return [unit ? `in ${unit}, commas between` : '', withMinus(field.hint ?? ''), typical].filter(Boolean).join(' · ')
 }

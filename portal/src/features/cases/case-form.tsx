@@ -1,7 +1,9 @@
 import { Fragment, useEffect, useRef } from 'react'
 import { useForm, useWatch } from 'react-hook-form'
 import { ApiError, issuesByField } from '../../api/api-error.ts'
+import type { FormWords } from '../../api/form-words.ts'
 import { Button, LinkButton } from '../../components/button.tsx'
+import { unitText } from '../../components/formats.ts'
 import { FormFailure } from '../../components/form-failure.tsx'
 import { SendButton } from '../../components/send-button.tsx'
 import { Offline } from '../../components/states.tsx'
@@ -35,7 +37,8 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
   })
   const values = useWatch({ control }) as FormValues
   const form = useRef<HTMLFormElement>(null)
-  const errors = issuesByField(error)
+  const words = wordsOf(c, values.heat)
+  const errors = issuesByField(error, words)
   const sent = (name: string) => isSent(c, name, values.heat)
   const open = c.fields.filter((field) => isOpen(c, field))
   const folded = c.fields.filter((field) => !isOpen(c, field))
@@ -89,7 +92,7 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
       {unsent ? (
         <Offline since={since} shown={solved && `The numbers below were solved at ${clockText(solved.at)}.`} />
       ) : (
-        <FormFailure error={error} fields={c.fields.map(({ name }) => name).filter(sent)} />
+        <FormFailure error={error} words={words} />
       )}
       <div className="btnrow mt-5">
         <SendButton kind="main" type="submit" error={error}>
@@ -115,6 +118,15 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
 }
 
 const same = (a: Body, b: Body): boolean => JSON.stringify(a) === JSON.stringify(b)
+
+/** The labels and units of the fields that stand in the form. */
+function wordsOf(c: Case, heat: string): FormWords {
+  const fields = c.fields.filter(({ name }) => isSent(c, name, heat))
+  return {
+    labels: Object.fromEntries(fields.map(({ name, title }) => [name, title ?? name])),
+    units: Object.fromEntries(fields.flatMap(({ unit }) => (unit ? [[unit, unitText(unit)]] : []))),
+  }
+}
 
 /** Shown at once: what must be given, and what the example gives. */
 function isOpen(c: Case, { name, required }: Field): boolean {

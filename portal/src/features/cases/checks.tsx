@@ -1,3 +1,4 @@
+import { withMinus } from '../../api/form-words.ts'
 import { plain } from '../../figure/measures.ts'
 import type { Answer } from '../../solving/solve.ts'
 
@@ -15,7 +16,7 @@ export function Checks({ checks }: { checks: Answer['checks'] }) {
               strokeWidth={holds ? 2 : 2.5}
             />
           </svg>
-          <span>{text}</span>
+          <span>{withMinus(text)}</span>
           <span className="fig">
             {plain(value)} · limit {plain(limit)}
           </span>

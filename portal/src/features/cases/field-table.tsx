@@ -1,5 +1,5 @@
 import { NumberTable } from '../../components/number-table.tsx'
-import { inMeasure, lengthMeasure, timeMeasure } from '../../figure/measures.ts'
+import { inMeasure, lengthMeasure, sentTime, timeMeasure } from '../../figure/measures.ts'
 import type { Drawing } from '../../solving/curve-query.ts'
 
 const ROWS = 24
@@ -24,7 +24,9 @@ export function FieldTable({ drawing }: { drawing: Drawing }) {
       corner={`time, ${measure.unit}`}
       columns={heads}
       rows={rows.map((row) => ({
-        name: inMeasure(times[row]!, measure, 6),
+        name: drawing.asked.times.includes(times[row]!)
+          ? sentTime(times[row]!, measure)
+          : inMeasure(times[row]!, measure, 6),
         values: columns.map((column) => valueOf(row, column)),
       }))}
     />

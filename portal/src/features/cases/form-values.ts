@@ -100,6 +100,6 @@ function valueOf(field: Field, value: string | string[]): unknown {
 }
 
 function numberOf(text: string): number | string {
-  const value = Number(text.replace('\u2212', '-'))
+  const value = Number(text.replaceAll('\u2212', '-'))
   return Number.isFinite(value) ? value : text
 }

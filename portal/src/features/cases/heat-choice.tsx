@@ -1,4 +1,5 @@
 import type { UseFormRegisterReturn } from 'react-hook-form'
+import { Symbol } from '../../components/symbol.tsx'
 import { wayName, waysOf } from './form-values.ts'
 import type { Case } from './queries.ts'
 
@@ -24,7 +25,9 @@ export function HeatChoice({ description: c, register }: { description: Case; re
               'none'
             ) : (
               <>
-                <i aria-hidden="true">{way.map(symbolOf).join(', ')}</i>
+                <i aria-hidden="true">
+                  <Symbol of={way.map(symbolOf).join(', ')} />
+                </i>
                 <span className="sr-only">{way.map(labelOf).join(' and ')}</span>
               </>
             )}

@@ -1,6 +1,6 @@
 import { scientific, unitText } from '../../components/formats.ts'
 import { NumberTable } from '../../components/number-table.tsx'
-import { inMeasure, plain, timeMeasure } from '../../figure/measures.ts'
+import { plain, sentTime, timeMeasure } from '../../figure/measures.ts'
 import { type Answer, type CompactAnswer, isFull } from '../../solving/solve.ts'
 import type { Case } from './queries.ts'
 
@@ -64,7 +64,7 @@ function Table({ head, limit, values, axes }: TableProps) {
       columns={columns}
       rows={rows
         .slice(0, SHOWN)
-        .map((row, i) => ({ name: axes ? inMeasure(axes.times[i]!, measure, 6) : String(i + 1), values: row }))}
+        .map((row, i) => ({ name: axes ? sentTime(axes.times[i]!, measure) : String(i + 1), values: row }))}
     />
   )
 }

@@ -2,7 +2,7 @@ import { Band } from '../../components/sheet.tsx'
 
 const claims = [
   {
-    figure: '≤ 1e-12',
+    figure: '≤ 10⁻¹²',
     text: 'of the driving difference, plus the rounding of the number itself: the largest error of a temperature. Each answer states its own limit.',
   },
   { figure: '0 bytes', text: 'differ when the same input meets the same solver version again. The ETag says so.' },

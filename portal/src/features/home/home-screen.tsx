@@ -24,7 +24,7 @@ export function HomeScreen() {
         large
         title="How temperature moves through a body, and how sure we are"
         facts={[
-          { name: 'Error of a temperature', value: '≤ 1e-12 of the driving difference', full: true },
+          { name: 'Error of a temperature', value: '≤ 10⁻¹² of the driving difference', full: true },
           { name: 'Charged by', value: 'evaluated point' },
           { name: 'Refused call', value: '0 points' },
           { name: 'Solver', value: shown?.solver ?? (answer.isError ? '–' : 'reading') },

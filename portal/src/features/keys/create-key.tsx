@@ -10,6 +10,8 @@ import { TextField } from '../../components/text-field.tsx'
 import { createKey, keysQuery } from './queries.ts'
 import { SecretOnce } from './secret-once.tsx'
 
+const words = { labels: { name: 'Name', quota: 'Own quota' } }
+
 /** Name and quota; then, as a step of its own, the secret. */
 export function CreateKey({ onClose }: { onClose(): void }) {
   const client = useQueryClient()
@@ -24,7 +26,7 @@ export function CreateKey({ onClose }: { onClose(): void }) {
     },
   })
   if (made) return <SecretOnce name={made.name} secret={made.secret} onDone={onClose} />
-  const errors = issuesByField(create.error)
+  const errors = issuesByField(create.error, words)
   return (
     <Dialog title="Create a key" onClose={onClose}>
       <form noValidate onSubmit={handleSubmit((values) => create.mutate(values))}>
@@ -44,7 +46,7 @@ export function CreateKey({ onClose }: { onClose(): void }) {
             error={errors['quota']}
             {...register('quota')}
           />
-          <FormFailure error={create.error} fields={['name', 'quota']} />
+          <FormFailure error={create.error} words={words} />
         </div>
         <div className="acts btnrow">
           <SendButton kind="main" type="submit" error={create.error} disabled={create.isPending}>

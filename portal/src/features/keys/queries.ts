@@ -13,9 +13,13 @@ export const keysQuery = () =>
     staleTime: 0,
   })
 
+/** A whole number with or without groups of three: 1000, 1,000, 1 000. */
+const grouped = /^\d{1,3}(?:([,\s'])\d{3})(?:\1\d{3})*$/
+
 /** What is asked of a new key; what is no number is left for the service to refuse. */
 export const createKey = ({ name, quota }: { name: string; quota: string }) => {
-  const text = quota.replace(/\s/g, '')
+  const typed = quota.trim()
+  const text = grouped.test(typed) ? typed.replace(/\D/g, '') : typed
   const points = text === '' ? {} : { quota: (Number.isFinite(Number(text)) ? Number(text) : text) as number }
   return unwrap(portalApi.POST('/portal/v1/keys', { body: { name, ...points } }))
 }

@@ -19,11 +19,11 @@ export function RevokeKey({ of: key, onClose }: { of: Key; onClose(): void }) {
     <Dialog title={`Revoke ${key.name}`} onClose={onClose}>
       <div className="body grid gap-3">
         <p className="prose">
-          Programs that send <code>{key.prefix}</code> are answered 401 within a second. It was last used{' '}
-          {key.lastUsedAt ? instantText(key.lastUsedAt) : 'never'}.
+          Programs that send <code>{key.prefix}</code> are answered 401 within a second.{' '}
+          {key.lastUsedAt ? `It was last used ${instantText(key.lastUsedAt)} UTC.` : 'It has never been used.'}
         </p>
         <p className="prose">A revoked key cannot be given back. Its calls stay in usage and requests.</p>
-        <FormFailure error={revoke.error} fields={[]} />
+        <FormFailure error={revoke.error} words={{ labels: {} }} />
       </div>
       <div className="acts btnrow">
         <Button kind="risk" disabled={revoke.isPending} onClick={() => revoke.mutate(key.id)}>

@@ -1,4 +1,5 @@
 import { useQuery } from '@tanstack/react-query'
+import { type ChangeEvent, useState } from 'react'
 import { useForm } from 'react-hook-form'
 import { Link, useLocation, useNavigate } from 'react-router-dom'
 import { issuesByField } from '../../api/api-error.ts'
@@ -11,6 +12,7 @@ import { Band, Sheet } from '../../components/sheet.tsx'
 import { Empty, Loading } from '../../components/states.tsx'
 import { TextField } from '../../components/text-field.tsx'
 import { TitleBlock } from '../../components/title-block.tsx'
+import { prefixOf, shortId } from './key-prefix.ts'
 import { type Search, findQuery } from './queries.ts'
 
 type Found = components['schemas']['FoundRequest']
@@ -24,6 +26,7 @@ const columns = (reason: string): readonly Column<Found>[] => [
       </Link>
     ),
   },
+  { header: 'Request', mono: true, cell: ({ id }) => <code title={id}>{shortId(id)}</code> },
   { header: 'Account', cell: ({ account }) => account?.name ?? 'none' },
   { header: 'Key', mono: true, cell: ({ key }) => <code>{key?.prefix ?? 'none'}</code> },
   { header: 'Call', cell: ({ method, path }) => <span className="fig">{`${method} ${path}`}</span> },
@@ -39,13 +42,16 @@ const columns = (reason: string): readonly Column<Found>[] => [
   { header: 'Points', numeric: true, cell: ({ points }) => whole(points) },
 ]
 
+const words = { labels: { query: 'Request id or key prefix', reason: 'Reason' } }
+
 /** Finds calls of any account; what was found stands in this entry of the history, so Back asks nothing again. */
 export function FindScreen() {
   const search = useLocation().state as Search | null
   const navigate = useNavigate()
-  const { register, handleSubmit } = useForm<Search>({ defaultValues: search ?? { query: '', reason: '' } })
+  const [cut, setCut] = useState(false)
+  const { register, handleSubmit, setValue } = useForm<Search>({ defaultValues: search ?? { query: '', reason: '' } })
   const result = useQuery({ ...findQuery(search ?? { query: '', reason: '' }), enabled: search !== null })
-  const errors = issuesByField(result.error)
+  const errors = issuesByField(result.error, words)
   return (
     <Sheet title="Find">
       <TitleBlock
@@ -74,8 +80,19 @@ export function FindScreen() {
             autoComplete="off"
             spellCheck={false}
             error={errors['query']}
-            {...register('query')}
+            {...register('query', {
+              onChange: (event: ChangeEvent<HTMLInputElement>) => {
+                const prefix = prefixOf(event.target.value)
+                setCut(prefix !== undefined)
+                if (prefix !== undefined) setValue('query', prefix)
+              },
+            })}
           />
+          <div role="status">
+            {cut && (
+              <p className="note warning mt-3 mb-3">The key was cut to its prefix. Tell the customer to revoke it.</p>
+            )}
+          </div>
           <TextField
             label="Reason"
             hint="goes on record"
@@ -83,7 +100,7 @@ export function FindScreen() {
             error={errors['reason']}
             {...register('reason')}
           />
-          <FormFailure error={result.error} fields={['query', 'reason']} />
+          <FormFailure error={result.error} words={words} />
           <div className="btnrow mt-5">
             <SendButton kind="main" type="submit" error={result.error}>
               {result.isFetching ? 'Finding' : 'Find'}

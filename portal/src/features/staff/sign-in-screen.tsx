@@ -10,6 +10,8 @@ import { TitleBlock } from '../../components/title-block.tsx'
 import { noteSignedIn } from '../../session/signed-in.ts'
 import { staffSessionQuery, staffSignIn } from './queries.ts'
 
+const words = { labels: { mail: 'Mail address', password: 'Password' } }
+
 export function StaffSignInScreen() {
   const client = useQueryClient()
   const navigate = useNavigate()
@@ -23,7 +25,7 @@ export function StaffSignInScreen() {
       await navigate('/staff', { replace: true })
     },
   })
-  const errors = issuesByField(start.error)
+  const errors = issuesByField(start.error, words)
   return (
     <Sheet title="Staff sign-in">
       <TitleBlock
@@ -48,7 +50,7 @@ export function StaffSignInScreen() {
             error={errors['password']}
             {...register('password')}
           />
-          <FormFailure error={start.error} fields={['mail', 'password']} />
+          <FormFailure error={start.error} words={words} />
           <div className="btnrow mt-5">
             <SendButton kind="main" type="submit" error={start.error} disabled={start.isPending}>
               {start.isPending ? 'Signing in' : 'Sign in'}

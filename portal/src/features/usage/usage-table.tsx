@@ -8,7 +8,7 @@ export function UsageTable({ usage }: { usage: Usage }) {
   const { total } = usage
   const columns: readonly Column<UsageRow>[] = [
     { header: 'Key', cell: ({ keyName }) => keyName ?? 'no key' },
-    { header: 'Case', mono: true, cell: (row) => <code>{row.case ?? 'none'}</code> },
+    { header: 'Case', mono: true, cell: (row) => (row.case ? <code>{row.case}</code> : 'other calls') },
     { header: 'Calls', numeric: true, cell: ({ calls }) => whole(calls) },
     { header: 'Refused', numeric: true, cell: ({ refused }) => whole(refused) },
     { header: 'Points', numeric: true, cell: ({ points }) => whole(points) },

@@ -1,0 +1,86 @@
+import { afterAll, beforeAll, expect, test } from 'vitest'
+import { type Browser, openBrowser } from './harness/browser.ts'
+import { type Portal, startPortal } from './harness/portal.ts'
+import { signInAs } from './harness/sign-in.ts'
+
+let portal: Portal
+let browser: Browser
+beforeAll(async () => {
+  portal = await startPortal({ demo: true })
+  browser = await openBrowser({ width: 1280 })
+})
+afterAll(async () => {
+  await browser.close()
+  await portal.close()
+})
+
+test('a sign-up that is refused names the fields as the form does', async () => {
+  const page = await browser.context.newPage()
+  await page.goto(`${portal.url}/sign-up`)
+  await page.getByText('at least 15 characters').waitFor()
+  await page.getByRole('button', { name: 'Sign up' }).click()
+  await page.locator('.err').first().waitFor()
+  const said = (await page.locator('form').innerText()).replace(/\s+/g, ' ')
+  expect(said).toContain('Account name must have')
+  expect(said).not.toMatch(/accountName/)
+  await page.close()
+})
+
+test('a refused number is told with label and unit of the form', async () => {
+  const page = await browser.context.newPage()
+  await page.goto(`${portal.url}/cases/slab-convection`)
+  await page.locator('[data-field=filmCoefficient] input').fill('-1')
+  await page.getByRole('button', { name: 'Solve', exact: true }).click()
+  const said = page.locator('[data-field=filmCoefficient] .err')
+  await said.waitFor()
+  expect(await said.innerText()).toMatch(/^Film coefficient is \u22121.*W\/\(m²·K\)/s)
+  await page.close()
+})
+
+test.each(['1,000', '1 000', '1000'])('a quota may be written as %s', async (typed) => {
+  const page = await browser.context.newPage()
+  await signInAs(page, portal, 'owner')
+  await page.getByRole('button', { name: 'Create a key' }).click()
+  const name = `quota ${typed}`
+  await page.getByLabel('Name').fill(name)
+  await page.getByLabel('Own quota').fill(typed)
+  await page.getByRole('button', { name: 'Create and show once' }).click()
+  await page.getByLabel('I have stored it').check()
+  await page.getByRole('button', { name: 'Done' }).click()
+  const row = page.getByRole('row', { name: new RegExp(name) })
+  await row.waitFor()
+  expect(await row.innerText()).toContain('1\u202f000')
+  await page.getByRole('button', { name: `Revoke ${name}` }).click()
+  await page.getByText('It has never been used.').waitFor()
+  await page.close()
+})
+
+test('a key pasted whole is cut to its prefix before anything is sent', async () => {
+  const page = await browser.context.newPage()
+  await signInAs(page, portal, 'support')
+  const key = portal.demo?.key ?? ''
+  const query = page.getByLabel('Request id or key prefix')
+  await query.fill(key)
+  await page.getByText('The key was cut to its prefix. Tell the customer to revoke it.').waitFor()
+  expect(await query.inputValue()).toBe(key.slice(0, 'soak_trial_'.length + 6))
+  await page.getByLabel('Reason').fill('The customer pasted a key.')
+  const sent = page.waitForRequest('**/support/v1/find')
+  await page.getByRole('button', { name: 'Find' }).click()
+  expect((await sent).postData()).not.toContain(key)
+  await page.locator('td code[title^=req_]').first().waitFor()
+  await page.close()
+})
+
+test('the explorer asks for a key in words, once, and folds the samples of refusals', async () => {
+  const page = await browser.context.newPage()
+  await page.goto(`${portal.url}/reference`)
+  await page.locator('.explorer .opblock').first().waitFor()
+  expect(await page.getByText('Authorize', { exact: true }).count()).toBe(0)
+  expect(await page.locator('.explorer .authorization__btn').count()).toBe(0)
+  await page.locator('.explorer .opblock-post button').first().click()
+  await page.locator('.explorer tr.response').first().waitFor()
+  expect(await page.locator('.explorer tr.response[data-code="422"] .model-example').first().isVisible()).toBe(false)
+  await page.getByRole('button', { name: 'Enter a key' }).click()
+  await page.locator('.explorer .modal-ux').waitFor()
+  await page.close()
+})
