@@ -2,6 +2,7 @@ import { afterAll, beforeAll, expect, test } from 'vitest'
 import { sweep } from '../../api/metering/sweep.ts'
 import lumped from '../../solvers/cases/lumped-convection/case.ts'
 import { expectBooks } from './harness/books.ts'
+import { createTestDatabase } from './harness/database.ts'
 import { gate } from './harness/gate.ts'
 import { makeKey, query, signUp } from './harness/people.ts'
 import { type TestService, startTestService } from './harness/service.ts'
@@ -23,9 +24,9 @@ const usedOf = async (accountId: string) =>
 const large = { ...lumped.example, times: Array.from({ length: 300 }, (_, i) => i + 1) }
 
 /** Sends a call, and hangs up once `reached` resolves. */
-async function hangUp(secret: string, body: object, reached: Promise<void>): Promise<void> {
+async function hangUp(secret: string, body: object, reached: Promise<void>, { url } = service): Promise<void> {
   const ending = new AbortController()
-  const lost = fetch(`${service.url}/v1/cases/${lumped.id}/solve`, {
+  const lost = fetch(`${url}/v1/cases/${lumped.id}/solve`, {
     method: 'POST',
     headers: { authorization: `Bearer ${secret}`, 'content-type': 'application/json' },
     body: JSON.stringify(body),
@@ -163,4 +164,25 @@ test('an answer that comes after its charge was taken for lost is not given', as
   expect(answer.json).toMatchObject({ status: 503, code: 'unavailable' })
   expect(await sumOf(key.id)).toBe(0)
   await expectBooks(service.databaseUrl, accountId)
+})
+
+test('a service that ends waits for a call whose client has gone', async () => {
+  const database = await createTestDatabase()
+  try {
+    const own = await startTestService({ databaseUrl: database.url })
+    const { client, accountId } = await signUp(own.url)
+    const key = await makeKey(client)
+    const held = holdUp(own.service.deps.compute as never, 'solve' as never)
+    await hangUp(key.secret, large, held.reached, own)
+    const closed = own.close()
+    await new Promise((resolve) => setTimeout(resolve, 300))
+    held.go()
+    await closed
+    expect(await query(database.url, 'SELECT status, points::int FROM log WHERE account_id = $1', [accountId])).toEqual(
+      [{ status: 499, points: 300 }],
+    )
+    await expectBooks(database.url, accountId)
+  } finally {
+    await database.drop()
+  }
 })
