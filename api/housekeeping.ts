@@ -1,6 +1,7 @@
 import type { Deps } from './deps.ts'
 import { pruneLimits } from './http/limits.ts'
 import { sweep } from './metering/sweep.ts'
+import { dropOldLog } from './requests/retention.ts'
 
 const MINUTE = 60_000
 
@@ -11,6 +12,10 @@ export function keepHouse({ pool, log }: Deps): () => Promise<void> {
     sweep: async () => {
       const settled = await sweep(pool)
       if (settled > 0) log.info({ settled }, 'charges of failed calls were refunded')
+    },
+    retention: async () => {
+      const days = await dropOldLog(pool)
+      if (days > 0) log.info({ days }, 'days of the log that are no longer kept were dropped')
     },
     limits: () => pruneLimits(pool),
   }

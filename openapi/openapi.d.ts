@@ -199,7 +199,7 @@ export interface paths {
         };
         /**
          * Read the usage of the account
-         * @description Sums of the ledger by UTC day, key and case, and calls that were refused. The total is the sum of the rows.
+         * @description Sums of the ledger by UTC day, key and case, and calls that were refused, which are known for 30 days. The total is the sum of the rows.
          */
         get: operations["readUsage"];
         put?: never;

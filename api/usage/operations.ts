@@ -1,6 +1,7 @@
 import type { z } from 'zod'
 import { type KeyCaller, type MemberCaller, operation } from '../operation.ts'
 import type { Deps } from '../deps.ts'
+import { KEPT_DAYS } from '../requests/retention.ts'
 import { readUsage } from './read-usage.ts'
 import { usageQuery, usageSchema } from './schemas.ts'
 
@@ -9,7 +10,8 @@ const shared = {
   tag: 'Usage',
   summary: 'Read the usage of the account',
   description:
-    'Sums of the ledger by UTC day, key and case, and calls that were refused. The total is the sum of the rows.',
+    'Sums of the ledger by UTC day, key and case, and calls that were refused, which are known for ' +
+    `${KEPT_DAYS} days. The total is the sum of the rows.`,
   query: usageQuery,
   status: 200,
   answer: usageSchema,
