@@ -53,7 +53,7 @@ describe.each(cases.map((c) => [c.id, c] as const))('%s', (_, c) => {
       )
       const answer = await client.solve(c.id, secret, body)
       expect([200, 422], `${field}: ${number} ${answer.text.slice(0, 300)}`).toContain(answer.status)
-      expect(answer.text.replaceAll('\\"NaN\\"', 'the text given')).not.toMatch(/NaN|Infinity/)
+      if (answer.status === 200 || number !== '"NaN"') expect(answer.text).not.toMatch(/NaN|Infinity/)
       if (answer.status === 200) expect(JSON.stringify(answer.json.result)).not.toContain('null')
       else expect(answer.json.errors.every((e: { pointer: string }) => e.pointer.startsWith('#'))).toBe(true)
     }
