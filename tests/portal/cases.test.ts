@@ -77,7 +77,7 @@ test.each(cases.map(({ id }) => id))(
     }
     expect([...names].sort()).toEqual(described.fields.map(({ name }) => name).sort())
     await page.getByRole('button', { name: 'Back to the example' }).click()
-    await page.getByRole('button', { name: 'Solve' }).click()
+    await page.getByRole('button', { name: 'Solve', exact: true }).click()
 
     expect(await page.locator('.formula math').count()).toBe(described.formula.length)
     const answer = await answerShown(page)

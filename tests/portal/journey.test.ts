@@ -119,7 +119,7 @@ test('what the service refuses lands on its field', async () => {
   await page.goto(`${portal.url}/cases/slab-convection`)
   const depths = page.getByLabel('Depths')
   await depths.fill('0, 0.4')
-  await page.getByRole('button', { name: 'Solve' }).click()
+  await page.getByRole('button', { name: 'Solve', exact: true }).click()
   const refusal = page.locator('[data-field=depths] .err')
   await refusal.waitFor()
   expect(await refusal.innerText()).toContain('The body ends at 0.2 m')
@@ -129,7 +129,7 @@ test('what the service refuses lands on its field', async () => {
   )
 
   await depths.fill('0, 0.04')
-  await page.getByRole('button', { name: 'Solve' }).click()
+  await page.getByRole('button', { name: 'Solve', exact: true }).click()
   await refusal.waitFor({ state: 'detached' })
   await page.getByRole('region', { name: 'Answer as JSON' }).getByText('0.04').first().waitFor()
   await page.close()

@@ -1,27 +1,36 @@
-import { type ComponentType, createElement } from 'react'
+import { useState } from 'react'
+import { createPortal } from 'react-dom'
+import { EnterKey } from './enter-key.tsx'
 
-interface Props {
-  isAuthorized: boolean
-  showPopup: boolean
-  onClick(): void
-  getComponent(name: string, container: true): ComponentType
+/** What the explorer gives its plug-ins, as far as it is used here. */
+interface System {
+  preauthorizeApiKey(scheme: string, value: string): unknown
+  specSelectors: { securityDefinitions(): { keySeq(): { first(): string } } }
 }
 
-function EnterKey({ isAuthorized, showPopup, onClick, getComponent }: Props) {
-  return (
-    <div className="auth-wrapper">
-      <button type="button" className="btn" onClick={onClick}>
-        {isAuthorized ? 'Change the key' : 'Enter a key'}
-      </button>
-      {showPopup && createElement(getComponent('authorizationPopup', true))}
-    </div>
-  )
+/** The button in place of the explorer's own. */
+function keyButton(system: System) {
+  return function KeyButton({ isAuthorized }: { isAuthorized: boolean }) {
+    const [asking, setAsking] = useState(false)
+    const use = (key: string) => {
+      system.preauthorizeApiKey(system.specSelectors.securityDefinitions().keySeq().first(), key)
+      setAsking(false)
+    }
+    return (
+      <div className="auth-wrapper">
+        <button type="button" className="btn" onClick={() => setAsking(true)}>
+          {isAuthorized ? 'Change the key' : 'Enter a key'}
+        </button>
+        {asking && createPortal(<EnterKey onUse={use} onClose={() => setAsking(false)} />, document.body)}
+      </div>
+    )
+  }
 }
 
 /** One place to enter a key, in words; no padlock at each operation. */
 export const keyPlugin = () => ({
   wrapComponents: {
-    authorizeBtn: () => EnterKey,
+    authorizeBtn: (_original: unknown, system: System) => keyButton(system),
     authorizeOperationBtn: () => () => null,
   },
 })
