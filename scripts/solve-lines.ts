@@ -1,6 +1,6 @@
 import { z } from 'zod'
-import { MAX_POINTS } from '../api/cases/limits.ts'
-import { BODY_LIMIT, parseJson } from '../api/http/json.ts'
+import { BODY_LIMIT, MAX_POINTS } from '../api/cases/limits.ts'
+import { parseJson } from '../api/http/json.ts'
 import { Problem, type ProblemDetails, invalidInput, problemDetails } from '../api/problems.ts'
 import { cases } from '../solvers/cases/index.ts'
 import { DomainError } from '../solvers/errors.ts'
@@ -45,7 +45,7 @@ function answerLine(line: Line, publicUrl: string): Answer | Refusal {
 }
 
 function read(line: Line): unknown {
-  if ('text' in line) return parseJson(line.text)
+  if ('text' in line) return parseJson(new TextEncoder().encode(line.text))
   if (line.fault === 'too-long') throw new Problem('body-too-large')
   throw new Problem('malformed-json', 'The line is not UTF-8.')
 }

@@ -47,12 +47,12 @@ function describe(issue: RawIssue): [DomainCode, string] {
     case 'invalid_type':
     case 'invalid_union':
       if (issue.input === undefined) return ['missing-field', `${name} is missing.`]
+      if (typeof issue.input === 'number' && !Number.isFinite(issue.input))
+        return ['out-of-range', `${name} is not a finite number.`]
       if (issue.code === 'invalid_union')
         return typeof issue.input === 'number'
           ? ['not-in-list', `${name} is ${issue.input}, which is not one of the values offered.`]
           : ['wrong-type', `${name} is ${kindOf(issue.input)}, which is not one of the values offered.`]
-      if (typeof issue.input === 'number' && !Number.isFinite(issue.input))
-        return ['out-of-range', `${name} is not a finite number.`]
       return ['wrong-type', `${name} is ${kindOf(issue.input)}; ${article(issue.expected)} is expected.`]
     case 'too_small':
     case 'too_big': {

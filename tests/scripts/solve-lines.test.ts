@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest'
-import { BODY_LIMIT } from '../../api/http/json.ts'
+import { BODY_LIMIT } from '../../api/cases/limits.ts'
 import { solveLines } from '../../scripts/solve-lines.ts'
 import { cases } from '../../solvers/cases/index.ts'
 import { solve } from '../../solvers/operations/solve.ts'
