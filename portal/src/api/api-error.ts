@@ -1,5 +1,5 @@
 import { type FormWords, inFormWords } from './form-words.ts'
-import type { Who } from '../session/signed-in.ts'
+import type { Who } from './signed-in.ts'
 
 /** What the service says of a call it refused or failed. */
 export interface ProblemBody {

@@ -1,5 +1,5 @@
 import { MutationCache, QueryCache, QueryClient } from '@tanstack/react-query'
-import { noteSignedIn } from '../session/signed-in.ts'
+import { noteSignedIn } from './signed-in.ts'
 import { ApiError } from './api-error.ts'
 
 /**

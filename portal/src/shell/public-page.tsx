@@ -1,6 +1,6 @@
 import { Link, Outlet } from 'react-router-dom'
 import { ButtonLink } from '../components/button.tsx'
-import { useSignedIn } from '../session/signed-in.ts'
+import { useSignedIn } from '../api/signed-in.ts'
 import { Masthead } from './masthead.tsx'
 import { Page } from './page.tsx'
 

@@ -1,7 +1,7 @@
 import { queryOptions } from '@tanstack/react-query'
 import { ApiError, unwrap } from '../../api/api-error.ts'
 import { portalApi } from '../../api/clients.ts'
-import { noteSignedIn } from '../../session/signed-in.ts'
+import { noteSignedIn } from '../../api/signed-in.ts'
 
 export interface SignUp {
   mail: string

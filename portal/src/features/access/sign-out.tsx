@@ -1,6 +1,6 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
 import { signOut } from './queries.ts'
-import { noteSignedIn } from '../../session/signed-in.ts'
+import { noteSignedIn } from '../../api/signed-in.ts'
 
 /** Ends the session on the server and forgets what was read; the page starts anew. */
 export function SignOut() {

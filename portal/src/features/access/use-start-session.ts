@@ -1,7 +1,7 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
 import { useNavigate } from 'react-router-dom'
 import { sessionQuery, signIn, signUp } from './queries.ts'
-import { noteSignedIn } from '../../session/signed-in.ts'
+import { noteSignedIn } from '../../api/signed-in.ts'
 
 type Start = typeof signUp | typeof signIn
 

@@ -7,7 +7,7 @@ import { FormFailure } from '../../components/form-failure.tsx'
 import { Band, Sheet } from '../../components/sheet.tsx'
 import { TextField } from '../../components/text-field.tsx'
 import { TitleBlock } from '../../components/title-block.tsx'
-import { noteSignedIn } from '../../session/signed-in.ts'
+import { noteSignedIn } from '../../api/signed-in.ts'
 import { staffSessionQuery, staffSignIn } from './queries.ts'
 
 const words = { labels: { mail: 'Mail address', password: 'Password' } }

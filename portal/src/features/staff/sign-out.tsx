@@ -1,5 +1,5 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
-import { noteSignedIn } from '../../session/signed-in.ts'
+import { noteSignedIn } from '../../api/signed-in.ts'
 import { staffSignOut } from './queries.ts'
 
 export function StaffSignOut() {
