@@ -17,7 +17,7 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
     'For ground, thick walls and the first minutes or hours of any body. It holds while the far side has felt nothing: numbers.penetrationDepth is where 1 % of a surface step has arrived at the last time, and the body must be deeper. A film coefficient of 0 leaves the body as it is.',
   formula: [
     '\\frac{T - T_i}{T_a - T_i} = e^{-\\eta^2} \\left[\\operatorname{erfcx}(\\eta) - \\operatorname{erfcx}(\\eta + \\beta)\\right]',
-    '\\eta = \\frac{x}{2\\sqrt{at}}, \\qquad \\beta = \\frac{h\\sqrt{at}}{k}, \\qquad \\operatorname{erfcx}(s) = e^{s^2} \\operatorname{erfc}(s)',
+    '\\eta = \\frac{x}{2\\,(at)^{1/2}}, \\qquad \\beta = \\frac{h\\,(at)^{1/2}}{k}, \\qquad \\operatorname{erfcx}(s) = e^{s^2} \\operatorname{erfc}(s)',
   ],
   sources: ['H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, section 2.7'],
   family: 'half-space',

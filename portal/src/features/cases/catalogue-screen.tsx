@@ -33,7 +33,7 @@ export function CatalogueScreen() {
         ]}
       >
         <p className="prose">
-          Each case is one body with one boundary, solved exactly.
+          Each case is one body with one boundary, and every answer states its bound.
           {cases.length > 1 && ' Pick what you can see in your problem.'}
         </p>
       </TitleBlock>
