@@ -17,7 +17,8 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
     'For ground, thick concrete and the first minutes of any body whose face temperature is known: measured on the face, or held by a change of phase or a strong film. It holds while the far side has felt nothing: numbers.penetrationDepth is where 1 % of the change has arrived at the last time, and the body must be deeper. Taking a fixed face in place of a film shortens times by about 2/(Bi + 2).',
   formula: [
     '\\frac{T - T_s}{T_i - T_s} = \\operatorname{erf}(\\eta), \\qquad \\eta = \\frac{x}{2\\,(at)^{1/2}}',
-    'q = \\frac{b\\,(T_s - T_i)}{(\\pi t)^{1/2}}\\; e^{-\\eta^2}, \\qquad Q = 2 b\\,(T_s - T_i)\\,(t/\\pi)^{1/2}, \\qquad b = (k\\rho c)^{1/2}',
+    'q = \\frac{b\\,(T_s - T_i)}{(\\pi t)^{1/2}}\\; e^{-\\eta^2}, \\qquad Q = 2 b\\,(T_s - T_i)\\,(t/\\pi)^{1/2}',
+    'b = (k\\rho c)^{1/2}',
   ],
   sources: ['H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, section 2.4'],
   family: 'half-space',
