@@ -1,6 +1,6 @@
 import { defineCase, type Resolved } from '../../case.ts'
 import { initialTemperature, solid, surfaceTemperature } from '../../fields.ts'
-import { penetrationDepth } from '../../half-space-reach.ts'
+import { changeHasArrived, penetrationDepth } from '../../half-space-reach.ts'
 import { refuseFluxAtStep } from '../../singular.ts'
 import { resolveSolid } from '../../solid.ts'
 import { solve, type HalfSpaceInput } from './solve.ts'
@@ -74,18 +74,6 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
   },
   solve,
   numbers: (input) => ({ penetrationDepth: penetrationDepth(input.diffusivity, input.times) }),
-  checks(input) {
-    const reach = penetrationDepth(input.diffusivity, input.times)
-    const deepest = input.depths.reduce((most, depth) => Math.max(most, depth), 0)
-    return [
-      {
-        id: 'change-has-arrived',
-        holds: deepest <= reach,
-        value: deepest,
-        limit: reach,
-        text: 'The deepest position lies within the depth that 1 % of a surface step has reached at the last time.',
-      },
-    ]
-  },
+  checks: (input) => [changeHasArrived(input)],
   warnings: () => [],
 })
