@@ -76,6 +76,6 @@ export function contract(
 ): number {
   if (output === 'temperature' || output === 'meanTemperature' || output === 'steadyTemperature')
     return 1e-12 * t.scale + 4 * EPS * Math.max(Math.abs(y), ...t.temperatures.map(Math.abs)) + 2 * EPS * K
-  if (output === 'heatFlux') return 1e-11 * (Math.max(Math.abs(y), Math.abs(t.surface ?? 0)) + K)
+  if (output === 'heatFlux') return 1e-11 * (Math.max(Math.abs(y), Math.abs(t.surface ?? 0)) + K) + 1e-290
   return 1e-11 * (Math.abs(y) + K) + 1e-290
 }
