@@ -3,7 +3,7 @@ import { D, erf, erfc, PI } from './functions.ts'
 /* Exact responses to a unit step of the face itself. Fluxes are per k·ΔT/L, the slab's length L being 1. */
 
 export function exactFixedSlab(fourier: D, delta: D): { remaining: D; completed: D; flux: D; heat: D; mean: D } {
-  return fourier.lt('0.02') ? byImages(fourier, delta) : bySeries(fourier, delta)
+  return fourier.lt('0.006') ? byImages(fourier, delta) : bySeries(fourier, delta)
 }
 
 /** Beyond, every term is below 1e-17000 and only lengthens the sums. */
