@@ -43,6 +43,22 @@ const heldOf = (i: Record<string, number>) => ({
 })
 const unitSolid = { conductivity: 1, diffusivity: 1 }
 
+const halfSpaceNames: Names = {
+  temperature_C: 'temperature',
+  change_ratio: 'completedFraction',
+  heat_flux_W_m2: 'heatFlux',
+  surface_heat_flux_W_m2: 'surfaceHeatFlux',
+  energy_J_m2: 'heatGained',
+}
+const slabNames: Names = {
+  temperature_C: 'temperature',
+  theta: 'remainingFraction',
+  average_C: 'meanTemperature',
+  heat_fraction: 'heatFraction',
+  surface_heat_flux_W_m2: 'surfaceHeatFlux',
+  energy_J_m2: 'heatGained',
+}
+
 const kinds: Record<string, { file: string; ask: Ask; names: Names }> = {
   A2: {
     file: 'A_semi_infinite',
@@ -50,13 +66,7 @@ const kinds: Record<string, { file: string; ask: Ask; names: Names }> = {
       caseId: 'semi-infinite-convection',
       body: { ...solidOf(i), ...filmOf(i), depths: [i['position_m']], times: [i['time_s']] },
     }),
-    names: {
-      temperature_C: 'temperature',
-      change_ratio: 'completedFraction',
-      heat_flux_W_m2: 'heatFlux',
-      surface_heat_flux_W_m2: 'surfaceHeatFlux',
-      energy_J_m2: 'heatGained',
-    },
+    names: halfSpaceNames,
   },
   B2: {
     file: 'B_slab',
@@ -71,14 +81,7 @@ const kinds: Record<string, { file: string; ask: Ask; names: Names }> = {
         times: [i['time_s']],
       },
     }),
-    names: {
-      temperature_C: 'temperature',
-      theta: 'remainingFraction',
-      average_C: 'meanTemperature',
-      heat_fraction: 'heatFraction',
-      surface_heat_flux_W_m2: 'surfaceHeatFlux',
-      energy_J_m2: 'heatGained',
-    },
+    names: slabNames,
   },
   A1: {
     file: 'A_semi_infinite',
@@ -86,13 +89,7 @@ const kinds: Record<string, { file: string; ask: Ask; names: Names }> = {
       caseId: 'semi-infinite-surface-temperature',
       body: { ...solidOf(i), ...heldOf(i), depths: [i['position_m']], times: [i['time_s']] },
     }),
-    names: {
-      temperature_C: 'temperature',
-      change_ratio: 'completedFraction',
-      heat_flux_W_m2: 'heatFlux',
-      surface_heat_flux_W_m2: 'surfaceHeatFlux',
-      energy_J_m2: 'heatGained',
-    },
+    names: halfSpaceNames,
   },
   B1: {
     file: 'B_slab',
@@ -107,14 +104,7 @@ const kinds: Record<string, { file: string; ask: Ask; names: Names }> = {
         times: [i['time_s']],
       },
     }),
-    names: {
-      temperature_C: 'temperature',
-      theta: 'remainingFraction',
-      average_C: 'meanTemperature',
-      heat_fraction: 'heatFraction',
-      surface_heat_flux_W_m2: 'surfaceHeatFlux',
-      energy_J_m2: 'heatGained',
-    },
+    names: slabNames,
   },
   'I-slabstep': {
     file: 'I_extremes',
