@@ -69,6 +69,8 @@ test('a person signs up, makes a key, calls with it and finds the call; support 
   await portal.service.service.deps.requestLog.flush()
 
   await page.getByRole('link', { name: 'Usage' }).click()
+  // The sheet of the keys, which also has such a row, stands until the next one is loaded.
+  await page.getByRole('heading', { level: 1, name: 'Usage' }).waitFor()
   const row = page.getByRole('row', { name: /first tool/ })
   await row.waitFor()
   expect(await row.innerText()).toMatch(/slab-convection\s+1\s+0\s+10\s+100\.0/)
