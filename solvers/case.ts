@@ -1,6 +1,7 @@
 import type { z } from 'zod'
 import type { CautionId } from './cautions.ts'
 import { type Issue, DomainError } from './errors.ts'
+import type { NumberName } from './number-catalogue.ts'
 import { type OutputDescription, type OutputName, type Shape, outputCatalogue } from './outputs.ts'
 import type { Solution } from './solution.ts'
 import type { Warning } from './warnings.ts'
@@ -14,27 +15,50 @@ export interface Check {
   text: string
 }
 
-export interface Numbers {
-  biot?: number
-  fourier?: number[]
-  /** The length that the Biot and Fourier numbers were made with, m. */
-  length?: number
-  /** Depth that 1 % of a surface step has reached at the last time, m. */
-  penetrationDepth?: number
-}
+/** Numbers that an expert looks at first, each described where the contract is made (numberCatalogue). */
+export type Numbers = Partial<Record<NumberName, number | number[]>>
+
+/**
+ * Where an answer has places: depths inward from the exposed face, radii from the axis or centre, either of the two,
+ * points of a body of two or three dimensions, or none.
+ */
+export type Places = 'depths' | 'radii' | 'depths-or-radii' | 'points' | 'none'
+
+export type PointAxis = 'x' | 'y' | 'z' | 'r'
+export type Point = Partial<Record<PointAxis, number>>
 
 /** What every resolved input has beside the case's own: SI, defaults filled in, refusals made. */
 export interface Resolved {
   times: number[]
   depths?: number[]
+  radii?: number[]
+  points?: Point[]
   outputs: OutputName[]
 }
 
 /** Signs for the small drawing of the case. */
 export interface Sketch {
-  body: 'half-space' | 'slab' | 'lumped'
-  boundary: 'convection' | 'temperature'
+  body:
+    | 'half-space'
+    | 'slab'
+    | 'lumped'
+    | 'cylinder'
+    | 'sphere'
+    | 'hollow-cylinder'
+    | 'hole'
+    | 'bar'
+    | 'brick'
+    | 'short-cylinder'
+    | 'bar-end'
+    | 'edge'
+    | 'corner'
+    | 'two-bodies'
+    | 'endless'
+  boundary: 'convection' | 'temperature' | 'flux' | 'ramp' | 'cycle' | 'contact' | 'two-sides' | 'source' | 'bath'
 }
+
+/** How the catalogue groups the cases. */
+export type Family = 'lumped' | 'half-space' | 'slab' | 'round' | 'product' | 'source'
 
 /**
  * An analytical case, described once. Its route, validation, contract entry, page, form, snippets, price and common
@@ -50,13 +74,18 @@ export interface CaseDescription<Shape_ extends z.ZodRawShape, R extends Resolve
   /** The formula in TeX, one entry a line. */
   formula: readonly string[]
   sources: readonly string[]
-  family: 'half-space' | 'slab' | 'lumped'
+  family: Family
   sketch: Sketch
   /** The case's own fields. Times, depths, outputs and detail are added by the operation. */
   fields: Shape_
-  /** Where the answer has places: depths inward from the exposed face, or none. */
-  places: 'depths' | 'none'
-  /** The field that says where the body ends, so that no depth may lie beyond; absent where it has no end. */
+  places: Places
+  /** The coordinates of a point, where places are points. */
+  pointAxes?: readonly PointAxis[]
+  /** Depths may be negative, in the other of two bodies. */
+  signedDepths?: true
+  /** Times are of a clock and may be negative: a settled cycle has no start. */
+  clock?: true
+  /** The field that says where the body ends, so that no depth or radius may lie beyond; absent where no one field does. */
   depthsEndAt?: string & keyof Shape_
   /** The field with the temperature that the body is driven to; absent where no one field says it. */
   drive?: string & keyof Shape_
@@ -85,7 +114,23 @@ export interface CaseDescription<Shape_ extends z.ZodRawShape, R extends Resolve
 export type ParsedInput<S extends z.ZodRawShape> = z.infer<z.ZodObject<S>> & {
   times: number[]
   depths?: number[] | undefined
+  radii?: number[] | undefined
+  points?: Point[] | undefined
   outputs: OutputName[]
+}
+
+/** The fields in which a case takes its places. */
+export const placeFields = {
+  depths: ['depths'],
+  radii: ['radii'],
+  'depths-or-radii': ['depths', 'radii'],
+  points: ['points'],
+  none: [],
+} as const satisfies Record<Places, readonly ('depths' | 'radii' | 'points')[]>
+
+/** How many places were asked for. */
+export function countOfPlaces({ depths, radii, points }: Pick<Resolved, 'depths' | 'radii' | 'points'>): number {
+  return (depths ?? radii ?? points ?? []).length
 }
 
 /** A case with its types hidden, as the lists and operations hold it. */

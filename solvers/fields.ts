@@ -108,6 +108,97 @@ export const depths = quantities(
   MAX_POSITIONS,
 )
 
+/** Of a case with two bodies in contact: the other one lies at negative depths. */
+export const signedDepths = quantities(
+  { symbol: 'x', unit: 'm', label: 'Depths', min: -1e5, max: 1e5, hint: 'below 0 in the other body' },
+  MAX_POSITIONS,
+)
+
+export const radii = quantities(
+  { symbol: 'r', unit: 'm', label: 'Radii', min: 0, max: 1e5, hint: 'from the axis or centre' },
+  MAX_POSITIONS,
+)
+
+const coordinates = {
+  x: quantity({ symbol: 'x', unit: 'm', label: 'x', min: -1e5, max: 1e5 }),
+  y: quantity({ symbol: 'y', unit: 'm', label: 'y', min: -1e5, max: 1e5 }),
+  z: quantity({ symbol: 'z', unit: 'm', label: 'z', min: -1e5, max: 1e5 }),
+  r: quantity({ symbol: 'r', unit: 'm', label: 'r', min: 0, max: 1e5 }),
+}
+
+/** Points of a body of two or three dimensions. */
+export function pointsOf(axes: readonly (keyof typeof coordinates)[]) {
+  const point = z.strictObject(Object.fromEntries(axes.map((axis) => [axis, coordinates[axis]])))
+  const accepted = `1 to ${MAX_POSITIONS} points {${axes.join(', ')}}, in m`
+  return z
+    .array(point)
+    .min(1)
+    .max(MAX_POSITIONS)
+    .meta({
+      title: 'Points',
+      description: `Points: ${accepted}.`,
+      'x-symbol': axes.join(', '),
+      'x-ucum': 'm',
+      'x-accepted': accepted,
+      'x-point': [...axes],
+    })
+}
+
+/** Times of a clock that a settled cycle is reckoned on. */
+export const clockTimes = quantities(
+  { symbol: 't', unit: 's', label: 'Times', min: -1e17, max: 1e17, hint: 'of the clock of the cycle, any sign' },
+  MAX_TIMES,
+)
+
+/** A settled cycle on the clock of `times`; exactly one of the two instants. */
+export const cycle = {
+  cycleMean: quantity({ ...temperature, symbol: 'Tₘ', label: 'Cycle mean', hint: 'mean of the driving temperature' }),
+  amplitude: quantity({
+    symbol: 'A',
+    unit: 'K',
+    label: 'Amplitude',
+    min: 0,
+    max: 1e4,
+    typical: [1, 40],
+    hint: 'half of highest less lowest',
+  }),
+  period: quantity({
+    symbol: 'P',
+    unit: 's',
+    label: 'Period',
+    min: 1e-6,
+    max: 1e12,
+    typical: [60, 4e7],
+    hint: 'a day 86400, a year 31557600',
+  }),
+  timeOfMaximum: quantity({
+    symbol: 't₊',
+    unit: 's',
+    label: 'Time of maximum',
+    min: -1e17,
+    max: 1e17,
+    hint: 'or timeOfMinimum',
+  }).optional(),
+  timeOfMinimum: quantity({
+    symbol: 't₋',
+    unit: 's',
+    label: 'Time of minimum',
+    min: -1e17,
+    max: 1e17,
+    hint: 'or timeOfMaximum',
+  }).optional(),
+}
+
+export const imposedHeatFlux = quantity({
+  symbol: 'q₀',
+  unit: 'W/m2',
+  label: 'Imposed heat flux',
+  min: -1e12,
+  max: 1e12,
+  typical: [-1000, 150_000],
+  hint: 'absorbed at the face, positive into the body',
+})
+
 export const times = quantities(
   { symbol: 't', unit: 's', label: 'Times', min: 0, max: 1e17, typical: [60, 1e8], hint: 'after the change' },
   MAX_TIMES,

@@ -1,3 +1,4 @@
+import type { Method } from './math/rounding.ts'
 import type { OutputName } from './outputs.ts'
 
 /** What each value of an output errs by at most: absolute + relative · |value|. */
@@ -6,7 +7,7 @@ export interface Bound {
   relative: number
 }
 
-export type Method = 'closed-form' | 'eigen-series' | 'two-image'
+export type { Method }
 
 export interface Output {
   values: number | number[] | number[][]

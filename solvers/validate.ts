@@ -29,7 +29,8 @@ type RawIssue = z.core.$ZodIssue & { input?: unknown }
 
 function toIssues(schema: z.ZodType, issue: RawIssue): Issue[] {
   if (issue.code === 'unrecognized_keys') {
-    const known = Object.keys(shapeAt(schema, issue.path) ?? {})
+    const at = schemaAt(schema, issue.path)
+    const known = Object.keys((at && shapeFor(at, (issue.input ?? {}) as Record<string, unknown>)) ?? {})
     return issue.keys.slice(0, MAX_ISSUES).map((key) => ({
       pointer: pointerOf([...issue.path, key.slice(0, 4 * QUOTED)]),
       code: 'unknown-field' as const,
@@ -41,8 +42,17 @@ function toIssues(schema: z.ZodType, issue: RawIssue): Issue[] {
   return [issueAt(schema, issue.path, code, detail)]
 }
 
+/** A union of objects that cannot tell which one is meant reports the object; what is at fault is its kind. */
+function kindIssue(issue: RawIssue): [DomainCode, string] {
+  const name = issue.path.join('/')
+  const kind = (issue.input as Record<string, unknown> | undefined)?.['kind']
+  if (kind === undefined) return ['missing-field', `${name} is missing.`]
+  return ['not-in-list', `${name} is ${kindOf(kind)}, which is not one of the kinds offered.`]
+}
+
 function describe(issue: RawIssue): [DomainCode, string] {
   const name = issue.path.join('/') || 'The body'
+  if (issue.code === 'invalid_union' && issue.path.at(-1) === 'kind') return kindIssue(issue)
   switch (issue.code) {
     case 'invalid_type':
     case 'invalid_union':
@@ -110,15 +120,44 @@ function article(kind: string): string {
   return `${/^[aeiou]/.test(word) ? 'an' : 'a'} ${word}`
 }
 
+interface Walkable {
+  shape?: Record<string, z.ZodType>
+  element?: z.ZodType
+  options?: readonly z.ZodType[]
+}
+const defOf = (schema: z.ZodType): Walkable => unwrap(schema).def as Walkable
+
 /* Walks a schema along a path, through optional and default wrappers, to what a field says of itself. */
 function schemaAt(schema: z.ZodType, path: readonly PropertyKey[]): z.ZodType | undefined {
-  let at: z.ZodType | undefined = schema
-  for (const part of path) {
-    at = at && unwrap(at)
-    const def = at?.def as { shape?: Record<string, z.ZodType>; element?: z.ZodType } | undefined
-    at = def?.shape ? def.shape[String(part)] : def?.element
+  return path.reduce<z.ZodType | undefined>((at, part) => at && stepInto(at, String(part)), schema)
+}
+
+/** Of alternatives, the first that has the name: those of one union mean the same by the same name. */
+function stepInto(schema: z.ZodType, name: string): z.ZodType | undefined {
+  const { shape, element, options } = defOf(schema)
+  if (shape) return Object.hasOwn(shape, name) ? shape[name] : undefined
+  if (element) return element
+  for (const option of options ?? []) {
+    const found = stepInto(option, name)
+    if (found) return found
   }
-  return at
+  return undefined
+}
+
+/** The fields that an object has by a schema; of alternatives, those of the kind that the object says it is. */
+export function shapeFor(schema: z.ZodType, given: Record<string, unknown>): Record<string, z.ZodType> | undefined {
+  const { shape, options = [] } = defOf(schema)
+  if (shape) return shape
+  const shapes = options.map((option) => shapeFor(option, given)).filter((one) => one !== undefined)
+  return shapes.find(({ kind }) => kind?.safeParse(given['kind']).success)
+}
+
+/** The kinds that a union of objects offers. */
+function kindsOf(schema: z.ZodType): string[] {
+  const values = (defOf(schema).options ?? []).flatMap(
+    (option) => (defOf(option).shape?.['kind']?.def as { values?: string[] } | undefined)?.values ?? [],
+  )
+  return values.map((value) => JSON.stringify(value))
 }
 
 export function unwrap(schema: z.ZodType): z.ZodType {
@@ -131,15 +170,14 @@ export function unwrap(schema: z.ZodType): z.ZodType {
   return at
 }
 
-function shapeAt(schema: z.ZodType, path: readonly PropertyKey[]): Record<string, unknown> | undefined {
-  const at = schemaAt(schema, path)
-  return at && (unwrap(at).def as { shape?: Record<string, unknown> }).shape
-}
-
 function acceptedAt(schema: z.ZodType, path: readonly PropertyKey[]): string | undefined {
   const at = schemaAt(schema, path)
   const accepted = at && metaOf(at)?.['x-accepted']
-  return typeof accepted === 'string' ? accepted : undefined
+  if (typeof accepted === 'string') return accepted
+  const union = path.at(-1) === 'kind' ? schemaAt(schema, path.slice(0, -1)) : at
+  const kinds = union ? kindsOf(union) : []
+  if (kinds.length === 0) return undefined
+  return path.at(-1) === 'kind' ? kinds.join(', ') : `an object whose kind is one of ${kinds.join(', ')}`
 }
 
 /** What a field says of itself, be it optional or not. */

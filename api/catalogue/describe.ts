@@ -44,6 +44,7 @@ export function descriptionOf(c: Case) {
     formula: [...c.formula],
     sources: [...c.sources],
     places: c.places,
+    pointAxes: [...(c.pointAxes ?? [])],
     depthsEndAt: c.depthsEndAt ?? null,
     drive: c.drive ?? null,
     fields: fieldsOf(c),

@@ -52,7 +52,10 @@ export const caseSchema = z
     notes: text,
     formula: z.array(text).meta({ description: 'The formula in TeX, one entry a line.' }),
     sources: z.array(text),
-    places: z.enum(['depths', 'none']),
+    places: z
+      .enum(['depths', 'radii', 'depths-or-radii', 'points', 'none'])
+      .meta({ description: 'The fields in which places are given.' }),
+    pointAxes: z.array(text).meta({ description: 'The coordinates of a point; empty where places are no points.' }),
     depthsEndAt: text
       .nullable()
       .meta({ description: 'The field that says where the body ends; null where it has no end.' }),

@@ -12,9 +12,11 @@ export function lastPlaces(value: number): number {
   return 4 * EPS * Math.abs(value)
 }
 
+export type Method = 'closed-form' | 'eigen-series' | 'two-image' | 'contour' | 'product' | 'duhamel' | 'root'
+
 /** A number, the most that it may be off, and how it was found. */
 export interface Estimate {
   value: number
   error: number
-  method: 'closed-form' | 'eigen-series' | 'two-image'
+  method: Method
 }

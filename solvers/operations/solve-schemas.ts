@@ -1,6 +1,7 @@
 import { z } from 'zod'
-import { type Case, outputNamesOf, outputOf, shapeOf } from '../case.ts'
-import { depths, times } from '../fields.ts'
+import { type Case, outputNamesOf, outputOf, placeFields, shapeOf } from '../case.ts'
+import { clockTimes, depths, pointsOf, radii, signedDepths, times } from '../fields.ts'
+import { numberCatalogue } from '../number-catalogue.ts'
 import type { OutputName, Shape } from '../outputs.ts'
 
 /* What a solve takes and answers, made from the description of a case. */
@@ -10,6 +11,16 @@ const detailField = z.enum(['full', 'compact']).optional().meta({
   description: 'Detail: full, or compact (result, bound and warning codes only).',
   'x-accepted': 'full or compact',
 })
+
+/** The fields in which a case takes its places, all optional: outputs without places need none. */
+export function placeSchemas(c: Case): Partial<Record<'depths' | 'radii' | 'points', z.ZodType>> {
+  const schemas = {
+    depths: (c.signedDepths ? signedDepths : depths).optional(),
+    radii: radii.optional(),
+    points: pointsOf(c.pointAxes ?? []).optional(),
+  }
+  return Object.fromEntries(placeFields[c.places].map((name) => [name, schemas[name]]))
+}
 
 function inputSchema(c: Case) {
   const names = outputNamesOf(c)
@@ -25,8 +36,8 @@ function inputSchema(c: Case) {
     })
   return z.strictObject({
     ...c.fields,
-    ...(c.places === 'depths' ? { depths: depths.optional() } : {}),
-    times,
+    ...placeSchemas(c),
+    times: c.clock ? clockTimes : times,
     outputs,
     detail: detailField,
   })
@@ -39,6 +50,18 @@ const valuesSchema: Record<Shape, z.ZodType> = {
   places: z.array(z.number()),
   single: z.number(),
 }
+
+const numbersSchema = z.strictObject(
+  Object.fromEntries(
+    Object.entries(numberCatalogue).map(([name, { unit, series, text }]) => [
+      name,
+      (series ? z.array(z.number()) : z.number()).optional().meta({ description: `${text} Unit ${unit}.` }),
+    ]),
+  ),
+)
+
+const pointSchema = (c: Case) =>
+  z.strictObject(Object.fromEntries((c.pointAxes ?? []).map((axis) => [axis, z.number()])))
 
 /** Cases without places answer a grid output as one row over the times. */
 export function answeredShape(c: Case, name: OutputName): Shape {
@@ -68,7 +91,12 @@ export function answerSchema(c: Case) {
     input: z
       .record(z.string(), z.unknown())
       .meta({ description: 'The input as used: SI, with defaults and derived properties.' }),
-    axes: z.strictObject({ times: series, ...(c.places === 'depths' ? { depths: series.optional() } : {}) }),
+    axes: z.strictObject({
+      times: series,
+      ...Object.fromEntries(
+        placeFields[c.places].map((name) => [name, (name === 'points' ? z.array(pointSchema(c)) : series).optional()]),
+      ),
+    }),
     units: z.record(z.string(), z.string()).meta({ description: 'UCUM code of each output and axis.' }),
     result,
     accuracy: z.strictObject({
@@ -82,12 +110,7 @@ export function answerSchema(c: Case) {
       scope: z.literal('numerical'),
       note: z.string(),
     }),
-    numbers: z.strictObject({
-      biot: z.number().optional(),
-      fourier: series.optional(),
-      length: z.number().optional(),
-      penetrationDepth: z.number().optional(),
-    }),
+    numbers: numbersSchema,
     checks: z.array(
       z.strictObject({ id: z.string(), holds: z.boolean(), value: z.number(), limit: z.number(), text: z.string() }),
     ),

@@ -1,8 +1,8 @@
 import { createHash } from 'node:crypto'
-import { type Case, type Resolved, outputNamesOf, outputOf } from '../case.ts'
+import { type Case, type Resolved, countOfPlaces, outputNamesOf, outputOf, placeFields } from '../case.ts'
 import { cautions } from '../cautions.ts'
 import { DomainError, type Issue } from '../errors.ts'
-import { readLists } from '../number-lists.ts'
+import { readLists, withLists } from '../number-lists.ts'
 import type { OutputName, Shape } from '../outputs.ts'
 import { issuesOf, kindOf } from '../validate.ts'
 import { SOLVER_VERSION } from '../version.ts'
@@ -27,49 +27,66 @@ function withReason(c: Case, body: unknown, issue: Issue): Issue {
   return { ...issue, code: 'output-not-defined', detail: `"${name}": ${reason}`, accepted }
 }
 
+type Read = Record<string, unknown> & Pick<Resolved, 'depths' | 'radii' | 'points' | 'times' | 'outputs'>
+
 function prepare(c: Case, body: unknown, defaultDetail: 'full' | 'compact'): Call {
   const schema = inputOf(c)
   const { body: brief, lists, issues } = readLists(schema, body)
   const parsed = schema.safeParse(brief, { reportInput: true })
   if (!parsed.success) issues.unshift(...issuesOf(schema, parsed.error).map((issue) => withReason(c, body, issue)))
   if (!parsed.success || issues.length > 0) throw new DomainError(issues)
-  const { detail = defaultDetail, ...input } = { ...parsed.data, ...lists } as Record<string, unknown> & {
+  const { detail = defaultDetail, ...input } = withLists(parsed.data, lists) as unknown as Read & {
     detail?: 'full' | 'compact'
-    outputs: OutputName[]
-    depths?: number[]
   }
   input.outputs = [...new Set(input.outputs)]
-  const placed = input.outputs.filter((name) => ['grid', 'places'].includes(answeredShape(c, name)))
-  if (placed.length > 0 && !input.depths)
-    throw new DomainError([
-      {
-        pointer: '#/depths',
-        code: 'missing-field',
-        detail: `${placed[0]} needs depths.`,
-        accepted: 'a list of depths in m, inward from the exposed face',
-      },
-    ])
-  refuseOutside(c, input)
+  refusePlaces(c, input)
   const resolved = c.resolve(input)
   const values = countValues(c, resolved)
   const points = c.weight * values + c.setUp
-  const size = Math.max(values, resolved.times.length, resolved.depths?.length ?? 0)
+  const size = Math.max(values, resolved.times.length, countOfPlaces(resolved))
   return { values, size, points, run: () => answer(c, resolved, points, detail === 'compact') }
 }
 
-function refuseOutside(c: Case, input: Record<string, unknown> & { depths?: number[] }): void {
+const placesAccepted = {
+  depths: 'a list of depths in m, inward from the exposed face',
+  radii: 'a list of radii in m',
+  'depths-or-radii': 'exactly one of depths (m, inward from the face) and radii (m)',
+  points: 'a list of points',
+  none: 'no places',
+}
+
+/** Places that are missing, given in two ways, or outside the body. */
+function refusePlaces(c: Case, input: Read): void {
+  const names = placeFields[c.places]
+  const given = names.filter((name) => input[name] !== undefined)
+  const accepted = placesAccepted[c.places]
+  if (given.length > 1) {
+    const detail = 'The places are given twice: by depths and by radii.'
+    throw new DomainError([{ pointer: '#/radii', code: 'conflicting-fields', detail, accepted }])
+  }
+  const placed = input.outputs.find((name) => ['grid', 'places'].includes(answeredShape(c, name)))
+  if (placed && given.length === 0) {
+    const detail = `${placed} needs ${names.join(' or ')}.`
+    throw new DomainError([{ pointer: `#/${names[0]}`, code: 'missing-field', detail, accepted }])
+  }
+  refuseOutside(c, input)
+}
+
+function refuseOutside(c: Case, input: Read): void {
   const end = c.depthsEndAt && input[c.depthsEndAt]
   if (typeof end !== 'number') return
-  const issues = (input.depths ?? []).flatMap((depth, j) => {
-    if (depth <= end) return []
-    const detail = `The body ends at ${end} m; this depth is ${depth} m.`
-    return [{ pointer: `#/depths/${j}`, code: 'depth-outside-body' as const, detail, accepted: `0 to ${end} m` }]
-  })
+  const issues = (['depths', 'radii'] as const).flatMap((name) =>
+    (input[name] ?? []).flatMap((place, j) => {
+      if (place <= end) return []
+      const detail = `The body ends at ${end} m; this ${name === 'depths' ? 'depth' : 'radius'} is ${place} m.`
+      return [{ pointer: `#/${name}/${j}`, code: 'depth-outside-body' as const, detail, accepted: `0 to ${end} m` }]
+    }),
+  )
   if (issues.length > 0) throw new DomainError(issues)
 }
 
 function countValues(c: Case, input: Resolved): number {
-  const places = input.depths?.length ?? 0
+  const places = countOfPlaces(input)
   const counts: Record<Shape, number> = {
     grid: input.times.length * places,
     times: input.times.length,
@@ -94,8 +111,9 @@ function answer(c: Case, input: Resolved, points: number, compact: boolean) {
   const echoed = c.echo?.(input) ?? { ...input }
   const warnings: Warning[] = [...c.warnings(input), ...unusualValues(c, echoed)]
   if (compact) return { result, accuracy: { bound }, warnings: warnings.map((w) => w.code) }
+  const given = placeFields[c.places].filter((name) => input[name] !== undefined)
   units['times'] = 's'
-  if (input.depths) units['depths'] = 'm'
+  for (const name of given) units[name] = 'm'
   return {
     case: c.id,
     operation: 'solve',
@@ -106,7 +124,7 @@ function answer(c: Case, input: Resolved, points: number, compact: boolean) {
         .filter(([, v]) => v !== undefined)
         .map(([k, v]) => [k, shortened(v)]),
     ),
-    axes: { times: input.times, ...(input.depths ? { depths: input.depths } : {}) },
+    axes: { times: input.times, ...Object.fromEntries(given.map((name) => [name, input[name]])) },
     units,
     result,
     accuracy: {

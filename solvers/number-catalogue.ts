@@ -1,0 +1,45 @@
+/** What `numbers` of an answer may hold: beside each name its unit and what it says. Series follow the times or the places. */
+export const numberCatalogue = {
+  biot: { unit: '1', series: false, text: 'Biot number hL/k.' },
+  fourier: { unit: '1', series: true, text: 'Fourier number at/L², one a time.' },
+  length: { unit: 'm', series: false, text: 'The length L that the Biot and Fourier numbers were made with.' },
+  penetrationDepth: {
+    unit: 'm',
+    series: false,
+    text: 'Depth that 1 % of a surface step has reached at the last time.',
+  },
+  slowestTimeConstant: {
+    unit: 's',
+    series: false,
+    text: 'Time in which the slowest part of the change falls to 1/e: L²/(z₁²a).',
+  },
+  lagTime: {
+    unit: 's',
+    series: false,
+    text: 'Time after which the centre follows the slowest part alone: where its straight line crosses the start.',
+  },
+  fValue: {
+    unit: 's',
+    series: false,
+    text: 'Time in which the remaining difference falls to a tenth: ln(10)·L²/(z₁²a).',
+  },
+  jValue: { unit: '1', series: true, text: 'Lag factor of each place: C₁ times the first eigenfunction there.' },
+  validUntil: {
+    unit: 's',
+    series: false,
+    text: 'Time until which a body of the given thickness follows this case to 1 %.',
+  },
+  validFrom: { unit: 's', series: false, text: 'Time from which one term of the series is right to 1 %.' },
+  driftRate: {
+    unit: 'K/s',
+    series: false,
+    text: 'Rate at which the mean goes on changing where there is no steady state.',
+  },
+  cyclesToSettle: {
+    unit: '1',
+    series: false,
+    text: 'Whole cycles after which a start at the mean has settled to 1 % of the amplitude.',
+  },
+} as const satisfies Record<string, { unit: string; series: boolean; text: string }>
+
+export type NumberName = keyof typeof numberCatalogue
