@@ -1,5 +1,5 @@
 import { type Estimate, EPS } from './rounding.ts'
-import type { SlabBody, SlabMoment } from './slab-body.ts'
+import type { FilmedBody, Moment, UnitBody } from './unit-body.ts'
 import { completedByImages, fluxByImages, heatByImages, remainingByImages, steepestFlux } from './slab-images.ts'
 import { SlabSeries, termsAt } from './slab-series.ts'
 
@@ -8,18 +8,18 @@ const SERIES_FROM = 0.004
 const IMAGES_TO = 0.06
 
 /** A slab after a unit step of the fluid at its exposed face, over the whole domain of Bi, Fo and depth. */
-export class SlabFilm {
+export class SlabFilm implements UnitBody {
   readonly series: SlabSeries
-  private readonly body: SlabBody
+  private readonly body: FilmedBody
 
   /** `shortest` is the smallest Fourier number that will be asked for. */
-  constructor(body: SlabBody, shortest: number) {
+  constructor(body: FilmedBody, shortest: number) {
     this.body = body
     this.series = new SlabSeries(body, Math.max(shortest, SERIES_FROM))
   }
 
   /** θ at place j, 1 at the start. */
-  remaining(j: number, m: SlabMoment): Estimate {
+  remaining(j: number, m: Moment): Estimate {
     const found = choose(
       m,
       () => remainingByImages(this.body, j, m),
@@ -29,7 +29,7 @@ export class SlabFilm {
   }
 
   /** 1 − θ at place j, without cancellation. */
-  completed(j: number, m: SlabMoment): Estimate {
+  completed(j: number, m: Moment): Estimate {
     const found = choose(
       m,
       () => completedByImages(this.body, j, m),
@@ -39,7 +39,7 @@ export class SlabFilm {
   }
 
   /** q/(h·ΔT) at place j, positive away from the face. */
-  flux(j: number, m: SlabMoment): Estimate {
+  flux(j: number, m: Moment): Estimate {
     return choose(
       m,
       () => fluxByImages(this.body, j, m),
@@ -48,7 +48,7 @@ export class SlabFilm {
   }
 
   /** Share of the heat that the body takes up in all. */
-  heatFraction(m: SlabMoment): Estimate {
+  heatFraction(m: Moment): Estimate {
     return choose(
       m,
       () => heatByImages(this.body, m),
@@ -57,14 +57,14 @@ export class SlabFilm {
   }
 
   /** Mean of θ; 1 − heatFraction without its cancellation at late times. */
-  meanRemaining(m: SlabMoment): Estimate {
+  meanRemaining(m: Moment): Estimate {
     if (m.fourier >= IMAGES_TO) return this.series.meanRemaining(m)
     const heat = this.heatFraction(m)
     return { ...heat, value: 1 - heat.value, error: heat.error + EPS }
   }
 
   /** Adds what the rounding of the depth itself moves: |∂θ/∂δ| is Bi times the flux, which falls with the depth. */
-  private shifted(found: Estimate, j: number, m: SlabMoment): Estimate {
+  private shifted(found: Estimate, j: number, m: Moment): Estimate {
     const shift = EPS * this.body.shifts[j]!
     if (shift === 0) return found
     const flux = m.fourier < SERIES_FROM ? steepestFlux(this.body, j, m) : Math.abs(this.flux(j, m).value) * 1.01
@@ -72,12 +72,12 @@ export class SlabFilm {
   }
 
   /** Terms of the series at this time; 0 where only the images are asked. */
-  terms(m: SlabMoment): number {
+  terms(m: Moment): number {
     return m.fourier < SERIES_FROM ? 0 : termsAt(m.fourier)
   }
 }
 
-function choose(m: SlabMoment, images: () => Estimate, series: () => Estimate): Estimate {
+function choose(m: Moment, images: () => Estimate, series: () => Estimate): Estimate {
   if (m.fourier < SERIES_FROM) return images()
   if (m.fourier > IMAGES_TO) return series()
   const a = images()

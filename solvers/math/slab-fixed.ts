@@ -3,7 +3,7 @@ import erfcx from '@stdlib/math-base-special-erfcx'
 import { gauss } from './gauss.ts'
 import { ierfcx } from './ierfcx.ts'
 import { type Estimate, EPS, TINY } from './rounding.ts'
-import type { SlabBody, SlabMoment } from './slab-body.ts'
+import type { Moment, UnitBody, UnitPlaces } from './unit-body.ts'
 
 /*
  * A slab of length 1 whose exposed face is stepped in temperature, the far plane passing no heat.
@@ -22,13 +22,13 @@ const DECAY = 50
 const SQRT_PI = 1.772453850905516
 const FAR = 27.5
 
-export class SlabFixed {
-  private readonly body: Omit<SlabBody, 'biot'>
-  constructor(body: Omit<SlabBody, 'biot'>) {
+export class SlabFixed implements UnitBody {
+  private readonly body: UnitPlaces
+  constructor(body: UnitPlaces) {
     this.body = body
   }
 
-  remaining(j: number, m: SlabMoment): Estimate {
+  remaining(j: number, m: Moment): Estimate {
     const delta = this.body.deltas[j]!
     if (m.fourier > SWITCH)
       return this.series(
@@ -48,7 +48,7 @@ export class SlabFixed {
     }
   }
 
-  completed(j: number, m: SlabMoment): Estimate {
+  completed(j: number, m: Moment): Estimate {
     if (m.fourier > SWITCH) {
       const left = this.remaining(j, m)
       return { ...left, value: 1 - left.value, error: left.error + EPS }
@@ -63,7 +63,7 @@ export class SlabFixed {
   }
 
   /** q·L/(k·ΔT), positive away from the face. */
-  flux(j: number, m: SlabMoment): Estimate {
+  flux(j: number, m: Moment): Estimate {
     const { deltas, inner, shifts } = this.body
     const delta = deltas[j]!
     if (m.fourier > SWITCH) {
@@ -86,7 +86,7 @@ export class SlabFixed {
     return { value: inner[j] === 0 ? 0 : scale * value, error: scale * (error + shift) + TINY, method: 'two-image' }
   }
 
-  heatFraction(m: SlabMoment): Estimate {
+  heatFraction(m: Moment): Estimate {
     if (m.fourier > SWITCH) {
       const left = this.meanRemaining(m)
       return { ...left, value: 1 - left.value, error: left.error + EPS }
@@ -96,7 +96,7 @@ export class SlabFixed {
     return { value, error: value * (24 * EPS + Math.exp(-4 / m.fourier)) + TINY, method: 'two-image' }
   }
 
-  meanRemaining(m: SlabMoment): Estimate {
+  meanRemaining(m: Moment): Estimate {
     if (m.fourier > SWITCH)
       return this.series(
         m,
@@ -108,22 +108,22 @@ export class SlabFixed {
     return { ...heat, value: 1 - heat.value, error: heat.error + EPS }
   }
 
-  terms(m: SlabMoment): number {
+  terms(m: Moment): number {
     return m.fourier > SWITCH ? termsAt(m.fourier) : 0
   }
 
   /** η at the nearest place within the rounding of a depth that is reckoned from the far face, where slopes are steepest. */
-  private nearest(j: number, m: SlabMoment): number {
+  private nearest(j: number, m: Moment): number {
     return Math.max(0, this.body.deltas[j]! - EPS * this.body.shifts[j]!) / (2 * m.root)
   }
 
-  private etas(j: number, m: SlabMoment): { near: number; far: number } {
+  private etas(j: number, m: Moment): { near: number; far: number } {
     return { near: this.body.deltas[j]! / (2 * m.root), far: (1 + this.body.inner[j]!) / (2 * m.root) }
   }
 
   /** Σ size(z)·e^(−z²Fo), with what each term may be off beside its decay, and the most that its size may be. */
   private series(
-    m: SlabMoment,
+    m: Moment,
     size: (z: number) => number,
     slackOf: (z: number) => number,
     most: (z: number) => number,
@@ -159,7 +159,7 @@ const decayOf = (eta: number) => (eta > FAR ? 0 : Math.exp(-eta * eta))
 const erfcOf = (eta: number) => decayOf(eta) * erfcx(eta)
 const errorOf = (eta: number) => EPS * (24 + 17 * Math.min(eta, FAR) ** 2)
 /** |∂erfc/∂δ|. */
-const slopeOf = (near: number, m: SlabMoment) => decayOf(near) / (SQRT_PI * m.root)
+const slopeOf = (near: number, m: Moment) => decayOf(near) / (SQRT_PI * m.root)
 
 function termsAt(fourier: number): number {
   return 2 + Math.floor(Math.sqrt(DECAY / fourier + 2.4674011002723395) / Math.PI)

@@ -10,7 +10,7 @@ import {
 } from './convective-half-space.ts'
 import { ierfcx } from './ierfcx.ts'
 import { type Estimate, EPS, TINY } from './rounding.ts'
-import type { SlabBody, SlabMoment } from './slab-body.ts'
+import type { FilmedBody, Moment } from './unit-body.ts'
 
 /*
  * A slab behind a film at short times: two half spaces, at δ and at its mirror image 2 − δ. Both reflections beyond
@@ -26,7 +26,7 @@ interface Arguments {
   truncation: number
 }
 
-function argumentsAt({ biot, deltas, inner }: SlabBody, j: number, m: SlabMoment): Arguments {
+function argumentsAt({ biot, deltas, inner }: FilmedBody, j: number, m: Moment): Arguments {
   return {
     near: deltas[j]! / (2 * m.root),
     far: (1 + inner[j]!) / (2 * m.root),
@@ -35,7 +35,7 @@ function argumentsAt({ biot, deltas, inner }: SlabBody, j: number, m: SlabMoment
   }
 }
 
-export function completedByImages(body: SlabBody, j: number, m: SlabMoment): Estimate {
+export function completedByImages(body: FilmedBody, j: number, m: Moment): Estimate {
   const { near, far, beta, truncation } = argumentsAt(body, j, m)
   const a = completed(near, beta)
   const b = completed(far, beta)
@@ -44,7 +44,7 @@ export function completedByImages(body: SlabBody, j: number, m: SlabMoment): Est
   return { value, error, method: 'two-image' }
 }
 
-export function remainingByImages(body: SlabBody, j: number, m: SlabMoment): Estimate {
+export function remainingByImages(body: FilmedBody, j: number, m: Moment): Estimate {
   const { near, far, beta, truncation } = argumentsAt(body, j, m)
   const a = remaining(near, beta)
   const b = completed(far, beta)
@@ -54,7 +54,7 @@ export function remainingByImages(body: SlabBody, j: number, m: SlabMoment): Est
 }
 
 /** q/(h·ΔT). Of flux the neglected reflection is at most four times what it is of the response. */
-export function fluxByImages(body: SlabBody, j: number, m: SlabMoment): Estimate {
+export function fluxByImages(body: FilmedBody, j: number, m: Moment): Estimate {
   const { near, far, beta, truncation } = argumentsAt(body, j, m)
   const a = fluxFraction(near, beta)
   const b = fluxFraction(far, beta)
@@ -64,20 +64,20 @@ export function fluxByImages(body: SlabBody, j: number, m: SlabMoment): Estimate
 }
 
 /** The largest flux within the rounding of a depth that is reckoned from the far face. */
-export function steepestFlux(body: SlabBody, j: number, m: SlabMoment): number {
+export function steepestFlux(body: FilmedBody, j: number, m: Moment): number {
   const nearest = Math.max(0, body.deltas[j]! - EPS * body.shifts[j]!)
   return fluxFraction(nearest / (2 * m.root), body.biot * m.root) * 1.01
 }
 
 /** What that rounding moves the flux by: its slope, or all of it where the rounding is not small against the depth reached. */
-function fluxShift(body: SlabBody, j: number, m: SlabMoment, at: { near: number; beta: number; a: number }): number {
+function fluxShift(body: FilmedBody, j: number, m: Moment, at: { near: number; beta: number; a: number }): number {
   const shift = EPS * body.shifts[j]!
   if (shift > 0.05 * m.root) return steepestFlux(body, j, m)
   const decay = at.near > 27.5 ? 0 : Math.exp(-at.near * at.near)
   return (1.2 * shift * (at.near * at.a + decay * ierfcx(at.near + at.beta))) / m.root
 }
 
-export function heatByImages({ biot }: SlabBody, m: SlabMoment): Estimate {
+export function heatByImages({ biot }: FilmedBody, m: Moment): Estimate {
   const value = Math.min(1, biot * m.fourier * energyFraction(biot * m.root))
   const error = value * (ENERGY_ERROR + 14 * EPS + 2 * Math.exp(-1 / m.fourier)) + TINY
   return { value, error, method: 'two-image' }

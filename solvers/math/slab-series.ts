@@ -1,5 +1,5 @@
 import { type Estimate, EPS, TINY } from './rounding.ts'
-import type { SlabBody, SlabMoment } from './slab-body.ts'
+import type { FilmedBody, Moment } from './unit-body.ts'
 import { slabEigenvalues } from './slab-eigenvalues.ts'
 import { oneMinusFirst, oneMinusFirstMean } from './slab-first-term.ts'
 
@@ -19,13 +19,13 @@ const DECAY = 50
  */
 export class SlabSeries {
   readonly weights: Float64Array
-  private readonly body: SlabBody
+  private readonly body: FilmedBody
   private readonly roots: Float64Array
   private readonly cosines: Float64Array[]
   private readonly sines: Float64Array[]
 
   /** `shortest` is the smallest Fourier number to be asked for; it decides how many roots are found. */
-  constructor(body: SlabBody, shortest: number) {
+  constructor(body: FilmedBody, shortest: number) {
     const { biot: B, deltas } = body
     this.body = body
     this.roots = slabEigenvalues(B, termsAt(shortest) + 1)
@@ -34,12 +34,12 @@ export class SlabSeries {
     this.sines = Array.from(deltas, (d) => this.roots.map((z) => Math.sin(z * d)))
   }
 
-  remaining(j: number, m: SlabMoment): Estimate {
+  remaining(j: number, m: Moment): Estimate {
     const { value, error } = this.sum(j, m, 0)
     return { value: Math.min(1, Math.max(0, value)), error, method: 'eigen-series' }
   }
 
-  completed(j: number, m: SlabMoment): Estimate {
+  completed(j: number, m: Moment): Estimate {
     const z = this.roots[0]!
     const B = this.body.biot
     const first = this.weights[0]! * (z * this.cosines[j]![0]! + B * this.sines[j]![0]!)
@@ -51,7 +51,7 @@ export class SlabSeries {
     return { value: Math.min(1, Math.max(0, value)), error, method: 'eigen-series' }
   }
 
-  heatFraction(m: SlabMoment): Estimate {
+  heatFraction(m: Moment): Estimate {
     const z = this.roots[0]!
     const first = (this.weights[0]! * this.body.biot) / z
     const done = -Math.expm1(-z * z * m.fourier)
@@ -62,12 +62,12 @@ export class SlabSeries {
     return { value: Math.min(1, Math.max(0, value)), error, method: 'eigen-series' }
   }
 
-  meanRemaining(m: SlabMoment): Estimate {
+  meanRemaining(m: Moment): Estimate {
     const { value, error } = this.meanSum(m, 0)
     return { value: Math.min(1, value), error, method: 'eigen-series' }
   }
 
-  flux(j: number, m: SlabMoment): Estimate {
+  flux(j: number, m: Moment): Estimate {
     const B = this.body.biot
     const delta = this.body.deltas[j]!
     const shift = this.body.shifts[j]!
@@ -94,7 +94,7 @@ export class SlabSeries {
   }
 
   /** Σ from term `first` on, of θ and of how far rounding and inputs may move it. */
-  private sum(j: number, m: SlabMoment, first: number): { value: number; error: number } {
+  private sum(j: number, m: Moment, first: number): { value: number; error: number } {
     const B = this.body.biot
     const delta = this.body.deltas[j]!
     const { roots, weights } = this
@@ -119,14 +119,14 @@ export class SlabSeries {
   }
 
   /** Bound on what the terms from `count` on add, by the geometric series of the first two. */
-  private tail(j: number, m: SlabMoment, count: number): number {
+  private tail(j: number, m: Moment, count: number): number {
     const z = this.roots[count]!
     const size = this.weights[count]! * (z + this.body.biot * Math.min(1, z * this.body.deltas[j]!))
     return (size * Math.exp(-z * z * m.fourier)) / -Math.expm1(-Math.PI * z * m.fourier)
   }
 
   /** Weights of the mean: 2Bi²/(z²(z² + Bi² + Bi)) = wₙ·Bi/zₙ. */
-  private meanSum(m: SlabMoment, first: number): { value: number; error: number } {
+  private meanSum(m: Moment, first: number): { value: number; error: number } {
     const B = this.body.biot
     const count = Math.min(termsAt(m.fourier), this.roots.length - 1)
     let value = 0

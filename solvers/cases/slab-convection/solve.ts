@@ -1,6 +1,7 @@
+import { momentsOf, shortestOf } from '../../body-step.ts'
 import { SlabFilm } from '../../math/slab-film.ts'
+import { characteristicLength, slabPlaces, type SlabStepInput, solveSlab } from '../../slab-step.ts'
 import type { Solution } from '../../solution.ts'
-import { characteristicLength, slabMoments, slabPlaces, type SlabStepInput, solveSlab } from '../../slab-step.ts'
 import { stepOutputs, untouched } from '../../step-response.ts'
 
 export interface SlabInput extends SlabStepInput {
@@ -27,9 +28,8 @@ export function solve(input: SlabInput): Solution {
   const step = { times, places: depths.length, outputs, initial: initialTemperature, drive: ambientTemperature }
   if (h === 0)
     return { ...stepOutputs(step, untouched), terms: 0, scale: Math.abs(ambientTemperature - initialTemperature) }
-  const biot = (h * characteristicLength(input)) / input.conductivity
-  const moments = slabMoments(input)
-  const shortest = moments.reduce((least, m) => Math.min(least, m.fourier), Infinity)
-  const unit = new SlabFilm({ biot, ...slabPlaces(input) }, shortest)
+  const length = characteristicLength(input)
+  const moments = momentsOf(input, length)
+  const unit = new SlabFilm({ biot: (h * length) / input.conductivity, ...slabPlaces(input) }, shortestOf(moments))
   return solveSlab(input, unit, moments, { temperature: ambientTemperature, fluxUnit: h, fluxAtStart: 1 })
 }

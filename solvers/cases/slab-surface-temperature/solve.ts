@@ -1,6 +1,7 @@
+import { momentsOf } from '../../body-step.ts'
 import { SlabFixed } from '../../math/slab-fixed.ts'
+import { characteristicLength, slabPlaces, type SlabStepInput, solveSlab } from '../../slab-step.ts'
 import type { Solution } from '../../solution.ts'
-import { characteristicLength, slabMoments, slabPlaces, type SlabStepInput, solveSlab } from '../../slab-step.ts'
 
 export interface SlabInput extends SlabStepInput {
   surfaceTemperature: number
@@ -20,7 +21,7 @@ export interface SlabInput extends SlabStepInput {
  * Source    H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, §3.3 and §3.4.
  */
 export function solve(input: SlabInput): Solution {
-  const fluxUnit = input.conductivity / characteristicLength(input)
-  const unit = new SlabFixed(slabPlaces(input))
-  return solveSlab(input, unit, slabMoments(input), { temperature: input.surfaceTemperature, fluxUnit, fluxAtStart: 0 })
+  const length = characteristicLength(input)
+  const drive = { temperature: input.surfaceTemperature, fluxUnit: input.conductivity / length, fluxAtStart: 0 }
+  return solveSlab(input, new SlabFixed(slabPlaces(input)), momentsOf(input, length), drive)
 }
