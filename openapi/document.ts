@@ -118,7 +118,25 @@ export function documentOf(name: DocumentName, operations: readonly Operation[],
     'x-warnings': warningCodes,
     'x-cautions': cautions,
   }
-  return { ...document, ...(name === 'openapi' ? codes : {}) }
+  return { ...sharedFailures(document as unknown as Json), ...(name === 'openapi' ? codes : {}) }
+}
+
+type Responses = Record<string, Json>
+type Paths = Record<string, Record<string, { responses: Responses }>>
+
+/** The same failures are met by most operations: each set stands once, by the codes it holds, and is referred to. */
+function sharedFailures(document: Json): Json {
+  const shared: Responses = {}
+  const paths = document['paths'] as Paths
+  for (const { responses } of Object.values(paths).flatMap((methods) => Object.values(methods)))
+    for (const [status, response] of Object.entries(responses)) {
+      if (Number(status) < 400) continue
+      const { 'x-codes': codes, ...rest } = response
+      const name = (codes as string[]).join('.')
+      shared[name] = rest
+      responses[status] = { $ref: `#/components/responses/${name}` }
+    }
+  return { ...document, components: { ...(document['components'] as Json), responses: shared } }
 }
 
 const header = (description: string, type: 'string' | 'integer' = 'string') => ({ description, schema: { type } })
@@ -216,6 +234,7 @@ function failures(codes: readonly ProblemCode[]): RouteConfig['responses'] {
       return [
         status,
         {
+          'x-codes': list,
           description: list.map((code) => `${problems[code].title} (${code}).`).join(' '),
           headers: referHeaders('Request-Id', ...extra),
           content: { 'application/problem+json': { schema: narrowed } },

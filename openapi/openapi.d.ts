@@ -366,8 +366,13 @@ export interface components {
             /** @description The formula in TeX, one entry a line. */
             formula: string[];
             sources: string[];
-            /** @enum {string} */
-            places: "depths" | "none";
+            /**
+             * @description The fields in which places are given.
+             * @enum {string}
+             */
+            places: "depths" | "radii" | "depths-or-radii" | "points" | "none";
+            /** @description The coordinates of a point; empty where places are no points. */
+            pointAxes: string[];
             /** @description The field that says where the body ends; null where it has no end. */
             depthsEndAt: string | null;
             /** @description The field with the temperature that the body is driven to. */
@@ -474,34 +479,13 @@ export interface components {
                 /** @description The temperature scale of the case, K. */
                 scale: number;
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    steadyTemperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    timeConstant?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
+                    heatFraction?: components["schemas"]["Bound"];
+                    steadyTemperature?: components["schemas"]["Bound"];
+                    timeConstant?: components["schemas"]["Bound"];
                 };
                 /**
                  * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
@@ -512,30 +496,59 @@ export interface components {
                 scope: "numerical";
                 note: string;
             };
-            numbers: {
-                biot?: number;
-                fourier?: number[];
-                length?: number;
-                penetrationDepth?: number;
-            };
-            checks: {
-                id: string;
-                holds: boolean;
-                value: number;
-                limit: number;
-                text: string;
-            }[];
-            warnings: {
-                code: string;
-                text: string;
-                value: number;
-            }[];
-            cautions: {
-                id: string;
-                version: number;
-                text: string;
-            }[];
+            numbers: components["schemas"]["Numbers"];
+            checks: components["schemas"]["Check"][];
+            warnings: components["schemas"]["Warning"][];
+            cautions: components["schemas"]["Caution"][];
             sources: string[];
+        };
+        /** @description A value errs by at most absolute + relative · |value|. */
+        Bound: {
+            absolute: number;
+            relative: number;
+        };
+        Numbers: {
+            /** @description Biot number hL/k. Unit 1. */
+            biot?: number;
+            /** @description Fourier number at/L², one a time. Unit 1. */
+            fourier?: number[];
+            /** @description The length L that the Biot and Fourier numbers were made with. Unit m. */
+            length?: number;
+            /** @description Depth that 1 % of a surface step has reached at the last time. Unit m. */
+            penetrationDepth?: number;
+            /** @description Time in which the slowest part of the change falls to 1/e: L²/(z₁²a). Unit s. */
+            slowestTimeConstant?: number;
+            /** @description Time after which the centre follows the slowest part alone: where its straight line crosses the start. Unit s. */
+            lagTime?: number;
+            /** @description Time in which the remaining difference falls to a tenth: ln(10)·L²/(z₁²a). Unit s. */
+            fValue?: number;
+            /** @description Lag factor of each place: C₁ times the first eigenfunction there. Unit 1. */
+            jValue?: number[];
+            /** @description Time until which a body of the given thickness follows this case to 1 %. Unit s. */
+            validUntil?: number;
+            /** @description Time from which one term of the series is right to 1 %. Unit s. */
+            validFrom?: number;
+            /** @description Rate at which the mean goes on changing where there is no steady state. Unit K/s. */
+            driftRate?: number;
+            /** @description Whole cycles after which a start at the mean has settled to 1 % of the amplitude. Unit 1. */
+            cyclesToSettle?: number;
+        };
+        Check: {
+            id: string;
+            holds: boolean;
+            value: number;
+            limit: number;
+            text: string;
+        };
+        Warning: {
+            code: string;
+            text: string;
+            value: number;
+        };
+        Caution: {
+            id: string;
+            version: number;
+            text: string;
         };
         LumpedConvectionSolveCompactAnswer: {
             result: {
@@ -556,34 +569,13 @@ export interface components {
             };
             accuracy: {
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    steadyTemperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    timeConstant?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
+                    heatFraction?: components["schemas"]["Bound"];
+                    steadyTemperature?: components["schemas"]["Bound"];
+                    timeConstant?: components["schemas"]["Bound"];
                 };
             };
             warnings: string[];
@@ -698,30 +690,12 @@ export interface components {
                 /** @description The temperature scale of the case, K. */
                 scale: number;
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    surfaceHeatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatFlux?: components["schemas"]["Bound"];
+                    surfaceHeatFlux?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
                 };
                 /**
                  * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
@@ -732,29 +706,10 @@ export interface components {
                 scope: "numerical";
                 note: string;
             };
-            numbers: {
-                biot?: number;
-                fourier?: number[];
-                length?: number;
-                penetrationDepth?: number;
-            };
-            checks: {
-                id: string;
-                holds: boolean;
-                value: number;
-                limit: number;
-                text: string;
-            }[];
-            warnings: {
-                code: string;
-                text: string;
-                value: number;
-            }[];
-            cautions: {
-                id: string;
-                version: number;
-                text: string;
-            }[];
+            numbers: components["schemas"]["Numbers"];
+            checks: components["schemas"]["Check"][];
+            warnings: components["schemas"]["Warning"][];
+            cautions: components["schemas"]["Caution"][];
             sources: string[];
         };
         SemiInfiniteConvectionSolveCompactAnswer: {
@@ -774,30 +729,12 @@ export interface components {
             };
             accuracy: {
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    surfaceHeatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatFlux?: components["schemas"]["Bound"];
+                    surfaceHeatFlux?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
                 };
             };
             warnings: string[];
@@ -896,30 +833,12 @@ export interface components {
                 /** @description The temperature scale of the case, K. */
                 scale: number;
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    surfaceHeatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatFlux?: components["schemas"]["Bound"];
+                    surfaceHeatFlux?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
                 };
                 /**
                  * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
@@ -930,29 +849,10 @@ export interface components {
                 scope: "numerical";
                 note: string;
             };
-            numbers: {
-                biot?: number;
-                fourier?: number[];
-                length?: number;
-                penetrationDepth?: number;
-            };
-            checks: {
-                id: string;
-                holds: boolean;
-                value: number;
-                limit: number;
-                text: string;
-            }[];
-            warnings: {
-                code: string;
-                text: string;
-                value: number;
-            }[];
-            cautions: {
-                id: string;
-                version: number;
-                text: string;
-            }[];
+            numbers: components["schemas"]["Numbers"];
+            checks: components["schemas"]["Check"][];
+            warnings: components["schemas"]["Warning"][];
+            cautions: components["schemas"]["Caution"][];
             sources: string[];
         };
         SemiInfiniteSurfaceTemperatureSolveCompactAnswer: {
@@ -972,30 +872,12 @@ export interface components {
             };
             accuracy: {
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    surfaceHeatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatFlux?: components["schemas"]["Bound"];
+                    surfaceHeatFlux?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
                 };
             };
             warnings: string[];
@@ -1094,38 +976,14 @@ export interface components {
                 /** @description The temperature scale of the case, K. */
                 scale: number;
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    surfaceHeatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    meanTemperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatFlux?: components["schemas"]["Bound"];
+                    surfaceHeatFlux?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    meanTemperature?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
+                    heatFraction?: components["schemas"]["Bound"];
                 };
                 /**
                  * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
@@ -1136,29 +994,10 @@ export interface components {
                 scope: "numerical";
                 note: string;
             };
-            numbers: {
-                biot?: number;
-                fourier?: number[];
-                length?: number;
-                penetrationDepth?: number;
-            };
-            checks: {
-                id: string;
-                holds: boolean;
-                value: number;
-                limit: number;
-                text: string;
-            }[];
-            warnings: {
-                code: string;
-                text: string;
-                value: number;
-            }[];
-            cautions: {
-                id: string;
-                version: number;
-                text: string;
-            }[];
+            numbers: components["schemas"]["Numbers"];
+            checks: components["schemas"]["Check"][];
+            warnings: components["schemas"]["Warning"][];
+            cautions: components["schemas"]["Caution"][];
             sources: string[];
         };
         SlabConvectionSolveCompactAnswer: {
@@ -1182,38 +1021,14 @@ export interface components {
             };
             accuracy: {
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    surfaceHeatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    meanTemperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatFlux?: components["schemas"]["Bound"];
+                    surfaceHeatFlux?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    meanTemperature?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
+                    heatFraction?: components["schemas"]["Bound"];
                 };
             };
             warnings: string[];
@@ -1321,38 +1136,14 @@ export interface components {
                 /** @description The temperature scale of the case, K. */
                 scale: number;
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    surfaceHeatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    meanTemperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatFlux?: components["schemas"]["Bound"];
+                    surfaceHeatFlux?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    meanTemperature?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
+                    heatFraction?: components["schemas"]["Bound"];
                 };
                 /**
                  * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
@@ -1363,29 +1154,10 @@ export interface components {
                 scope: "numerical";
                 note: string;
             };
-            numbers: {
-                biot?: number;
-                fourier?: number[];
-                length?: number;
-                penetrationDepth?: number;
-            };
-            checks: {
-                id: string;
-                holds: boolean;
-                value: number;
-                limit: number;
-                text: string;
-            }[];
-            warnings: {
-                code: string;
-                text: string;
-                value: number;
-            }[];
-            cautions: {
-                id: string;
-                version: number;
-                text: string;
-            }[];
+            numbers: components["schemas"]["Numbers"];
+            checks: components["schemas"]["Check"][];
+            warnings: components["schemas"]["Warning"][];
+            cautions: components["schemas"]["Caution"][];
             sources: string[];
         };
         SlabSurfaceTemperatureSolveCompactAnswer: {
@@ -1409,38 +1181,14 @@ export interface components {
             };
             accuracy: {
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    surfaceHeatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    meanTemperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatFlux?: components["schemas"]["Bound"];
+                    surfaceHeatFlux?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    meanTemperature?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
+                    heatFraction?: components["schemas"]["Bound"];
                 };
             };
             warnings: string[];
@@ -1597,7 +1345,234 @@ export interface components {
             status: "ready";
         };
     };
-    responses: never;
+    responses: {
+        /** @description The request cannot be read (malformed-request). */
+        "malformed-request": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "malformed-request";
+                };
+            };
+        };
+        /** @description The method does not apply (method-not-allowed). */
+        "method-not-allowed": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                Allow: components["headers"]["Allow"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "method-not-allowed";
+                };
+            };
+        };
+        /** @description No acceptable form of answer (not-acceptable). */
+        "not-acceptable": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "not-acceptable";
+                };
+            };
+        };
+        /** @description The request came too slowly (request-timeout). */
+        "request-timeout": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "request-timeout";
+                };
+            };
+        };
+        /** @description The expectation cannot be met (expectation-failed). */
+        "expectation-failed": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "expectation-failed";
+                };
+            };
+        };
+        /** @description A parameter is refused (invalid-parameter). */
+        "invalid-parameter": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "invalid-parameter";
+                };
+            };
+        };
+        /** @description The headers are too large (header-too-large). */
+        "header-too-large": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "header-too-large";
+                };
+            };
+        };
+        /** @description A fault of ours (internal). */
+        internal: {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "internal";
+                };
+            };
+        };
+        /** @description The service is not ready (unavailable). */
+        unavailable: {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                "Retry-After": components["headers"]["Retry-After"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "unavailable";
+                };
+            };
+        };
+        /** @description There is nothing here (not-found). */
+        "not-found": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "not-found";
+                };
+            };
+        };
+        /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
+        "duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
+                };
+            };
+        };
+        /** @description A key is needed (key-missing). The key is not valid (key-unknown). */
+        "key-missing.key-unknown": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "key-missing" | "key-unknown";
+                };
+            };
+        };
+        /** @description The body is too large (body-too-large). Too much for one call (too-many-points). */
+        "body-too-large.too-many-points": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "body-too-large" | "too-many-points";
+                };
+            };
+        };
+        /** @description The body is of another kind (unsupported-media-type). */
+        "unsupported-media-type": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "unsupported-media-type";
+                };
+            };
+        };
+        /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
+        "invalid-input.invalid-parameter": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "invalid-input" | "invalid-parameter";
+                };
+            };
+        };
+        /** @description The points of this period are used up (quota-exceeded). */
+        "quota-exceeded": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                "Points-Remaining": components["headers"]["Points-Remaining"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "quota-exceeded";
+                };
+            };
+        };
+        /** @description The solve took too long (solve-too-slow). The service is not ready (unavailable). */
+        "solve-too-slow.unavailable": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                "Retry-After": components["headers"]["Retry-After"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "solve-too-slow" | "unavailable";
+                };
+            };
+        };
+    };
     parameters: never;
     requestBodies: never;
     headers: {
@@ -1649,125 +1624,15 @@ export interface operations {
                 };
                 content?: never;
             };
-            /** @description The request cannot be read (malformed-request). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "malformed-request";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["malformed-request"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     readCase: {
@@ -1805,138 +1670,16 @@ export interface operations {
                 };
                 content?: never;
             };
-            /** @description The request cannot be read (malformed-request). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "malformed-request";
-                    };
-                };
-            };
-            /** @description There is nothing here (not-found). */
-            404: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-found";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["malformed-request"];
+            404: components["responses"]["not-found"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     readContract: {
@@ -1968,125 +1711,15 @@ export interface operations {
                 };
                 content?: never;
             };
-            /** @description The request cannot be read (malformed-request). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "malformed-request";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["malformed-request"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     "solve-lumped-convection": {
@@ -2129,179 +1762,19 @@ export interface operations {
                     "application/json": components["schemas"]["LumpedConvectionSolveAnswer"] | components["schemas"]["LumpedConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
-                    };
-                };
-            };
-            /** @description A key is needed (key-missing). The key is not valid (key-unknown). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "key-missing" | "key-unknown";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The body is too large (body-too-large). Too much for one call (too-many-points). */
-            413: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "body-too-large" | "too-many-points";
-                    };
-                };
-            };
-            /** @description The body is of another kind (unsupported-media-type). */
-            415: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unsupported-media-type";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-input" | "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The points of this period are used up (quota-exceeded). */
-            429: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Points-Remaining": components["headers"]["Points-Remaining"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "quota-exceeded";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The solve took too long (solve-too-slow). The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "solve-too-slow" | "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            401: components["responses"]["key-missing.key-unknown"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            413: components["responses"]["body-too-large.too-many-points"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["quota-exceeded"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["solve-too-slow.unavailable"];
         };
     };
     "solve-semi-infinite-convection": {
@@ -2350,179 +1823,19 @@ export interface operations {
                     "application/json": components["schemas"]["SemiInfiniteConvectionSolveAnswer"] | components["schemas"]["SemiInfiniteConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
-                    };
-                };
-            };
-            /** @description A key is needed (key-missing). The key is not valid (key-unknown). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "key-missing" | "key-unknown";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The body is too large (body-too-large). Too much for one call (too-many-points). */
-            413: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "body-too-large" | "too-many-points";
-                    };
-                };
-            };
-            /** @description The body is of another kind (unsupported-media-type). */
-            415: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unsupported-media-type";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-input" | "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The points of this period are used up (quota-exceeded). */
-            429: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Points-Remaining": components["headers"]["Points-Remaining"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "quota-exceeded";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The solve took too long (solve-too-slow). The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "solve-too-slow" | "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            401: components["responses"]["key-missing.key-unknown"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            413: components["responses"]["body-too-large.too-many-points"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["quota-exceeded"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["solve-too-slow.unavailable"];
         };
     };
     "solve-semi-infinite-surface-temperature": {
@@ -2569,179 +1882,19 @@ export interface operations {
                     "application/json": components["schemas"]["SemiInfiniteSurfaceTemperatureSolveAnswer"] | components["schemas"]["SemiInfiniteSurfaceTemperatureSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
-                    };
-                };
-            };
-            /** @description A key is needed (key-missing). The key is not valid (key-unknown). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "key-missing" | "key-unknown";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The body is too large (body-too-large). Too much for one call (too-many-points). */
-            413: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "body-too-large" | "too-many-points";
-                    };
-                };
-            };
-            /** @description The body is of another kind (unsupported-media-type). */
-            415: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unsupported-media-type";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-input" | "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The points of this period are used up (quota-exceeded). */
-            429: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Points-Remaining": components["headers"]["Points-Remaining"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "quota-exceeded";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The solve took too long (solve-too-slow). The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "solve-too-slow" | "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            401: components["responses"]["key-missing.key-unknown"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            413: components["responses"]["body-too-large.too-many-points"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["quota-exceeded"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["solve-too-slow.unavailable"];
         };
     };
     "solve-slab-convection": {
@@ -2791,179 +1944,19 @@ export interface operations {
                     "application/json": components["schemas"]["SlabConvectionSolveAnswer"] | components["schemas"]["SlabConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
-                    };
-                };
-            };
-            /** @description A key is needed (key-missing). The key is not valid (key-unknown). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "key-missing" | "key-unknown";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The body is too large (body-too-large). Too much for one call (too-many-points). */
-            413: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "body-too-large" | "too-many-points";
-                    };
-                };
-            };
-            /** @description The body is of another kind (unsupported-media-type). */
-            415: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unsupported-media-type";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-input" | "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The points of this period are used up (quota-exceeded). */
-            429: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Points-Remaining": components["headers"]["Points-Remaining"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "quota-exceeded";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The solve took too long (solve-too-slow). The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "solve-too-slow" | "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            401: components["responses"]["key-missing.key-unknown"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            413: components["responses"]["body-too-large.too-many-points"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["quota-exceeded"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["solve-too-slow.unavailable"];
         };
     };
     "solve-slab-surface-temperature": {
@@ -3012,179 +2005,19 @@ export interface operations {
                     "application/json": components["schemas"]["SlabSurfaceTemperatureSolveAnswer"] | components["schemas"]["SlabSurfaceTemperatureSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
-                    };
-                };
-            };
-            /** @description A key is needed (key-missing). The key is not valid (key-unknown). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "key-missing" | "key-unknown";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The body is too large (body-too-large). Too much for one call (too-many-points). */
-            413: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "body-too-large" | "too-many-points";
-                    };
-                };
-            };
-            /** @description The body is of another kind (unsupported-media-type). */
-            415: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unsupported-media-type";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-input" | "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The points of this period are used up (quota-exceeded). */
-            429: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Points-Remaining": components["headers"]["Points-Remaining"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "quota-exceeded";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The solve took too long (solve-too-slow). The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "solve-too-slow" | "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            401: components["responses"]["key-missing.key-unknown"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            413: components["responses"]["body-too-large.too-many-points"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["quota-exceeded"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["solve-too-slow.unavailable"];
         };
     };
     readUsage: {
@@ -3223,139 +2056,16 @@ export interface operations {
                 };
                 content?: never;
             };
-            /** @description The request cannot be read (malformed-request). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "malformed-request";
-                    };
-                };
-            };
-            /** @description A key is needed (key-missing). The key is not valid (key-unknown). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "key-missing" | "key-unknown";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["malformed-request"];
+            401: components["responses"]["key-missing.key-unknown"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     readRequest: {
@@ -3393,152 +2103,17 @@ export interface operations {
                 };
                 content?: never;
             };
-            /** @description The request cannot be read (malformed-request). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "malformed-request";
-                    };
-                };
-            };
-            /** @description A key is needed (key-missing). The key is not valid (key-unknown). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "key-missing" | "key-unknown";
-                    };
-                };
-            };
-            /** @description There is nothing here (not-found). */
-            404: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-found";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["malformed-request"];
+            401: components["responses"]["key-missing.key-unknown"];
+            404: components["responses"]["not-found"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     isAlive: {
@@ -3570,125 +2145,15 @@ export interface operations {
                 };
                 content?: never;
             };
-            /** @description The request cannot be read (malformed-request). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "malformed-request";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["malformed-request"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     isReady: {
@@ -3720,125 +2185,15 @@ export interface operations {
                 };
                 content?: never;
             };
-            /** @description The request cannot be read (malformed-request). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "malformed-request";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["malformed-request"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
 }

@@ -566,34 +566,13 @@ export interface components {
                 /** @description The temperature scale of the case, K. */
                 scale: number;
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    steadyTemperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    timeConstant?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
+                    heatFraction?: components["schemas"]["Bound"];
+                    steadyTemperature?: components["schemas"]["Bound"];
+                    timeConstant?: components["schemas"]["Bound"];
                 };
                 /**
                  * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
@@ -604,30 +583,59 @@ export interface components {
                 scope: "numerical";
                 note: string;
             };
-            numbers: {
-                biot?: number;
-                fourier?: number[];
-                length?: number;
-                penetrationDepth?: number;
-            };
-            checks: {
-                id: string;
-                holds: boolean;
-                value: number;
-                limit: number;
-                text: string;
-            }[];
-            warnings: {
-                code: string;
-                text: string;
-                value: number;
-            }[];
-            cautions: {
-                id: string;
-                version: number;
-                text: string;
-            }[];
+            numbers: components["schemas"]["Numbers"];
+            checks: components["schemas"]["Check"][];
+            warnings: components["schemas"]["Warning"][];
+            cautions: components["schemas"]["Caution"][];
             sources: string[];
+        };
+        /** @description A value errs by at most absolute + relative · |value|. */
+        Bound: {
+            absolute: number;
+            relative: number;
+        };
+        Numbers: {
+            /** @description Biot number hL/k. Unit 1. */
+            biot?: number;
+            /** @description Fourier number at/L², one a time. Unit 1. */
+            fourier?: number[];
+            /** @description The length L that the Biot and Fourier numbers were made with. Unit m. */
+            length?: number;
+            /** @description Depth that 1 % of a surface step has reached at the last time. Unit m. */
+            penetrationDepth?: number;
+            /** @description Time in which the slowest part of the change falls to 1/e: L²/(z₁²a). Unit s. */
+            slowestTimeConstant?: number;
+            /** @description Time after which the centre follows the slowest part alone: where its straight line crosses the start. Unit s. */
+            lagTime?: number;
+            /** @description Time in which the remaining difference falls to a tenth: ln(10)·L²/(z₁²a). Unit s. */
+            fValue?: number;
+            /** @description Lag factor of each place: C₁ times the first eigenfunction there. Unit 1. */
+            jValue?: number[];
+            /** @description Time until which a body of the given thickness follows this case to 1 %. Unit s. */
+            validUntil?: number;
+            /** @description Time from which one term of the series is right to 1 %. Unit s. */
+            validFrom?: number;
+            /** @description Rate at which the mean goes on changing where there is no steady state. Unit K/s. */
+            driftRate?: number;
+            /** @description Whole cycles after which a start at the mean has settled to 1 % of the amplitude. Unit 1. */
+            cyclesToSettle?: number;
+        };
+        Check: {
+            id: string;
+            holds: boolean;
+            value: number;
+            limit: number;
+            text: string;
+        };
+        Warning: {
+            code: string;
+            text: string;
+            value: number;
+        };
+        Caution: {
+            id: string;
+            version: number;
+            text: string;
         };
         LumpedConvectionSolveCompactAnswer: {
             result: {
@@ -648,34 +656,13 @@ export interface components {
             };
             accuracy: {
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    steadyTemperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    timeConstant?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
+                    heatFraction?: components["schemas"]["Bound"];
+                    steadyTemperature?: components["schemas"]["Bound"];
+                    timeConstant?: components["schemas"]["Bound"];
                 };
             };
             warnings: string[];
@@ -790,30 +777,12 @@ export interface components {
                 /** @description The temperature scale of the case, K. */
                 scale: number;
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    surfaceHeatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatFlux?: components["schemas"]["Bound"];
+                    surfaceHeatFlux?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
                 };
                 /**
                  * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
@@ -824,29 +793,10 @@ export interface components {
                 scope: "numerical";
                 note: string;
             };
-            numbers: {
-                biot?: number;
-                fourier?: number[];
-                length?: number;
-                penetrationDepth?: number;
-            };
-            checks: {
-                id: string;
-                holds: boolean;
-                value: number;
-                limit: number;
-                text: string;
-            }[];
-            warnings: {
-                code: string;
-                text: string;
-                value: number;
-            }[];
-            cautions: {
-                id: string;
-                version: number;
-                text: string;
-            }[];
+            numbers: components["schemas"]["Numbers"];
+            checks: components["schemas"]["Check"][];
+            warnings: components["schemas"]["Warning"][];
+            cautions: components["schemas"]["Caution"][];
             sources: string[];
         };
         SemiInfiniteConvectionSolveCompactAnswer: {
@@ -866,30 +816,12 @@ export interface components {
             };
             accuracy: {
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    surfaceHeatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatFlux?: components["schemas"]["Bound"];
+                    surfaceHeatFlux?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
                 };
             };
             warnings: string[];
@@ -988,30 +920,12 @@ export interface components {
                 /** @description The temperature scale of the case, K. */
                 scale: number;
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    surfaceHeatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatFlux?: components["schemas"]["Bound"];
+                    surfaceHeatFlux?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
                 };
                 /**
                  * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
@@ -1022,29 +936,10 @@ export interface components {
                 scope: "numerical";
                 note: string;
             };
-            numbers: {
-                biot?: number;
-                fourier?: number[];
-                length?: number;
-                penetrationDepth?: number;
-            };
-            checks: {
-                id: string;
-                holds: boolean;
-                value: number;
-                limit: number;
-                text: string;
-            }[];
-            warnings: {
-                code: string;
-                text: string;
-                value: number;
-            }[];
-            cautions: {
-                id: string;
-                version: number;
-                text: string;
-            }[];
+            numbers: components["schemas"]["Numbers"];
+            checks: components["schemas"]["Check"][];
+            warnings: components["schemas"]["Warning"][];
+            cautions: components["schemas"]["Caution"][];
             sources: string[];
         };
         SemiInfiniteSurfaceTemperatureSolveCompactAnswer: {
@@ -1064,30 +959,12 @@ export interface components {
             };
             accuracy: {
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    surfaceHeatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatFlux?: components["schemas"]["Bound"];
+                    surfaceHeatFlux?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
                 };
             };
             warnings: string[];
@@ -1186,38 +1063,14 @@ export interface components {
                 /** @description The temperature scale of the case, K. */
                 scale: number;
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    surfaceHeatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    meanTemperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatFlux?: components["schemas"]["Bound"];
+                    surfaceHeatFlux?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    meanTemperature?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
+                    heatFraction?: components["schemas"]["Bound"];
                 };
                 /**
                  * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
@@ -1228,29 +1081,10 @@ export interface components {
                 scope: "numerical";
                 note: string;
             };
-            numbers: {
-                biot?: number;
-                fourier?: number[];
-                length?: number;
-                penetrationDepth?: number;
-            };
-            checks: {
-                id: string;
-                holds: boolean;
-                value: number;
-                limit: number;
-                text: string;
-            }[];
-            warnings: {
-                code: string;
-                text: string;
-                value: number;
-            }[];
-            cautions: {
-                id: string;
-                version: number;
-                text: string;
-            }[];
+            numbers: components["schemas"]["Numbers"];
+            checks: components["schemas"]["Check"][];
+            warnings: components["schemas"]["Warning"][];
+            cautions: components["schemas"]["Caution"][];
             sources: string[];
         };
         SlabConvectionSolveCompactAnswer: {
@@ -1274,38 +1108,14 @@ export interface components {
             };
             accuracy: {
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    surfaceHeatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    meanTemperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatFlux?: components["schemas"]["Bound"];
+                    surfaceHeatFlux?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    meanTemperature?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
+                    heatFraction?: components["schemas"]["Bound"];
                 };
             };
             warnings: string[];
@@ -1413,38 +1223,14 @@ export interface components {
                 /** @description The temperature scale of the case, K. */
                 scale: number;
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    surfaceHeatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    meanTemperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatFlux?: components["schemas"]["Bound"];
+                    surfaceHeatFlux?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    meanTemperature?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
+                    heatFraction?: components["schemas"]["Bound"];
                 };
                 /**
                  * @description How the bound was made: proved, or counted term by term and held by tests (estimated).
@@ -1455,29 +1241,10 @@ export interface components {
                 scope: "numerical";
                 note: string;
             };
-            numbers: {
-                biot?: number;
-                fourier?: number[];
-                length?: number;
-                penetrationDepth?: number;
-            };
-            checks: {
-                id: string;
-                holds: boolean;
-                value: number;
-                limit: number;
-                text: string;
-            }[];
-            warnings: {
-                code: string;
-                text: string;
-                value: number;
-            }[];
-            cautions: {
-                id: string;
-                version: number;
-                text: string;
-            }[];
+            numbers: components["schemas"]["Numbers"];
+            checks: components["schemas"]["Check"][];
+            warnings: components["schemas"]["Warning"][];
+            cautions: components["schemas"]["Caution"][];
             sources: string[];
         };
         SlabSurfaceTemperatureSolveCompactAnswer: {
@@ -1501,38 +1268,14 @@ export interface components {
             };
             accuracy: {
                 bound: {
-                    temperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    surfaceHeatFlux?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatGained?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    meanTemperature?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    remainingFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    completedFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
-                    heatFraction?: {
-                        absolute: number;
-                        relative: number;
-                    };
+                    temperature?: components["schemas"]["Bound"];
+                    heatFlux?: components["schemas"]["Bound"];
+                    surfaceHeatFlux?: components["schemas"]["Bound"];
+                    heatGained?: components["schemas"]["Bound"];
+                    meanTemperature?: components["schemas"]["Bound"];
+                    remainingFraction?: components["schemas"]["Bound"];
+                    completedFraction?: components["schemas"]["Bound"];
+                    heatFraction?: components["schemas"]["Bound"];
                 };
             };
             warnings: string[];
@@ -1593,7 +1336,324 @@ export interface components {
             detail?: "full" | "compact";
         };
     };
-    responses: never;
+    responses: {
+        /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
+        "duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
+                };
+            };
+        };
+        /** @description The call comes from another site (cross-site). */
+        "cross-site": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "cross-site";
+                };
+            };
+        };
+        /** @description The method does not apply (method-not-allowed). */
+        "method-not-allowed": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                Allow: components["headers"]["Allow"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "method-not-allowed";
+                };
+            };
+        };
+        /** @description No acceptable form of answer (not-acceptable). */
+        "not-acceptable": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "not-acceptable";
+                };
+            };
+        };
+        /** @description The request came too slowly (request-timeout). */
+        "request-timeout": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "request-timeout";
+                };
+            };
+        };
+        /** @description The mail address is in use (mail-in-use). */
+        "mail-in-use": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "mail-in-use";
+                };
+            };
+        };
+        /** @description The body is too large (body-too-large). */
+        "body-too-large": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "body-too-large";
+                };
+            };
+        };
+        /** @description The body is of another kind (unsupported-media-type). */
+        "unsupported-media-type": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "unsupported-media-type";
+                };
+            };
+        };
+        /** @description The expectation cannot be met (expectation-failed). */
+        "expectation-failed": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "expectation-failed";
+                };
+            };
+        };
+        /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
+        "invalid-input.invalid-parameter": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "invalid-input" | "invalid-parameter";
+                };
+            };
+        };
+        /** @description Too many calls in a short time (rate-limited). */
+        "rate-limited": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                "Retry-After": components["headers"]["Retry-After"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "rate-limited";
+                };
+            };
+        };
+        /** @description The headers are too large (header-too-large). */
+        "header-too-large": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "header-too-large";
+                };
+            };
+        };
+        /** @description A fault of ours (internal). */
+        internal: {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "internal";
+                };
+            };
+        };
+        /** @description The service is not ready (unavailable). */
+        unavailable: {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                "Retry-After": components["headers"]["Retry-After"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "unavailable";
+                };
+            };
+        };
+        /** @description The mail address and password do not fit (sign-in-refused). */
+        "sign-in-refused": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "sign-in-refused";
+                };
+            };
+        };
+        /** @description The request cannot be read (malformed-request). */
+        "malformed-request": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "malformed-request";
+                };
+            };
+        };
+        /** @description A parameter is refused (invalid-parameter). */
+        "invalid-parameter": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "invalid-parameter";
+                };
+            };
+        };
+        /** @description Sign in first (sign-in-needed). */
+        "sign-in-needed": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "sign-in-needed";
+                };
+            };
+        };
+        /** @description Not allowed in this role (forbidden). */
+        forbidden: {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "forbidden";
+                };
+            };
+        };
+        /** @description The call comes from another site (cross-site). Not allowed in this role (forbidden). */
+        "cross-site.forbidden": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "cross-site" | "forbidden";
+                };
+            };
+        };
+        /** @description The account has too many keys (too-many-keys). */
+        "too-many-keys": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "too-many-keys";
+                };
+            };
+        };
+        /** @description There is nothing here (not-found). */
+        "not-found": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "not-found";
+                };
+            };
+        };
+        /** @description The body is too large (body-too-large). Too much for a trial without a key (too-many-values). */
+        "body-too-large.too-many-values": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "body-too-large" | "too-many-values";
+                };
+            };
+        };
+        /** @description The solve took too long (solve-too-slow). The service is not ready (unavailable). */
+        "solve-too-slow.unavailable": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                "Retry-After": components["headers"]["Retry-After"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "solve-too-slow" | "unavailable";
+                };
+            };
+        };
+    };
     parameters: never;
     requestBodies: never;
     headers: {
@@ -1649,191 +1709,20 @@ export interface operations {
                     "application/json": components["schemas"]["Session"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
-                    };
-                };
-            };
-            /** @description The call comes from another site (cross-site). */
-            403: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "cross-site";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The mail address is in use (mail-in-use). */
-            409: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "mail-in-use";
-                    };
-                };
-            };
-            /** @description The body is too large (body-too-large). */
-            413: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "body-too-large";
-                    };
-                };
-            };
-            /** @description The body is of another kind (unsupported-media-type). */
-            415: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unsupported-media-type";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-input" | "invalid-parameter";
-                    };
-                };
-            };
-            /** @description Too many calls in a short time (rate-limited). */
-            429: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "rate-limited";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            403: components["responses"]["cross-site"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            409: components["responses"]["mail-in-use"];
+            413: components["responses"]["body-too-large"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     signIn: {
@@ -1867,191 +1756,20 @@ export interface operations {
                     "application/json": components["schemas"]["Session"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
-                    };
-                };
-            };
-            /** @description The mail address and password do not fit (sign-in-refused). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "sign-in-refused";
-                    };
-                };
-            };
-            /** @description The call comes from another site (cross-site). */
-            403: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "cross-site";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The body is too large (body-too-large). */
-            413: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "body-too-large";
-                    };
-                };
-            };
-            /** @description The body is of another kind (unsupported-media-type). */
-            415: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unsupported-media-type";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-input" | "invalid-parameter";
-                    };
-                };
-            };
-            /** @description Too many calls in a short time (rate-limited). */
-            429: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "rate-limited";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            401: components["responses"]["sign-in-refused"];
+            403: components["responses"]["cross-site"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            413: components["responses"]["body-too-large"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     signOut: {
@@ -2071,138 +1789,16 @@ export interface operations {
                 };
                 content?: never;
             };
-            /** @description The request cannot be read (malformed-request). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "malformed-request";
-                    };
-                };
-            };
-            /** @description The call comes from another site (cross-site). */
-            403: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "cross-site";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["malformed-request"];
+            403: components["responses"]["cross-site"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     readSession: {
@@ -2234,151 +1830,17 @@ export interface operations {
                 };
                 content?: never;
             };
-            /** @description The request cannot be read (malformed-request). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "malformed-request";
-                    };
-                };
-            };
-            /** @description Sign in first (sign-in-needed). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "sign-in-needed";
-                    };
-                };
-            };
-            /** @description Not allowed in this role (forbidden). */
-            403: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "forbidden";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["malformed-request"];
+            401: components["responses"]["sign-in-needed"];
+            403: components["responses"]["forbidden"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     listKeys: {
@@ -2410,151 +1872,17 @@ export interface operations {
                 };
                 content?: never;
             };
-            /** @description The request cannot be read (malformed-request). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "malformed-request";
-                    };
-                };
-            };
-            /** @description Sign in first (sign-in-needed). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "sign-in-needed";
-                    };
-                };
-            };
-            /** @description Not allowed in this role (forbidden). */
-            403: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "forbidden";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["malformed-request"];
+            401: components["responses"]["sign-in-needed"];
+            403: components["responses"]["forbidden"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     createKey: {
@@ -2588,190 +1916,20 @@ export interface operations {
                     "application/json": components["schemas"]["CreatedKey"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
-                    };
-                };
-            };
-            /** @description Sign in first (sign-in-needed). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "sign-in-needed";
-                    };
-                };
-            };
-            /** @description The call comes from another site (cross-site). Not allowed in this role (forbidden). */
-            403: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "cross-site" | "forbidden";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The account has too many keys (too-many-keys). */
-            409: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "too-many-keys";
-                    };
-                };
-            };
-            /** @description The body is too large (body-too-large). */
-            413: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "body-too-large";
-                    };
-                };
-            };
-            /** @description The body is of another kind (unsupported-media-type). */
-            415: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unsupported-media-type";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-input" | "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            401: components["responses"]["sign-in-needed"];
+            403: components["responses"]["cross-site.forbidden"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            409: components["responses"]["too-many-keys"];
+            413: components["responses"]["body-too-large"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     revokeKey: {
@@ -2797,164 +1955,18 @@ export interface operations {
                     "application/json": components["schemas"]["RevokedKey"];
                 };
             };
-            /** @description The request cannot be read (malformed-request). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "malformed-request";
-                    };
-                };
-            };
-            /** @description Sign in first (sign-in-needed). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "sign-in-needed";
-                    };
-                };
-            };
-            /** @description The call comes from another site (cross-site). Not allowed in this role (forbidden). */
-            403: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "cross-site" | "forbidden";
-                    };
-                };
-            };
-            /** @description There is nothing here (not-found). */
-            404: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-found";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["malformed-request"];
+            401: components["responses"]["sign-in-needed"];
+            403: components["responses"]["cross-site.forbidden"];
+            404: components["responses"]["not-found"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     readAccountUsage: {
@@ -2993,151 +2005,17 @@ export interface operations {
                 };
                 content?: never;
             };
-            /** @description The request cannot be read (malformed-request). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "malformed-request";
-                    };
-                };
-            };
-            /** @description Sign in first (sign-in-needed). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "sign-in-needed";
-                    };
-                };
-            };
-            /** @description Not allowed in this role (forbidden). */
-            403: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "forbidden";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["malformed-request"];
+            401: components["responses"]["sign-in-needed"];
+            403: components["responses"]["forbidden"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     listAccountRequests: {
@@ -3176,151 +2054,17 @@ export interface operations {
                 };
                 content?: never;
             };
-            /** @description The request cannot be read (malformed-request). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "malformed-request";
-                    };
-                };
-            };
-            /** @description Sign in first (sign-in-needed). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "sign-in-needed";
-                    };
-                };
-            };
-            /** @description Not allowed in this role (forbidden). */
-            403: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "forbidden";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["malformed-request"];
+            401: components["responses"]["sign-in-needed"];
+            403: components["responses"]["forbidden"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     readAccountRequest: {
@@ -3358,164 +2102,18 @@ export interface operations {
                 };
                 content?: never;
             };
-            /** @description The request cannot be read (malformed-request). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "malformed-request";
-                    };
-                };
-            };
-            /** @description Sign in first (sign-in-needed). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "sign-in-needed";
-                    };
-                };
-            };
-            /** @description Not allowed in this role (forbidden). */
-            403: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "forbidden";
-                    };
-                };
-            };
-            /** @description There is nothing here (not-found). */
-            404: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-found";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["malformed-request"];
+            401: components["responses"]["sign-in-needed"];
+            403: components["responses"]["forbidden"];
+            404: components["responses"]["not-found"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     "try-solve-lumped-convection": {
@@ -3556,165 +2154,18 @@ export interface operations {
                     "application/json": components["schemas"]["LumpedConvectionSolveAnswer"] | components["schemas"]["LumpedConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The body is too large (body-too-large). Too much for a trial without a key (too-many-values). */
-            413: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "body-too-large" | "too-many-values";
-                    };
-                };
-            };
-            /** @description The body is of another kind (unsupported-media-type). */
-            415: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unsupported-media-type";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-input" | "invalid-parameter";
-                    };
-                };
-            };
-            /** @description Too many calls in a short time (rate-limited). */
-            429: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "rate-limited";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The solve took too long (solve-too-slow). The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "solve-too-slow" | "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            413: components["responses"]["body-too-large.too-many-values"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["solve-too-slow.unavailable"];
         };
     };
     "try-solve-semi-infinite-convection": {
@@ -3761,165 +2212,18 @@ export interface operations {
                     "application/json": components["schemas"]["SemiInfiniteConvectionSolveAnswer"] | components["schemas"]["SemiInfiniteConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The body is too large (body-too-large). Too much for a trial without a key (too-many-values). */
-            413: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "body-too-large" | "too-many-values";
-                    };
-                };
-            };
-            /** @description The body is of another kind (unsupported-media-type). */
-            415: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unsupported-media-type";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-input" | "invalid-parameter";
-                    };
-                };
-            };
-            /** @description Too many calls in a short time (rate-limited). */
-            429: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "rate-limited";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The solve took too long (solve-too-slow). The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "solve-too-slow" | "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            413: components["responses"]["body-too-large.too-many-values"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["solve-too-slow.unavailable"];
         };
     };
     "try-solve-semi-infinite-surface-temperature": {
@@ -3964,165 +2268,18 @@ export interface operations {
                     "application/json": components["schemas"]["SemiInfiniteSurfaceTemperatureSolveAnswer"] | components["schemas"]["SemiInfiniteSurfaceTemperatureSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The body is too large (body-too-large). Too much for a trial without a key (too-many-values). */
-            413: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "body-too-large" | "too-many-values";
-                    };
-                };
-            };
-            /** @description The body is of another kind (unsupported-media-type). */
-            415: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unsupported-media-type";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-input" | "invalid-parameter";
-                    };
-                };
-            };
-            /** @description Too many calls in a short time (rate-limited). */
-            429: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "rate-limited";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The solve took too long (solve-too-slow). The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "solve-too-slow" | "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            413: components["responses"]["body-too-large.too-many-values"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["solve-too-slow.unavailable"];
         };
     };
     "try-solve-slab-convection": {
@@ -4170,165 +2327,18 @@ export interface operations {
                     "application/json": components["schemas"]["SlabConvectionSolveAnswer"] | components["schemas"]["SlabConvectionSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The body is too large (body-too-large). Too much for a trial without a key (too-many-values). */
-            413: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "body-too-large" | "too-many-values";
-                    };
-                };
-            };
-            /** @description The body is of another kind (unsupported-media-type). */
-            415: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unsupported-media-type";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-input" | "invalid-parameter";
-                    };
-                };
-            };
-            /** @description Too many calls in a short time (rate-limited). */
-            429: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "rate-limited";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The solve took too long (solve-too-slow). The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "solve-too-slow" | "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            413: components["responses"]["body-too-large.too-many-values"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["solve-too-slow.unavailable"];
         };
     };
     "try-solve-slab-surface-temperature": {
@@ -4375,165 +2385,18 @@ export interface operations {
                     "application/json": components["schemas"]["SlabSurfaceTemperatureSolveAnswer"] | components["schemas"]["SlabSurfaceTemperatureSolveCompactAnswer"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The body is too large (body-too-large). Too much for a trial without a key (too-many-values). */
-            413: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "body-too-large" | "too-many-values";
-                    };
-                };
-            };
-            /** @description The body is of another kind (unsupported-media-type). */
-            415: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unsupported-media-type";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-input" | "invalid-parameter";
-                    };
-                };
-            };
-            /** @description Too many calls in a short time (rate-limited). */
-            429: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "rate-limited";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The solve took too long (solve-too-slow). The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "solve-too-slow" | "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            413: components["responses"]["body-too-large.too-many-values"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["solve-too-slow.unavailable"];
         };
     };
 }

@@ -240,7 +240,271 @@ export interface components {
             reason: string;
         };
     };
-    responses: never;
+    responses: {
+        /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
+        "duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
+                };
+            };
+        };
+        /** @description The mail address and password do not fit (sign-in-refused). */
+        "sign-in-refused": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "sign-in-refused";
+                };
+            };
+        };
+        /** @description The call comes from another site (cross-site). Not allowed in this role (forbidden). */
+        "cross-site.forbidden": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "cross-site" | "forbidden";
+                };
+            };
+        };
+        /** @description The method does not apply (method-not-allowed). */
+        "method-not-allowed": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                Allow: components["headers"]["Allow"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "method-not-allowed";
+                };
+            };
+        };
+        /** @description No acceptable form of answer (not-acceptable). */
+        "not-acceptable": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "not-acceptable";
+                };
+            };
+        };
+        /** @description The request came too slowly (request-timeout). */
+        "request-timeout": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "request-timeout";
+                };
+            };
+        };
+        /** @description The body is too large (body-too-large). */
+        "body-too-large": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "body-too-large";
+                };
+            };
+        };
+        /** @description The body is of another kind (unsupported-media-type). */
+        "unsupported-media-type": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "unsupported-media-type";
+                };
+            };
+        };
+        /** @description The expectation cannot be met (expectation-failed). */
+        "expectation-failed": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "expectation-failed";
+                };
+            };
+        };
+        /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
+        "invalid-input.invalid-parameter": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "invalid-input" | "invalid-parameter";
+                };
+            };
+        };
+        /** @description Too many calls in a short time (rate-limited). */
+        "rate-limited": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                "Retry-After": components["headers"]["Retry-After"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "rate-limited";
+                };
+            };
+        };
+        /** @description The headers are too large (header-too-large). */
+        "header-too-large": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "header-too-large";
+                };
+            };
+        };
+        /** @description A fault of ours (internal). */
+        internal: {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "internal";
+                };
+            };
+        };
+        /** @description The service is not ready (unavailable). */
+        unavailable: {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                "Retry-After": components["headers"]["Retry-After"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "unavailable";
+                };
+            };
+        };
+        /** @description The request cannot be read (malformed-request). */
+        "malformed-request": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "malformed-request";
+                };
+            };
+        };
+        /** @description The call comes from another site (cross-site). */
+        "cross-site": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "cross-site";
+                };
+            };
+        };
+        /** @description A parameter is refused (invalid-parameter). */
+        "invalid-parameter": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "invalid-parameter";
+                };
+            };
+        };
+        /** @description Sign in first (sign-in-needed). */
+        "sign-in-needed": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "sign-in-needed";
+                };
+            };
+        };
+        /** @description Not allowed in this role (forbidden). */
+        forbidden: {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "forbidden";
+                };
+            };
+        };
+        /** @description There is nothing here (not-found). */
+        "not-found": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "not-found";
+                };
+            };
+        };
+    };
     parameters: never;
     requestBodies: never;
     headers: {
@@ -294,191 +558,20 @@ export interface operations {
                     "application/json": components["schemas"]["StaffSession"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
-                    };
-                };
-            };
-            /** @description The mail address and password do not fit (sign-in-refused). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "sign-in-refused";
-                    };
-                };
-            };
-            /** @description The call comes from another site (cross-site). Not allowed in this role (forbidden). */
-            403: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "cross-site" | "forbidden";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The body is too large (body-too-large). */
-            413: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "body-too-large";
-                    };
-                };
-            };
-            /** @description The body is of another kind (unsupported-media-type). */
-            415: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unsupported-media-type";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-input" | "invalid-parameter";
-                    };
-                };
-            };
-            /** @description Too many calls in a short time (rate-limited). */
-            429: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "rate-limited";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            401: components["responses"]["sign-in-refused"];
+            403: components["responses"]["cross-site.forbidden"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            413: components["responses"]["body-too-large"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     staffSignOut: {
@@ -498,138 +591,16 @@ export interface operations {
                 };
                 content?: never;
             };
-            /** @description The request cannot be read (malformed-request). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "malformed-request";
-                    };
-                };
-            };
-            /** @description The call comes from another site (cross-site). */
-            403: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "cross-site";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["malformed-request"];
+            403: components["responses"]["cross-site"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     readStaffSession: {
@@ -661,151 +632,17 @@ export interface operations {
                 };
                 content?: never;
             };
-            /** @description The request cannot be read (malformed-request). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "malformed-request";
-                    };
-                };
-            };
-            /** @description Sign in first (sign-in-needed). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "sign-in-needed";
-                    };
-                };
-            };
-            /** @description Not allowed in this role (forbidden). */
-            403: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "forbidden";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["malformed-request"];
+            401: components["responses"]["sign-in-needed"];
+            403: components["responses"]["forbidden"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     findRequests: {
@@ -839,177 +676,19 @@ export interface operations {
                     "application/json": components["schemas"]["FoundRequests"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
-                    };
-                };
-            };
-            /** @description Sign in first (sign-in-needed). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "sign-in-needed";
-                    };
-                };
-            };
-            /** @description The call comes from another site (cross-site). Not allowed in this role (forbidden). */
-            403: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "cross-site" | "forbidden";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The body is too large (body-too-large). */
-            413: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "body-too-large";
-                    };
-                };
-            };
-            /** @description The body is of another kind (unsupported-media-type). */
-            415: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unsupported-media-type";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-input" | "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            401: components["responses"]["sign-in-needed"];
+            403: components["responses"]["cross-site.forbidden"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            413: components["responses"]["body-too-large"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
     readAnyRequest: {
@@ -1048,190 +727,20 @@ export interface operations {
                     "application/json": components["schemas"]["StaffRequest"];
                 };
             };
-            /** @description A name stands twice in one object (duplicate-name). The body is not JSON (malformed-json). The request cannot be read (malformed-request). The body is nested too deeply (too-deep). The body has too many parts (too-many-parts). */
-            400: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "duplicate-name" | "malformed-json" | "malformed-request" | "too-deep" | "too-many-parts";
-                    };
-                };
-            };
-            /** @description Sign in first (sign-in-needed). */
-            401: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "sign-in-needed";
-                    };
-                };
-            };
-            /** @description The call comes from another site (cross-site). Not allowed in this role (forbidden). */
-            403: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "cross-site" | "forbidden";
-                    };
-                };
-            };
-            /** @description There is nothing here (not-found). */
-            404: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-found";
-                    };
-                };
-            };
-            /** @description The method does not apply (method-not-allowed). */
-            405: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    Allow: components["headers"]["Allow"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "method-not-allowed";
-                    };
-                };
-            };
-            /** @description No acceptable form of answer (not-acceptable). */
-            406: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "not-acceptable";
-                    };
-                };
-            };
-            /** @description The request came too slowly (request-timeout). */
-            408: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "request-timeout";
-                    };
-                };
-            };
-            /** @description The body is too large (body-too-large). */
-            413: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "body-too-large";
-                    };
-                };
-            };
-            /** @description The body is of another kind (unsupported-media-type). */
-            415: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unsupported-media-type";
-                    };
-                };
-            };
-            /** @description The expectation cannot be met (expectation-failed). */
-            417: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "expectation-failed";
-                    };
-                };
-            };
-            /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-            422: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "invalid-input" | "invalid-parameter";
-                    };
-                };
-            };
-            /** @description The headers are too large (header-too-large). */
-            431: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "header-too-large";
-                    };
-                };
-            };
-            /** @description A fault of ours (internal). */
-            500: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "internal";
-                    };
-                };
-            };
-            /** @description The service is not ready (unavailable). */
-            503: {
-                headers: {
-                    "Request-Id": components["headers"]["Request-Id"];
-                    "Retry-After": components["headers"]["Retry-After"];
-                    [name: string]: unknown;
-                };
-                content: {
-                    "application/problem+json": components["schemas"]["Problem"] & {
-                        /** @enum {unknown} */
-                        code?: "unavailable";
-                    };
-                };
-            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            401: components["responses"]["sign-in-needed"];
+            403: components["responses"]["cross-site.forbidden"];
+            404: components["responses"]["not-found"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            413: components["responses"]["body-too-large"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
         };
     };
 }

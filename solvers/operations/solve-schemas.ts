@@ -43,7 +43,18 @@ function inputSchema(c: Case) {
   })
 }
 
-const boundSchema = z.strictObject({ absolute: z.number(), relative: z.number() })
+export const boundSchema = z
+  .strictObject({ absolute: z.number(), relative: z.number() })
+  .meta({ id: 'Bound', description: 'A value errs by at most absolute + relative · |value|.' })
+const checkSchema = z
+  .strictObject({ id: z.string(), holds: z.boolean(), value: z.number(), limit: z.number(), text: z.string() })
+  .meta({ id: 'Check' })
+export const warningSchema = z
+  .strictObject({ code: z.string(), text: z.string(), value: z.number() })
+  .meta({ id: 'Warning' })
+export const cautionSchema = z
+  .strictObject({ id: z.string(), version: z.number(), text: z.string() })
+  .meta({ id: 'Caution' })
 const valuesSchema: Record<Shape, z.ZodType> = {
   grid: z.array(z.array(z.number())),
   times: z.array(z.number()),
@@ -51,14 +62,16 @@ const valuesSchema: Record<Shape, z.ZodType> = {
   single: z.number(),
 }
 
-const numbersSchema = z.strictObject(
-  Object.fromEntries(
-    Object.entries(numberCatalogue).map(([name, { unit, series, text }]) => [
-      name,
-      (series ? z.array(z.number()) : z.number()).optional().meta({ description: `${text} Unit ${unit}.` }),
-    ]),
-  ),
-)
+const numbersSchema = z
+  .strictObject(
+    Object.fromEntries(
+      Object.entries(numberCatalogue).map(([name, { unit, series, text }]) => [
+        name,
+        (series ? z.array(z.number()) : z.number()).optional().meta({ description: `${text} Unit ${unit}.` }),
+      ]),
+    ),
+  )
+  .meta({ id: 'Numbers' })
 
 const pointSchema = (c: Case) =>
   z.strictObject(Object.fromEntries((c.pointAxes ?? []).map((axis) => [axis, z.number()])))
@@ -111,11 +124,9 @@ export function answerSchema(c: Case) {
       note: z.string(),
     }),
     numbers: numbersSchema,
-    checks: z.array(
-      z.strictObject({ id: z.string(), holds: z.boolean(), value: z.number(), limit: z.number(), text: z.string() }),
-    ),
-    warnings: z.array(z.strictObject({ code: z.string(), text: z.string(), value: z.number() })),
-    cautions: z.array(z.strictObject({ id: z.string(), version: z.number(), text: z.string() })),
+    checks: z.array(checkSchema),
+    warnings: z.array(warningSchema),
+    cautions: z.array(cautionSchema),
     sources: z.array(z.string()),
   })
 }

@@ -31,11 +31,19 @@ export function bodyFaults(o: Operation, body: unknown): string[] {
   return faultsAt(o.document, ['paths', o.path, o.method, 'requestBody', 'content', 'application/json', 'schema'], body)
 }
 
+/** Where a document describes an answer; failures are described once for all operations and referred to. */
+function responseAt(o: Operation, status: number): { at: string[]; response: Json | undefined } {
+  const find = (at: string[]) =>
+    at.reduce<unknown>((value, part) => (value as Json | undefined)?.[part], documents[o.document]) as Json | undefined
+  const at = ['paths', o.path, o.method, 'responses', String(status)]
+  const response = find(at)
+  const shared = (response?.['$ref'] as string | undefined)?.slice('#/'.length).split('/')
+  return shared ? { at: shared, response: find(shared) } : { at, response }
+}
+
 /** What the document has to say against an answer: status, kind, headers and body. */
 export function answerFaults(o: Operation, answer: Answer): string[] {
-  const at = ['paths', o.path, o.method, 'responses', String(answer.status)]
-  const response = at.reduce<unknown>((value, part) => (value as Json | undefined)?.[part], documents[o.document]) as
-    Json | undefined
+  const { at, response } = responseAt(o, answer.status)
   if (!response) return [`the document has no answer ${answer.status}`]
   const content = response['content'] as Json | undefined
   if (!content) return answer.text === '' ? [] : ['the document has no body for this answer']
