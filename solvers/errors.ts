@@ -39,6 +39,10 @@ export const domainCodes = {
     title: 'A depth lies outside the body',
     text: 'The body ends before this depth, so there is no temperature to give. Nothing is moved to the edge.',
   },
+  'sizes-do-not-fit': {
+    title: 'Two sizes do not fit each other',
+    text: 'Each size is in its range, but together they make no body that the case can solve.',
+  },
   'output-not-defined': {
     title: 'The case has no such output',
     text: 'An output that a case lacks, or that does not exist for the given input, is refused and never answered as null.',

