@@ -305,13 +305,21 @@ export interface components {
             /** @description Which query parameter. */
             parameter?: string;
             /** @enum {string} */
-            code: "missing-field" | "unknown-field" | "wrong-type" | "out-of-range" | "not-in-list" | "wrong-length" | "wrong-form" | "conflicting-fields" | "depth-outside-body" | "output-not-defined" | "singular-at-time-zero";
+            code: "missing-field" | "unknown-field" | "wrong-type" | "out-of-range" | "not-in-list" | "wrong-length" | "wrong-form" | "conflicting-fields" | "depth-outside-body" | "sizes-do-not-fit" | "output-not-defined" | "singular-at-time-zero";
             detail: string;
             /** @description What would be accepted instead. */
             accepted?: string;
         };
         CaseList: {
             cases: components["schemas"]["CaseSummary"][];
+            /** @description Groups of the cases, in the order to show them. */
+            families: {
+                id: string;
+                title: string;
+                text: string;
+            }[];
+            /** @description By what the list can be narrowed. */
+            facets: components["schemas"]["CaseFacet"][];
         };
         CaseSummary: {
             id: string;
@@ -321,6 +329,10 @@ export interface components {
             sketch: {
                 body: string;
                 boundary: string;
+            };
+            /** @description By what the case is found: values of each facet of the list. */
+            facets: {
+                [key: string]: string[];
             };
             operations: {
                 id: string;
@@ -338,6 +350,15 @@ export interface components {
             /** @description Points that a call costs at least. */
             leastCharge: number;
         };
+        CaseFacet: {
+            id: string;
+            title: string;
+            /** @description Those that some case has. */
+            values: {
+                id: string;
+                title: string;
+            }[];
+        };
         Case: {
             id: string;
             title: string;
@@ -347,6 +368,10 @@ export interface components {
                 body: string;
                 boundary: string;
             };
+            /** @description By what the case is found: values of each facet of the list. */
+            facets: {
+                [key: string]: string[];
+            };
             operations: {
                 id: string;
                 title: string;
@@ -355,6 +380,10 @@ export interface components {
                 method: "POST";
                 /** @description Path of the operation under the address of the service. */
                 path: string;
+                /** @description A body that it answers. */
+                example: {
+                    [key: string]: unknown;
+                };
             }[];
             /** @description Priced points per number of the answer. */
             weight: number;
@@ -423,6 +452,32 @@ export interface components {
             schema: {
                 [key: string]: unknown;
             };
+            /** @description What an object holds; of a list, what each of its objects holds. */
+            fields?: components["schemas"]["CaseSubField"][];
+            /** @description The kinds that an object may be of, each with what it holds beside its kind. */
+            kinds?: components["schemas"]["CaseFieldKind"][];
+        };
+        CaseSubField: {
+            name: string;
+            required: boolean;
+            title?: string;
+            symbol?: string;
+            /** @description UCUM code of a plain number. */
+            unit?: string;
+            hint?: string;
+            accepted?: string;
+            /** @description Lowest and highest value met in practice. */
+            typical?: number[];
+            /** @description JSON Schema of the field. */
+            schema: {
+                [key: string]: unknown;
+            };
+        };
+        CaseFieldKind: {
+            kind: string;
+            title?: string;
+            hint?: string;
+            fields: components["schemas"]["CaseSubField"][];
         };
         CaseOutput: {
             /** @enum {string} */

@@ -319,7 +319,7 @@ export interface components {
             /** @description Which query parameter. */
             parameter?: string;
             /** @enum {string} */
-            code: "missing-field" | "unknown-field" | "wrong-type" | "out-of-range" | "not-in-list" | "wrong-length" | "wrong-form" | "conflicting-fields" | "depth-outside-body" | "output-not-defined" | "singular-at-time-zero";
+            code: "missing-field" | "unknown-field" | "wrong-type" | "out-of-range" | "not-in-list" | "wrong-length" | "wrong-form" | "conflicting-fields" | "depth-outside-body" | "sizes-do-not-fit" | "output-not-defined" | "singular-at-time-zero";
             detail: string;
             /** @description What would be accepted instead. */
             accepted?: string;

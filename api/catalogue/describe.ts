@@ -1,45 +1,45 @@
-import { z } from 'zod'
 import { type Case, outputNamesOf, outputOf } from '../../solvers/case.ts'
 import { cases } from '../../solvers/cases/index.ts'
 import { cautions } from '../../solvers/cautions.ts'
-import { caseOperations } from '../../solvers/operations/index.ts'
-import { solve } from '../../solvers/operations/solve.ts'
+import { type CaseOperation, caseOperations } from '../../solvers/operations/index.ts'
 import { SOLVER_VERSION } from '../../solvers/version.ts'
 import { warningCodes } from '../../solvers/warnings.ts'
 import { FLOOR } from '../cases/limits.ts'
+import { facetsAmong, facetsOf, familyTexts } from './facets.ts'
+import { type FieldEntry, fieldsOf } from './fields.ts'
 
 /** Where an operation of a case is asked. */
 export function caseOperationPath(caseId: string, operationId: string): string {
   return `/v1/cases/${caseId}/${operationId}`
 }
 
-export function summaryOf(c: Case) {
-  const { id, title, summary, family, sketch, weight, setUp } = c
-  const operations = caseOperations.map((o) => ({
-    id: o.id,
-    title: o.title,
-    summary: o.summary,
-    method: 'POST',
-    path: caseOperationPath(id, o.id),
-  }))
-  return { id, title, summary, family, sketch, operations, weight, setUp, leastCharge: FLOOR }
+const fieldsByCase = new Map<string, FieldEntry[]>()
+
+function knownFieldsOf(c: Case): FieldEntry[] {
+  const known = fieldsByCase.get(c.id) ?? fieldsOf(c)
+  fieldsByCase.set(c.id, known)
+  return known
 }
 
-function fieldsOf(c: Case) {
-  const schema = z.toJSONSchema(solve.input(c), { io: 'input' })
-  const required = new Set(schema.required)
-  return Object.entries(schema.properties ?? {}).map(([name, property]) => {
-    const field = property as Record<string, unknown>
-    const entries = { title: field['title'], symbol: field['x-symbol'], unit: field['x-ucum'], hint: field['x-hint'] }
-    const more = { accepted: field['x-accepted'], typical: field['x-typical'] }
-    const known = Object.entries({ ...entries, ...more }).filter(([, value]) => value !== undefined)
-    return { name, required: required.has(name), ...Object.fromEntries(known), schema: field }
-  })
+function operationOf(c: Case, o: CaseOperation) {
+  return { id: o.id, title: o.title, summary: o.summary, method: 'POST', path: caseOperationPath(c.id, o.id) }
+}
+
+export function summaryOf(c: Case) {
+  const { id, title, summary, family, sketch, weight, setUp } = c
+  const operations = caseOperations.map((o) => operationOf(c, o))
+  const facets = facetsOf(
+    c,
+    knownFieldsOf(c),
+    operations.map((o) => o.id),
+  )
+  return { id, title, summary, family, sketch, facets, operations, weight, setUp, leastCharge: FLOOR }
 }
 
 export function descriptionOf(c: Case) {
   return {
     ...summaryOf(c),
+    operations: caseOperations.map((o) => ({ ...operationOf(c, o), example: o.example(c) })),
     notes: c.notes,
     formula: [...c.formula],
     sources: [...c.sources],
@@ -47,7 +47,7 @@ export function descriptionOf(c: Case) {
     pointAxes: [...(c.pointAxes ?? [])],
     depthsEndAt: c.depthsEndAt ?? null,
     drive: c.drive ?? null,
-    fields: fieldsOf(c),
+    fields: knownFieldsOf(c),
     outputs: outputNamesOf(c).map((name) => ({ name, ...outputOf(c, name) })),
     absentOutputs: Object.entries(c.absentOutputs).map(([name, reason]) => ({ name, reason })),
     cautions: c.cautions.map((id) => ({ id, ...cautions[id] })),
@@ -58,7 +58,15 @@ export function descriptionOf(c: Case) {
   }
 }
 
-export const caseSummaries = () => cases.map(summaryOf)
+/** Every case in short, with what the list can be grouped and narrowed by. */
+export function caseList() {
+  const summaries = cases.map(summaryOf)
+  const families = Object.entries(familyTexts)
+    .filter(([id]) => summaries.some(({ family }) => family === id))
+    .map(([id, texts]) => ({ id, ...texts }))
+  return { cases: summaries, families, facets: facetsAmong(summaries.map(({ facets }) => facets)) }
+}
+
 const descriptions = new Map<string, ReturnType<typeof descriptionOf>>()
 
 /** The whole description of a case, made once. */

@@ -3,7 +3,7 @@ import { cases } from '../../solvers/cases/index.ts'
 import { operation } from '../operation.ts'
 import { Problem } from '../problems.ts'
 import { publicDocument } from './document.ts'
-import { caseSummaries, describedCase } from './describe.ts'
+import { caseList, describedCase } from './describe.ts'
 import { caseListSchema, caseSchema } from './schemas.ts'
 
 const listCases = operation({
@@ -17,7 +17,7 @@ const listCases = operation({
   access: 'public',
   status: 200,
   answer: caseListSchema,
-  handle: () => ({ body: { cases: caseSummaries() } }),
+  handle: () => ({ body: caseList() }),
 })
 
 const readCase = operation({

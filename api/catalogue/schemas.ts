@@ -19,6 +19,9 @@ const summaryShape = {
   summary: text,
   family: text,
   sketch: z.strictObject({ body: text, boundary: text }),
+  facets: z
+    .record(text, z.array(text))
+    .meta({ description: 'By what the case is found: values of each facet of the list.' }),
   operations: z.array(caseOperationSchema),
   weight: z.number().meta({ description: 'Priced points per number of the answer.' }),
   setUp: z.number().meta({ description: 'Priced points once per call.' }),
@@ -26,19 +29,54 @@ const summaryShape = {
 }
 
 export const caseSummarySchema = z.strictObject(summaryShape).meta({ id: 'CaseSummary' })
-export const caseListSchema = z.strictObject({ cases: z.array(caseSummarySchema) }).meta({ id: 'CaseList' })
+
+const facetSchema = z
+  .strictObject({
+    id: text,
+    title: text,
+    values: z.array(z.strictObject({ id: text, title: text })).meta({ description: 'Those that some case has.' }),
+  })
+  .meta({ id: 'CaseFacet' })
+
+export const caseListSchema = z
+  .strictObject({
+    cases: z.array(caseSummarySchema),
+    families: z
+      .array(z.strictObject({ id: text, title: text, text }))
+      .meta({ description: 'Groups of the cases, in the order to show them.' }),
+    facets: z.array(facetSchema).meta({ description: 'By what the list can be narrowed.' }),
+  })
+  .meta({ id: 'CaseList' })
+
+const fieldShape = {
+  name: text,
+  required: z.boolean(),
+  title: text.optional(),
+  symbol: text.optional(),
+  unit: text.optional().meta({ description: 'UCUM code of a plain number.' }),
+  hint: text.optional(),
+  accepted: text.optional(),
+  typical: z.array(z.number()).optional().meta({ description: 'Lowest and highest value met in practice.' }),
+  schema: z.record(text, z.unknown()).meta({ description: 'JSON Schema of the field.' }),
+}
+
+const subFieldSchema = z.strictObject(fieldShape).meta({ id: 'CaseSubField' })
+
+const kindSchema = z
+  .strictObject({ kind: text, title: text.optional(), hint: text.optional(), fields: z.array(subFieldSchema) })
+  .meta({ id: 'CaseFieldKind' })
 
 const fieldSchema = z
   .strictObject({
-    name: text,
-    required: z.boolean(),
-    title: text.optional(),
-    symbol: text.optional(),
-    unit: text.optional().meta({ description: 'UCUM code of a plain number.' }),
-    hint: text.optional(),
-    accepted: text.optional(),
-    typical: z.array(z.number()).optional().meta({ description: 'Lowest and highest value met in practice.' }),
-    schema: z.record(text, z.unknown()).meta({ description: 'JSON Schema of the field.' }),
+    ...fieldShape,
+    fields: z
+      .array(subFieldSchema)
+      .optional()
+      .meta({ description: 'What an object holds; of a list, what each of its objects holds.' }),
+    kinds: z
+      .array(kindSchema)
+      .optional()
+      .meta({ description: 'The kinds that an object may be of, each with what it holds beside its kind.' }),
   })
   .meta({ id: 'CaseField' })
 
@@ -46,9 +84,14 @@ const outputSchema = z
   .strictObject({ name: z.enum(outputNames), label: text, symbol: text, unit: text, shape, text })
   .meta({ id: 'CaseOutput' })
 
+const exampleSchema = z.record(text, z.unknown())
+
 export const caseSchema = z
   .strictObject({
     ...summaryShape,
+    operations: z.array(
+      caseOperationSchema.extend({ example: exampleSchema.meta({ description: 'A body that it answers.' }) }),
+    ),
     notes: text,
     formula: z.array(text).meta({ description: 'The formula in TeX, one entry a line.' }),
     sources: z.array(text),
@@ -65,9 +108,9 @@ export const caseSchema = z
     absentOutputs: z.array(z.strictObject({ name: z.enum(outputNames), reason: text })),
     cautions: z.array(z.strictObject({ id: z.enum(Object.keys(cautions)), version: z.number(), text })),
     warnings: z.array(z.strictObject({ code: text, title: text, text })),
-    example: z.record(text, z.unknown()),
+    example: exampleSchema,
     variants: z
-      .array(z.strictObject({ title: text, input: z.record(text, z.unknown()) }))
+      .array(z.strictObject({ title: text, input: exampleSchema }))
       .meta({ description: 'Other ways to state the case, each a whole input.' }),
     solver: text.meta({ description: 'Version of the numbers.' }),
   })
