@@ -23,6 +23,10 @@ export const cautions = {
     version: 1,
     text: 'Where the body is food: time estimate only. Legal cooling and storage limits apply; verify with a calibrated probe.',
   },
+  contact: {
+    version: 1,
+    text: 'Interface temperature of idealised bodies; a heated or backed surface keeps rising, and this is not an upper limit for it. Burn risk depends on contact time, skin condition and area; assess with ISO 13732-1 and product rules. Not medical advice.',
+  },
   control: { version: 1, text: 'Do not use as a safety interlock.' },
 } as const
 

@@ -81,6 +81,62 @@ export const outputCatalogue = {
     shape: 'single',
     text: 'Time in which the difference to the end state falls to 1/e.',
   },
+  amplitude: {
+    label: 'Amplitude',
+    symbol: 'A(x)',
+    unit: 'K',
+    shape: 'places',
+    text: 'Amplitude of the temperature at each place.',
+  },
+  timeLag: {
+    label: 'Time lag',
+    symbol: 'Δt',
+    unit: 's',
+    shape: 'places',
+    text: 'Time by which each place follows the driving cycle, whole periods included.',
+  },
+  dampingDepth: {
+    label: 'Damping depth',
+    symbol: 'δ',
+    unit: 'm',
+    shape: 'single',
+    text: 'Depth over which the amplitude falls to 1/e.',
+  },
+  heatPerHalfCycle: {
+    label: 'Heat per half cycle',
+    symbol: 'Q½',
+    unit: 'J/m2',
+    shape: 'single',
+    text: 'Heat that enters the surface in one half of the cycle and leaves in the other.',
+  },
+  contactTemperature: {
+    label: 'Contact temperature',
+    symbol: 'Tₖ',
+    unit: 'Cel',
+    shape: 'single',
+    text: 'Temperature that both faces have at once, and keep, in perfect contact.',
+  },
+  idealTemperature: {
+    label: 'Temperature in perfect contact',
+    symbol: 'T*',
+    unit: 'Cel',
+    shape: 'grid',
+    text: 'Temperature at each time and place if nothing resisted between the faces.',
+  },
+  surfaceTemperature: {
+    label: 'Surface temperature',
+    symbol: 'Tₛ',
+    unit: 'Cel',
+    shape: 'times',
+    text: 'Temperature of the own face.',
+  },
+  otherSurfaceTemperature: {
+    label: 'Surface temperature of the other body',
+    symbol: 'Tₛ₂',
+    unit: 'Cel',
+    shape: 'times',
+    text: 'Temperature of the face of the other body.',
+  },
 } as const satisfies Record<string, OutputDescription>
 
 export type OutputName = keyof typeof outputCatalogue

@@ -1,5 +1,9 @@
 /** Warnings say that a number may not mean what its reader thinks. Each code has its own page in the portal. */
 export const warningCodes = {
+  'body-too-thin': {
+    title: 'A body is too thin for the times asked for',
+    text: 'The far face has been felt: from there on a body without end is no longer a good model. In contact the echo is 1 % at a·t/L² = 0.30.',
+  },
   'film-includes-radiation-unknown': {
     title: 'The film coefficient is taken as the total',
     text: 'The film coefficient is taken as the total, radiation included. One for air movement alone needs about 5 W/(m2.K) more indoors.',

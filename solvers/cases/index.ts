@@ -1,6 +1,8 @@
 import type { Case } from '../case.ts'
 import lumpedConvection from './lumped-convection/case.ts'
 import semiInfiniteConvection from './semi-infinite-convection/case.ts'
+import semiInfiniteSurfaceFlux from './semi-infinite-surface-flux/case.ts'
+import semiInfiniteSurfaceRamp from './semi-infinite-surface-ramp/case.ts'
 import semiInfiniteSurfaceTemperature from './semi-infinite-surface-temperature/case.ts'
 import slabConvection from './slab-convection/case.ts'
 import slabSurfaceTemperature from './slab-surface-temperature/case.ts'
@@ -8,8 +10,10 @@ import slabSurfaceTemperature from './slab-surface-temperature/case.ts'
 /** Every case of the product. Adding one is a folder beside this file and a line here. */
 export const cases: readonly Case[] = [
   lumpedConvection,
-  semiInfiniteConvection,
   semiInfiniteSurfaceTemperature,
+  semiInfiniteSurfaceRamp,
+  semiInfiniteSurfaceFlux,
+  semiInfiniteConvection,
   slabConvection,
   slabSurfaceTemperature,
 ]

@@ -8,6 +8,7 @@ import { EPS } from './rounding.ts'
  * Response of a half space at 0 whose fluid steps to 1, in η = x/(2√(at)) and β = h√(at)/k.
  *
  *   completed  u = erfc(η) − e^(2ηβ + β²)·erfc(η + β) = e^(−η²)·[erfcx(η) − erfcx(η + β)]
+ *   perFilm    u/β, 2·ierfc(η) where β = 0: what a flux absorbed at the face does, in units of √(at)/k
  *   remaining  1 − u = erf(η) + e^(−η²)·erfcx(η + β)
  *   flux       q/(h·ΔT) = e^(−η²)·erfcx(η + β)
  *   energy     Q/(h·ΔT·t) = [erfcx(β) − 1 + 2β/√π]/β²
@@ -25,6 +26,14 @@ const FAR = 27.5
 export function completed(eta: number, beta: number): number {
   if (eta > FAR) return 0
   return Math.exp(-eta * eta) * scaledDifference(eta, beta)
+}
+
+/** u/β without dividing by a β that may be 0. Relative error within completedError(η). */
+export function completedPerFilm(eta: number, beta: number): number {
+  if (eta > FAR) return 0
+  const decay = Math.exp(-eta * eta)
+  if (beta >= Math.max(0.7, eta)) return (decay * (erfcx(eta) - erfcx(eta + beta))) / beta
+  return decay * 2 * (beta === 0 ? ierfcx(eta) : gauss(ierfcx, eta, beta) / beta)
 }
 
 /** erfcx(η) − erfcx(η + β), by quadrature of −erfcx′ = 2·ierfcx where the difference would cancel. */

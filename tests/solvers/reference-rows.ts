@@ -1,6 +1,7 @@
 import { readFileSync } from 'node:fs'
 import type { OutputName } from '../../solvers/outputs.ts'
 import type { Kinds } from './rows/ask.ts'
+import { closedForms } from './rows/closed-forms.ts'
 import { steps } from './rows/steps.ts'
 
 export interface Row {
@@ -27,7 +28,7 @@ function read(name: string): Row[] {
 }
 
 /* Each file of rows/ has a line here. */
-const kinds: Kinds = { ...steps }
+const kinds: Kinds = { ...steps, ...closedForms }
 
 export const questions: Question[] = Object.entries(kinds).flatMap(([kind, { file, ask, names }]) =>
   read(file)

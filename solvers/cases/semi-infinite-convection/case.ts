@@ -1,23 +1,26 @@
 import { defineCase, type Resolved } from '../../case.ts'
-import { film, initialTemperature, solid } from '../../fields.ts'
+import type { Issue } from '../../errors.ts'
+import { film, imposedHeatFlux, initialTemperature, solid } from '../../fields.ts'
 import { filmWarnings } from '../../film.ts'
 import { changeHasArrived, penetrationDepth } from '../../half-space-reach.ts'
+import type { OutputName } from '../../outputs.ts'
 import { resolveSolid } from '../../solid.ts'
 import { solve, type HalfSpaceInput } from './solve.ts'
 
 type HalfSpaceResolved = HalfSpaceInput & Resolved
 
-const fields = { ...solid, initialTemperature, ...film }
+const fields = { ...solid, initialTemperature, ...film, imposedHeatFlux: imposedHeatFlux.optional() }
 
 export default defineCase<typeof fields, HalfSpaceResolved>({
   id: 'semi-infinite-convection',
   title: 'Half space, convection at the surface',
   summary: 'A body too deep for its back to be felt meets a fluid at another temperature.',
   notes:
-    'For ground, thick walls and the first minutes or hours of any body. It holds while the far side has felt nothing: numbers.penetrationDepth is where 1 % of a surface step has arrived at the last time, and the body must be deeper. A film coefficient of 0 leaves the body as it is.',
+    'For ground, thick walls and the first minutes or hours of any body. It holds while the far side has felt nothing: numbers.penetrationDepth is where 1 % of a surface step has arrived at the last time, and the body must be deeper. A film coefficient of 0 leaves the body as it is. Sun, radiation or friction absorbed at the surface is imposedHeatFlux: the body then heads for ambientTemperature + imposedHeatFlux/filmCoefficient, which the fractions refer to.',
   formula: [
     '\\frac{T - T_i}{T_a - T_i} = e^{-\\eta^2} \\left[\\operatorname{erfcx}(\\eta) - \\operatorname{erfcx}(\\eta + \\beta)\\right]',
     '\\eta = \\frac{x}{2\\,(at)^{1/2}}, \\qquad \\beta = \\frac{h\\,(at)^{1/2}}{k}, \\qquad \\operatorname{erfcx}(s) = e^{s^2} \\operatorname{erfc}(s)',
+    'q = h\\,(T_a - T_i)\\,e^{-\\eta^2} \\operatorname{erfcx}(\\eta + \\beta), \\qquad \\text{with a flux } q_0 \\text{ absorbed: } T_a + q_0/h \\text{ for } T_a',
   ],
   sources: ['H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, section 2.7'],
   family: 'half-space',
@@ -36,7 +39,8 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
   absentOutputs: {
     meanTemperature: 'The body has no end, so its mean stays the initial temperature.',
     heatFraction: 'The heat that the body takes up in all is infinite.',
-    steadyTemperature: 'The body ends at the ambient temperature, after infinite time.',
+    steadyTemperature:
+      'The body ends at the ambient temperature, or imposedHeatFlux/filmCoefficient above it, after infinite time.',
     timeConstant: 'A body without end has no time constant.',
   },
   weight: 1,
@@ -66,13 +70,30 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
         outputs: ['temperature', 'heatFlux', 'surfaceHeatFlux', 'heatGained', 'remainingFraction', 'completedFraction'],
       },
     },
+    {
+      title: 'A dark wall in the sun, all outputs',
+      input: {
+        conductivity: 1.4,
+        density: 2200,
+        specificHeat: 920,
+        filmCoefficient: 18,
+        imposedHeatFlux: 550,
+        initialTemperature: 16,
+        ambientTemperature: 24,
+        depths: [0, 0.1],
+        times: [1800, 14400],
+        outputs: ['temperature', 'heatFlux', 'surfaceHeatFlux', 'heatGained', 'remainingFraction', 'completedFraction'],
+      },
+    },
   ],
   resolve(input, refuse): HalfSpaceResolved {
     const body = resolveSolid(input, refuse)
-    const { filmCoefficient, initialTemperature, ambientTemperature, times, outputs } = input
+    const { filmCoefficient, imposedHeatFlux, initialTemperature, ambientTemperature, times, outputs } = input
+    if (filmCoefficient === 0 && imposedHeatFlux) refuseFractions(outputs, refuse)
     return {
       ...body!,
       filmCoefficient,
+      ...(imposedHeatFlux === undefined ? {} : { imposedHeatFlux }),
       initialTemperature,
       ambientTemperature,
       depths: input.depths ?? [],
@@ -85,3 +106,13 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
   checks: (input) => [changeHasArrived(input)],
   warnings: (input) => filmWarnings(input.filmCoefficient),
 })
+
+/** Without a film a flux heats for ever: there is no end state, and no share of it. */
+function refuseFractions(outputs: readonly OutputName[], refuse: (issue: Issue) => void): void {
+  outputs.forEach((name, i) => {
+    if (name !== 'remainingFraction' && name !== 'completedFraction') return
+    const detail = `"${name}": with a film coefficient of 0 a flux heats the body without end.`
+    const accepted = 'temperature, heatFlux, surfaceHeatFlux, heatGained'
+    refuse({ pointer: `#/outputs/${i}`, code: 'output-not-defined', detail, accepted })
+  })
+}

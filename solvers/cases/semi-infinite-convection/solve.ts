@@ -1,6 +1,8 @@
+import { fieldOutputs, grid, history } from '../../field-outputs.ts'
 import {
   completed,
   completedError,
+  completedPerFilm,
   ENERGY_ERROR,
   energyFraction,
   fluxError,
@@ -8,7 +10,7 @@ import {
   remaining,
   REMAINING_ERROR,
 } from '../../math/convective-half-space.ts'
-import { EPS, TINY } from '../../math/rounding.ts'
+import { EPS, type Estimate, TINY } from '../../math/rounding.ts'
 import type { OutputName } from '../../outputs.ts'
 import type { Solution } from '../../solution.ts'
 import { exactly, scaled, type StepResponse, stepOutputs, untouched } from '../../step-response.ts'
@@ -17,6 +19,8 @@ export interface HalfSpaceInput {
   conductivity: number
   diffusivity: number
   filmCoefficient: number
+  /** Absorbed at the face beside what the film brings; absent where there is none. */
+  imposedHeatFlux?: number
   initialTemperature: number
   ambientTemperature: number
   depths: readonly number[]
@@ -25,16 +29,18 @@ export interface HalfSpaceInput {
 }
 
 /**
- * Half space at one temperature whose surface meets a fluid at another from time 0 on.
+ * Half space at one temperature whose surface meets a fluid at another from time 0 on, and may absorb a heat flux.
  *
  *   T = Tᵢ + (Tₐ − Tᵢ)·e^(−η²)·[erfcx(η) − erfcx(η + β)],   η = x/(2√(at)),   β = h√(at)/k
  *   q = h(Tₐ − Tᵢ)·e^(−η²)·erfcx(η + β),   Q = h(Tₐ − Tᵢ)t·[erfcx(β) − 1 + 2β/√π]/β²
+ *   with a flux q₀ absorbed: Tₐ + q₀/h for Tₐ, and no division by h
  *
  * Shapes    depths: n;  times: m;  grids have m rows of n.
  * Units     SI, temperatures in °C; heat per m2.
- * Domain    k, a > 0;  h ≥ 0;  depth ≥ 0;  t ≥ 0.
- * Accuracy  temperatures 1e-12·|Tₐ − Tᵢ| beside the rounding of inputs and result; fractions, fluxes and heats
- *           relative (70 + 17η²)ε with η the argument of e^(−η²). Each output carries its bound.
+ * Domain    k, a > 0;  h ≥ 0;  depth ≥ 0;  t ≥ 0;  q₀ of any sign.
+ * Accuracy  temperatures 1e-12·(|Tₐ − Tᵢ| + |q₀|·min(1/h, 2√(at/π)/k)) beside the rounding of inputs and result;
+ *           fractions, fluxes and heats relative (70 + 17η²)ε with η the argument of e^(−η²), the latter two of what
+ *           either drive alone causes. Each output carries its bound.
  * Errors    none: the input is resolved. Never NaN or Infinity.
  * Source    H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, §2.7, in scaled functions.
  */
@@ -42,6 +48,7 @@ export function solve(input: HalfSpaceInput): Solution {
   const { initialTemperature, ambientTemperature, times, depths, outputs } = input
   const step = { times, places: depths.length, outputs, initial: initialTemperature, drive: ambientTemperature }
   const response = input.filmCoefficient === 0 ? untouched : responseOf(input)
+  if (input.imposedHeatFlux) return withFlux(input, input.imposedHeatFlux, response)
   return { ...stepOutputs(step, response), terms: 0, scale: Math.abs(ambientTemperature - initialTemperature) }
 }
 
@@ -75,4 +82,50 @@ function responseOf(input: HalfSpaceInput): StepResponse {
       return { value, error: value * (ENERGY_ERROR + 6 * EPS), method: 'closed-form' }
     },
   }
+}
+
+/** Film and absorbed flux together: the fractions are the film's, the rest is the sum of the two. */
+function withFlux(input: HalfSpaceInput, q0: number, response: StepResponse): Solution {
+  const { conductivity: k, diffusivity: a, filmCoefficient: h, times, depths, outputs } = input
+  const { initialTemperature: initial, ambientTemperature: ambient } = input
+  const roots = times.map((t) => Math.sqrt(a) * Math.sqrt(t))
+  const eta = (i: number, j: number) => depths[j]! / (2 * roots[i]!)
+  const beta = (i: number) => (h / k) * roots[i]!
+  const step = ambient - initial
+  // What a film brings from a difference that has the rounding of both temperatures, and the flux beside it.
+  const drive = { value: h * step + q0, error: EPS * (h * (Math.abs(initial) + Math.abs(ambient)) + 2 * Math.abs(q0)) }
+  const driven = (share: number, error: number): Estimate => {
+    const size = (h * Math.abs(step) + Math.abs(q0)) * (error + 8 * EPS * share)
+    return { value: drive.value * share, error: size + drive.error * share + TINY, method: 'closed-form' }
+  }
+  const flux = (i: number, at: number): Estimate => {
+    const share = times[i] === 0 ? (at === 0 ? 1 : 0) : fluxFraction(at, beta(i))
+    return driven(share, times[i] === 0 ? 0 : fluxError(at) * share)
+  }
+  const rise = (i: number, j: number): Estimate => {
+    if (times[i] === 0) return exactly(0)
+    const relative = completedError(eta(i, j))
+    const film = completed(eta(i, j), beta(i))
+    const absorbed = (q0 / k) * roots[i]! * completedPerFilm(eta(i, j), beta(i))
+    const error = Math.abs(step) * film * relative + Math.abs(absorbed) * (relative + 8 * EPS)
+    const inputs = EPS * (Math.abs(initial) + Math.abs(ambient)) * film
+    return { value: step * film + absorbed, error: error + inputs + TINY, method: 'closed-form' }
+  }
+  const fields = {
+    temperature: grid((i, j) => {
+      const { value, error, method } = rise(i, j)
+      return { value: initial + value, error: error + EPS * Math.abs(initial), method }
+    }),
+    heatFlux: grid((i, j) => flux(i, times[i] === 0 ? depths[j]! : eta(i, j))),
+    surfaceHeatFlux: history((i) => flux(i, 0)),
+    heatGained: history((i) => {
+      const share = times[i]! * energyFraction(beta(i))
+      return driven(share, share * (ENERGY_ERROR + 6 * EPS))
+    }),
+    completedFraction: grid((i, j) => response.completed(i, j), 'relative'),
+    remainingFraction: grid((i, j) => response.remaining(i, j), 'relative'),
+  }
+  const widest = roots.reduce((most, root) => Math.max(most, (1.1283791670955126 * root) / k), 0)
+  const scale = Math.abs(step) + Math.abs(q0) * Math.min(h === 0 ? widest : 1 / h, widest)
+  return { ...fieldOutputs({ times, places: depths.length, outputs }, fields), terms: 0, scale }
 }
