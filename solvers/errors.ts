@@ -35,6 +35,14 @@ export const domainCodes = {
     title: 'Fields exclude each other',
     text: 'The same property was given in two ways, or two fields were given that cannot stand together. Neither is preferred silently, consistent or not.',
   },
+  'unit-not-accepted': {
+    title: 'A unit is not accepted here',
+    text: 'Each quantity takes the UCUM codes listed for it. A scale with a zero of its own (Cel, [degF]) stands alone, never in a product, and a difference of temperatures takes K or [degR]. Nothing is converted by a guess.',
+  },
+  'material-unknown': {
+    title: 'There is no such material',
+    text: 'The id names no material of the catalogue and none that this call can use. Materials of an account are known only where a key says which account it is.',
+  },
   'depth-outside-body': {
     title: 'A depth lies outside the body',
     text: 'The body ends before this depth, so there is no temperature to give. Nothing is moved to the edge.',
@@ -46,6 +54,10 @@ export const domainCodes = {
   'output-not-defined': {
     title: 'The case has no such output',
     text: 'An output that a case lacks, or that does not exist for the given input, is refused and never answered as null.',
+  },
+  'target-at-asymptote': {
+    title: 'The target is where the value ends',
+    text: 'The value tends to the target and comes nearer to it for ever, so no time can be told at which it is reached. Ask for a target that differs from the end by what matters to you.',
   },
   'singular-at-time-zero': {
     title: 'The output diverges at time zero',

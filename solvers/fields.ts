@@ -8,8 +8,16 @@ export const MAX_TIMES = 100_000
 
 const temperature = { unit: 'Cel', min: -273.15, max: 1e4, typical: [-40, 100] } as const
 
-/** A solid by its properties: a conductivity and exactly one statement of its heat capacity. */
+/** A solid: by a material, or by its properties, a conductivity and exactly one statement of its heat capacity. */
 export const solid = {
+  material: z.string().min(1).max(60).optional().meta({
+    title: 'Material',
+    description:
+      'Material: the id of one of the catalogue, or of one of the account, in place of all properties. The answer says what was used.',
+    'x-accepted': 'the id of a material',
+    'x-hint': 'an id such as concrete-dense-2400, in place of the properties',
+    'x-material': true,
+  }),
   conductivity: quantity({
     symbol: 'k',
     unit: 'W/(m.K)',

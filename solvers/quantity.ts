@@ -1,5 +1,6 @@
 import { z } from 'zod'
 import { asNumberList } from './number-lists.ts'
+import { acceptedUnits } from './units.ts'
 import { figure } from './validate.ts'
 
 /** A physical quantity as a field: how it is named, what it may be and what it usually is. */
@@ -37,6 +38,7 @@ export function quantity(d: QuantityDescription) {
     description: [d.label, d.hint].filter(Boolean).join(': ') + `. Unit ${d.unit}; ${acceptedOf(d)}.`,
     'x-symbol': d.symbol,
     'x-ucum': d.unit,
+    'x-units': [...acceptedUnits(d.unit)],
     'x-accepted': acceptedOf(d),
     ...(d.hint ? { 'x-hint': d.hint } : {}),
     ...(d.zero ? { 'x-zero-or': d.min } : {}),
@@ -60,5 +62,5 @@ export function quantities(d: QuantityDescription, maximum: number) {
       ...(d.hint ? { 'x-hint': d.hint } : {}),
       ...(d.typical ? { 'x-typical': [...d.typical] } : {}),
     })
-  return asNumberList(schema, { element, min: d.min, max: d.max, most: maximum })
+  return asNumberList(schema, { element, unit: d.unit, min: d.min, max: d.max, most: maximum })
 }

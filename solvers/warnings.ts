@@ -16,9 +16,21 @@ export const warningCodes = {
     title: 'The lumped body reaches its target early',
     text: 'A body with one temperature changes faster than the real one: the time to a temperature errs early, the unsafe side when a core must be cooled or heated.',
   },
+  'material-confidence-low': {
+    title: 'The figures of the material are known roughly only',
+    text: 'The properties are of the right order, no more. Take those of your material, or reckon with the standard uncertainty that the text names.',
+  },
+  'moisture-state-unspecified': {
+    title: 'The moisture of the material is not stated',
+    text: 'The properties are for the moisture usual in use, or for none that was stated. Wet material conducts and stores more, dry material less.',
+  },
   'outside-typical-range': {
     title: 'A value is unusual',
     text: 'The value is allowed and solved exactly, but outside what is met in practice. A wrong unit is the common cause.',
+  },
+  'phase-change-crossed': {
+    title: 'The material would freeze or thaw',
+    text: 'A temperature lies beyond 0 degrees Celsius while the properties are those of the other side. The latent heat is left out, and the change comes too early.',
   },
 } as const
 

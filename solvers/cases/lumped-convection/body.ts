@@ -105,7 +105,8 @@ function byQuantities(input: BodyInput, refuse: Refuse): LumpedBody | undefined 
 function capacityOf(input: BodyInput, refuse: Refuse): Pick<LumpedBody, 'capacity' | 'echo'> | undefined {
   const { heatCapacity, volume } = input
   if (heatCapacity !== undefined) {
-    refuseGiven(input, ['volume', 'density', 'specificHeat', 'volumetricHeatCapacity'], 'beside heatCapacity', refuse)
+    const others = ['volume', 'material', 'density', 'specificHeat', 'volumetricHeatCapacity'] as const
+    refuseGiven(input, others, 'beside heatCapacity', refuse)
     return { capacity: heatCapacity, echo: { heatCapacity } }
   }
   if (volume === undefined) {
