@@ -89,7 +89,7 @@ export interface CaseDescription<Shape_ extends z.ZodRawShape, R extends Resolve
   depthsEndAt?: string & keyof Shape_
   /** The field with the temperature that the body is driven to; absent where no one field says it. */
   drive?: string & keyof Shape_
-  outputs: Partial<Record<OutputName, Partial<Pick<OutputDescription, 'unit' | 'shape'>>>>
+  outputs: Partial<Record<OutputName, Partial<Pick<OutputDescription, 'unit' | 'shape' | 'text'>>>>
   /** Outputs that a reader would expect and the case cannot have, each with the reason. */
   absentOutputs: Partial<Record<OutputName, string>>
   /** Priced points per number, and once per call. */
@@ -104,6 +104,11 @@ export interface CaseDescription<Shape_ extends z.ZodRawShape, R extends Resolve
   solve(input: R): Solution
   /** The input as echoed in the answer, where it is not what the solver reads. */
   echo?(input: R): Record<string, unknown>
+  /**
+   * The temperature that the body ends at there, or null where it has none: it grows without end, or goes on with a
+   * cycle. Left out, it is the steady temperature if that is an output, else the field that drives the body.
+   */
+  end?(input: R, place: number | Point | undefined): number | null
   numbers(input: R): Numbers
   checks(input: R): Check[]
   warnings(input: R): Warning[]

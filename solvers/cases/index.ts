@@ -1,6 +1,9 @@
 import type { Case } from '../case.ts'
 import lumpedConvection from './lumped-convection/case.ts'
+import semiInfiniteContact from './semi-infinite-contact/case.ts'
 import semiInfiniteConvection from './semi-infinite-convection/case.ts'
+import semiInfinitePeriodicAmbient from './semi-infinite-periodic-ambient/case.ts'
+import semiInfinitePeriodicSurface from './semi-infinite-periodic-surface/case.ts'
 import semiInfiniteSurfaceFlux from './semi-infinite-surface-flux/case.ts'
 import semiInfiniteSurfaceRamp from './semi-infinite-surface-ramp/case.ts'
 import semiInfiniteSurfaceTemperature from './semi-infinite-surface-temperature/case.ts'
@@ -14,6 +17,9 @@ export const cases: readonly Case[] = [
   semiInfiniteSurfaceRamp,
   semiInfiniteSurfaceFlux,
   semiInfiniteConvection,
+  semiInfinitePeriodicSurface,
+  semiInfinitePeriodicAmbient,
+  semiInfiniteContact,
   slabConvection,
   slabSurfaceTemperature,
 ]

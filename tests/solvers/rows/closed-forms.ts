@@ -7,6 +7,30 @@ const drivenNames = {
   energy_J_m2: 'heatGained',
 } as const
 
+const cycleNames = {
+  temperature_C: 'temperature',
+  amplitude_K: 'amplitude',
+  time_lag_s: 'timeLag',
+  heat_flux_W_m2: 'heatFlux',
+  damping_depth_m: 'dampingDepth',
+} as const
+
+const cycleOf = (i: Record<string, number>, of: 'surface' | 'ambient') => ({
+  cycleMean: i[`${of}_mean_C`],
+  amplitude: i[`${of}_amplitude_K`],
+  period: i['period_s'],
+  timeOfMaximum: i['time_of_maximum_s'],
+  depths: [i['position_m']],
+  times: [i['time_s']],
+})
+
+const contactBody = (i: Record<string, number>, n: 1 | 2) => ({
+  conductivity: i[`conductivity_${n}_W_mK`],
+  density: i[`density_${n}_kg_m3`],
+  specificHeat: i[`specific_heat_${n}_J_kgK`],
+  initialTemperature: i[`initial_${n}_C`],
+})
+
 export const closedForms: Kinds = {
   A3: {
     file: 'A_semi_infinite',
@@ -22,6 +46,19 @@ export const closedForms: Kinds = {
     }),
     names: drivenNames,
   },
+  A4: {
+    file: 'A_semi_infinite',
+    ask: (i) => ({ caseId: 'semi-infinite-periodic-surface', body: { ...solidOf(i), ...cycleOf(i, 'surface') } }),
+    names: cycleNames,
+  },
+  A5: {
+    file: 'A_semi_infinite',
+    ask: (i) => ({
+      caseId: 'semi-infinite-periodic-ambient',
+      body: { ...solidOf(i), filmCoefficient: i['film_W_m2K'], ...cycleOf(i, 'ambient') },
+    }),
+    names: cycleNames,
+  },
   A6: {
     file: 'A_semi_infinite',
     ask: (i) => ({
@@ -35,6 +72,25 @@ export const closedForms: Kinds = {
       },
     }),
     names: drivenNames,
+  },
+  A7: {
+    file: 'A_semi_infinite',
+    ask: (i) => ({
+      caseId: 'semi-infinite-contact',
+      // The row counts from the other body, at x below 0, to the own.
+      body: {
+        ...contactBody(i, 2),
+        other: contactBody(i, 1),
+        depths: [i['position_m']],
+        times: [i['time_s']],
+      },
+    }),
+    names: {
+      contact_temperature_C: 'contactTemperature',
+      temperature_C: 'temperature',
+      interface_heat_flux_W_m2: 'surfaceHeatFlux',
+      energy_J_m2: 'heatGained',
+    },
   },
   A8: {
     file: 'A_semi_infinite',

@@ -1,0 +1,210 @@
+import { z } from 'zod'
+import { type Check, defineCase, type Resolved } from '../../case.ts'
+import type { Issue } from '../../errors.ts'
+import { initialTemperature, solid } from '../../fields.ts'
+import type { OutputName } from '../../outputs.ts'
+import { quantity } from '../../quantity.ts'
+import { refuseFluxAtStep } from '../../singular.ts'
+import { resolveSolid, type Solid } from '../../solid.ts'
+import type { Warning } from '../../warnings.ts'
+import { solve, type ContactInput } from './solve.ts'
+
+interface ContactResolved extends ContactInput, Resolved {
+  thickness?: number
+  other: Solid & { initialTemperature: number; thickness?: number }
+  depths: number[]
+  times: number[]
+  outputs: OutputName[]
+}
+
+const body = {
+  ...solid,
+  initialTemperature,
+  thickness: quantity({
+    symbol: 'd',
+    unit: 'm',
+    label: 'Thickness',
+    min: 1e-9,
+    max: 1e5,
+    typical: [0.001, 10],
+    hint: 'of this body, to check how long the answer holds; changes no number',
+  }).optional(),
+}
+
+const fields = {
+  ...body,
+  other: z.strictObject(body).meta({
+    title: 'Other body',
+    description: 'Other body: the solid that is touched, with its initial temperature; it lies at depths below 0.',
+    'x-accepted': 'a solid with its initialTemperature',
+    'x-hint': 'what is touched; lies at depths below 0',
+  }),
+  contactConductance: quantity({
+    symbol: 'hₖ',
+    unit: 'W/(m2.K)',
+    label: 'Contact conductance',
+    min: 1e-9,
+    max: 1e12,
+    typical: [100, 1e5],
+    hint: 'left out: perfect contact; skin 500 to 2000, pressed metal 1e3 to 1e4',
+  }).optional(),
+}
+
+export default defineCase<typeof fields, ContactResolved>({
+  id: 'semi-infinite-contact',
+  title: 'Two half spaces in contact',
+  summary: 'Two bodies at their own temperatures touch, both too deep for their backs to be felt.',
+  notes:
+    'For moulds, floors under bare feet, hot surfaces that are touched and poured layers. In perfect contact both faces are at once at contactTemperature and stay there, until a thin body feels its back: give thickness, and the answer checks it (1 % of echo at a·t/L² = 0.30). A contactConductance holds the faces apart and lowers what the colder one feels, so the values without it always come with the answer: contactTemperature, and idealTemperature beside temperature. Depths from 0 on lie in the own body, below 0 in the other; heat fluxes are positive from the other body to the own.',
+  formula: [
+    'T = T_i + (T_k - T_i)\\,\\operatorname{erfc}(\\eta), \\qquad T_k = \\frac{b_1 T_1 + b_2 T_2}{b_1 + b_2}, \\qquad \\eta = \\frac{|x|}{2\\,(at)^{1/2}}, \\qquad b = (k\\rho c)^{1/2}',
+    '\\text{with a conductance:}\\quad T = T_i + (T_k - T_i)\\,e^{-\\eta^2} \\left[\\operatorname{erfcx}(\\eta) - \\operatorname{erfcx}(\\eta + \\gamma)\\right], \\qquad \\gamma = h_k\\,t^{1/2} \\left(\\frac{1}{b_1} + \\frac{1}{b_2}\\right)',
+    'q = h_k\\,(T_2 - T_1)\\,e^{-\\eta^2} \\operatorname{erfcx}(\\eta + \\gamma)',
+  ],
+  sources: ['H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, section 2.15'],
+  family: 'half-space',
+  sketch: { body: 'two-bodies', boundary: 'contact' },
+  fields,
+  places: 'depths',
+  signedDepths: true,
+  outputs: {
+    temperature: {},
+    idealTemperature: {},
+    heatFlux: { text: 'Local heat flux, positive towards greater depths: from the other body to the own.' },
+    surfaceHeatFlux: {},
+    heatGained: {},
+    remainingFraction: {},
+    completedFraction: {},
+    contactTemperature: {},
+    surfaceTemperature: {},
+    otherSurfaceTemperature: {},
+  },
+  absentOutputs: {
+    meanTemperature: 'The bodies have no end, so their means stay the initial temperatures.',
+    heatFraction: 'The heat that a body takes up in all is infinite.',
+    steadyTemperature: 'Both bodies end at contactTemperature, after infinite time.',
+    timeConstant: 'A body without end has no time constant.',
+  },
+  weight: 1,
+  setUp: 0,
+  cautions: ['contact', 'general'],
+  example: {
+    conductivity: 0.37,
+    volumetricHeatCapacity: 3.4e6,
+    initialTemperature: 33,
+    other: { conductivity: 1.3, density: 2200, specificHeat: 850, initialTemperature: 60 },
+    contactConductance: 1500,
+    depths: [-0.002, 0, 0.0002],
+    times: [0.5, 5],
+  },
+  variants: [
+    {
+      title: 'A casting on its mould in perfect contact, all outputs',
+      input: {
+        conductivity: 0.9,
+        diffusivity: 5e-7,
+        initialTemperature: 25,
+        other: { conductivity: 30, density: 7200, specificHeat: 700, initialTemperature: 900 },
+        depths: [-0.01, 0, 0.005],
+        times: [10, 300],
+        outputs: [
+          'temperature',
+          'idealTemperature',
+          'heatFlux',
+          'surfaceHeatFlux',
+          'heatGained',
+          'remainingFraction',
+          'completedFraction',
+          'contactTemperature',
+          'surfaceTemperature',
+          'otherSurfaceTemperature',
+        ],
+      },
+    },
+    {
+      title: 'A bare foot on a thin board, checked for its back',
+      input: {
+        conductivity: 0.4,
+        volumetricHeatCapacity: 3.5e6,
+        initialTemperature: 32,
+        other: { conductivity: 0.16, diffusivity: 1.4e-7, initialTemperature: 19, thickness: 0.014 },
+        contactConductance: 800,
+        times: [60],
+        outputs: ['surfaceTemperature', 'otherSurfaceTemperature', 'surfaceHeatFlux'],
+      },
+    },
+  ],
+  resolve(input, refuse): ContactResolved {
+    const { other, contactConductance, initialTemperature, times } = input
+    const own = resolveSolid(input, refuse)
+    const touched = resolveSolid(other, (issue) => refuse(inside('other', issue)))
+    if (contactConductance === undefined) refuseFluxAtStep(input, (depth) => depth === 0, refuse)
+    return {
+      ...own!,
+      initialTemperature,
+      ...given('thickness', input.thickness),
+      other: { ...touched!, initialTemperature: other.initialTemperature, ...given('thickness', other.thickness) },
+      ...given('contactConductance', contactConductance),
+      depths: input.depths ?? [],
+      times,
+      outputs: contactConductance === undefined ? input.outputs : withIdeal(input.outputs),
+    }
+  },
+  solve,
+  numbers(input) {
+    const until = thinBodies(input).map(({ until }) => until)
+    return until.length === 0 ? {} : { validUntil: Math.min(...until) }
+  },
+  checks: (input) => thinBodies(input).map((thin) => echoCheck(input, thin)),
+  warnings: (input) => thinBodies(input).flatMap((thin) => thinWarnings(input, thin)),
+})
+
+const given = <K extends string>(name: K, value: number | undefined) =>
+  (value === undefined ? {} : { [name]: value }) as Partial<Record<K, number>>
+
+function inside(name: string, issue: Issue): Issue {
+  return { ...issue, pointer: issue.pointer.replace('#/', `#/${name}/`) }
+}
+
+/** A resistance is never answered alone: what there would be without it comes first. */
+function withIdeal(outputs: readonly OutputName[]): OutputName[] {
+  const ideal: OutputName[] = outputs.includes('temperature')
+    ? ['contactTemperature', 'idealTemperature']
+    : ['contactTemperature']
+  return [...new Set([...ideal, ...outputs])]
+}
+
+interface Thin {
+  id: 'own-body-deep-enough' | 'other-body-deep-enough'
+  name: string
+  /** Time at which the echo of the far face is 1 %. */
+  until: number
+}
+
+function thinBodies({ thickness, diffusivity, other }: ContactResolved): Thin[] {
+  const untilOf = (length: number, a: number) => (0.3 * length * length) / a
+  const found: Thin[] = []
+  if (thickness !== undefined)
+    found.push({ id: 'own-body-deep-enough', name: 'own', until: untilOf(thickness, diffusivity) })
+  if (other.thickness !== undefined)
+    found.push({
+      id: 'other-body-deep-enough',
+      name: 'other',
+      until: untilOf(other.thickness, other.diffusivity),
+    })
+  return found
+}
+
+const lastOf = (times: readonly number[]) => times.reduce((most, t) => Math.max(most, t), 0)
+
+function echoCheck({ times }: ContactResolved, { id, name, until }: Thin): Check {
+  const value = lastOf(times)
+  const text = `At the last time the ${name} body feels less than 1 % of an echo from its far face.`
+  return { id, holds: value <= until, value, limit: until, text }
+}
+
+function thinWarnings({ times }: ContactResolved, { name, until }: Thin): Warning[] {
+  if (lastOf(times) <= until) return []
+  const text = `The ${name} body feels its far face after ${until} s; later answers are those of a deeper one. A heated or backed surface keeps rising.`
+  return [{ code: 'body-too-thin', text, value: until }]
+}
