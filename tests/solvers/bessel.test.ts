@@ -49,15 +49,15 @@ const I_ERROR = 2e-15 / EPS
 const K_ERROR = 3e-15 / EPS
 
 describe('the decimal side', () => {
-  it('has the product that the two kinds must have, to 60 digits, on both sides of its own change of method', () => {
-    for (const z of [at(1e-6, 0.3), at(1, -1), at(40, 1.2), at(59.9, -1.3), at(60.1, 1.3), at(1e9, 0.4)]) {
+  it('has the product that the two kinds must have, to 30 digits, on both sides of its own change of method', () => {
+    for (const z of [at(1e-6, 0.3), at(1, -1), at(20, 1.2), at(39.9, -1.3), at(40.1, 1.3), at(1e9, 0.4)]) {
       const exactZ = exact(z.re, z.im)
       const { i0, i1, k0, k1 } = exactBessel(exactZ)
       const one = multiply(exactZ, add(multiply(i0, k1), multiply(i1, k0)))
-      expect(Number(size(add(one, exact(-1, 0)))), `${z.re} ${z.im}`).toBeLessThan(1e-45)
+      expect(Number(size(add(one, exact(-1, 0)))), `${z.re} ${z.im}`).toBeLessThan(1e-32)
     }
-    const { k0, k1 } = exactBessel(exact(59.99, 0))
-    expect(Number(divide(k0, k1).re)).toBeCloseTo(1 - 0.5 / 59.99 + 0.375 / 59.99 ** 2, 5)
+    const { k0, k1 } = exactBessel(exact(39.99, 0))
+    expect(Number(divide(k0, k1).re)).toBeCloseTo(1 - 0.5 / 39.99 + 0.375 / 39.99 ** 2, 4)
   })
 })
 

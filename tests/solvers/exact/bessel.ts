@@ -1,11 +1,11 @@
 import { D as Sixty } from './functions.ts'
 
 /*
- * Modified Bessel functions of complex argument in decimal arithmetic: power series up to |z| = 60 with digits enough for their
+ * Modified Bessel functions of complex argument in decimal arithmetic: power series up to |z| = 40 with digits enough for their
  * cancellation, beyond it the asymptotic series.
  */
-const D = Sixty.clone({ precision: 130 })
-type D = Sixty
+export const D = Sixty.clone({ precision: 75 })
+export type D = Sixty
 
 export interface ExactComplex {
   re: D
@@ -16,10 +16,10 @@ const EULER = new D(
   '0.5772156649015328606065120900824024310421593359399235988057672348848677267776646709369470632917467495146314472498070824809605',
 )
 const PI = D.acos(-1)
-const real = (x: number | string | D): ExactComplex => ({ re: new D(x), im: new D(0) })
+export const real = (x: number | string | D): ExactComplex => ({ re: new D(x), im: new D(0) })
 export const exact = (re: number, im: number): ExactComplex => ({ re: new D(re), im: new D(im) })
 export const add = (a: ExactComplex, b: ExactComplex): ExactComplex => ({ re: a.re.plus(b.re), im: a.im.plus(b.im) })
-const grow = (factor: D, a: ExactComplex): ExactComplex => ({ re: factor.mul(a.re), im: factor.mul(a.im) })
+export const grow = (factor: D, a: ExactComplex): ExactComplex => ({ re: factor.mul(a.re), im: factor.mul(a.im) })
 export const multiply = (a: ExactComplex, b: ExactComplex): ExactComplex => ({
   re: a.re.mul(b.re).minus(a.im.mul(b.im)),
   im: a.re.mul(b.im).plus(a.im.mul(b.re)),
@@ -28,11 +28,11 @@ const square = (a: ExactComplex) => a.re.mul(a.re).plus(a.im.mul(a.im))
 export const divide = (a: ExactComplex, b: ExactComplex): ExactComplex =>
   grow(new D(1).div(square(b)), multiply(a, { re: b.re, im: b.im.neg() }))
 export const size = (a: ExactComplex): D => square(a).sqrt()
-const exp = (a: ExactComplex): ExactComplex => grow(a.re.exp(), { re: a.im.cos(), im: a.im.sin() })
-const negative = (a: ExactComplex) => grow(new D(-1), a)
+export const exp = (a: ExactComplex): ExactComplex => grow(a.re.exp(), { re: a.im.cos(), im: a.im.sin() })
+export const negative = (a: ExactComplex) => grow(new D(-1), a)
 const angle = (a: ExactComplex) => D.atan2(a.im, a.re)
 const log = (a: ExactComplex): ExactComplex => ({ re: size(a).ln(), im: angle(a) })
-const root = (a: ExactComplex) => {
+export const root = (a: ExactComplex) => {
   const half = angle(a).div(2)
   return grow(size(a).sqrt(), { re: half.cos(), im: half.sin() })
 }
@@ -44,9 +44,9 @@ export interface ExactBessel {
   k1: ExactComplex
 }
 
-/** I₀, I₁ times e^(−z) and K₀, K₁ times e^z, to 40 digits. */
+/** I₀, I₁ times e^(−z) and K₀, K₁ times e^z, to 30 digits. */
 export function exactBessel(z: ExactComplex): ExactBessel {
-  return size(z).lt(60) ? bySeries(z) : byAsymptotics(z)
+  return size(z).lt(40) ? bySeries(z) : byAsymptotics(z)
 }
 
 function bySeries(z: ExactComplex): ExactBessel {
@@ -70,7 +70,7 @@ function bySeries(z: ExactComplex): ExactBessel {
     k0 = add(k0, multiply(term, add(real(harmonic), negative(logarithm))))
     const bracket = add(logarithm, real(harmonic.plus(next.div(2)).neg()))
     k1 = add(k1, grow(next, multiply(term, bracket)))
-    if (size(term).lt('1e-120')) break
+    if (size(term).lt('1e-70')) break
   }
   const up = exp(z)
   const down = exp(negative(z))
@@ -97,7 +97,7 @@ function byAsymptotics(z: ExactComplex): ExactBessel {
       least = size(term)
       plus = add(plus, term)
       minus = k % 2 === 0 ? add(minus, term) : add(minus, negative(term))
-      if (least.lt('1e-70')) break
+      if (least.lt('1e-40')) break
     }
     return { plus, minus }
   })
