@@ -1,0 +1,108 @@
+import { z } from 'zod'
+import type { Issue } from './errors.ts'
+import { initialTemperature, MAX_POSITIONS } from './fields.ts'
+import { quantities } from './quantity.ts'
+
+/** Temperatures along a body before the change, linear between the depths; the same depth twice is a jump. */
+export interface InitialProfile {
+  depths: number[]
+  temperatures: number[]
+}
+
+const points = { max: 1e5, min: 0, unit: 'm' }
+
+const profileField = z
+  .strictObject({
+    depths: quantities(
+      { ...points, symbol: 'x', label: 'Depths of the profile', hint: 'from 0 to the thickness' },
+      MAX_POSITIONS,
+    ),
+    temperatures: quantities(
+      {
+        unit: 'Cel',
+        min: -273.15,
+        max: 1e4,
+        typical: [-40, 100],
+        symbol: 'T',
+        label: 'Temperatures of the profile',
+        hint: 'one for each depth',
+      },
+      MAX_POSITIONS,
+    ),
+  })
+  .meta({
+    title: 'Initial profile',
+    description:
+      'Initial profile: depths and temperatures at time 0, linear between; from 0 to the thickness, a jump as the same depth twice. In place of initialTemperature.',
+    'x-accepted': 'depths and temperatures of equal count, from depth 0 to the thickness, a depth at most twice',
+    'x-hint': 'a start that is not uniform, as after a change of film',
+  })
+
+/** For a case that always starts from a profile. */
+export const initialProfile = profileField
+
+/** For a case that starts from one temperature or from a profile. */
+export const start = {
+  initialTemperature: initialTemperature.optional(),
+  initialProfile: profileField.optional(),
+}
+
+/** The start of a body: one temperature, or a profile. */
+export type Start = { initialTemperature: number } | { initialProfile: InitialProfile }
+
+export function resolveStart(
+  input: { initialTemperature?: number | undefined; initialProfile?: InitialProfile | undefined },
+  thickness: number,
+  refuse: (issue: Issue) => void,
+): Start {
+  const { initialTemperature, initialProfile } = input
+  const accepted = 'exactly one of initialTemperature and initialProfile'
+  if (initialProfile && initialTemperature !== undefined) {
+    const detail = 'The start is given twice: by initialTemperature and by initialProfile.'
+    refuse({ pointer: '#/initialProfile', code: 'conflicting-fields', detail, accepted })
+  } else if (!initialProfile && initialTemperature === undefined) {
+    const detail = 'The initial temperature of the body is missing.'
+    refuse({ pointer: '#/initialTemperature', code: 'missing-field', detail, accepted })
+  }
+  if (!initialProfile) return { initialTemperature: initialTemperature! }
+  refuseProfile(initialProfile, thickness, refuse)
+  return { initialProfile }
+}
+
+/** A profile must lie along the whole body, from face to face, and never turn back. */
+export function refuseProfile(
+  { depths, temperatures }: InitialProfile,
+  thickness: number,
+  refuse: (issue: Issue) => void,
+): void {
+  const at = (j: number) => `#/initialProfile/depths/${j}`
+  if (depths.length !== temperatures.length || depths.length < 2) {
+    const detail = `The profile has ${depths.length} depths and ${temperatures.length} temperatures.`
+    const accepted = 'as many temperatures as depths, at least 2'
+    refuse({ pointer: '#/initialProfile/temperatures', code: 'wrong-length', detail, accepted })
+  }
+  if (depths[0] !== 0) {
+    const detail = `The profile begins at ${depths[0]} m.`
+    refuse({ pointer: at(0), code: 'out-of-range', detail, accepted: '0 m, the left or exposed face' })
+  }
+  const last = depths.length - 1
+  if (depths[last] !== thickness) {
+    const detail = `The profile ends at ${depths[last]} m, the body at ${thickness} m.`
+    refuse({ pointer: at(last), code: 'out-of-range', detail, accepted: `${thickness} m, the thickness` })
+  }
+  for (let j = 1; j <= last; j++) {
+    if (depths[j]! < depths[j - 1]!) {
+      const detail = `This depth is ${depths[j]} m, the one before it ${depths[j - 1]} m.`
+      refuse({ pointer: at(j), code: 'out-of-range', detail, accepted: 'depths that do not fall' })
+    } else if (j > 1 && depths[j] === depths[j - 2]) {
+      const detail = `The depth ${depths[j]} m stands three times.`
+      refuse({ pointer: at(j), code: 'conflicting-fields', detail, accepted: 'a depth once, or twice for a jump' })
+    }
+  }
+}
+
+/** The profile of a start; a uniform one has the two faces. */
+export function profileOf(from: Start, thickness: number): InitialProfile {
+  if ('initialProfile' in from) return from.initialProfile
+  return { depths: [0, thickness], temperatures: [from.initialTemperature, from.initialTemperature] }
+}
