@@ -4,7 +4,7 @@ import { parseJson } from '../api/http/json.ts'
 import { Problem, type ProblemDetails, invalidInput, problemDetails } from '../api/problems.ts'
 import { cases } from '../solvers/cases/index.ts'
 import { DomainError } from '../solvers/errors.ts'
-import { caseOperations } from '../solvers/operations/index.ts'
+import { operationsOf } from '../solvers/operations/index.ts'
 import { parse } from '../solvers/validate.ts'
 import { type Line, linesOf } from './lines.ts'
 
@@ -60,7 +60,7 @@ function solveOne(raw: unknown): { points: number; answer: object } {
   const line = parse(lineSchema, raw)
   const asked = cases.find(({ id }) => id === line.case)
   if (!asked) throw new Problem('not-found', `There is no case "${line.case}".`)
-  const operation = caseOperations.find(({ id }) => id === line.operation)
+  const operation = operationsOf(asked).find(({ id }) => id === line.operation)
   if (!operation) throw new Problem('not-found', `There is no operation "${line.operation}" of ${asked.id}.`)
   const call = within('#/input', () => operation.prepare(asked, line.input, 'compact'))
   if (call.points > MAX_POINTS)

@@ -1,6 +1,6 @@
 import type { Case } from '../../solvers/case.ts'
 import { cases } from '../../solvers/cases/index.ts'
-import { type Call, type CaseOperation, caseOperations } from '../../solvers/operations/index.ts'
+import { type Call, type CaseOperation, operationsOf } from '../../solvers/operations/index.ts'
 import { caseOperationPath } from '../catalogue/describe.ts'
 import { parseJson } from '../http/json.ts'
 import { type Body, operation } from '../operation.ts'
@@ -25,7 +25,8 @@ const bodyOf = (c: Case, o: CaseOperation, limit: number): Body<PreparedCall> =>
   },
 })
 
-function metered(c: Case, o: CaseOperation) {
+function withKey(c: Case, o: CaseOperation) {
+  const free = o.price(c) === 'free'
   return operation({
     id: `${o.id}-${c.id}`,
     document: 'openapi',
@@ -33,9 +34,9 @@ function metered(c: Case, o: CaseOperation) {
     path: caseOperationPath(c.id, o.id),
     tag: 'Cases',
     summary: `${c.title}: ${o.title.toLowerCase()}`,
-    description: `${o.summary}\n\n${c.summary}\n\n${c.notes}\n\nPrice: ${priceOf(c)}.`,
+    description: `${o.summary}\n\n${c.summary}\n\n${c.notes}\n\nPrice: ${o.price(c)}.`,
     access: 'key',
-    metered: true,
+    metered: !free,
     body: bodyOf(c, o, BODY_LIMIT),
     status: 200,
     answer: answerOf(c, o),
@@ -43,6 +44,7 @@ function metered(c: Case, o: CaseOperation) {
     caseId: c.id,
     caseOperation: o.id,
     handle({ body, caller, call, deps }) {
+      if (free) return deps.compute.solve({ case: c.id, operation: o.id, ...body })
       if (body.call.points > MAX_POINTS)
         throw new Problem(
           'too-many-points',
@@ -53,7 +55,7 @@ function metered(c: Case, o: CaseOperation) {
   })
 }
 
-function unmetered(c: Case, o: CaseOperation) {
+function withoutKey(c: Case, o: CaseOperation) {
   return operation({
     id: `try-${o.id}-${c.id}`,
     document: 'portal',
@@ -82,12 +84,7 @@ function unmetered(c: Case, o: CaseOperation) {
   })
 }
 
-function priceOf(c: Case): string {
-  const setUp = c.setUp ? ` and ${c.setUp} a call` : ''
-  return `${c.weight} ${c.weight === 1 ? 'point' : 'points'} a number${setUp}, at least 10 a call`
-}
+const each = (make: typeof withKey) => cases.flatMap((c) => operationsOf(c).map((o) => make(c, o)))
 
-const each = (make: typeof metered) => cases.flatMap((c) => caseOperations.map((o) => make(c, o)))
-
-export const caseOperationList = each(metered)
-export const tryOperations = each(unmetered)
+export const caseOperationList = each(withKey)
+export const tryOperations = each(withoutKey)

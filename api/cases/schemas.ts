@@ -18,9 +18,11 @@ export function inputOf(c: Case, o: CaseOperation): z.ZodObject {
 /** The answer in full, or compact where the body asked for that. */
 export function answerOf(c: Case, o: CaseOperation): z.ZodType {
   const id = `${pascal(c.id)}${pascal(o.id)}Answer`
-  const known =
-    answers.get(id) ??
-    z.union([o.answer(c).meta({ id }), o.compactAnswer(c).meta({ id: id.replace(/Answer$/, 'CompactAnswer') })])
+  const known = answers.get(id) ?? eitherOf(id, o.answer(c), o.compactAnswer?.(c))
   answers.set(id, known)
   return known
+}
+
+function eitherOf(id: string, full: z.ZodType, compact: z.ZodType | undefined): z.ZodType {
+  return compact ? z.union([full.meta({ id }), compact.meta({ id: id.replace(/Answer$/, 'CompactAnswer') })]) : full
 }

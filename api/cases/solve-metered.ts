@@ -1,21 +1,17 @@
 import type { Call } from '../../solvers/operations/index.ts'
+import { chargeOf } from '../../solvers/operations/price.ts'
 import type { SolveTask } from '../compute/compute.ts'
 import type { Deps } from '../deps.ts'
 import type { RecordedCall } from '../http/record.ts'
 import type { KeyCaller, Reply } from '../operation.ts'
 import { Problem } from '../problems.ts'
-import { FLOOR } from './limits.ts'
 
 /** Numbers of a call so small that it is solved before it is charged: about a millisecond, no more than its checks. */
 const SMALL = 200
 
-export function priceOf(points: number): number {
-  return Math.max(FLOOR, Math.ceil(points))
-}
-
 /** Spends and solves. Whenever the process dies, the points of a call that was not answered come back. */
 export async function solveMetered(task: SolveTask, caller: KeyCaller, call: RecordedCall, deps: Deps): Promise<Reply> {
-  const points = priceOf(task.call.points)
+  const points = chargeOf(task.call.points)
   const { requestId } = call
   const { accountId, keyId } = caller
   const charge = { requestId, accountId, keyId, caseId: task.case, points }

@@ -1,7 +1,7 @@
 import { type Case, outputNamesOf, outputOf } from '../../solvers/case.ts'
 import { cases } from '../../solvers/cases/index.ts'
 import { cautions } from '../../solvers/cautions.ts'
-import { type CaseOperation, caseOperations } from '../../solvers/operations/index.ts'
+import { type CaseOperation, operationsOf } from '../../solvers/operations/index.ts'
 import { SOLVER_VERSION } from '../../solvers/version.ts'
 import { warningCodes } from '../../solvers/warnings.ts'
 import { FLOOR } from '../cases/limits.ts'
@@ -27,7 +27,7 @@ function operationOf(c: Case, o: CaseOperation) {
 
 export function summaryOf(c: Case) {
   const { id, title, summary, family, sketch, weight, setUp } = c
-  const operations = caseOperations.map((o) => operationOf(c, o))
+  const operations = operationsOf(c).map((o) => operationOf(c, o))
   const facets = facetsOf(
     c,
     knownFieldsOf(c),
@@ -39,7 +39,7 @@ export function summaryOf(c: Case) {
 export function descriptionOf(c: Case) {
   return {
     ...summaryOf(c),
-    operations: caseOperations.map((o) => ({ ...operationOf(c, o), example: o.example(c) })),
+    operations: operationsOf(c).map((o) => ({ ...operationOf(c, o), example: o.example(c) })),
     notes: c.notes,
     formula: [...c.formula],
     sources: [...c.sources],

@@ -1,7 +1,7 @@
 import { cases } from '../../solvers/cases/index.ts'
 import { DomainError } from '../../solvers/errors.ts'
 import { caseOperations } from '../../solvers/operations/index.ts'
-import { priceOf } from '../cases/solve-metered.ts'
+import { chargeOf } from '../../solvers/operations/price.ts'
 import { caseOperationPath } from '../catalogue/describe.ts'
 import { readable } from '../http/readable.ts'
 import { render } from '../http/render.ts'
@@ -56,7 +56,7 @@ function oneCall(key: (typeof keys)[number], at: Date, random: Random, publicUrl
   }
   try {
     const call = o.prepare(c, body, 'full')
-    const points = priceOf(call.points)
+    const points = chargeOf(call.points)
     const bytesOut = Buffer.byteLength(render(call.run()).text)
     return {
       entry: { ...started, status: 200, points, bytesOut },

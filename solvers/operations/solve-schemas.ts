@@ -1,16 +1,10 @@
 import { z } from 'zod'
 import { type Case, outputNamesOf, outputOf, placeFields, shapeOf } from '../case.ts'
 import { clockTimes, depths, pointsOf, radii, signedDepths, times } from '../fields.ts'
-import { numberCatalogue } from '../number-catalogue.ts'
 import type { OutputName, Shape } from '../outputs.ts'
+import { accuracyScope, boundSchema, compactOf, detailField, headOf, tail } from './envelope.ts'
 
 /* What a solve takes and answers, made from the description of a case. */
-
-const detailField = z.enum(['full', 'compact']).optional().meta({
-  title: 'Detail',
-  description: 'Detail: full, or compact (result, bound and warning codes only).',
-  'x-accepted': 'full or compact',
-})
 
 /** The fields in which a case takes its places, all optional: outputs without places need none. */
 export function placeSchemas(c: Case): Partial<Record<'depths' | 'radii' | 'points', z.ZodType>> {
@@ -43,35 +37,12 @@ function inputSchema(c: Case) {
   })
 }
 
-export const boundSchema = z
-  .strictObject({ absolute: z.number(), relative: z.number() })
-  .meta({ id: 'Bound', description: 'A value errs by at most absolute + relative · |value|.' })
-const checkSchema = z
-  .strictObject({ id: z.string(), holds: z.boolean(), value: z.number(), limit: z.number(), text: z.string() })
-  .meta({ id: 'Check' })
-export const warningSchema = z
-  .strictObject({ code: z.string(), text: z.string(), value: z.number() })
-  .meta({ id: 'Warning' })
-export const cautionSchema = z
-  .strictObject({ id: z.string(), version: z.number(), text: z.string() })
-  .meta({ id: 'Caution' })
 const valuesSchema: Record<Shape, z.ZodType> = {
   grid: z.array(z.array(z.number())),
   times: z.array(z.number()),
   places: z.array(z.number()),
   single: z.number(),
 }
-
-const numbersSchema = z
-  .strictObject(
-    Object.fromEntries(
-      Object.entries(numberCatalogue).map(([name, { unit, series, text }]) => [
-        name,
-        (series ? z.array(z.number()) : z.number()).optional().meta({ description: `${text} Unit ${unit}.` }),
-      ]),
-    ),
-  )
-  .meta({ id: 'Numbers' })
 
 const pointSchema = (c: Case) =>
   z.strictObject(Object.fromEntries((c.pointAxes ?? []).map((axis) => [axis, z.number()])))
@@ -97,13 +68,7 @@ export function answerSchema(c: Case) {
   })
   const series = z.array(z.number())
   return z.strictObject({
-    case: z.literal(c.id),
-    operation: z.literal('solve'),
-    solver: z.string().meta({ description: 'Version of the numbers.' }),
-    points: z.number().meta({ description: 'Priced points of this answer, before the floor of a call.' }),
-    input: z
-      .record(z.string(), z.unknown())
-      .meta({ description: 'The input as used: SI, with defaults and derived properties.' }),
+    ...headOf(c, 'solve'),
     axes: z.strictObject({
       times: series,
       ...Object.fromEntries(
@@ -117,28 +82,13 @@ export function answerSchema(c: Case) {
       terms: z.number(),
       scale: z.number().meta({ description: 'The temperature scale of the case, K.' }),
       bound: perOutput(() => boundSchema),
-      kind: z.enum(['proved', 'estimated']).meta({
-        description: 'How the bound was made: proved, or counted term by term and held by tests (estimated).',
-      }),
-      scope: z.literal('numerical'),
-      note: z.string(),
+      ...accuracyScope,
     }),
-    numbers: numbersSchema,
-    checks: z.array(checkSchema),
-    warnings: z.array(warningSchema),
-    cautions: z.array(cautionSchema),
-    sources: z.array(z.string()),
+    ...tail,
   })
 }
 
-export function compactSchema(c: Case) {
-  const full = answerSchema(c)
-  return z.strictObject({
-    result: full.shape.result,
-    accuracy: z.strictObject({ bound: full.shape.accuracy.shape.bound }),
-    warnings: z.array(z.string()),
-  })
-}
+export const compactSchema = (c: Case) => compactOf(answerSchema(c))
 
 const inputs = new Map<string, ReturnType<typeof inputSchema>>()
 /** Built once a case, since building a schema costs more than a solve. */

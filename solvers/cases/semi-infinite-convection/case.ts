@@ -102,6 +102,10 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
     }
   },
   solve,
+  end({ filmCoefficient: h, imposedHeatFlux: flux = 0, ambientTemperature, initialTemperature }) {
+    if (h === 0) return flux === 0 ? initialTemperature : null
+    return ambientTemperature + flux / h
+  },
   numbers: (input) => ({ penetrationDepth: penetrationDepth(input.diffusivity, input.times) }),
   checks: (input) => [changeHasArrived(input)],
   warnings: (input) => filmWarnings(input.filmCoefficient),

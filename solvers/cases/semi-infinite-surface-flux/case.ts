@@ -99,6 +99,8 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
     }
   },
   solve,
+  end: ({ imposedHeatFlux, pulseDuration, initialTemperature }) =>
+    imposedHeatFlux === 0 || pulseDuration !== undefined ? initialTemperature : null,
   numbers: (input) => ({ penetrationDepth: penetrationDepth(input.diffusivity, input.times) }),
   checks: (input) => [changeHasArrived(input)],
   warnings: () => [],

@@ -89,6 +89,10 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
     }
   },
   solve,
+  end({ rampRate, rampDuration, initialTemperature }) {
+    if (rampRate !== 0 && rampDuration === undefined) return null
+    return initialTemperature + rampRate * (rampDuration ?? 0)
+  },
   numbers: (input) => ({ penetrationDepth: penetrationDepth(input.diffusivity, input.times) }),
   checks: (input) => [changeHasArrived(input)],
   warnings: () => [],

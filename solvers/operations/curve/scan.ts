@@ -1,0 +1,178 @@
+import { EPS } from '../../math/rounding.ts'
+import type { Curve } from './curve.ts'
+import type { Grid } from './grid.ts'
+import { derivative, type Interpolant, interpolate, isResolved, slopeError, valueAt } from './interpolant.ts'
+
+/** A curve as looked at, finely where it changes. */
+export interface Scan {
+  points: number[]
+  values: number[]
+  bounds: number[]
+  breaks: readonly number[]
+}
+
+/** Which of the breaks is the last at or before a point. */
+function breakBefore(breaks: readonly number[], point: number): number {
+  let [low, high] = [0, breaks.length - 1]
+  while (low < high) {
+    const middle = Math.ceil((low + high) / 2)
+    if (breaks[middle]! <= point) low = middle
+    else high = middle - 1
+  }
+  return low
+}
+
+/** The kink or start at or before a point, where its time or distance is counted from. */
+export function originOf(breaks: readonly number[], point: number): number {
+  return breaks[breakBefore(breaks, point)]!
+}
+
+/** The smooth stretch around a point. */
+function stretchOf(breaks: readonly number[], point: number): [number, number] {
+  const index = Math.min(breakBefore(breaks, point), Math.max(0, breaks.length - 2))
+  return [breaks[index]!, breaks[index + 1] ?? breaks[index]!]
+}
+
+/** A gap in which the curve changes by a larger share of its range is cut again, and so are its neighbours. */
+const CALM = 1e-4
+
+export function scan(curve: Curve, grid: Grid): Scan {
+  const points = [...grid.points]
+  const { values, bounds } = curve.sample(points)
+  const range = spread(values)
+  const lively = values.map((v, i) => i > 0 && Math.abs(v - values[i - 1]!) > CALM * range)
+  const cut = points.flatMap((_, i) =>
+    i > 0 && (lively[i] || lively[i - 1] || lively[i + 1])
+      ? between(points[i - 1]!, points[i]!, originOf(grid.breaks, points[i - 1]!))
+      : [],
+  )
+  const first: Scan = { points, values, bounds, breaks: grid.breaks }
+  return cut.length ? merged(first, { points: cut, ...curve.sample(cut) }) : first
+}
+
+function spread(values: readonly number[]): number {
+  const most = values.reduce((m, v) => Math.max(m, v), -Infinity)
+  return most - values.reduce((m, v) => Math.min(m, v), Infinity)
+}
+
+/** Two points that cut a gap in three, by ratio of their distance from where the stretch starts if it has one. */
+function between(a: number, b: number, origin: number): number[] {
+  const [near, far] = [a - origin, b - origin]
+  const inside =
+    near > 0 ? [1 / 3, 2 / 3].map((s) => origin + near * (far / near) ** s) : [1 / 3, 2 / 3].map((s) => a + (b - a) * s)
+  return inside.filter((p) => p > a && p < b)
+}
+
+type Points = Omit<Scan, 'breaks'>
+
+export function merged(a: Scan, b: Points): Scan {
+  const all = [
+    ...a.points.map((p, i) => [p, a.values[i]!, a.bounds[i]!]),
+    ...b.points.map((p, i) => [p, b.values[i]!, b.bounds[i]!]),
+  ]
+  all.sort((x, y) => x[0]! - y[0]!)
+  const [points, values, bounds] = [0, 1, 2].map((n) => all.map((one) => one[n]!))
+  return { points: points!, values: values!, bounds: bounds!, breaks: a.breaks }
+}
+
+/** A point at which the curve turns, between its neighbours in a scan. */
+export interface Turn {
+  at: number
+  value: number
+  /** What the value and the point may be off. */
+  bound: number
+  atBound: number
+}
+
+/** Places in a scan where it is higher (sign 1) or lower (-1) than at both neighbours. */
+export function turnsIn({ values }: Scan, sign: 1 | -1): number[] {
+  return values.flatMap((v, i) => {
+    const before = values[i - 1]
+    const after = values[i + 1]
+    if (before === undefined || after === undefined) return []
+    const [rise, fall] = [sign * (v - before), sign * (v - after)]
+    return rise >= 0 && fall >= 0 && rise + fall > 0 ? [i] : []
+  })
+}
+
+/** The turn itself, by the sign of the derivative; a kink may be one. */
+export function turnAt(curve: Curve, { points, values, bounds, breaks }: Scan, i: number, sign: 1 | -1): Turn {
+  const [before, here, after] = [points[i - 1]!, points[i]!, points[i + 1]!]
+  const kink = originOf(breaks, here) === here
+  const windows: [number, number][] = kink
+    ? [
+        [before, here],
+        [here, after],
+      ]
+    : [[before, after]]
+  const known: Turn = { at: here, value: values[i]!, bound: bounds[i]!, atBound: kink ? 0 : after - before }
+  return windows
+    .flatMap(([from, to]) => turnWithin(curve, from, to, sign) ?? [])
+    .reduce((best, turn) => (sign * (turn.value - best.value) >= (kink ? 0 : -2 * turn.bound) ? turn : best), known)
+}
+
+/** Narrows a window on the zero of the derivative until noise grows faster than the series converges. */
+function turnWithin(curve: Curve, from: number, to: number, sign: 1 | -1): Turn | undefined {
+  let best: { at: number; error: number; curvature: number } | undefined
+  let [middle, half] = [(from + to) / 2, (to - from) / 2]
+  for (let round = 0; round < 12; round++) {
+    const fit = fitOver(curve, Math.max(from, middle - half), Math.min(to, middle + half))
+    const slope = derivative(fit)
+    const at = zeroOf(slope, sign)
+    if (at === undefined) break
+    const curvature = Math.abs(valueAt(derivative(slope), at))
+    const error = slopeError(fit) / curvature
+    if (best && !(error < best.error)) break
+    best = { at, error, curvature }
+    ;[middle, half] = [at, half / 3]
+  }
+  if (!best) return undefined
+  const { values, bounds } = curve.sample([best.at])
+  const noise = bounds[0]! / (best.curvature * half)
+  const atBound = Math.min(to - from, 2 * best.error + 4 * noise + 4 * EPS * Math.abs(best.at))
+  const lost = (best.curvature * atBound * atBound) / 2
+  return { at: best.at, value: values[0]!, bound: bounds[0]! + Math.min(lost, bounds[0]!), atBound }
+}
+
+const fitOver = (curve: Curve, from: number, to: number) => interpolate((at) => curve.sample(at).values, from, to)
+
+/** Where a derivative passes zero, falling for a maximum. */
+function zeroOf(slope: Interpolant, sign: 1 | -1): number | undefined {
+  const { middle, half } = slope
+  const at = (share: number) => middle + half * share
+  const side = (share: number) => sign * valueAt(slope, at(share))
+  const steps = 32
+  for (let k = 0; k < steps; k++) {
+    let [low, high] = [(2 * k) / steps - 1, (2 * k + 2) / steps - 1]
+    if (!(side(low) > 0 && side(high) <= 0)) continue
+    for (let n = 0; n < 60; n++) {
+      const mid = (low + high) / 2
+      if (side(mid) > 0) low = mid
+      else high = mid
+    }
+    return at((low + high) / 2)
+  }
+  return undefined
+}
+
+/**
+ * The derivative at a point, from a series over a window that is narrowed until its last terms tell that it has
+ * converged as far as noise lets it.
+ */
+export function slopeAt(curve: Curve, breaks: readonly number[], at: number): number {
+  const [from, to] = stretchOf(breaks, at)
+  let best: { slope: number; error: number } | undefined
+  let half = Math.min(0.25 * (at - from || to - at), to - from)
+  for (let round = 0; round < 12; round++, half /= 3) {
+    const window = [Math.max(from, at - half), Math.min(to, at + half)] as const
+    if (!(window[1] - window[0] > 64 * EPS * Math.abs(at))) break
+    const fit = fitOver(curve, ...window)
+    const slope = valueAt(derivative(fit), at)
+    const error = slopeError(fit)
+    if (!isResolved(fit)) continue
+    if (best && !(error < best.error)) break
+    best = { slope, error }
+    if (error < 1e-13 * Math.abs(slope)) break
+  }
+  return best?.slope ?? NaN
+}

@@ -1,0 +1,34 @@
+import type { Case } from '../case.ts'
+import { DomainError, type Issue } from '../errors.ts'
+import { quantity } from '../quantity.ts'
+import type { Course } from './curve/grid.ts'
+
+/* The span of time that is looked at. */
+
+export const seconds = (label: string, hint: string, min = 0) =>
+  quantity({ symbol: 't', unit: 's', label, min, max: 1e17, typical: [60, 1e8], hint })
+
+export const untilNeeded: Issue = {
+  pointer: '#/until',
+  code: 'missing-field',
+  detail: 'What drives the case goes on changing; until says how long to look.',
+  accepted: 'a time in s, within the history where there is one',
+}
+
+/** So many periods are looked at in one call. */
+const MOST_PERIODS = 1000
+
+export function refuseLongCycles({ period }: Course, from: number, until: number | undefined): void {
+  if (period === undefined || until === undefined || until - from <= MOST_PERIODS * period) return
+  const accepted = `at most ${MOST_PERIODS} periods, ${MOST_PERIODS * period} s`
+  const detail = `The span holds ${Math.ceil((until - from) / period)} periods.`
+  throw new DomainError([{ pointer: '#/until', code: 'out-of-range', detail, accepted }])
+}
+
+/** About how many values a curve is looked at by, in those of a weight of 1. */
+export function work(c: Case, { instants, period }: Course): number {
+  const values = 400 + 8 * instants.length + (period === undefined ? 0 : 500)
+  return Math.min(MOST_WORK, c.weight * values)
+}
+/** Below what a call without a key may ask for. */
+const MOST_WORK = 10_000
