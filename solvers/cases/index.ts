@@ -1,5 +1,8 @@
 import type { Case } from '../case.ts'
+import cylinderInInfiniteMedium from './cylinder-in-infinite-medium/case.ts'
+import lineSource from './line-source/case.ts'
 import lumpedConvection from './lumped-convection/case.ts'
+import pointSource from './point-source/case.ts'
 import semiInfiniteContact from './semi-infinite-contact/case.ts'
 import semiInfiniteConvection from './semi-infinite-convection/case.ts'
 import semiInfinitePeriodicAmbient from './semi-infinite-periodic-ambient/case.ts'
@@ -22,4 +25,7 @@ export const cases: readonly Case[] = [
   semiInfiniteContact,
   slabConvection,
   slabSurfaceTemperature,
+  cylinderInInfiniteMedium,
+  lineSource,
+  pointSource,
 ]

@@ -121,4 +121,18 @@ export const closedForms: Kinds = {
     }),
     names: drivenNames,
   },
+  G1: {
+    file: 'G_line_source',
+    ask: (i) => ({
+      caseId: 'line-source',
+      body: {
+        ...solidOf(i),
+        initialTemperature: i['initial_C'],
+        linePower: i['line_power_W_m'],
+        radii: [i['position_m']],
+        times: [i['time_s']],
+      },
+    }),
+    names: { temperature_C: 'temperature', radial_heat_flux_W_m2: 'heatFlux' },
+  },
 }
