@@ -11,6 +11,7 @@ import { type Operation, type Tag, problemsOf } from '../api/operation.ts'
 import { rolesWith } from '../api/permissions.ts'
 import { type SessionKind, cookieName } from '../api/session-kinds.ts'
 import { type ProblemCode, domainCodes, problemCodes, problems } from '../api/problems.ts'
+import { withUnits } from './units.ts'
 
 // Schemas say their names and more by .meta(); only a schema that no operation refers to needs registering.
 extendZodWithOpenApi(z)
@@ -118,7 +119,7 @@ export function documentOf(name: DocumentName, operations: readonly Operation[],
     'x-warnings': warningCodes,
     'x-cautions': cautions,
   }
-  return { ...sharedFailures(document as unknown as Json), ...(name === 'openapi' ? codes : {}) }
+  return { ...withUnits(sharedFailures(document as unknown as Json)), ...(name === 'openapi' ? codes : {}) }
 }
 
 type Responses = Record<string, Json>

@@ -45,3 +45,14 @@ test('each case stands in each document that asks it, and its fields say what th
   const text = JSON.stringify(documents.openapi)
   for (const word of ['x-symbol', 'x-ucum', 'x-typical', 'x-accepted', 'x-hint']) expect(text).toContain(`"${word}"`)
 })
+
+test('a number of a quantity may be stated with a unit that the quantity takes, and with no other', () => {
+  const o = operations.find(({ id }) => id === 'solve-slab-convection')!
+  const stated = (thickness: unknown, times: unknown) => bodyFaults(o, { ...o.example?.body, thickness, times })
+  expect(stated({ value: 20, unit: 'cm' }, [{ value: 1, unit: 'h' }, 7200])).toEqual([])
+  expect(stated({ value: 20, unit: 'h' }, [3600])).not.toEqual([])
+  expect(stated({ value: 20 }, [3600])).not.toEqual([])
+  expect(stated(0.2, { values: [1], unit: 'h' })).not.toEqual([])
+  expect(stated(1e6, [3600])).not.toEqual([])
+  expect(JSON.stringify(documents)).not.toContain('x-units')
+})

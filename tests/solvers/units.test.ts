@@ -1,6 +1,6 @@
 import { readFileSync } from 'node:fs'
 import fc from 'fast-check'
-import Decimal from 'decimal.js'
+import { Decimal } from 'decimal.js'
 import { describe, expect, it, test } from 'vitest'
 import { z } from 'zod'
 import { referencePages } from '../../scripts/reference-pages.ts'
