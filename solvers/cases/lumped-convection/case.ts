@@ -1,12 +1,12 @@
-import { z } from 'zod'
 import { defineCase, type Resolved } from '../../case.ts'
 import type { Issue } from '../../errors.ts'
-import { exposedFaces, film, initialTemperature, radius, solid, thickness } from '../../fields.ts'
+import { film, initialTemperature } from '../../fields.ts'
 import { filmWarnings } from '../../film.ts'
+import { biotWarnings, lumpedNumbers, oneTemperatureWillDo } from '../../lumped-biot.ts'
+import { type LumpedBody, noBody, resolveBody } from '../../lumped-body.ts'
+import { lumpedBody } from '../../lumped-fields.ts'
 import type { OutputName } from '../../outputs.ts'
 import { quantity } from '../../quantity.ts'
-import type { Warning } from '../../warnings.ts'
-import { type LumpedBody, resolveBody } from './body.ts'
 import { solve, type LumpedInput } from './solve.ts'
 
 interface LumpedResolved extends LumpedInput, Resolved {
@@ -22,40 +22,7 @@ interface LumpedResolved extends LumpedInput, Resolved {
 const outside = { filmCoefficient: 12, initialTemperature: 60, ambientTemperature: 20, times: [600, 7200] }
 
 const fields = {
-  heatCapacity: quantity({
-    symbol: 'C',
-    unit: 'J/K',
-    label: 'Heat capacity of the body',
-    min: 1e-12,
-    max: 1e15,
-    hint: 'with area',
-  }).optional(),
-  volume: quantity({
-    symbol: 'V',
-    unit: 'm3',
-    label: 'Volume',
-    min: 1e-27,
-    max: 1e15,
-    hint: 'with area and the heat capacity of the solid',
-  }).optional(),
-  area: quantity({ symbol: 'A', unit: 'm2', label: 'Exchanging area', min: 1e-18, max: 1e10 }).optional(),
-  body: z.enum(['slab', 'cylinder', 'sphere']).optional().meta({
-    title: 'Body',
-    description:
-      'Body: slab (with thickness and exposedFaces), cylinder or sphere (with radius), in place of heatCapacity or volume with area.',
-    'x-accepted': 'slab, cylinder or sphere',
-    'x-hint': 'in place of heat capacity and area',
-  }),
-  thickness: thickness.optional(),
-  exposedFaces: exposedFaces.optional(),
-  radius: radius.optional(),
-  ...solid,
-  correction: z.enum(['none', 'mean']).optional().meta({
-    title: 'Correction',
-    description: 'Correction: none (default) or mean, with body only.',
-    'x-accepted': 'none or mean',
-    'x-hint': 'with body only',
-  }),
+  ...lumpedBody,
   power: quantity({
     symbol: 'P',
     unit: 'W',
@@ -162,7 +129,7 @@ export default defineCase<typeof fields, LumpedResolved>({
   ],
   resolve(input, refuse): LumpedResolved {
     const { filmCoefficient, initialTemperature, ambientTemperature, times, outputs, power = 0 } = input
-    const body = resolveBody(input, refuse) ?? nothing
+    const body = resolveBody(input, refuse) ?? noBody
     refuseEndless(filmCoefficient, power, outputs, refuse)
     const biot = body.solid && (filmCoefficient * body.length!) / body.solid.conductivity
     const film = input.correction === 'mean' ? filmCoefficient / (1 + biot! / (body.dimension! + 2)) : filmCoefficient
@@ -182,29 +149,11 @@ export default defineCase<typeof fields, LumpedResolved>({
   echo({ body, filmCoefficient, initialTemperature, ambientTemperature, times, outputs }) {
     return { ...body.echo, filmCoefficient, initialTemperature, ambientTemperature, times, outputs }
   },
-  numbers({ biot, body, times }) {
-    if (!body.solid) return {}
-    const rate = body.solid.diffusivity / (body.length! * body.length!)
-    return { biot: biot!, fourier: times.map((time) => rate * time), length: body.length! }
-  },
-  checks({ biot }) {
-    if (biot === undefined) return []
-    return [
-      {
-        id: 'one-temperature-will-do',
-        holds: biot <= 0.1,
-        value: biot,
-        limit: 0.1,
-        text: 'The Biot number is at most 0.1, so one temperature describes the body.',
-      },
-    ]
-  },
+  numbers: ({ biot, body, times }) => lumpedNumbers(body, biot, times),
+  checks: ({ biot }) => oneTemperatureWillDo(biot),
   warnings: ({ filmCoefficient, biot }) => [...filmWarnings(filmCoefficient), ...biotWarnings(biot)],
   unitOf: (output, { body }) => (output === 'heatGained' ? body.heatUnit : undefined),
 })
-
-/** Stands in for a body that was refused, so that the rest of the input is still examined. */
-const nothing: LumpedBody = { capacity: 1, area: 1, heatUnit: 'J', echo: {} }
 
 /** Without a film a source heats for ever: no end state, and no fraction of one. */
 function refuseEndless(
@@ -221,20 +170,4 @@ function refuseEndless(
     const detail = `"${name}": with a film coefficient of 0 ${power === 0 ? 'the body never changes' : 'and a source the body never settles'}.`
     refuse({ pointer: `#/outputs/${i}`, code: 'output-not-defined', detail, accepted: 'temperature, heatGained' })
   })
-}
-
-function biotWarnings(biot: number | undefined): Warning[] {
-  if (biot === undefined || biot <= 0.1) return []
-  return [
-    {
-      code: 'lumped-biot-high',
-      text: 'The Biot number is above 0.1: inside and face differ noticeably. At 0.1 a slab is off by 2 % at its centre, a cylinder at 0.2 by 4.8 %, a sphere at 0.3 by 8.1 %.',
-      value: biot,
-    },
-    {
-      code: 'lumped-errs-early',
-      text: 'The time to a temperature errs early, the unsafe side when a core must be cooled or heated.',
-      value: biot,
-    },
-  ]
 }

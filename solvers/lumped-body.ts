@@ -1,5 +1,5 @@
-import type { Issue } from '../../errors.ts'
-import { resolveHeatCapacity, resolveSolid, type Solid, type SolidInput } from '../../solid.ts'
+import type { Issue } from './errors.ts'
+import { resolveHeatCapacity, resolveSolid, type Solid, type SolidInput } from './solid.ts'
 
 export interface BodyInput extends SolidInput {
   body?: 'slab' | 'cylinder' | 'sphere' | undefined
@@ -119,3 +119,6 @@ function capacityOf(input: BodyInput, refuse: Refuse): Pick<LumpedBody, 'capacit
   const capacity = heat.volumetricHeatCapacity * volume
   return { capacity, echo: { volume, ...heat, heatCapacity: capacity } }
 }
+
+/** Stands in for a body that was refused, so that the rest of the input is still examined. */
+export const noBody: LumpedBody = { capacity: 1, area: 1, heatUnit: 'J', echo: {} }
