@@ -87,6 +87,8 @@ export interface CaseDescription<Shape_ extends z.ZodRawShape, R extends Resolve
   clock?: true
   /** The field that says where the body ends, so that no depth or radius may lie beyond; absent where no one field does. */
   depthsEndAt?: string & keyof Shape_
+  /** The field that says at which radius a body with a hole begins. */
+  radiiBeginAt?: string & keyof Shape_
   /** The field with the temperature that the body is driven to; absent where no one field says it. */
   drive?: string & keyof Shape_
   outputs: Partial<Record<OutputName, Partial<Pick<OutputDescription, 'unit' | 'shape' | 'text'>>>>
@@ -139,8 +141,12 @@ export function countOfPlaces({ depths, radii, points }: Pick<Resolved, 'depths'
 }
 
 /** A case with its types hidden, as the lists and operations hold it. */
-export type Case = Omit<CaseDescription<z.ZodRawShape, Resolved>, 'resolve' | 'depthsEndAt' | 'drive'> & {
+export type Case = Omit<
+  CaseDescription<z.ZodRawShape, Resolved>,
+  'resolve' | 'depthsEndAt' | 'radiiBeginAt' | 'drive'
+> & {
   depthsEndAt?: string
+  radiiBeginAt?: string
   drive?: string
   /** Throws DomainError. */
   resolve(input: Record<string, unknown>): Resolved

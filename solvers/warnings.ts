@@ -4,9 +4,17 @@ export const warningCodes = {
     title: 'A body is too thin for the times asked for',
     text: 'The far face has been felt: from there on a body without end is no longer a good model. In contact the echo is 1 % at a·t/L² = 0.30.',
   },
+  'end-effects': {
+    title: 'The ends of the cylinder are felt',
+    text: 'The cylinder is taken to be endless. After length²/(90a) heat that passes beyond its ends changes the middle by about 1 %, and the answer overstates the change.',
+  },
   'film-includes-radiation-unknown': {
     title: 'The film coefficient is taken as the total',
     text: 'The film coefficient is taken as the total, radiation included. One for air movement alone needs about 5 W/(m2.K) more indoors.',
+  },
+  'film-constant': {
+    title: 'The film is the same throughout',
+    text: 'A film that stays hides a change of it, such as the removal of forms. Solve up to the change, then start again from the profile there.',
   },
   'lumped-biot-high': {
     title: 'One temperature for the whole body is a coarse model here',

@@ -1,5 +1,6 @@
 import type { Case } from '../case.ts'
 import cylinderInInfiniteMedium from './cylinder-in-infinite-medium/case.ts'
+import cylinderInInfiniteMedium from './cylinder-in-infinite-medium/case.ts'
 import lineSource from './line-source/case.ts'
 import lumpedConvection from './lumped-convection/case.ts'
 import pointSource from './point-source/case.ts'
@@ -25,6 +26,7 @@ export const cases: readonly Case[] = [
   semiInfiniteContact,
   slabConvection,
   slabSurfaceTemperature,
+  cylinderInInfiniteMedium,
   cylinderInInfiniteMedium,
   lineSource,
   pointSource,

@@ -38,15 +38,23 @@ export function refusePlaces(c: Case, input: Read): void {
   if (issues.length > 0) throw new DomainError(issues)
 }
 
-/** An issue for each place beyond the end of the body. */
+/** An issue for each place beyond the end of the body, or in its hole. */
 export function placesOutside(c: Case, input: Pick<Read, 'depths' | 'radii'> & Record<string, unknown>): Issue[] {
-  const end = c.depthsEndAt && input[c.depthsEndAt]
-  if (typeof end !== 'number') return []
+  const sizeOf = (name: string | undefined) => {
+    const size = name === undefined ? undefined : input[name]
+    return typeof size === 'number' ? size : undefined
+  }
+  const end = sizeOf(c.depthsEndAt)
+  const begin = sizeOf(c.radiiBeginAt) ?? 0
+  if (end === undefined && begin === 0) return []
+  const accepted = end === undefined ? `${begin} m or more` : `${begin} to ${end} m`
   return (['depths', 'radii'] as const).flatMap((name) =>
     (input[name] ?? []).flatMap((place, j) => {
-      if (place <= end) return []
-      const detail = `The body ends at ${end} m; this ${name === 'depths' ? 'depth' : 'radius'} is ${place} m.`
-      return [{ pointer: `#/${name}/${j}`, code: 'depth-outside-body' as const, detail, accepted: `0 to ${end} m` }]
+      const short = place < begin
+      if (!short && !(end !== undefined && place > end)) return []
+      const where = short ? `begins at ${begin}` : `ends at ${end}`
+      const detail = `The body ${where} m; this ${name === 'depths' ? 'depth' : 'radius'} is ${place} m.`
+      return [{ pointer: `#/${name}/${j}`, code: 'depth-outside-body' as const, detail, accepted }]
     }),
   )
 }

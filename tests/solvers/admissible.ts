@@ -59,7 +59,7 @@ function varied(c: Case, stated: unknown, field: Field | undefined, name = ''): 
   if (typeof stated === 'number')
     return field?.maximum !== undefined && field.minimum !== undefined ? within(field) : fc.constant(stated)
   if (Array.isArray(stated) && typeof stated[0] === 'number' && field?.items)
-    return placeNames.includes(name) && c.depthsEndAt ? someOf(share) : someOf(within(field.items))
+    return placeNames.includes(name) && (c.depthsEndAt || c.radiiBeginAt) ? someOf(share) : someOf(within(field.items))
   if (Array.isArray(stated) && typeof stated[0] === 'object' && field?.items)
     return someOf(varied(c, stated[0], field.items))
   if (typeof stated !== 'object' || stated === null || Array.isArray(stated)) return fc.constant(stated)
@@ -76,11 +76,18 @@ function propertiesOf(field: Field | undefined, stated: Input): Record<string, F
 
 /** Places that were drawn as shares of the body, laid into it. */
 function placed(c: Case, body: Input): Input {
-  const end = c.depthsEndAt && body[c.depthsEndAt]
-  if (typeof end !== 'number') return body
+  const sizeOf = (field: string | undefined) => (field === undefined ? undefined : (body[field] as number | undefined))
+  const begin = sizeOf(c.radiiBeginAt) ?? 0
+  const end = sizeOf(c.depthsEndAt)
+  if (end === undefined && begin === 0) return body
+  // A body without end is looked at up to the longest radius, by decades.
+  const laidAt = (one: number) =>
+    end === undefined
+      ? Math.min(1e5, begin * (1e5 / begin) ** (one * one))
+      : Math.min(end, Math.max(begin, begin + one * (end - begin)))
   const laid = placeNames.flatMap((name) => {
     const shares = body[name] as number[] | undefined
-    return shares ? [[name, shares.map((one) => Math.min(end, one * end))] as const] : []
+    return shares ? [[name, shares.map(laidAt)] as const] : []
   })
   return { ...body, ...Object.fromEntries(laid) }
 }
