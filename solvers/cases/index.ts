@@ -1,6 +1,5 @@
 import type { Case } from '../case.ts'
 import cylinderInInfiniteMedium from './cylinder-in-infinite-medium/case.ts'
-import cylinderInInfiniteMedium from './cylinder-in-infinite-medium/case.ts'
 import lineSource from './line-source/case.ts'
 import lumpedConvection from './lumped-convection/case.ts'
 import pointSource from './point-source/case.ts'
@@ -26,7 +25,6 @@ export const cases: readonly Case[] = [
   semiInfiniteContact,
   slabConvection,
   slabSurfaceTemperature,
-  cylinderInInfiniteMedium,
   cylinderInInfiniteMedium,
   lineSource,
   pointSource,
