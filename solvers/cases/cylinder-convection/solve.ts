@@ -1,0 +1,22 @@
+import { cylinder, type FilmDrive, type RadialStepInput, solveBehindFilm } from '../../radial-step.ts'
+import type { Solution } from '../../solution.ts'
+
+export type CylinderInput = RadialStepInput & FilmDrive
+
+/**
+ * A long cylinder at one temperature whose surface meets a fluid at another from time 0 on.
+ *
+ *   θ = (T − Tₐ)/(Tᵢ − Tₐ) = Σ Cₙ·J₀(zₙr/R)·e^(−zₙ²Fo),   zₙJ₁ = Bi·J₀,   Cₙ = (2/zₙ)·J₁/(J₀² + J₁²)
+ *   Bi = hR/k,  Fo = at/R²
+ *
+ * Shapes    depths or radii: n;  times: m;  grids have m rows of n.
+ * Units     SI, temperatures in °C; heat per metre of cylinder, fluxes per m2.
+ * Domain    k, ρc, a, R > 0;  h ≥ 0;  0 ≤ depth, radius ≤ R;  t ≥ 0. Bi 1e-22..1e18, Fo 0..1e38.
+ * Accuracy  temperatures 1e-12·|Tₐ − Tᵢ| beside the rounding of inputs and result; fractions, fluxes and heats
+ *           1e-11 relative. Each output carries its bound; below Fo 0.02 the inverted Laplace transform, above it the series.
+ * Errors    none: the input is resolved. Never NaN or Infinity.
+ * Source    H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, §7.6, §7.7 and §13.3.
+ */
+export function solve(input: CylinderInput): Solution {
+  return solveBehindFilm(cylinder, input)
+}

@@ -1,0 +1,102 @@
+import { completed, energyFraction, fluxFraction, remaining } from './convective-half-space.ts'
+import { CylinderContour } from './cylinder-contour.ts'
+import { cylinderModes } from './cylinder-modes.ts'
+import { cylinderDeficit } from './round-deficits.ts'
+import { RoundSeries, roundTermsAt } from './round-series.ts'
+import { type Estimate, EPS, TINY } from './rounding.ts'
+import type { FilmedBody, Moment, UnitBody } from './unit-body.ts'
+
+/** Only the contour below. */
+const SERIES_FROM = 0.02
+/** Up to here also where the series errs by more than this share of its value. */
+const CONTOUR_TO = 0.2
+const LOOSE = 1e-12
+/** Below, the body is a half space to the last digit, and its transform would overflow. */
+const PLANE = 1e-200
+
+/** A cylinder of radius 1 after a unit step: of the fluid behind a film, or where Bi is Infinity of its face itself. */
+export class UnitCylinder implements UnitBody {
+  readonly series: RoundSeries
+  readonly contour: CylinderContour
+  private readonly body: FilmedBody
+
+  /** `shortest` is the smallest Fourier number that will be asked for. */
+  constructor(body: FilmedBody, shortest: number) {
+    const modes = cylinderModes(body, body.biot, Math.max(shortest, SERIES_FROM))
+    this.body = body
+    this.series = new RoundSeries(modes, cylinderDeficit(body, modes))
+    this.contour = new CylinderContour(body)
+  }
+
+  remaining(j: number, m: Moment): Estimate {
+    if (m.fourier < PLANE) return closed(remaining(...this.arguments(j, m)))
+    return choose(
+      m,
+      () => this.contour.remaining(j, m),
+      () => this.series.remaining(j, m),
+    )
+  }
+
+  completed(j: number, m: Moment): Estimate {
+    if (m.fourier < PLANE) return closed(completed(...this.arguments(j, m)))
+    return choose(
+      m,
+      () => this.contour.completed(j, m),
+      () => this.series.completed(j, m),
+    )
+  }
+
+  flux(j: number, m: Moment): Estimate {
+    if (m.fourier < PLANE) return closed(this.planeFlux(j, m))
+    return m.fourier < SERIES_FROM ? this.contour.flux(j, m) : this.series.flux(j, m)
+  }
+
+  heatFraction(m: Moment): Estimate {
+    if (m.fourier < PLANE) return closed(this.planeHeat(m))
+    return choose(
+      m,
+      () => this.contour.heatFraction(m),
+      () => this.series.heatFraction(m),
+    )
+  }
+
+  /** 1 − heatFraction without its cancellation at late times. */
+  meanRemaining(m: Moment): Estimate {
+    if (m.fourier >= SERIES_FROM) return this.series.meanRemaining(m)
+    const heat = this.heatFraction(m)
+    return { ...heat, value: 1 - heat.value, error: heat.error + EPS }
+  }
+
+  terms(m: Moment): number {
+    return m.fourier < SERIES_FROM ? 0 : roundTermsAt(m.fourier)
+  }
+
+  private arguments(j: number, m: Moment): [number, number] {
+    return [this.body.deltas[j]! / (2 * m.root), this.body.biot * m.root]
+  }
+
+  private planeFlux(j: number, m: Moment): number {
+    const [eta, beta] = this.arguments(j, m)
+    return this.body.biot === Infinity ? Math.exp(-eta * eta) / (Math.sqrt(Math.PI) * m.root) : fluxFraction(eta, beta)
+  }
+
+  private planeHeat(m: Moment): number {
+    const { biot } = this.body
+    return biot === Infinity
+      ? (4 * m.root) / Math.sqrt(Math.PI)
+      : 2 * biot * m.root * m.root * energyFraction(biot * m.root)
+  }
+}
+
+/** A fraction of a half space at so short a time is 0 or 1, or at the face itself. */
+function closed(value: number): Estimate {
+  return { value, error: 200 * EPS * value + TINY, method: 'closed-form' }
+}
+
+function choose(m: Moment, contour: () => Estimate, series: () => Estimate): Estimate {
+  if (m.fourier < SERIES_FROM) return contour()
+  const a = series()
+  if (m.fourier > CONTOUR_TO || a.error < LOOSE * a.value) return a
+  const b = contour()
+  return a.error <= b.error ? a : b
+}
