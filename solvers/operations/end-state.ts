@@ -1,5 +1,6 @@
 import type { Case } from '../case.ts'
 import { DomainError } from '../errors.ts'
+import type { OutputName } from '../outputs.ts'
 import { extentOf } from './course.ts'
 import { type Asked, overTime } from './curve/curve.ts'
 import type { Question } from './question.ts'
@@ -40,19 +41,24 @@ function isIdle(asked: Asked): boolean {
 }
 const isRecord = (value: unknown): value is object => typeof value === 'object' && value !== null
 
+/** Outputs that are the end state, by the names that cases give it. */
+const endNames = ['steadyTemperature', 'contactTemperature', 'equilibriumTemperature'] as const
+
+const endName = (c: Case) => endNames.find((name) => Object.hasOwn(c.outputs, name)) as OutputName | undefined
+
 function temperatureAt(c: Case, q: Question, j: number | undefined): number | null {
   if (c.end) return c.end(q.resolved, j === undefined ? undefined : q.places[j])
-  if (c.outputs.steadyTemperature) return steadyAt(c, q.asked, j)
+  const output = endName(c)
+  if (output) return steadyAt(c, q.asked, output, j)
   const name = c.drive && (isIdle(q.asked) ? 'initialTemperature' : c.drive)
   const driven = name && q.asked[name]
   return typeof driven === 'number' ? driven : null
 }
 
-/** The steady temperature as the case answers it; an input for which it refuses that has none. */
-function steadyAt(c: Case, asked: Asked, j: number | undefined): number | null {
+/** The end state as the case answers it; an input for which it refuses that has none. */
+function steadyAt(c: Case, asked: Asked, output: OutputName, j: number | undefined): number | null {
   try {
-    const input = c.resolve({ ...asked, times: [0], outputs: ['steadyTemperature'] })
-    const values = c.solve(input).outputs.steadyTemperature!.values
+    const values = c.solve(c.resolve({ ...asked, times: [0], outputs: [output] })).outputs[output]!.values
     return typeof values === 'number' ? values : ((values as number[])[j ?? 0] ?? null)
   } catch (error) {
     if (error instanceof DomainError) return null
@@ -62,10 +68,10 @@ function steadyAt(c: Case, asked: Asked, j: number | undefined): number | null {
 
 /** Where each place has an end of its own, the mean's is asked of the body itself, after the longest time. */
 function meanOf(c: Case, q: Question): number | null {
-  if (c.end || !c.outputs.steadyTemperature || answeredShape(c, 'steadyTemperature') === 'single')
-    return temperatureAt(c, q, undefined)
+  const output = endName(c)
+  if (c.end || !output || answeredShape(c, output) === 'single') return temperatureAt(c, q, undefined)
   const axis = c.places === 'radii' ? 'radii' : 'depths'
   const [first] = extentOf(c, q.asked, axis)
-  if (steadyAt(c, { ...q.asked, [axis]: [first] }, 0) === null) return null
+  if (steadyAt(c, { ...q.asked, [axis]: [first] }, output, 0) === null) return null
   return overTime(c, q.asked, 'meanTemperature').sample([LONGEST]).values[0]!
 }

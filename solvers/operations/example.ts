@@ -15,10 +15,11 @@ export function partsOf(c: Case) {
 
 /** A number between two others, away from both, with as few digits as that allows. */
 export function between(a: number, b: number): number {
-  const [middle, least] = [(a + b) / 2, 0.2 * Math.abs(b - a)]
+  const [low, high] = [Math.min(a, b), Math.max(a, b)]
+  const [middle, least] = [(a + b) / 2, 0.2 * (high - low)]
   for (let digits = 1; digits < 15; digits++) {
     const rounded = Number(middle.toPrecision(digits))
-    if (Math.abs(rounded - a) >= least && Math.abs(rounded - b) >= least) return rounded
+    if (rounded - low >= least && high - rounded >= least) return rounded
   }
   return middle
 }

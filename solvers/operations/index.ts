@@ -1,5 +1,6 @@
 import type { z } from 'zod'
 import type { Case } from '../case.ts'
+import { chart } from './chart.ts'
 import { costOf } from './cost.ts'
 import { depthReached } from './depth-reached.ts'
 import { extremes } from './extremes.ts'
@@ -35,7 +36,7 @@ export interface CaseOperation {
   prepare(c: Case, body: unknown, defaultDetail: 'full' | 'compact'): Call
 }
 
-const priced = [solve, timeToReach, depthReached, extremes]
+const priced = [solve, timeToReach, depthReached, extremes, chart]
 
 export const caseOperations: readonly CaseOperation[] = [...priced, costOf(priced)]
 

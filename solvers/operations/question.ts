@@ -68,7 +68,7 @@ export function placeInputs(c: Case): Record<string, z.ZodType> {
 
 function pointInputs(c: Case) {
   const axes = (c.pointAxes ?? []).join(', ')
-  const element = pointsOf(c.pointAxes ?? []).element
+  const element = pointsOf(c.pointAxes ?? [], c.optionalAxes).element
   const accepted = `a point {${axes}}, in m`
   return {
     one: element.optional().meta({ title: 'Point', description: `Point: ${accepted}.`, 'x-accepted': accepted }),

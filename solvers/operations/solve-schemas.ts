@@ -11,7 +11,7 @@ export function placeSchemas(c: Case): Partial<Record<'depths' | 'radii' | 'poin
   const schemas = {
     depths: (c.signedDepths ? signedDepths : depths).optional(),
     radii: radii.optional(),
-    points: pointsOf(c.pointAxes ?? []).optional(),
+    points: pointsOf(c.pointAxes ?? [], c.optionalAxes).optional(),
   }
   return Object.fromEntries(placeFields[c.places].map((name) => [name, schemas[name]]))
 }
@@ -45,7 +45,11 @@ const valuesSchema: Record<Shape, z.ZodType> = {
 }
 
 const pointSchema = (c: Case) =>
-  z.strictObject(Object.fromEntries((c.pointAxes ?? []).map((axis) => [axis, z.number()])))
+  z.strictObject(
+    Object.fromEntries(
+      (c.pointAxes ?? []).map((axis) => [axis, c.optionalAxes?.includes(axis) ? z.number().optional() : z.number()]),
+    ),
+  )
 
 /** Cases without places answer a grid output as one row over the times. */
 export function answeredShape(c: Case, name: OutputName): Shape {

@@ -2,6 +2,7 @@ import { type Case, type Resolved, countOfPlaces, outputNamesOf, outputOf, place
 import type { Issue } from '../errors.ts'
 import type { OutputName, Shape } from '../outputs.ts'
 import { kindOf } from '../validate.ts'
+import { refuseDerived, solveWithDerived } from './derived.ts'
 import { headed, scopeOf, tailOf, warningsOf } from './envelope.ts'
 import type { Call, CaseOperation } from './index.ts'
 import { type Read, refusePlaces } from './places.ts'
@@ -27,13 +28,14 @@ function prepare(c: Case, body: unknown, defaultDetail: 'full' | 'compact'): Cal
   input.outputs = [...new Set(input.outputs)]
   refusePlaces(c, input)
   const resolved = c.resolve(input)
-  const values = countValues(c, resolved)
-  const points = c.weight * values + c.setUp
+  refuseDerived(c, resolved)
+  const values = countValues(c, resolved, () => 1)
+  const points = c.weight * countValues(c, resolved, (name) => outputOf(c, name).cost ?? 1) + c.setUp
   const size = Math.max(values, resolved.times.length, countOfPlaces(resolved))
   return { values, size, points, run: () => answer(c, resolved, points, detail === 'compact') }
 }
 
-function countValues(c: Case, input: Resolved): number {
+function countValues(c: Case, input: Resolved, costOf: (name: OutputName) => number): number {
   const places = countOfPlaces(input)
   const counts: Record<Shape, number> = {
     grid: input.times.length * places,
@@ -41,11 +43,11 @@ function countValues(c: Case, input: Resolved): number {
     places,
     single: 1,
   }
-  return input.outputs.reduce((sum, name) => sum + counts[answeredShape(c, name)], 0)
+  return input.outputs.reduce((sum, name) => sum + costOf(name) * counts[answeredShape(c, name)], 0)
 }
 
 function answer(c: Case, input: Resolved, points: number, compact: boolean) {
-  const solution = c.solve(input)
+  const solution = solveWithDerived(c, input)
   const result: Record<string, unknown> = {}
   const bound: Record<string, unknown> = {}
   const units: Record<string, string> = {}

@@ -13,7 +13,7 @@ export interface Crossing {
 
 /** Every point at which a scanned curve certainly passes the target. */
 export function crossingsOf(curve: Curve, looked: Scan, target: number): Crossing[] {
-  const whole = withTurns(curve, looked, target)
+  const whole = withOwnBounds(curve, withTurns(curve, looked, target), target)
   const crossings: Crossing[] = []
   let last: number | undefined
   whole.points.forEach((_, i) => {
@@ -31,6 +31,18 @@ function sideOf({ values, bounds }: Scan, i: number, target: number): -1 | 0 | 1
   const difference = values[i]! - target
   return Math.abs(difference) <= bounds[i]! && !(bounds[i] === 0 && difference !== 0) ? 0 : difference > 0 ? 1 : -1
 }
+
+/** Values of one look share a bound, the largest: those that it leaves in doubt are asked for alone. */
+function withOwnBounds(curve: Curve, looked: Scan, target: number): Scan {
+  const doubtful = looked.points.flatMap((_, i) =>
+    looked.values[i] !== target && sideOf(looked, i, target) === 0 ? [i] : [],
+  )
+  if (doubtful.length === 0) return looked
+  const bounds = [...looked.bounds]
+  for (const i of doubtful.slice(0, MOST_ALONE)) bounds[i] = curve.sample([looked.points[i]!]).bounds[0]!
+  return { ...looked, bounds }
+}
+const MOST_ALONE = 200
 
 /** Adds the turns that may pass the target between two points that do not. */
 function withTurns(curve: Curve, looked: Scan, target: number): Scan {
@@ -63,7 +75,7 @@ function locate(curve: Curve, whole: Scan, target: number, low: number, high: nu
   const near = narrowed(curve, past, limits, origin)
   if (near[1] - near[0] <= 2 * spacing(near[1])) return { at: near[0], bound: near[1] - near[0], direction }
   const at = root(curve, past, near)
-  const slope = slopeAt(curve, breaks, at)
+  const slope = slopeAt(curve, breaks, at, 2 * (limits[1] - limits[0]))
   const bound = certainty(curve, past, at, Math.abs(slope), limits)
   return { at, bound, direction, ...(Number.isFinite(slope) ? { slope } : {}) }
 }

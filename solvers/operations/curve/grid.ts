@@ -59,6 +59,10 @@ export function timeGrid(course: Course, from: number, to: number): Grid {
   return { points: distinct([from, ...inside, to]), breaks: distinct([from, ...instants.filter((t) => t > from), to]) }
 }
 
+/** No depth of a body without end matters below this; and bodies with an end are thinner than that. */
+const SHALLOWEST = 1e-13
+const ENDLESS = 1e4
+
 /** Places by decades from each face and joint, both ways, and evenly between them. */
 export function placeGrid(joints: readonly number[]): Grid {
   const breaks = distinct(joints)
@@ -66,7 +70,7 @@ export function placeGrid(joints: readonly number[]): Grid {
     const next = breaks[i + 1]
     if (next === undefined) return [joint]
     const length = next - joint
-    const near = decades(1e-9 * length, length)
+    const near = decades(length < ENDLESS ? 1e-9 * length : SHALLOWEST, length)
     const even = Array.from({ length: 31 }, (_, k) => joint + ((k + 1) / 32) * length)
     return [joint, ...near.map((d) => joint + d), ...near.map((d) => next - d), ...even]
   })

@@ -156,13 +156,13 @@ function zeroOf(slope: Interpolant, sign: 1 | -1): number | undefined {
 }
 
 /**
- * The derivative at a point, from a series over a window that is narrowed until its last terms tell that it has
- * converged as far as noise lets it.
+ * The derivative at a point, from a series over a window of some width to either side, which is narrowed until its last
+ * terms tell that it has converged as far as noise lets it.
  */
-export function slopeAt(curve: Curve, breaks: readonly number[], at: number): number {
+export function slopeAt(curve: Curve, breaks: readonly number[], at: number, width: number): number {
   const [from, to] = stretchOf(breaks, at)
   let best: { slope: number; error: number } | undefined
-  let half = Math.min(0.25 * (at - from || to - at), to - from)
+  let half = Math.min(width, to - from)
   for (let round = 0; round < 12; round++, half /= 3) {
     const window = [Math.max(from, at - half), Math.min(to, at + half)] as const
     if (!(window[1] - window[0] > 64 * EPS * Math.abs(at))) break
