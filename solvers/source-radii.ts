@@ -1,8 +1,8 @@
 import type { Check } from './case.ts'
 import type { Issue } from './errors.ts'
 
-/** A source has no size: at it the temperature is infinite, so radii begin where sizes do. */
-const LEAST = 1e-9
+/** A source has no size: at it the temperature is infinite, so radii begin at less than an atom. */
+const LEAST = 1e-12
 
 export function refuseAtSource(radii: readonly number[], refuse: (issue: Issue) => void): void {
   radii.forEach((radius, j) => {

@@ -1,7 +1,11 @@
 import type { Case } from '../case.ts'
+import cylinderConvection from './cylinder-convection/case.ts'
 import cylinderInInfiniteMedium from './cylinder-in-infinite-medium/case.ts'
+import cylinderSurfaceTemperature from './cylinder-surface-temperature/case.ts'
+import hollowCylinderConvection from './hollow-cylinder-convection/case.ts'
 import lineSource from './line-source/case.ts'
 import lumpedConvection from './lumped-convection/case.ts'
+import lumpedVaryingAmbient from './lumped-varying-ambient/case.ts'
 import pointSource from './point-source/case.ts'
 import semiInfiniteContact from './semi-infinite-contact/case.ts'
 import semiInfiniteConvection from './semi-infinite-convection/case.ts'
@@ -11,11 +15,18 @@ import semiInfiniteSurfaceFlux from './semi-infinite-surface-flux/case.ts'
 import semiInfiniteSurfaceRamp from './semi-infinite-surface-ramp/case.ts'
 import semiInfiniteSurfaceTemperature from './semi-infinite-surface-temperature/case.ts'
 import slabConvection from './slab-convection/case.ts'
+import slabInitialProfile from './slab-initial-profile/case.ts'
+import slabInternalHeat from './slab-internal-heat/case.ts'
+import slabSurfaceFlux from './slab-surface-flux/case.ts'
 import slabSurfaceTemperature from './slab-surface-temperature/case.ts'
+import slabTwoSides from './slab-two-sides/case.ts'
+import sphereConvection from './sphere-convection/case.ts'
+import sphereSurfaceTemperature from './sphere-surface-temperature/case.ts'
 
 /** Every case of the product. Adding one is a folder beside this file and a line here. */
 export const cases: readonly Case[] = [
   lumpedConvection,
+  lumpedVaryingAmbient,
   semiInfiniteSurfaceTemperature,
   semiInfiniteSurfaceRamp,
   semiInfiniteSurfaceFlux,
@@ -25,6 +36,15 @@ export const cases: readonly Case[] = [
   semiInfiniteContact,
   slabConvection,
   slabSurfaceTemperature,
+  slabTwoSides,
+  slabSurfaceFlux,
+  slabInternalHeat,
+  slabInitialProfile,
+  cylinderConvection,
+  cylinderSurfaceTemperature,
+  sphereConvection,
+  sphereSurfaceTemperature,
+  hollowCylinderConvection,
   cylinderInInfiniteMedium,
   lineSource,
   pointSource,

@@ -95,7 +95,7 @@ export default defineCase<typeof fields, LineSourceResolved>({
     return { ...body!, initialTemperature, linePower, ...probe, radii, times, outputs }
   },
   solve,
-  end: () => null,
+  end: ({ linePower, initialTemperature }) => (linePower === 0 ? initialTemperature : null),
   numbers: fourierAtNearest,
   checks: (input) => [...lateForLogarithm(input), ...probeChecks(input)],
   warnings: () => [],

@@ -151,6 +151,8 @@ export default defineCase<typeof fields, ContactResolved>({
     }
   },
   solve,
+  end: ({ effusivity: e1, initialTemperature: T1, other: { effusivity: e2, initialTemperature: T2 } }) =>
+    T1 + (T2 - T1) * (e2 / (e1 + e2)),
   numbers(input) {
     const until = thinBodies(input).map(({ until }) => until)
     return until.length === 0 ? {} : { validUntil: Math.min(...until) }

@@ -76,6 +76,7 @@ export default defineCase<typeof fields, AmbientResolved>({
     return { ...body!, cycle: wave!, filmCoefficient, depths: input.depths ?? [], times, outputs }
   },
   solve,
+  end: () => null,
   echo: ({ cycle, ...rest }) => ({ ...rest, ...cycleEcho(cycle) }),
   numbers: () => ({}),
   checks: (input) => [cycleIsFelt(input)],

@@ -72,6 +72,7 @@ export default defineCase<typeof fields, PeriodicResolved>({
     return { ...body!, cycle: wave!, depths: input.depths ?? [], times, outputs }
   },
   solve,
+  end: () => null,
   echo: ({ cycle, ...rest }) => ({ ...rest, ...cycleEcho(cycle) }),
   numbers: () => ({}),
   checks: (input) => [cycleIsFelt(input)],

@@ -31,6 +31,14 @@ const contactBody = (i: Record<string, number>, n: 1 | 2) => ({
   initialTemperature: i[`initial_${n}_C`],
 })
 
+const lumpedOf = (i: Record<string, number>) => ({
+  heatCapacity: i['mass_kg']! * i['specific_heat_J_kgK']!,
+  area: i['area_m2'],
+  filmCoefficient: i['film_W_m2K'],
+  initialTemperature: i['initial_C'],
+  times: [i['time_s']],
+})
+
 export const closedForms: Kinds = {
   A3: {
     file: 'A_semi_infinite',
@@ -134,5 +142,24 @@ export const closedForms: Kinds = {
       },
     }),
     names: { temperature_C: 'temperature', radial_heat_flux_W_m2: 'heatFlux' },
+  },
+  D2: {
+    file: 'D_lumped',
+    ask: (i) => ({
+      caseId: 'lumped-convection',
+      body: { ...lumpedOf(i), ambientTemperature: i['ambient_C'], power: i['gain_W'] },
+    }),
+    names: { temperature_C: 'temperature', steady_temperature_C: 'steadyTemperature' },
+  },
+  D3: {
+    file: 'D_lumped',
+    ask: (i) => ({
+      caseId: 'lumped-varying-ambient',
+      body: {
+        ...lumpedOf(i),
+        ambient: { kind: 'ramp', start: i['ambient_start_C'], rampRate: i['ambient_ramp_K_s'] },
+      },
+    }),
+    names: { temperature_C: 'temperature' },
   },
 }
