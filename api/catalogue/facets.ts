@@ -59,11 +59,12 @@ const questions: Record<string, Question> = {
   chart: { title: 'A chart', answeredBy: (_, operations) => operations.includes('chart') },
 }
 
-const titles: Record<string, { title: string; values: Record<string, string> }> = {
-  body: { title: 'Body', values: bodies },
-  boundary: { title: 'Boundary', values: boundaries },
+const titles: Record<string, { title: string; match: 'any' | 'all'; values: Record<string, string> }> = {
+  body: { title: 'Body', match: 'any', values: bodies },
+  boundary: { title: 'Boundary', match: 'any', values: boundaries },
   question: {
     title: 'Question',
+    match: 'all',
     values: Object.fromEntries(Object.entries(questions).map(([id, { title }]) => [id, title])),
   },
 }
@@ -78,9 +79,10 @@ export function facetsOf(c: Case, fields: readonly FieldEntry[], operations: rea
 
 /** The facets with the values that occur, in the order in which they stand here. */
 export function facetsAmong(found: readonly Record<string, readonly string[]>[]) {
-  return Object.entries(titles).map(([id, { title, values }]) => ({
+  return Object.entries(titles).map(([id, { title, match, values }]) => ({
     id,
     title,
+    match,
     values: Object.entries(values)
       .filter(([value]) => found.some((one) => one[id]?.includes(value)))
       .map(([value, name]) => ({ id: value, title: name })),

@@ -34,6 +34,7 @@ const facetSchema = z
   .strictObject({
     id: text,
     title: text,
+    match: z.enum(['any', 'all']).meta({ description: 'Of several values, whether a case must have any or all.' }),
     values: z.array(z.strictObject({ id: text, title: text })).meta({ description: 'Those that some case has.' }),
   })
   .meta({ id: 'CaseFacet' })

@@ -2,10 +2,11 @@ import fc from 'fast-check'
 import { expect, test } from 'vitest'
 import { contour, region } from '../../portal/src/figure/contour.ts'
 import { gridOf, nearest } from '../../portal/src/figure/grid.ts'
-import { type Field, rangeOf, temperatureRange, washText } from '../../portal/src/figure/field.ts'
+import { type Field, changeOf, cools, rangeOf, temperatureRange, washText } from '../../portal/src/figure/field.ts'
 import { layoutOf } from '../../portal/src/figure/layout.ts'
 import { degrees, markText, plain } from '../../portal/src/figure/measures.ts'
 import { multiples, niceCeiling, niceStep } from '../../portal/src/figure/steps.ts'
+import { timeAxis } from '../../portal/src/figure/time-axis.ts'
 import { jsonText } from '../../portal/src/components/json-text.ts'
 
 const xs = Array.from({ length: 21 }, (_, i) => i)
@@ -87,13 +88,13 @@ test('steps are 1, 2, 2.5 or 5 times a power of ten, and enough of them', () => 
 })
 
 const field = (initial: number, drive: number, values: number[][]): Field => ({
-  depths: values[0]!.map((_, i) => i / 10),
+  places: values[0]!.map((_, i) => i / 10),
+  along: 'depth',
   times: values.map((_, i) => i * 3600),
   values,
   initial,
-  drive,
-  held: false,
-  back: 'insulated',
+  near: { kind: 'film', level: drive },
+  far: { kind: 'insulated' },
 })
 
 test('a range is never empty, and all that is drawn from it is finite', () => {
@@ -119,6 +120,45 @@ test('a range is never empty, and all that is drawn from it is finite', () => {
       expect(degrees(initial, high - low)).not.toMatch(/NaN/)
     }),
   )
+})
+
+test('where no temperature drives a body, what it does is read from its answers', () => {
+  const warming: Field = {
+    ...field(0, 0, [
+      [5, 5, 5],
+      [9, 7, 6],
+      [14, 9, 7],
+    ]),
+    initial: undefined,
+    near: { kind: 'acting', sign: 'flux' },
+  }
+  expect(changeOf(warming)).toEqual({ from: 5, to: 10 })
+  expect(cools(warming)).toBe(false)
+  expect(washText(warming)).toBe('Hatched: above 9 °C.')
+  expect(rangeOf(warming)).toEqual({ low: 4, high: 14, step: 2 })
+})
+
+test('places that do not start at 0 fill the plan from edge to edge', () => {
+  const radii: Field = {
+    ...field(20, 5, [
+      [20, 20, 20],
+      [18, 19, 19.5],
+    ]),
+    places: [0.05, 0.06, 0.1],
+    along: 'radius',
+  }
+  const { x, left, right } = layoutOf(radii, 900, true)
+  expect(x(0.05)).toBe(left)
+  expect(x(0.1)).toBe(right)
+  const { depths } = gridOf({ from: 0.05, extent: 0.1, end: 60, depths: [0.01, 0.07], times: [] })
+  expect([depths[0], depths.at(-1)]).toEqual([0.05, 0.1])
+  expect(depths).toContain(0.07)
+})
+
+test('the marks of times that begin before 0 lie among them', () => {
+  const { measure, ticks } = timeAxis(43_200, -43_200)
+  expect(measure.unit).toBe('h')
+  expect(ticks).toEqual([-12, -9, -6, -3, 0, 3, 6, 9, 12].map((hours) => hours * 3600))
 })
 
 test('numbers carry no zeros that only fill up, and a true minus', () => {

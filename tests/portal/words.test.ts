@@ -5,7 +5,15 @@ import { prefixOf, shortId } from '../../portal/src/features/staff/key-prefix.ts
 import { sentTime, timeMeasure } from '../../portal/src/figure/measures.ts'
 
 const words = {
-  labels: { accountName: 'Account name', mail: 'Mail address', times: 'Times', filmCoefficient: 'Film coefficient' },
+  labels: {
+    accountName: 'Account name',
+    mail: 'Mail address',
+    times: 'Times',
+    filmCoefficient: 'Film coefficient',
+    left: 'Left side',
+    initialProfile: 'Initial profile',
+  },
+  inside: { surfaceTemperature: 'Surface temperature', temperatures: 'Temperatures' },
   units: { Cel: '°C', 'W/(m2.K)': 'W/(m²·K)', m: 'm' },
 }
 
@@ -15,6 +23,10 @@ test.each([
   ['times/1 is -3; at least 0 is accepted.', 'Times, value 2, is \u22123; at least 0 is accepted.'],
   ['Accepted: a number from 0 to 1e6 W/(m2.K).', 'Accepted: a number from 0 to 1e6 W/(m²·K).'],
   ['Accepted: a number from -273.15 to 1e4 Cel.', 'Accepted: a number from \u2212273.15 to 1e4 °C.'],
+  ['left/surfaceTemperature is missing.', 'Left side, surface temperature, is missing.'],
+  ['left is missing.', 'Left side is missing.'],
+  ['initialProfile/temperatures/1 is -3.', 'Initial profile, temperatures, value 2, is \u22123.'],
+  ['Accepted: a number from 0 to 1 J/kg.', 'Accepted: a number from 0 to 1 J/kg.'],
   ['It goes with filmCoefficient.', 'It goes with film coefficient.'],
 ])('a refusal is told in the words of the form: %s', (said, shown) => {
   expect(inFormWords(said, words)).toBe(shown)

@@ -1,4 +1,5 @@
 import { type FormWords, inFormWords } from './form-words.ts'
+import type { Refusal } from './refusal.ts'
 import type { Who } from './signed-in.ts'
 
 /** What the service says of a call it refused or failed. */
@@ -80,13 +81,17 @@ function secondsOf(response: Response): number | undefined {
   return Number.isFinite(seconds) ? seconds : undefined
 }
 
+export function refusalsOf(error: unknown, words: FormWords): Refusal[] {
+  const issues = error instanceof ApiError ? (error.problem?.errors ?? []) : []
+  return issues.map(({ pointer, detail, accepted }) => ({
+    path: pointer?.replace(/^#?\/?/, '') ?? '',
+    text: inFormWords(accepted ? `${detail} Accepted: ${accepted}.` : detail, words),
+  }))
+}
+
 /** The refusal of each field, by the first part of its pointer, in the words of the form. */
 export function issuesByField(error: unknown, words: FormWords): Record<string, string> {
-  const issues = error instanceof ApiError ? (error.problem?.errors ?? []) : []
   const fields: Record<string, string> = {}
-  for (const { pointer, detail, accepted } of issues) {
-    const name = pointer?.split('/')[1] ?? ''
-    fields[name] ??= inFormWords(accepted ? `${detail} Accepted: ${accepted}.` : detail, words)
-  }
+  for (const { path, text } of refusalsOf(error, words)) fields[path.split('/')[0] ?? ''] ??= text
   return fields
 }

@@ -11,7 +11,7 @@ interface Props {
 /** Chain lines over the plan with thick ends, an arrow the way one looks, and the letter. */
 export function CutMarks({ field, layout, cut, history }: Props) {
   const { x, z, left, right, back, small, planTop, planHeight } = layout
-  const at = x(field.depths[cut.column]!)
+  const at = x(field.places[cut.column]!)
   const level = z(field.times[cut.row]!)
   const from = left - (small ? 10 : 12)
   const to = right + back + (small ? 2 : 8)

@@ -28,7 +28,7 @@ export function FieldFigure({ field, cut, onCut, hatch, material, history = true
   const value = field.values[cut.row]![cut.column]!
   const wash = washText(field)
   const reading = `${degrees(value, layout.range.high - layout.range.low)} °C`
-  const label = `Temperature over depth and time. At ${placeOf(field, cut)} and ${timeOf(field.times, cut.row)}: ${reading}`
+  const label = `Temperature over ${field.along} and time. At ${placeOf(field, cut)} and ${timeOf(field.times, cut.row)}: ${reading}`
   const follow = (event: PointerEvent<SVGSVGElement>) => {
     const at = cutAt(event, field, layout)
     if (at && (at.row !== cut.row || at.column !== cut.column)) onCut(at)
@@ -56,8 +56,8 @@ export function FieldFigure({ field, cut, onCut, hatch, material, history = true
         <HistoryFigure
           width={layout.width}
           times={field.times}
-          values={field.values.map((row) => row[cut.column]!)}
-          levels={[field.initial]}
+          series={[{ name: placeOf(field, cut), values: field.values.map((row) => row[cut.column]!) }]}
+          levels={field.initial === undefined ? [] : [field.initial]}
           row={cut.row}
           title={`B–B: history at ${placeOf(field, cut)}`}
         />
@@ -75,7 +75,8 @@ function cutAt(
   const box = event.currentTarget.getBoundingClientRect()
   const [px, py] = [event.clientX - box.left, event.clientY - box.top]
   if (px < left - 4 || px > right + 4 || py < planTop - 4 || py > planTop + planHeight + 4) return undefined
-  const depth = ((px - left) / (right - left)) * field.depths.at(-1)!
+  const [first, last] = [field.places[0]!, field.places.at(-1)!]
+  const place = first + ((px - left) / (right - left)) * (last - first)
   const time = ((py - planTop) / planHeight) * field.times.at(-1)!
-  return { row: Math.max(1, nearest(field.times, time)), column: nearest(field.depths, depth) }
+  return { row: Math.max(1, nearest(field.times, time)), column: nearest(field.places, place) }
 }

@@ -1,19 +1,26 @@
 import { plain } from './measures.ts'
 import { multiples, niceStep } from './steps.ts'
 
-export type Back = 'insulated' | 'mirror' | 'endless'
+/** What lies before or behind the shown part of a body. */
+export type Edge =
+  /** A fluid through its film, or a face that is held, at a temperature. */
+  | { kind: 'film' | 'held'; level: number }
+  /** Something else that acts on the face, by the sign it is drawn with. */
+  | { kind: 'acting'; sign: string }
+  | { kind: 'insulated' | 'mirror' | 'centre' | 'endless' }
 
-/** A solved field, as a drawing needs it: temperatures by time and depth, and what surrounds the body. */
+/** A solved field, as a drawing needs it: temperatures by time and place, and what surrounds the body. */
 export interface Field {
-  depths: readonly number[]
+  /** Depths from the exposed face, or radii; m. */
+  places: readonly number[]
+  along: 'depth' | 'radius'
   times: readonly number[]
   /** °C, one row a time. */
   values: readonly (readonly number[])[]
-  initial: number
-  /** Temperature that the body is driven to, and by what: a fluid through its film, or its face held there. */
-  drive: number
-  held: boolean
-  back: Back
+  /** Where the body starts from one temperature. */
+  initial: number | undefined
+  near: Edge
+  far: Edge
 }
 
 /** Where the two sections cut the plan: a row (time) and a column (place). */
@@ -40,8 +47,33 @@ export function temperatureRange(values: readonly number[]): Range {
   return { low: Math.floor(low / step + 1e-9) * step, high: Math.ceil(high / step - 1e-9) * step, step }
 }
 
+const levelOf = (edge: Edge): number | undefined => ('level' in edge ? edge.level : undefined)
+
+/** Temperatures that are drawn beside those of the body. */
+function levelsOf({ initial, near, far }: Field): number[] {
+  return [initial, levelOf(near), levelOf(far)].filter((level) => level !== undefined)
+}
+
 export function rangeOf(field: Field): Range {
-  return temperatureRange([field.initial, field.drive, ...field.values.flatMap((row) => [row[0]!, row.at(-1)!])])
+  const all = field.values.flat()
+  return temperatureRange([...levelsOf(field), ...all])
+}
+
+const meanOf = (values: readonly number[]): number => values.reduce((a, b) => a + b, 0) / values.length
+
+/** Where a change starts and what it heads for: told by the case, or read from the first and last profile. */
+export function changeOf(field: Field): { from: number; to: number } {
+  const { initial, near, far, values } = field
+  return {
+    from: initial ?? meanOf(values[0]!),
+    to: levelOf(near) ?? levelOf(far) ?? meanOf(values.at(-1)!),
+  }
+}
+
+/** Whether the body cools on the whole. */
+export function cools(field: Field): boolean {
+  const { from, to } = changeOf(field)
+  return to < from
 }
 
 export interface Isotherms {
@@ -50,11 +82,11 @@ export interface Isotherms {
   key: number | undefined
 }
 
-export function isothermsOf({ initial, drive, values }: Field): Isotherms {
-  const [low, high] = [Math.min(initial, drive), Math.max(initial, drive)]
-  if (high - low <= FLAT * Math.max(1, Math.abs(low), Math.abs(high))) return { levels: [], key: undefined }
-  const all = values.flat()
+export function isothermsOf(field: Field): Isotherms {
+  const all = field.values.flat()
   const [least, most] = [all.reduce((a, b) => Math.min(a, b)), all.reduce((a, b) => Math.max(a, b))]
+  const [low, high] = [Math.min(least, ...levelsOf(field)), Math.max(most, ...levelsOf(field))]
+  if (high - low <= FLAT * Math.max(1, Math.abs(low), Math.abs(high))) return { levels: [], key: undefined }
   const step = niceStep(high - low, 14)
   const levels = multiples(step, low, high).filter(
     (level) => level > Math.max(low, least) && level < Math.min(high, most),
@@ -69,11 +101,12 @@ export function isothermsOf({ initial, drive, values }: Field): Isotherms {
 
 /** What the hatching of the plan means, in words; undefined where nothing is hatched and 0 °C is not in question. */
 export function washText(field: Field): string | undefined {
-  const { initial, drive, values } = field
+  const { values } = field
   const { levels, key } = isothermsOf(field)
-  const side = drive < initial ? 'below' : 'above'
+  const { low, high } = rangeOf(field)
+  const side = cools(field) ? 'below' : 'above'
   const said = key === undefined ? [] : [`Hatched: ${side} ${plain(key)} °C.`]
-  if (Math.min(initial, drive) < 0 && Math.max(initial, drive) > 0 && !levels.includes(0)) {
+  if (low < 0 && high > 0 && !levels.includes(0)) {
     const past = (value: number) => (side === 'below' ? value < 0 : value > 0)
     const all = values.every((row) => row.every(past))
     said.unshift(`${all ? 'Everywhere' : 'Nowhere'} ${side} 0 °C.`)

@@ -1,14 +1,21 @@
-import type { Field } from './field.ts'
 import type { Layout } from './layout.ts'
 import { plain } from './measures.ts'
 
+interface Props {
+  layout: Layout
+  /** Of the fluid, °C. */
+  level: number
+  cold: boolean
+  /** Of the face, °C. */
+  face: number
+}
+
 /** The fluid before the face: its temperature, and the drop from it to the face. */
-export function Film({ field, layout, face }: { field: Field; layout: Layout; face: number }) {
+export function Film({ layout, level: fluid, cold, face }: Props) {
   const { axis, left, top, bottom, small, y } = layout
-  const cold = field.drive < field.initial
   const width = small ? 16 : 30
   const edge = left - width
-  const level = y(field.drive)
+  const level = y(fluid)
   const name = cold ? 't-frost' : 't-clay'
   return (
     <g>
@@ -21,7 +28,7 @@ export function Film({ field, layout, face }: { field: Field; layout: Layout; fa
       ) : (
         <>
           <text className={`${name} halo`} x={axis + 6} y={cold ? level - 8 : level + 18}>
-            {`fluid ${plain(field.drive)} °C`}
+            {`fluid ${plain(fluid)} °C`}
           </text>
           <text x={edge - 5} y={cold ? top + 20 : bottom - 9} textAnchor="end">
             film

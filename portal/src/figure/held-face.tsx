@@ -1,12 +1,10 @@
-import type { Field } from './field.ts'
 import type { Layout } from './layout.ts'
 import { plain } from './measures.ts'
 
 /** A face held at a temperature: a thick line before it, and its level. */
-export function HeldFace({ field, layout }: { field: Field; layout: Layout }) {
+export function HeldFace({ layout, level: held, cold }: { layout: Layout; level: number; cold: boolean }) {
   const { axis, left, top, bottom, small, y } = layout
-  const cold = field.drive < field.initial
-  const level = y(field.drive)
+  const level = y(held)
   return (
     <g>
       <line className={cold ? 'cold' : 'now'} x1={axis} x2={left} y1={level} y2={level} />
@@ -16,7 +14,7 @@ export function HeldFace({ field, layout }: { field: Field; layout: Layout }) {
         x={axis + (small ? 2 : 6)}
         y={cold ? level - 8 : level + 18}
       >
-        {small ? 'face' : `face ${plain(field.drive)} °C`}
+        {small ? 'face' : `face ${plain(held)} °C`}
       </text>
     </g>
   )

@@ -14,10 +14,10 @@ interface Props {
 /** Section B–B beside the plan: time downwards as there, temperature brought round the corner by the mitre. */
 export function HistorySection({ field, layout, cut }: Props) {
   const { x, y, z, across, historyLeft, size, top, bottom, planTop, planHeight, range } = layout
-  const depth = field.depths[cut.column]!
+  const depth = field.places[cut.column]!
   const time = field.times[cut.row]!
   const value = field.values[cut.row]![cut.column]!
-  const length = lengthMeasure(field.depths.at(-1)!)
+  const length = lengthMeasure(field.places.at(-1)!)
   const { measure } = timeAxis(field.times.at(-1)!)
   const place = `${inMeasure(depth, length)} ${length.unit}`
   const right = historyLeft + size
@@ -69,8 +69,8 @@ function TemperatureLines({ layout: { range, across, planTop, planHeight } }: { 
 
 /** What a history is called in words. */
 export function placeOf(field: Field, cut: Cut): string {
-  const length = lengthMeasure(field.depths.at(-1)!)
-  return `${inMeasure(field.depths[cut.column]!, length)} ${length.unit}`
+  const length = lengthMeasure(field.places.at(-1)!)
+  return `${inMeasure(field.places[cut.column]!, length)} ${length.unit}`
 }
 
 export function timeOf(times: readonly number[], row: number): string {

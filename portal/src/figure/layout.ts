@@ -19,7 +19,7 @@ export interface Layout {
   historyLeft: number
   size: number
   range: Range
-  x(depth: number): number
+  x(place: number): number
   y(temperature: number): number
   z(time: number): number
   /** Temperature along the history beside the plan. */
@@ -42,7 +42,7 @@ export function layoutOf(field: Field, width: number, history: boolean): Layout 
   const planHeight = small ? 200 : beside ? 250 : Math.round(Math.min(410, width * 0.47))
   const historyLeft = right + back + gap
   const range = rangeOf(field)
-  const extent = field.depths.at(-1)!
+  const [first, last] = [field.places[0]!, field.places.at(-1)!]
   const end = field.times.at(-1)!
   const part = (temperature: number) => (temperature - range.low) / (range.high - range.low)
   return {
@@ -61,7 +61,7 @@ export function layoutOf(field: Field, width: number, history: boolean): Layout 
     historyLeft,
     size,
     range,
-    x: (depth) => left + ((right - left) * depth) / extent,
+    x: (place) => left + ((right - left) * (place - first)) / (last - first),
     y: (temperature) => bottom - size * part(temperature),
     z: (time) => planTop + (planHeight * time) / end,
     across: (temperature) => historyLeft + size * part(temperature),

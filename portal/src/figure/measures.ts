@@ -16,7 +16,7 @@ const timeUnits: readonly (Measure & { until: number; steps: readonly number[] }
 ]
 
 export function timeMeasure(end: number): Measure {
-  return timeUnits.find(({ until }) => end < until) ?? { unit: 's', size: 1 }
+  return timeUnits.find(({ until }) => Math.abs(end) < until) ?? { unit: 's', size: 1 }
 }
 
 /** A step of clock or calendar in which an end of so many units has five to eight parts, or none that fits. */

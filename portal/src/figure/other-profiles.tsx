@@ -1,5 +1,5 @@
 import { type Point, pathOf } from './points.ts'
-import type { Cut, Field } from './field.ts'
+import { type Cut, type Field, changeOf } from './field.ts'
 import { nearest } from './grid.ts'
 import type { Layout } from './layout.ts'
 import { inMeasure } from './measures.ts'
@@ -16,7 +16,7 @@ interface Props {
 
 /** A profile as it is drawn. */
 export function profileOf(field: Field, { x, y }: Layout, row: number): Point[] {
-  return field.values[row]!.map((value, i) => [x(field.depths[i]!), y(value)] as const)
+  return field.values[row]!.map((value, i) => [x(field.places[i]!), y(value)] as const)
 }
 
 /** Profiles before and after the chosen one, each with its time where there is room. */
@@ -32,7 +32,7 @@ export function OtherProfiles({ field, layout, cut }: Props) {
       <g key={row}>
         <path className="past" d={pathOf(curve)} />
         {free && (
-          <text className="halo-sheet" x={at[0]} y={at[1]} textAnchor={field.back === 'endless' ? 'start' : 'end'}>
+          <text className="halo-sheet" x={at[0]} y={at[1]} textAnchor={field.far.kind === 'endless' ? 'start' : 'end'}>
             {inMeasure(field.times[row]!, measure)} {measure.unit}
           </text>
         )}
@@ -41,18 +41,24 @@ export function OtherProfiles({ field, layout, cut }: Props) {
   })
 }
 
+/** Round times near those parts. */
+export function profileTimes(end: number): number[] {
+  const step = (timeAxis(end).ticks[1] ?? end) / 4
+  return parts.map((part) => Math.max(step, Math.round((end * part) / step) * step))
+}
+
 function rowsOf({ times }: Field, cut: Cut): number[] {
   const end = times.at(-1)!
-  const step = (timeAxis(end).ticks[1] ?? end) / 4
-  const rows = parts.map((part) => nearest(times, Math.max(step, Math.round((end * part) / step) * step)))
+  const rows = profileTimes(end).map((time) => nearest(times, time))
   return [...new Set(rows)].filter((row) => Math.abs(times[row]! - times[cut.row]!) > 0.02 * end)
 }
 
 /** At the end of the profile; in a body without end, where all profiles meet, half-way down the change. */
 function labelPlace(field: Field, { right, top, y }: Layout, curve: readonly Point[]): Point {
-  if (field.back === 'endless') {
-    const half = y((field.initial + field.drive) / 2)
-    const side = Math.sign(y(field.initial) - half)
+  if (field.far.kind === 'endless') {
+    const { from, to } = changeOf(field)
+    const half = y((from + to) / 2)
+    const side = Math.sign(y(from) - half)
     const at = curve.find(([, level]) => (level - half) * side >= 0)
     return at ? [at[0] + 4, half + 14] : [right - 6, half]
   }

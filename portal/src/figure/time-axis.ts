@@ -2,9 +2,12 @@ import { type Measure, clockStep, timeMeasure } from './measures.ts'
 import { multiples, niceStep } from './steps.ts'
 
 /** The unit for a span of time, and its ticks in seconds. */
-export function timeAxis(end: number): { measure: Measure; ticks: number[] } {
-  const measure = timeMeasure(end)
-  const span = end / measure.size
+export function timeAxis(end: number, start = 0): { measure: Measure; ticks: number[] } {
+  const measure = timeMeasure(Math.max(Math.abs(start), Math.abs(end)))
+  const span = (end - start) / measure.size
   const step = clockStep(measure, span) ?? niceStep(span, 7)
-  return { measure, ticks: multiples(step, 0, span).map((tick) => tick * measure.size) }
+  return {
+    measure,
+    ticks: multiples(step, start / measure.size, end / measure.size).map((tick) => tick * measure.size),
+  }
 }

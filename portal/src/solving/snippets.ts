@@ -1,5 +1,5 @@
 import { jsonText } from '../components/json-text.ts'
-import type { Body } from './solve.ts'
+import type { Body } from './body.ts'
 
 export interface Snippet {
   name: string

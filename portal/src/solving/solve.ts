@@ -1,5 +1,6 @@
 import { unwrap } from '../api/api-error.ts'
 import { portalApi } from '../api/clients.ts'
+import type { Body } from './body.ts'
 import type { paths } from '../../../openapi/portal.d.ts'
 
 type TryPath = Extract<keyof paths, `/portal/v1/try/${string}`>
@@ -8,7 +9,6 @@ type AnyAnswer = paths[TryPath]['post']['responses'][200]['content']['applicatio
 /** An answer in full. */
 export type Answer = Extract<AnyAnswer, { case: string }>
 export type CompactAnswer = Exclude<AnyAnswer, { case: string }>
-export type Body = Readonly<Record<string, unknown>>
 
 /** Solves without a key. The path names the case; that its body fits is for the service to say. */
 export function trySolve(caseId: string, body: Body, signal?: AbortSignal): Promise<AnyAnswer> {

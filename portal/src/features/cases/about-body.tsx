@@ -1,21 +1,21 @@
 import { ScrollRegion } from '../../components/scroll-region.tsx'
 import { withMinus } from '../../api/form-words.ts'
 import { Note } from '../../components/note.tsx'
-import type { Body } from '../../solving/solve.ts'
+import type { Body } from '../../solving/body.ts'
 import { BodyDrawing } from './body-drawing.tsx'
-import { kindOf } from './form-values.ts'
+import { controlOf } from './fields.ts'
 import { Formula } from './formula.tsx'
-import type { Case } from './queries.ts'
+import type { Case } from './described.ts'
 
 /** Sketch, formula and notes. */
 export function AboutBody({ description: c, body }: { description: Case; body: Body }) {
   const without = c.fields.filter(
-    (field) => field.required && kindOf(field) === 'choice' && !('default' in field.schema),
+    (field) => field.required && controlOf(field) === 'choice' && !('default' in field.schema),
   )
   return (
     <div className="min-w-0">
       <h2 className="mb-4">The body</h2>
-      <BodyDrawing sketch={c.sketch} title={c.title} body={body} />
+      <BodyDrawing description={c} body={body} />
       <ScrollRegion label="Formula" className="equations">
         {c.formula.map((tex) => (
           <Formula key={tex} tex={tex} />

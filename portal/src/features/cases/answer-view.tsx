@@ -9,7 +9,7 @@ import { plain } from '../../figure/measures.ts'
 import { type Answer, type CompactAnswer, isFull } from '../../solving/solve.ts'
 import { Checks } from './checks.tsx'
 import { OutputValues } from './output-values.tsx'
-import type { Case } from './queries.ts'
+import type { Case } from './described.ts'
 import { type Stale, StaleFrame } from './stale-frame.tsx'
 
 interface Props {

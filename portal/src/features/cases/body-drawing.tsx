@@ -1,115 +1,137 @@
 import { SymbolSpans } from '../../components/symbol.tsx'
 import { Dimension } from '../../figure/dimension.tsx'
 import { Drawing } from '../../figure/drawing.tsx'
-import { FaceSign } from '../../figure/face-sign.tsx'
 import { hatched } from '../../figure/hatches.tsx'
-import { type SketchOf, Sketch, hatchFor } from '../../figure/sketch.tsx'
+import { Acting } from '../../figure/sketch/acting.tsx'
+import type { Frame } from '../../figure/sketch/frame.ts'
+import { shapeOf } from '../../figure/sketch/shapes.ts'
 import { useWidth } from '../../figure/use-width.ts'
-import type { Body } from '../../solving/solve.ts'
+import type { Body } from '../../solving/body.ts'
+import { type Shown, shownOf } from './body-shown.ts'
+import type { Case } from './described.ts'
 
 interface Props {
-  sketch: SketchOf
-  title: string
+  description: Case
   body: Body
 }
 
-const [top, bottom] = [34, 150]
+const [top, bottom] = [40, 150]
 
 /** The body with the symbols of its fields, as the last solve has it. */
-export function BodyDrawing({ sketch, title, body }: Props) {
+export function BodyDrawing({ description, body }: Props) {
   const [box, width] = useWidth<HTMLDivElement>()
-  const place = sketch.body === 'lumped' ? undefined : placeOf(body)
   return (
     <div ref={box} className="min-w-0">
-      {width > 0 &&
-        (place === undefined ? (
-          <Sketch sketch={sketch} label={title} />
-        ) : (
-          <Section {...{ sketch, title, body, place }} width={Math.min(560, Math.max(264, width))} />
-        ))}
+      {width > 0 && (
+        <Section
+          shown={shownOf(description, body)}
+          title={description.title}
+          width={Math.min(560, Math.max(264, width))}
+        />
+      )}
     </div>
   )
 }
 
-function Section({ sketch, title, body, place, width }: Props & { place: number; width: number }) {
-  const slab = sketch.body === 'slab'
-  const both = slab && body['exposedFaces'] === 2
-  const [face, far] = [Math.round(width * 0.27), Math.round(width * (slab ? 0.74 : 0.92))]
-  const at = face + (far - face) * place
-  const middle = (top + bottom) / 2
+function frameOf({ body, wide }: Shown, width: number): Frame {
+  const tall = ['bar', 'brick', 'corner', 'edge', 'bar-end'].includes(body)
+  const [left, right] = wide ? [0.27, 0.92] : [0.27, 0.74]
+  if (body === 'endless' || body === 'hole') return { left: width * 0.08, right: width * 0.92, top: 34, bottom }
+  if (wide || body === 'slab') return { left: width * left, right: width * right, top: tall ? top + 24 : 34, bottom }
+  // Near a square, in the middle.
+  const half = Math.min(width * 0.22, body === 'short-cylinder' ? 62 : 72)
+  return { left: width / 2 - half, right: width / 2 + half, top: tall ? top + 12 : top, bottom: bottom + 8 }
+}
+
+function Section({ shown, title, width }: { shown: Shown; title: string; width: number }) {
+  const { body, boundary, first, second, both, place } = shown
+  const shape = shapeOf(body)
+  const frame = frameOf(shown, width)
+  const [x, y] = shape.mark(frame, place.along, place.across)
+  const flat = body === 'slab' || body === 'half-space' || body === 'two-bodies'
+  const level = flat || body === 'hole' || body === 'endless'
+  const left = x > frame.left + (frame.right - frame.left) * 0.6
+  const measured = shape.measured(frame).filter(({ field }) => shown.symbols[field])
+  const base = frame.bottom + 22
+  const depth = flat && place.along > 0 && !shown.signed
+  const height = base + (depth ? 24 : 4) + 30 * measured.length
   return (
-    <Drawing
-      width={width}
-      height={slab ? 216 : 186}
-      label={`${title}: ${sketch.boundary === 'temperature' ? 'temperature held at' : 'film before'} ${both ? 'both faces' : 'the face'}, one position marked`}
-    >
-      <rect className="w-sheet" x={face} y={top} width={far - face} height={bottom - top} />
-      <rect
-        fill={hatched(hatchFor(sketch.body))}
-        opacity={0.8}
-        x={face}
-        y={top}
-        width={far - face}
-        height={bottom - top}
-      />
-      <FaceSign at={face} from={top} to={bottom} kind={sketch.boundary} />
-      {both && <FaceSign at={far} from={top} to={bottom} kind={sketch.boundary} turned />}
-      {slab && !both && (
+    <Drawing width={width} height={height} label={`${title}: ${shown.text}`}>
+      {shape.draw(frame)}
+      <Acting frame={frame} body={body} boundary={boundary} first={first} second={both ? second : ''} />
+      {body === 'slab' && !both && <Back frame={frame} />}
+      {body === 'slab' && shown.mirrored && <MidPlane frame={frame} />}
+      {flat && <line className="proj" x1={x} x2={x} y1={frame.top} y2={frame.bottom + 18} />}
+      {body !== 'lumped' && (
         <>
-          <rect fill={hatched('wool')} x={far} y={top} width={26} height={bottom - top} />
-          <line className="thin" x1={far + 26} x2={far + 26} y1={top} y2={bottom} />
-          <text x={far + 13} y={top - 8} textAnchor="middle">
-            no heat
+          <circle className="ring" cx={x} cy={y} r={5.5} />
+          <text
+            className="t-it halo-sheet"
+            x={x + (left ? -12 : 12)}
+            y={y + (level ? 5 : -9)}
+            textAnchor={left ? 'end' : 'start'}
+          >
+            {shown.reading}
           </text>
         </>
       )}
-      <path className="thin" d={`M${face} ${top}H${far}M${face} ${bottom}H${far}`} />
-      <path
-        className="cut"
-        d={`M${face} ${top - 10}V${bottom + 10}${slab ? `M${far} ${top - 10}V${bottom + 10}` : ''}`}
-      />
-      {!slab && <path className="thin" d={`M${far} ${top - 8}c-6 22 6 34 0 62s6 40 0 70`} />}
-      {both && (
-        <>
-          <line className="dash" x1={(face + far) / 2} x2={(face + far) / 2} y1={top - 14} y2={bottom + 14} />
-          <text x={(face + far) / 2} y={top - 18} textAnchor="middle">
-            mid-plane
-          </text>
-        </>
-      )}
-      <line className="proj" x1={at} x2={at} y1={top} y2={bottom + 18} />
-      <circle className="ring" cx={at} cy={middle} r={5.5} />
-      <text
-        className="t-it halo-sheet"
-        x={at + (place > 0.6 ? -12 : 12)}
-        y={middle + 5}
-        textAnchor={place > 0.6 ? 'end' : 'start'}
-      >
-        T(x, t)
-      </text>
       <text className="t-it" x={8} y={18}>
-        <SymbolSpans of={sketch.boundary === 'temperature' ? 'Tₛ' : 'h, Tₐ'} />
+        <SymbolSpans of={shown.drivers.join(', ')} />
       </text>
-      {place > 0 && <Dimension from={face} to={at} y={bottom + 22} reach={14} />}
-      <text className="t-it halo" x={(face + at) / 2} y={bottom + 17} textAnchor="middle">
-        x
-      </text>
-      {slab && (
-        <>
-          <Dimension from={face} to={far} y={bottom + 52} reach={44} />
-          <text className="t-it halo" x={(face + far) / 2} y={bottom + 47} textAnchor="middle">
-            d
-          </text>
-        </>
-      )}
+      {depth && <Length from={frame.left} to={x} y={base} reach={14} symbol="x" />}
+      {measured.map(({ field, from, to }, i) => (
+        <Length
+          key={field}
+          {...{ from, to }}
+          y={base + (depth ? 30 : 4) + 30 * i}
+          reach={(depth ? 44 : 14) + 30 * i}
+          symbol={shown.symbols[field]!}
+        />
+      ))}
     </Drawing>
   )
 }
 
-/** The first position inside, as a part of what is drawn. */
-function placeOf(body: Body): number {
-  const depths = Array.isArray(body['depths']) ? (body['depths'] as number[]) : []
-  const inside = depths.find((depth) => depth > 0)
-  const extent = typeof body['thickness'] === 'number' ? body['thickness'] : 2 * Math.max(0, ...depths)
-  return inside === undefined || !(extent > 0) ? 0.32 : Math.min(1, inside / extent)
+interface LengthProps {
+  from: number
+  to: number
+  y: number
+  reach: number
+  symbol: string
+}
+
+function Length({ from, to, y, reach, symbol }: LengthProps) {
+  return (
+    <g>
+      <Dimension from={from} to={to} y={y} reach={reach} />
+      <text className="t-it halo" x={(from + to) / 2} y={y - 5} textAnchor="middle">
+        <SymbolSpans of={symbol} />
+      </text>
+    </g>
+  )
+}
+
+/** Wool behind a face that is not exposed. */
+function Back({ frame: { right, top: from, bottom: to } }: { frame: Frame }) {
+  return (
+    <g>
+      <rect fill={hatched('wool')} x={right} y={from} width={26} height={to - from} />
+      <line className="thin" x1={right + 26} x2={right + 26} y1={from} y2={to} />
+      <text x={right + 13} y={from - 8} textAnchor="middle">
+        no heat
+      </text>
+    </g>
+  )
+}
+
+function MidPlane({ frame }: { frame: Frame }) {
+  const middle = (frame.left + frame.right) / 2
+  return (
+    <g>
+      <line className="dash" x1={middle} x2={middle} y1={frame.top - 14} y2={frame.bottom + 14} />
+      <text x={middle} y={frame.top - 18} textAnchor="middle">
+        mid-plane
+      </text>
+    </g>
+  )
 }

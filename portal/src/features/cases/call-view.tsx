@@ -6,7 +6,7 @@ import { ButtonLink } from '../../components/button.tsx'
 import { isFull } from '../../solving/solve.ts'
 import { SnippetCode } from './snippet-code.tsx'
 import { snippets } from '../../solving/snippets.ts'
-import type { Case } from './queries.ts'
+import type { Case } from './described.ts'
 import { type Stale, StaleFrame } from './stale-frame.tsx'
 import type { Solved } from './use-solve.ts'
 
@@ -19,7 +19,7 @@ interface Props {
 /** Exactly the call that was solved, in two languages, and its answer. */
 export function CallView({ description: c, solved: { body, answer }, stale }: Props) {
   const copy = stale ? 'Copy the last solve' : 'Copy'
-  const path = c.operations[0]!.path
+  const path = c.operations.find(({ id }) => id === 'solve')!.path
   const tabs = snippets.map(({ name, language, write }) => {
     const text = write(location.origin + path, body)
     return {

@@ -4,19 +4,20 @@ import { withMinus } from '../../api/form-words.ts'
 import { unitText } from '../../components/formats.ts'
 import { Symbol } from '../../components/symbol.tsx'
 import { plain } from '../../figure/measures.ts'
-import { kindOf, optionsOf } from './form-values.ts'
-import type { Field } from './queries.ts'
+import { type Field, controlOf, optionsOf } from './fields.ts'
 
 interface Props {
   field: Field
+  /** Where the field stands in the body. */
+  path: string
   register: UseFormRegisterReturn
   error: string | undefined
 }
 
 /** One field of the contract, in the control that its schema asks for. */
-export function CaseField({ field, register, error }: Props) {
+export function CaseField({ field, path, register, error }: Props) {
   const id = useId()
-  const kind = kindOf(field)
+  const kind = controlOf(field)
   const title = field.title ?? field.name
   const hint = hintOf(field)
   const grouped = kind === 'several' || (kind === 'choice' && field.required)
@@ -43,7 +44,7 @@ export function CaseField({ field, register, error }: Props) {
           <span className="unit">{unitText(field.unit ?? '')}</span>
         </>
       )}
-      {kind === 'list' && (
+      {['list', 'rows', 'text'].includes(kind) && (
         <span className="control">
           <input id={id} className="box" autoComplete="off" {...access} {...register} />
         </span>
@@ -74,7 +75,11 @@ export function CaseField({ field, register, error }: Props) {
                 {...access}
                 {...register}
               />
-              {kind === 'several' ? <span className="fig">{String(option)}</span> : String(option)}
+              {kind === 'several' ? (
+                <span className="fig min-w-0 wrap-anywhere">{String(option)}</span>
+              ) : (
+                String(option)
+              )}
             </label>
           ))}
         </span>
@@ -89,12 +94,12 @@ export function CaseField({ field, register, error }: Props) {
   const name = `field${kind === 'number' ? ' quantity' : kind === 'several' ? ' several' : ''}${error ? ' bad' : ''}`
   if (!grouped)
     return (
-      <div className={name} data-field={field.name}>
+      <div className={name} data-field={path}>
         {parts}
       </div>
     )
   return (
-    <fieldset className={name} data-field={field.name} aria-describedby={described}>
+    <fieldset className={name} data-field={path} aria-describedby={described}>
       <legend className="sr-only">{title}</legend>
       {parts}
     </fieldset>
@@ -108,7 +113,18 @@ const short = (value: number): string =>
 
 function hintOf(field: Field): string {
   const [low, high] = field.typical ?? []
-  const unit = kindOf(field) === 'list' ? unitText(field.unit ?? '') : ''
+  const unit = unitText(field.unit ?? '')
   const typical = low !== undefined && high !== undefined ? `usually ${short(low)} to ${short(high)}` : ''
-  return [unit ? `in ${unit}, commas between` : '', withMinus(field.hint ?? ''), typical].filter(Boolean).join(' · ')
+  const control = controlOf(field)
+  const between = control === 'list' ? `in ${unit}, commas between` : control === 'rows' ? rowsHint(field, unit) : ''
+  return [between, withMinus(field.hint ?? ''), typical].filter(Boolean).join(' · ')
+}
+
+/** How a row is typed: its columns in their order, or by name where some may be left out. */
+function rowsHint({ fields = [] }: Field, unit: string): string {
+  const names = fields.map(({ name }) => name)
+  const row = fields.every(({ required }) => required)
+    ? names.join(', ')
+    : names.map((name) => `${name} 0.1`).join(', ')
+  return `${row}${unit ? ` in ${unit}` : ''}; semicolons between`
 }

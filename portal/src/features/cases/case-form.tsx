@@ -1,6 +1,6 @@
-import { Fragment, useEffect, useRef } from 'react'
+import { useEffect, useRef } from 'react'
 import { useForm, useWatch } from 'react-hook-form'
-import { ApiError, issuesByField } from '../../api/api-error.ts'
+import { ApiError, refusalsOf } from '../../api/api-error.ts'
 import type { FormWords } from '../../api/form-words.ts'
 import { Button, LinkButton } from '../../components/button.tsx'
 import { unitText } from '../../components/formats.ts'
@@ -8,12 +8,14 @@ import { FormFailure } from '../../components/form-failure.tsx'
 import { SendButton } from '../../components/send-button.tsx'
 import { Offline } from '../../components/states.tsx'
 import { clockText, useOfflineSince } from '../../components/use-online.ts'
-import type { Body } from '../../solving/solve.ts'
-import { CaseField } from './case-field.tsx'
+import type { Body } from '../../solving/body.ts'
+import { FieldList } from './field-list.tsx'
+import { type Field, fieldsInside } from './fields.ts'
 import { FORM_ID } from './form-id.ts'
-import { HeatChoice } from './heat-choice.tsx'
-import { type FormValues, bodyOf, isSent, valuesOf, waysOf } from './form-values.ts'
-import type { Case, Field } from './queries.ts'
+import { type FormValues, bodyOf, isComplete, valuesOf } from './form-values.ts'
+import type { Case } from './described.ts'
+import { refusalAt } from './refusals.ts'
+import { isSent, waysOf } from './solid-ways.ts'
 import type { Solved } from './use-solve.ts'
 
 interface Props {
@@ -32,17 +34,18 @@ interface Props {
 
 /** Every field of the contract. It solves when a field is left changed, and on Solve. */
 export function CaseForm({ description: c, asked, solved, pending, error, onSolve, onCancel, onChanged }: Props) {
+  const { fields } = c
   const { control, register, handleSubmit, getValues, reset } = useForm<FormValues>({
-    defaultValues: valuesOf(c, c.example),
+    defaultValues: valuesOf(fields, c.example),
   })
   const values = useWatch({ control }) as FormValues
   const form = useRef<HTMLFormElement>(null)
-  const words = wordsOf(c, values.heat)
-  const errors = issuesByField(error, words)
-  const sent = (name: string) => isSent(c, name, values.heat)
-  const open = c.fields.filter((field) => isOpen(c, field))
-  const folded = c.fields.filter((field) => !isOpen(c, field))
-  const stale = solved !== undefined && !same(bodyOf(c, values), bodyOf(c, valuesOf(c, solved.body)))
+  const words = wordsOf(fields, values)
+  const refusals = refusalsOf(error, words)
+  const open = fields.filter((field) => isOpen(c, field))
+  const folded = fields.filter((field) => !isOpen(c, field))
+  const read = (body: Body) => bodyOf(fields, valuesOf(fields, body))
+  const stale = solved !== undefined && !same(bodyOf(fields, values), read(solved.body))
   const since = useOfflineSince()
   const unsent = since !== undefined && error instanceof ApiError && !error.problem
   useEffect(() => onChanged(stale), [stale, onChanged])
@@ -52,20 +55,19 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
   }, [error])
 
   const send = (always: boolean) => {
-    const body = bodyOf(c, getValues())
-    if (always || !same(body, bodyOf(c, valuesOf(c, asked)))) onSolve(body)
+    const now = getValues()
+    const body = bodyOf(fields, now)
+    if (always || (isComplete(fields, now) && !same(body, read(asked)))) onSolve(body)
   }
-  const ways = waysOf(c).flat()
-  const firstWay = c.fields.find(({ name }) => ways.includes(name))
-  const fields = (list: readonly Field[]) =>
-    list.map((field) => (
-      <Fragment key={field.name}>
-        {field === firstWay && <HeatChoice description={c} register={register('heat')} />}
-        {sent(field.name) && (
-          <CaseField field={field} error={errors[field.name]} register={register(`fields.${field.name}`)} />
-        )}
-      </Fragment>
-    ))
+  const list = {
+    fields,
+    values,
+    example: c.example,
+    refusals,
+    path: '',
+    box: '',
+    register: (box: string) => register(box as 'fields'),
+  }
 
   return (
     <form
@@ -82,11 +84,11 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
       <h2 id="numbers" className="mb-2">
         Your numbers
       </h2>
-      {fields(open)}
+      <FieldList {...list} shown={open} />
       {folded.length > 0 && (
-        <details className="more" open={folded.some(({ name }) => errors[name])}>
+        <details className="more" open={folded.some(({ name }) => refusalAt(refusals, name))}>
           <summary>Other ways to give it, and more</summary>
-          {fields(folded)}
+          <FieldList {...list} shown={folded} />
         </details>
       )}
       {unsent ? (
@@ -101,7 +103,7 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
         {pending && <Button onClick={onCancel}>Cancel</Button>}
         <LinkButton
           onClick={() => {
-            reset(valuesOf(c, c.example))
+            reset(valuesOf(fields, c.example))
             send(false)
           }}
         >
@@ -120,17 +122,20 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
 const same = (a: Body, b: Body): boolean => JSON.stringify(a) === JSON.stringify(b)
 
 /** The labels and units of the fields that stand in the form. */
-function wordsOf(c: Case, heat: string): FormWords {
-  const fields = c.fields.filter(({ name }) => isSent(c, name, heat))
-  return {
-    labels: Object.fromEntries(fields.map(({ name, title }) => [name, title ?? name])),
-    units: Object.fromEntries(fields.flatMap(({ unit }) => (unit ? [[unit, unitText(unit)]] : []))),
-  }
+function wordsOf(fields: readonly Field[], values: FormValues): FormWords {
+  const sent = fields.filter(({ name }) => isSent(fields, name, values.solid))
+  const inside = sent.flatMap((field) => {
+    const own = values.fields[field.name]
+    return fieldsInside(field, (own as FormValues | undefined)?.kind ?? '')
+  })
+  const labels = (list: readonly Field[]) => Object.fromEntries(list.map(({ name, title }) => [name, title ?? name]))
+  const units = [...sent, ...inside].flatMap(({ unit }) => (unit ? [[unit, unitText(unit)] as const] : []))
+  return { labels: labels(sent), inside: labels(inside), units: Object.fromEntries(units) }
 }
 
 /** Shown at once: what must be given, and what the example gives. */
-function isOpen(c: Case, { name, required }: Field): boolean {
-  if (required || name in c.example || name === 'outputs') return true
-  const ways = waysOf(c)
-  return ways.some((way) => way.includes(name)) && ways.flat().some((one) => one in c.example)
+function isOpen({ fields, example }: Case, { name, required }: Field): boolean {
+  if (required || name in example || name === 'outputs') return true
+  const ways = waysOf(fields)
+  return ways.some((way) => way.includes(name)) && ways.flat().some((one) => one in example)
 }

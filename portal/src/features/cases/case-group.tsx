@@ -1,23 +1,27 @@
 import { Link } from 'react-router-dom'
 import { counted } from '../../components/formats.ts'
-import { Sketch } from '../../figure/sketch.tsx'
-import type { CaseSummary } from './queries.ts'
+import { Sketch } from '../../figure/sketch/sketch.tsx'
+import type { CaseList, CaseSummary } from './described.ts'
 
-const titleOf = (family: string) => family.charAt(0).toUpperCase() + family.slice(1).replaceAll('-', ' ')
+interface Props {
+  family: CaseList['families'][number]
+  cases: readonly CaseSummary[]
+}
 
 /** The cases of one family: cells of one ruled table. */
-export function CaseGroup({ family, cases }: { family: string; cases: readonly CaseSummary[] }) {
+export function CaseGroup({ family: { title, text }, cases }: Props) {
   return (
-    <section className="case-group" aria-label={titleOf(family)}>
+    <section className="case-group" aria-label={title}>
       <header>
-        <h2>{titleOf(family)}</h2>
+        <h2>{title}</h2>
+        <p className="mt-1 text-ink-2">{text}</p>
         <p className="lab mt-2">{counted(cases.length, 'case')}</p>
       </header>
       <ul>
-        {cases.map(({ id, title, summary, sketch }) => (
+        {cases.map(({ id, title: name, summary, sketch }) => (
           <li key={id}>
             <Sketch sketch={sketch} />
-            <Link to={`/cases/${id}`}>{title}</Link>
+            <Link to={`/cases/${id}`}>{name}</Link>
             <span className="lab">{id}</span>
             <span className="text-ink-2">{summary}</span>
           </li>

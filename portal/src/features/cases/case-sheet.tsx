@@ -3,13 +3,14 @@ import { useState } from 'react'
 import { Band, Sheet } from '../../components/sheet.tsx'
 import { Failed, Loading } from '../../components/states.tsx'
 import { TitleBlock } from '../../components/title-block.tsx'
+import { isDrawn } from '../../solving/described.ts'
 import { trySolve } from '../../solving/solve.ts'
 import { AnswerView } from './answer-view.tsx'
 import { CallView } from './call-view.tsx'
 import { CaseForm } from './case-form.tsx'
 import { CurveBand } from './curve-band.tsx'
 import { AboutBody } from './about-body.tsx'
-import type { Case } from './queries.ts'
+import type { Case } from './described.ts'
 import type { Stale } from './stale-frame.tsx'
 import { type Solved, useSolve } from './use-solve.ts'
 
@@ -55,7 +56,7 @@ export function CaseSheet({ description: c }: { description: Case }) {
       </Band>
       {solved ? (
         <>
-          <CurveBand description={c} solved={solved} stale={stale} />
+          {isDrawn(c) && <CurveBand description={c} solved={solved} stale={stale} />}
           <Band>
             <div className="two flip">
               <AnswerView description={c} answer={solved.answer} stale={stale} />

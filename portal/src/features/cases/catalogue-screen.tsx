@@ -7,16 +7,25 @@ import { Sheet } from '../../components/sheet.tsx'
 import { Empty } from '../../components/states.tsx'
 import { TitleBlock } from '../../components/title-block.tsx'
 import { CaseGroup } from './case-group.tsx'
-import { type CaseSummary, casesQuery } from './queries.ts'
+import { FacetMarks } from './facet-marks.tsx'
+import { marked, narrowed, narrowingIn, worded } from './narrowing.ts'
+import type { CaseList } from './described.ts'
+import { casesQuery } from './queries.ts'
 
+const none: CaseList = { cases: [], families: [], facets: [] }
+
+/** Every case, narrowed by words and by marks that stand in the address. */
 export function CatalogueScreen() {
   const query = useQuery(casesQuery())
   const [search, setSearch] = useSearchParams()
-  const words = search.get('q') ?? ''
-  const cases = query.data?.cases ?? []
-  const found = cases.filter((c) => matches(c, words))
+  const list = query.data ?? none
+  const { cases } = list
+  const narrowing = narrowingIn(search, list.facets)
+  const found = narrowed(list, narrowing)
   const waiting = query.isError ? '–' : 'reading'
-  const families = [...new Set(found.map(({ family }) => family))]
+  const operations = [...new Set(cases.flatMap((c) => c.operations.map(({ id }) => id)))]
+  const go = (next: URLSearchParams) => setSearch(next, { replace: true, preventScrollReset: true })
+  const clear = () => go(new URLSearchParams())
   return (
     <Sheet title="Cases">
       <TitleBlock
@@ -24,34 +33,36 @@ export function CatalogueScreen() {
         facts={[
           { name: 'Cases', value: query.data ? cases.length : waiting },
           { name: 'Shown', value: query.data ? found.length : waiting },
-          {
-            name: 'Operations',
-            value:
-              [...new Set(cases.flatMap(({ operations }) => operations.map(({ id }) => id)))].join(' · ') || waiting,
-            full: true,
-          },
+          { name: 'Operations', value: operations.join(' · ') || waiting, full: true },
         ]}
       >
         <p className="prose">
           Each case is one body with one boundary, and every answer states its bound.
-          {cases.length > 1 && ' Pick what you can see in your problem.'}
+          {cases.length > 1 && ' Mark what you can see in your problem; the rest falls away.'}
         </p>
       </TitleBlock>
-      <search className="band tight btnrow">
-        <label htmlFor="words" className="font-[560]">
-          Find by word
-        </label>
-        <input
-          id="words"
-          type="search"
-          className="box max-w-[280px]"
-          value={words}
-          onChange={(event) => setSearch(event.target.value ? { q: event.target.value } : {}, { replace: true })}
+      <search className="band tight">
+        <FacetMarks
+          list={list}
+          narrowing={narrowing}
+          onMark={(facet, value, on) => go(marked(search, facet, value, on))}
         />
-        <span role="status" className="fig">
-          {query.data && `${counted(found.length, 'case')} of ${cases.length}`}
-        </span>
-        {words && <LinkButton onClick={() => setSearch({}, { replace: true })}>Clear</LinkButton>}
+        <div className="btnrow pt-4">
+          <label htmlFor="words" className="font-[560]">
+            Find by word
+          </label>
+          <input
+            id="words"
+            type="search"
+            className="box max-w-[280px]"
+            value={narrowing.words}
+            onChange={(event) => go(worded(search, event.target.value))}
+          />
+          <span role="status" className="fig">
+            {query.data && `${found.length} of ${counted(cases.length, 'case')}`}
+          </span>
+          {search.size > 0 && <LinkButton onClick={clear}>Clear all</LinkButton>}
+        </div>
       </search>
       <QueryView
         query={query}
@@ -60,25 +71,19 @@ export function CatalogueScreen() {
         empty={
           <div className="band">
             <Empty title="No case has all of that">
-              <LinkButton onClick={() => setSearch({}, { replace: true })}>Clear the words above</LinkButton>
+              <p className="prose">Clear one mark above, or the words.</p>
+              <LinkButton onClick={clear}>Clear all</LinkButton>
             </Empty>
           </div>
         }
       >
-        {() =>
-          families.map((family) => (
-            <CaseGroup key={family} family={family} cases={found.filter((c) => c.family === family)} />
-          ))
+        {({ families }) =>
+          families.map((family) => {
+            const own = found.filter((c) => c.family === family.id)
+            return own.length > 0 && <CaseGroup key={family.id} family={family} cases={own} />
+          })
         }
       </QueryView>
     </Sheet>
   )
-}
-
-function matches(c: CaseSummary, words: string): boolean {
-  const text = `${c.id} ${c.title} ${c.summary} ${c.family}`.toLowerCase()
-  return words
-    .toLowerCase()
-    .split(/\s+/)
-    .every((word) => text.includes(word))
 }

@@ -3,12 +3,12 @@ import { useState } from 'react'
 import { Segmented } from '../../components/segmented.tsx'
 import { Band } from '../../components/sheet.tsx'
 import { QueryView } from '../../components/query-view.tsx'
-import { hatchFor } from '../../figure/sketch.tsx'
+import { hatchFor } from '../../figure/sketch/shapes.ts'
 import { type Drawing, curveQuery } from '../../solving/curve-query.ts'
 import { FieldCurve } from './field-curve.tsx'
 import { FieldTable } from './field-table.tsx'
 import { HistoryCurve } from './history-curve.tsx'
-import type { Case } from './queries.ts'
+import type { Case } from './described.ts'
 import { type Stale, StaleFrame } from './stale-frame.tsx'
 import type { Solved } from './use-solve.ts'
 
@@ -30,7 +30,7 @@ export function CurveBand({ description: c, solved: { body, answer }, stale }: P
   return (
     <Band label="Curve">
       <div className="btnrow justify-between mb-5">
-        <h2>{c.places === 'depths' ? 'One solve, two cuts' : 'One solve, its history'}</h2>
+        <h2>{headOf(query.data)}</h2>
         <Segmented label="Show as" options={views} value={view} onChange={(chosen) => setView(chosen)} />
       </div>
       <StaleFrame stale={stale}>
@@ -42,8 +42,15 @@ export function CurveBand({ description: c, solved: { body, answer }, stale }: P
   )
 }
 
-function Shown({ drawing, view, body }: { drawing: Drawing | null; view: 'curve' | 'table'; body: string }) {
-  if (!drawing) return <p className="prose">All times are 0. Ask for a time after the change to see a curve.</p>
+function headOf(drawing: Drawing | undefined): string {
+  if (drawing?.kind === 'field') return 'One solve, two cuts'
+  return drawing?.kind === 'history' && drawing.series.length > 1
+    ? 'One solve, its histories'
+    : 'One solve, its history'
+}
+
+function Shown({ drawing, view, body }: { drawing: Drawing; view: 'curve' | 'table'; body: string }) {
+  if (drawing.kind === 'none') return <p className="prose">{drawing.why}</p>
   if (view === 'table') return <FieldTable drawing={drawing} />
   if (drawing.kind === 'field') return <FieldCurve drawing={drawing} hatch={hatchFor(body)} />
   return <HistoryCurve drawing={drawing} />

@@ -4,11 +4,11 @@ import { FieldFigure } from '../../figure/field-figure.tsx'
 import { nearest } from '../../figure/grid.ts'
 import type { Hatch } from '../../figure/hatches.tsx'
 import { placeOf, timeOf } from '../../figure/history-section.tsx'
-import type { FieldDrawing } from '../../solving/curve-query.ts'
+import type { FieldDrawing } from '../../solving/field-drawing.ts'
 
 /** The three views with a slider for each cut; the sliders step along the solved points. */
 export function FieldCurve({ drawing: { field, start }, hatch }: { drawing: FieldDrawing; hatch: Hatch }) {
-  const [cut, setCut] = useState({ row: nearest(field.times, start.time), column: nearest(field.depths, start.depth) })
+  const [cut, setCut] = useState({ row: nearest(field.times, start.time), column: nearest(field.places, start.place) })
   return (
     <>
       <FieldFigure field={field} cut={cut} onCut={setCut} hatch={hatch} material="" />
@@ -22,10 +22,10 @@ export function FieldCurve({ drawing: { field, start }, hatch }: { drawing: Fiel
           onChange={(row) => setCut({ ...cut, row })}
         />
         <Slider
-          label="Cut B–B at depth"
+          label={`Cut B–B at ${field.along}`}
           shown={placeOf(field, cut)}
           min={0}
-          max={field.depths.length - 1}
+          max={field.places.length - 1}
           value={cut.column}
           onChange={(column) => setCut({ ...cut, column })}
         />

@@ -1,36 +1,39 @@
 import { NumberTable } from '../../components/number-table.tsx'
 import { inMeasure, lengthMeasure, sentTime, timeMeasure } from '../../figure/measures.ts'
-import type { Drawing } from '../../solving/curve-query.ts'
+import type { FieldDrawing } from '../../solving/field-drawing.ts'
+import type { HistoryDrawing } from '../../solving/history-drawing.ts'
 
 const ROWS = 24
 const COLUMNS = 10
 
 /** The numbers of the curves: every so many of them, those that were asked for among them. */
-export function FieldTable({ drawing }: { drawing: Drawing }) {
+export function FieldTable({ drawing }: { drawing: FieldDrawing | HistoryDrawing }) {
   const times = drawing.kind === 'field' ? drawing.field.times : drawing.times
-  const depths = drawing.kind === 'field' ? drawing.field.depths : [0]
-  const measure = timeMeasure(times.at(-1)!)
-  const length = lengthMeasure(depths.at(-1)!)
+  const measure = timeMeasure(Math.max(...times.map(Math.abs)))
   const rows = picked(times, ROWS, drawing.asked.times)
-  const columns = picked(depths, COLUMNS, drawing.asked.depths)
-  const valueOf = (row: number, column: number) =>
-    drawing.kind === 'field' ? drawing.field.values[row]![column]! : drawing.values[row]!
-  const heads =
-    drawing.kind === 'field' ? columns.map((i) => `${inMeasure(depths[i]!, length)} ${length.unit}`) : ['temperature']
+  const columns = drawing.kind === 'field' ? fieldColumns(drawing) : drawing.series
   return (
     <NumberTable
       caption="Temperature, °C. The same numbers as the curves."
-      label="Temperature by time and depth"
+      label={`Temperature by time and ${drawing.kind === 'field' ? drawing.field.along : 'place'}`}
       corner={`time, ${measure.unit}`}
-      columns={heads}
+      columns={columns.map(({ name }) => name)}
       rows={rows.map((row) => ({
         name: drawing.asked.times.includes(times[row]!)
           ? sentTime(times[row]!, measure)
           : inMeasure(times[row]!, measure, 6),
-        values: columns.map((column) => valueOf(row, column)),
+        values: columns.map(({ values }) => values[row]!),
       }))}
     />
   )
+}
+
+function fieldColumns({ field: { places, values }, asked }: FieldDrawing) {
+  const length = lengthMeasure(places.at(-1)!)
+  return picked(places, COLUMNS, asked.places).map((i) => ({
+    name: `${inMeasure(places[i]!, length)} ${length.unit}`,
+    values: values.map((row) => row[i]!),
+  }))
 }
 
 function picked(all: readonly number[], most: number, asked: readonly number[]): number[] {

@@ -1,105 +1,91 @@
-import type { Body } from '../../solving/solve.ts'
-import type { Case, Field } from './queries.ts'
+import type { Body } from '../../solving/body.ts'
+import { type Field, allInside, controlOf, defaultOf, fieldsInside, optionsOf } from './fields.ts'
+import { listOf, numberOf, rowsOf, rowsText } from './number-text.ts'
+import { isSent, wayName, waysOf } from './solid-ways.ts'
 
-/** What stands in the boxes of the form. */
+/** What stands in the boxes of the form, or of a group of it. */
 export interface FormValues {
-  /** Which statement of the heat capacity is sent; empty for none. */
-  heat: string
-  fields: Record<string, string | string[]>
+  /** Which statement of the solid is sent; empty for none. */
+  solid: string
+  /** Which kind an object is of; empty for none, and where it has no kinds. */
+  kind: string
+  fields: { [name: string]: Value }
 }
 
-interface FieldSchema {
-  type?: string
-  const?: unknown
-  enum?: readonly unknown[]
-  anyOf?: readonly FieldSchema[]
-  items?: FieldSchema
-  default?: unknown
+export type Value = string | string[] | FormValues
+
+const isGroup = (value: unknown): value is FormValues =>
+  typeof value === 'object' && value !== null && !Array.isArray(value)
+
+export function valuesOf(fields: readonly Field[], body: Body): FormValues {
+  const given = waysOf(fields).find((way) => way.some((name) => name in body))
+  const boxes = fields.map((field) => [field.name, valueIn(field, body[field.name])] as const)
+  return { solid: given ? wayName(given) : '', kind: String(body['kind'] ?? ''), fields: Object.fromEntries(boxes) }
 }
 
-export type Kind = 'number' | 'list' | 'choice' | 'several'
-
-/** The values of a closed list, in the type the contract has for them. */
-export function choicesOf(schema: FieldSchema): readonly unknown[] {
-  if (schema.enum) return schema.enum
-  if (schema.anyOf?.every((one) => one.const !== undefined || one.enum))
-    return schema.anyOf.flatMap((one) => one.enum ?? [one.const])
-  return []
-}
-
-export function kindOf(field: Field): Kind {
-  const schema = field.schema as FieldSchema
-  if (schema.items) return choicesOf(schema.items).length > 0 ? 'several' : 'list'
-  return choicesOf(schema).length > 0 ? 'choice' : 'number'
-}
-
-export const optionsOf = (field: Field): readonly unknown[] => {
-  const schema = field.schema as FieldSchema
-  return choicesOf(schema.items ?? schema)
-}
-
-/** The ways in which a solid can state its heat capacity; exactly one is sent. */
-const heatWays: readonly (readonly string[])[] = [
-  ['density', 'specificHeat'],
-  ['volumetricHeatCapacity'],
-  ['diffusivity'],
-]
-
-/** The ways that a case offers, when there is more than one. */
-export function waysOf(c: Case): readonly (readonly string[])[] {
-  const names = new Set(c.fields.map(({ name }) => name))
-  const ways = heatWays.filter((way) => way.every((name) => names.has(name)))
-  return ways.length > 1 ? ways : []
-}
-
-export const wayName = (way: readonly string[]): string => way.join('+')
-
-export function isSent(c: Case, name: string, heat: string): boolean {
-  const way = waysOf(c).find((one) => one.includes(name))
-  return !way || wayName(way) === heat
-}
-
-export function valuesOf(c: Case, body: Body): FormValues {
-  const given = waysOf(c).find((way) => way.some((name) => name in body))
-  const fields = Object.fromEntries(c.fields.map((field) => [field.name, textOf(field, body[field.name])]))
-  return { heat: given ? wayName(given) : '', fields }
-}
-
-function textOf(field: Field, value: unknown): string | string[] {
-  if (kindOf(field) === 'several')
-    return ((value ?? (field.schema as FieldSchema).default ?? []) as unknown[]).map(String)
-  if (value === undefined) return ''
-  return Array.isArray(value) ? value.join(', ') : String(value)
+function valueIn(field: Field, given: unknown): Value {
+  switch (controlOf(field)) {
+    case 'group':
+    case 'kinds':
+      return valuesOf(allInside(field), (given ?? {}) as Body)
+    case 'several':
+      return ((given ?? defaultOf(field) ?? []) as unknown[]).map(String)
+    case 'rows':
+      return given === undefined ? '' : rowsText(field.fields ?? [], given as Body[])
+    default:
+      if (given === undefined) return ''
+      return Array.isArray(given) ? given.join(', ') : String(given)
+  }
 }
 
 /** The body of the call: what is empty is not sent, what is no number is sent as typed for the service to refuse. */
-export function bodyOf(c: Case, { heat, fields }: FormValues): Record<string, unknown> {
-  const body: Record<string, unknown> = {}
-  for (const field of c.fields) {
-    if (!isSent(c, field.name, heat)) continue
-    const value = fields[field.name]
-    if (value === undefined || value.length === 0 || (typeof value === 'string' && value.trim() === '')) continue
-    const sent = valueOf(field, value)
-    if (kindOf(field) === 'several' && JSON.stringify(sent) === JSON.stringify((field.schema as FieldSchema).default))
-      continue
-    body[field.name] = sent
+export function bodyOf(fields: readonly Field[], values: FormValues): Record<string, unknown> {
+  const sent = fields.flatMap((field) => {
+    const value = isSent(fields, field.name, values.solid) ? sentOf(field, values.fields[field.name]) : undefined
+    return value === undefined ? [] : [[field.name, value] as const]
+  })
+  return Object.fromEntries(sent)
+}
+
+function sentOf(field: Field, value: Value | undefined): unknown {
+  if (isGroup(value)) return groupOf(field, value)
+  if (Array.isArray(value)) {
+    const chosen = optionsOf(field).filter((option) => value.includes(String(option)))
+    return chosen.length === 0 || JSON.stringify(chosen) === JSON.stringify(defaultOf(field)) ? undefined : chosen
   }
-  return body
+  const text = value?.trim() ?? ''
+  return text === '' ? undefined : readAs(field, text)
 }
 
-function valueOf(field: Field, value: string | string[]): unknown {
-  if (Array.isArray(value)) return optionsOf(field).filter((option) => value.includes(String(option)))
-  const text = value.trim()
-  if (kindOf(field) === 'list')
-    return text
-      .split(/[\s,;]+/)
-      .filter(Boolean)
-      .map(numberOf)
-  if (kindOf(field) === 'choice') return optionsOf(field).find((option) => String(option) === text) ?? text
-  return numberOf(text)
+/** An object that may be left out is, where nothing of it is given. */
+function groupOf(field: Field, values: FormValues): unknown {
+  const inside = bodyOf(fieldsInside(field, values.kind), values)
+  if (field.kinds) return values.kind === '' ? undefined : { kind: values.kind, ...inside }
+  return field.required || Object.keys(inside).length > 0 ? inside : undefined
 }
 
-function numberOf(text: string): number | string {
-  const value = Number(text.replaceAll('\u2212', '-'))
-  return Number.isFinite(value) ? value : text
+function readAs(field: Field, text: string): unknown {
+  switch (controlOf(field)) {
+    case 'list':
+      return listOf(text)
+    case 'rows':
+      return rowsOf(field.fields ?? [], text)
+    case 'choice':
+      return optionsOf(field).find((option) => String(option) === text) ?? text
+    case 'text':
+      return text
+    default:
+      return numberOf(text)
+  }
+}
+
+/** Whether everything that must be given stands in its box. */
+export function isComplete(fields: readonly Field[], values: FormValues): boolean {
+  return fields.every((field) => {
+    if (!isSent(fields, field.name, values.solid)) return true
+    const value = values.fields[field.name]
+    if (!isGroup(value)) return !field.required || (value !== undefined && value.length > 0)
+    if (sentOf(field, value) === undefined) return !field.required
+    return isComplete(fieldsInside(field, value.kind), value)
+  })
 }

@@ -2,22 +2,30 @@ import { scientific, unitText } from '../../components/formats.ts'
 import { NumberTable } from '../../components/number-table.tsx'
 import { plain, sentTime, timeMeasure } from '../../figure/measures.ts'
 import { type Answer, type CompactAnswer, isFull } from '../../solving/solve.ts'
-import type { Case } from './queries.ts'
+import type { Case } from './described.ts'
 
 type Values = number | number[] | number[][]
+type Shape = Case['outputs'][number]['shape']
 
 interface Bound {
   absolute: number
   relative: number
 }
 
+interface Axes {
+  times?: number[]
+  depths?: number[] | undefined
+  radii?: number[] | undefined
+  points?: Record<string, number>[] | undefined
+}
+
 /** Rows of a long answer that are shown; all of them stand in the JSON. */
 const SHOWN = 12
 
-/** Each output with its error limit: one number, or a table by time and place. */
+/** Each output with its error limit: one number, or a table by time, by place, or by both. */
 export function OutputValues({ description: c, answer }: { description: Case; answer: Answer | CompactAnswer }) {
   const bounds = answer.accuracy.bound as Record<string, Bound>
-  const axes = isFull(answer) ? answer.axes : undefined
+  const axes: Axes = isFull(answer) ? answer.axes : {}
   return (
     <div className="grid gap-5">
       {Object.entries(answer.result as Record<string, Values>).map(([name, values]) => {
@@ -34,7 +42,7 @@ export function OutputValues({ description: c, answer }: { description: Case; an
               </dd>
             </dl>
           )
-        return <Table key={name} head={head} limit={limit} values={values} axes={axes} />
+        return <Table key={name} {...{ head, limit, values, axes }} shape={output?.shape ?? 'times'} />
       })}
     </div>
   )
@@ -44,28 +52,41 @@ interface TableProps {
   head: string
   limit: string
   values: number[] | number[][]
-  axes: { times: number[]; depths?: number[] | undefined } | undefined
+  shape: Shape
+  axes: Axes
 }
 
-function Table({ head, limit, values, axes }: TableProps) {
+function Table({ head, limit, values, shape, axes }: TableProps) {
+  const places = placeNames(axes)
+  const byPlace = shape === 'places'
   const rows = values.map((row) => (Array.isArray(row) ? row : [row]))
-  const measure = timeMeasure(axes?.times.at(-1) ?? 1)
-  const across = rows[0]?.length ?? 0
-  const columns =
-    rows[0] && Array.isArray(values[0])
-      ? Array.from({ length: across }, (_, i) => (axes?.depths ? `${plain(axes.depths[i]!)} m` : `place ${i + 1}`))
-      : [head.split(', ')[1] ?? head.toLowerCase()]
-  const more = rows.length > SHOWN ? ` The first ${SHOWN} of ${rows.length} times; the rest stands in the JSON.` : ''
+  const measure = timeMeasure(Math.max(...(axes.times ?? [1]).map(Math.abs)))
+  const columns = Array.isArray(values[0])
+    ? rows[0]!.map((_, j) => places?.[j] ?? `place ${j + 1}`)
+    : [head.split(', ')[1] ?? head.toLowerCase()]
+  const names = byPlace ? places : axes.times?.map((time) => sentTime(time, measure))
+  const what = byPlace ? 'places' : 'times'
+  const more = rows.length > SHOWN ? ` The first ${SHOWN} of ${rows.length} ${what}; the rest stands in the JSON.` : ''
   return (
     <NumberTable
       caption={`${head}; ${limit}.${more}`}
       label={head}
-      corner={axes ? `time, ${measure.unit}` : 'time, in order'}
+      corner={byPlace ? 'place' : axes.times ? `time, ${measure.unit}` : 'time, in order'}
       columns={columns}
-      rows={rows
-        .slice(0, SHOWN)
-        .map((row, i) => ({ name: axes ? sentTime(axes.times[i]!, measure) : String(i + 1), values: row }))}
+      rows={rows.slice(0, SHOWN).map((row, i) => ({ name: names?.[i] ?? String(i + 1), values: row }))}
     />
+  )
+}
+
+/** The places as they were asked for. */
+function placeNames({ depths, radii, points }: Axes): string[] | undefined {
+  const list = depths ?? radii
+  if (list) return list.map((place) => `${plain(place)} m`)
+  return points?.map(
+    (point) =>
+      `${Object.entries(point)
+        .map(([axis, value]) => `${axis} ${plain(value)}`)
+        .join(', ')} m`,
   )
 }
 

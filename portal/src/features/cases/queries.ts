@@ -1,11 +1,6 @@
 import { queryOptions } from '@tanstack/react-query'
 import { unwrap } from '../../api/api-error.ts'
 import { publicApi } from '../../api/clients.ts'
-import type { components } from '../../../../openapi/openapi.d.ts'
-
-export type CaseSummary = components['schemas']['CaseSummary']
-export type Case = components['schemas']['Case']
-export type Field = components['schemas']['CaseField']
 
 export const casesQuery = () =>
   queryOptions({

@@ -1,6 +1,7 @@
 import { useMutation } from '@tanstack/react-query'
 import { useRef, useState } from 'react'
-import { type Answer, type Body, type CompactAnswer, trySolve } from '../../solving/solve.ts'
+import type { Body } from '../../solving/body.ts'
+import { type Answer, type CompactAnswer, trySolve } from '../../solving/solve.ts'
 
 export interface Solved {
   body: Body

@@ -42,10 +42,10 @@ export function Hero({ field, answer, film, hours, position, asked, onPosition, 
           {(solved) => (
             <FieldFigure
               field={solved}
-              cut={{ row: nearest(solved.times, hours * 3600), column: nearest(solved.depths, depth) }}
+              cut={{ row: nearest(solved.times, hours * 3600), column: nearest(solved.places, depth) }}
               onCut={({ row, column }) => {
                 onHours(Math.max(0.5, Math.round((solved.times[row]! / 3600) * 2) / 2))
-                setDepth(solved.depths[column]!)
+                setDepth(solved.places[column]!)
               }}
               hatch="masonry"
               material="brick"

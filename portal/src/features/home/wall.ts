@@ -1,7 +1,7 @@
 import { keepPreviousData, queryOptions } from '@tanstack/react-query'
 import type { Field } from '../../figure/field.ts'
 import { gridOf } from '../../figure/grid.ts'
-import { gridValues } from '../../solving/curve-query.ts'
+import { gridValues } from '../../solving/grid-values.ts'
 import { trySolve } from '../../solving/solve.ts'
 
 export const CASE = 'slab-convection'
@@ -42,14 +42,15 @@ export const fieldQuery = (filmCoefficient: number) =>
   queryOptions({
     queryKey: ['try', CASE, 'wall', filmCoefficient],
     queryFn: async ({ signal }): Promise<Field> => {
-      const values = await gridValues(CASE, { ...wall, filmCoefficient }, grid, signal)
+      const values = await gridValues(CASE, { ...wall, filmCoefficient, ...grid }, signal)
       return {
-        ...grid,
+        places: grid.depths,
+        along: 'depth',
+        times: grid.times,
         values,
         initial: wall.initialTemperature,
-        drive: wall.ambientTemperature,
-        held: false,
-        back: 'insulated',
+        near: { kind: 'film', level: wall.ambientTemperature },
+        far: { kind: 'insulated' },
       }
     },
     placeholderData: keepPreviousData,

@@ -1,0 +1,2 @@
+/** The body of a call. */
+export type Body = Readonly<Record<string, unknown>>
