@@ -29,7 +29,7 @@ export class UnitCylinder implements UnitBody {
   }
 
   remaining(j: number, m: Moment): Estimate {
-    if (m.fourier < PLANE) return closed(remaining(...this.arguments(j, m)))
+    if (m.fourier < PLANE) return closed(Math.min(1, remaining(...this.arguments(j, m))))
     return choose(
       m,
       () => this.contour.remaining(j, m),

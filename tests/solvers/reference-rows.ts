@@ -2,6 +2,8 @@ import { readFileSync } from 'node:fs'
 import type { OutputName } from '../../solvers/outputs.ts'
 import type { Kinds } from './rows/ask.ts'
 import { closedForms } from './rows/closed-forms.ts'
+import { radial } from './rows/radial.ts'
+import { slabs } from './rows/slabs.ts'
 import { steps } from './rows/steps.ts'
 
 export interface Row {
@@ -28,7 +30,7 @@ function read(name: string): Row[] {
 }
 
 /* Each file of rows/ has a line here. */
-const kinds: Kinds = { ...steps, ...closedForms }
+const kinds: Kinds = { ...steps, ...closedForms, ...radial, ...slabs }
 
 export const questions: Question[] = Object.entries(kinds).flatMap(([kind, { file, ask, names }]) =>
   read(file)
