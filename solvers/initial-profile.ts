@@ -54,27 +54,37 @@ export function resolveStart(
   input: { initialTemperature?: number | undefined; initialProfile?: InitialProfile | undefined },
   thickness: number,
   refuse: (issue: Issue) => void,
-): Start {
+): Start | undefined {
   const { initialTemperature, initialProfile } = input
   const accepted = 'exactly one of initialTemperature and initialProfile'
   if (initialProfile && initialTemperature !== undefined) {
     const detail = 'The start is given twice: by initialTemperature and by initialProfile.'
     refuse({ pointer: '#/initialProfile', code: 'conflicting-fields', detail, accepted })
-  } else if (!initialProfile && initialTemperature === undefined) {
+    return undefined
+  }
+  if (!initialProfile && initialTemperature === undefined) {
     const detail = 'The initial temperature of the body is missing.'
     refuse({ pointer: '#/initialTemperature', code: 'missing-field', detail, accepted })
+    return undefined
   }
   if (!initialProfile) return { initialTemperature: initialTemperature! }
-  refuseProfile(initialProfile, thickness, refuse)
-  return { initialProfile }
+  return isSound(initialProfile, thickness, refuse) ? { initialProfile } : undefined
 }
 
+/** Depths nearer to each other than this share of the thickness are meant as a jump, which is stated by the same depth twice. */
+const LEAST_STEP = 1e-9
+
 /** A profile must lie along the whole body, from face to face, and never turn back. */
-export function refuseProfile(
+export function isSound(
   { depths, temperatures }: InitialProfile,
   thickness: number,
-  refuse: (issue: Issue) => void,
-): void {
+  tell: (issue: Issue) => void,
+): boolean {
+  let sound = true
+  const refuse = (issue: Issue) => {
+    sound = false
+    tell(issue)
+  }
   const at = (j: number) => `#/initialProfile/depths/${j}`
   if (depths.length !== temperatures.length || depths.length < 2) {
     const detail = `The profile has ${depths.length} depths and ${temperatures.length} temperatures.`
@@ -97,8 +107,12 @@ export function refuseProfile(
     } else if (j > 1 && depths[j] === depths[j - 2]) {
       const detail = `The depth ${depths[j]} m stands three times.`
       refuse({ pointer: at(j), code: 'conflicting-fields', detail, accepted: 'a depth once, or twice for a jump' })
+    } else if (depths[j] !== depths[j - 1] && depths[j]! - depths[j - 1]! < LEAST_STEP * thickness) {
+      const detail = `This depth is nearer to the one before it than a billionth of the thickness.`
+      refuse({ pointer: at(j), code: 'out-of-range', detail, accepted: 'the same depth for a jump, or one farther on' })
     }
   }
+  return sound
 }
 
 /** The profile of a start; a uniform one has the two faces. */

@@ -83,6 +83,22 @@ export class TwoSided {
     return apart(left) + apart(right) + fluxes + profile + Number((source?.rate ?? 0) !== 0)
   }
 
+  /** Whether something acts at a face itself or all along the body. */
+  driven(face: 'left' | 'right'): boolean {
+    const side = face === 'left' ? this.problem.left : this.problem.right
+    const apart = (temperatureOf(side) ?? this.reference) !== this.reference
+    return apart || fluxOf(side) !== 0 || (this.problem.source?.rate ?? 0) !== 0
+  }
+
+  /** Whether all that comes to a face is what the other alone drives, with no rounding of its own. */
+  crosses(face: 'left' | 'right'): boolean {
+    const { left, right, source, start, pulse } = this.problem
+    const own = face === 'left' ? left : right
+    if (this.reference !== 0 || 'initialProfile' in start || pulse !== undefined || (source?.rate ?? 0) !== 0)
+      return false
+    return (temperatureOf(own) ?? 0) === 0 && fluxOf(own) === 0
+  }
+
   at(i: number): TwoSidedMoment {
     const known = this.moments.get(i)
     if (known) return known
@@ -116,8 +132,10 @@ export class TwoSided {
     const heat = () => scaled(volumetricHeatCapacity * length, values.gain())
     const known = (side: Side, acting: boolean, flux: () => Estimate) =>
       passesNoHeat(side) ? exactly(acting ? fluxOf(side) : 0) : scaled(unit, flux())
-    const leftFlux = () => known(left, pulse === undefined || time <= pulse, () => values.leftFlux())
-    const rightFlux = () => known(right, true, () => values.rightFlux())
+    const crossing = (face: 'left' | 'right') => this.crosses(face) && this.lasting.crossing(face, this.momentOf(time))
+    const leftFlux = () =>
+      known(left, pulse === undefined || time <= pulse, () => crossing('left') || values.leftFlux())
+    const rightFlux = () => known(right, true, () => crossing('right') || values.rightFlux())
     const mean = meanOf(this.profile, length, this.reference)
     return {
       temperature: (j) => celsius(values.temperature(this.places[j]!)),

@@ -124,9 +124,16 @@ export class EarlyValues {
       value += face.value.re
       size += face.size
     }
-    const unfaded = this.pieces.reduce((sum, p) => sum + p.forwardFluxSize + p.backwardFluxSize, 0)
     const taken = face.beta === 0 ? 0 : (2 * face.beta) / (face.beta + (face.alpha * REAL) / this.m.root)
-    return { value, error: EPS * (size + LEFT * taken * unfaded) + TINY, method: 'contour' }
+    return { value, error: EPS * (size + LEFT * taken * this.unfaded()) + TINY, method: 'contour' }
+  }
+
+  /** Flux of all waves where they start, in units of EPS. */
+  private unfaded(): number {
+    return this.waves.reduce((sum, { forwardSizes, backwardSizes }, n) => {
+      const sent = [...forwardSizes, ...backwardSizes].reduce((all, { given }) => all + given, 0)
+      return sum + modulus(this.roots[n]!) * sent
+    }, 0)
   }
 
   private pieceAt(k: number): Piece {
@@ -147,8 +154,8 @@ export class EarlyValues {
       forward.set([a.re, a.im], 2 * n)
       backward.set([b.re, b.im], 2 * n)
       const share = AMPLIFIED * (narrow ? modulus(w.unit) * Math.abs(rise!.rise.value) : modulus(own))
-      const given =
-        share + (narrow || slope !== 0 ? (1.5 * modulus(w.unit) * rise!.rise.slack) / (modulus(root) * width) : 0)
+      const told = slope === 0 ? 0 : Math.min(1, 1 / (modulus(root) * width))
+      const given = share + 0.75 * told * modulus(w.unit) * (rise?.rise.slack ?? 0)
       sizes.forwardSize += w.forwardSizes[k]!.own + share
       sizes.backwardSize += w.backwardSizes[k]!.own + share
       sizes.forwardFluxSize += modulus(root) * (w.forwardSizes[k]!.given + given)

@@ -1,5 +1,6 @@
 import { EPS, type Estimate } from './rounding.ts'
 import type { Load, Moment, Place, TwoSidedBody } from './two-sided-body.ts'
+import { crossingFlux } from './two-sided-crossing.ts'
 import { EarlyValues } from './two-sided-early.ts'
 import { LateSlab, termsAt } from './two-sided-late.ts'
 import { LateValues } from './two-sided-late-values.ts'
@@ -35,6 +36,14 @@ export class TwoSidedSlab {
   at(m: Moment): SlabValues {
     if (m.fourier < SERIES_FROM) return new EarlyValues(this.body, this.load, m)
     return new LateValues(this.late, this.late.stateAt(m.fourier))
+  }
+
+  /** The flux at a face that the other alone drives; undefined where the series has all its digits. */
+  crossing(face: 'left' | 'right', m: Moment): Estimate | undefined {
+    if (m.fourier >= SERIES_FROM) return undefined
+    const { left, right } = this.body
+    if (face === 'right') return crossingFlux(left, this.load.left, right, m)
+    return crossingFlux(right, this.load.right, left, m)
   }
 
   /**
