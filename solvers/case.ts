@@ -81,6 +81,10 @@ export interface CaseDescription<Shape_ extends z.ZodRawShape, R extends Resolve
   places: Places
   /** The coordinates of a point, where places are points. */
   pointAxes?: readonly PointAxis[]
+  /** Of these, the ones that only some bodies of the case have. */
+  optionalAxes?: readonly PointAxis[]
+  /** From where to where a body lies, by axis, in m; an axis that is left out has no meaning for it. */
+  pointRanges?(input: Record<string, unknown>): Partial<Record<PointAxis, readonly [number, number]>>
   /** Depths may be negative, in the other of two bodies. */
   signedDepths?: true
   /** Times are of a clock and may be negative: a settled cycle has no start. */
@@ -159,7 +163,10 @@ export function defineCase<S extends z.ZodRawShape, R extends Resolved>(descript
     if (issues.length > 0) throw new DomainError(issues)
     return resolved
   }
-  return { ...(description as unknown as Case), resolve }
+  // A rate follows from the temperatures of any case.
+  const { temperature, ...others } = description.outputs
+  const outputs = temperature ? { temperature, rate: {}, ...others } : others
+  return { ...(description as unknown as Case), outputs, resolve }
 }
 
 export function outputOf(c: Case, name: OutputName): OutputDescription {

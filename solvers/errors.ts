@@ -59,6 +59,10 @@ export const domainCodes = {
     title: 'The target is where the value ends',
     text: 'The value tends to the target and comes nearer to it for ever, so no time can be told at which it is reached. Ask for a target that differs from the end by what matters to you.',
   },
+  'no-rate-at-change': {
+    title: 'There is no rate at this time',
+    text: 'A temperature has one rate before a change of what drives it and another after it. Ask for a time to either side.',
+  },
   'singular-at-time-zero': {
     title: 'The output diverges at time zero',
     text: 'The requested output has no finite limit as time goes to zero. Ask for a time after the change.',

@@ -1,3 +1,5 @@
+import { SLOPE_COST } from './rate.ts'
+
 /** Where an output has numbers: at each time and place, at each time, at each place, or once. */
 export type Shape = 'grid' | 'times' | 'places' | 'single'
 
@@ -7,6 +9,8 @@ export interface OutputDescription {
   unit: string
   shape: Shape
   text: string
+  /** How many values of others one of these takes; it is priced so. */
+  cost?: number
 }
 
 /* The outputs that cases share. A case names those it has; where its unit or shape differs, it says so. */
@@ -17,6 +21,14 @@ export const outputCatalogue = {
     unit: 'Cel',
     shape: 'grid',
     text: 'Temperature at each time and place.',
+  },
+  rate: {
+    label: 'Rate',
+    symbol: '∂T/∂t',
+    unit: 'K/s',
+    shape: 'grid',
+    text: 'How fast the temperature rises at each time and place.',
+    cost: SLOPE_COST,
   },
   heatFlux: {
     label: 'Heat flux',
@@ -136,6 +148,48 @@ export const outputCatalogue = {
     unit: 'Cel',
     shape: 'times',
     text: 'Temperature of the face of the other body.',
+  },
+  leftHeatFlux: {
+    label: 'Heat flux at the left',
+    symbol: 'qₗ',
+    unit: 'W/m2',
+    shape: 'times',
+    text: 'Heat flux conducted into the body at its left face.',
+  },
+  rightHeatFlux: {
+    label: 'Heat flux at the right',
+    symbol: 'qᵣ',
+    unit: 'W/m2',
+    shape: 'times',
+    text: 'Heat flux conducted into the body at its right face.',
+  },
+  backHeatFlux: {
+    label: 'Heat flux at the back',
+    symbol: 'q₂',
+    unit: 'W/m2',
+    shape: 'times',
+    text: 'Heat flux conducted into the body at its back face.',
+  },
+  heatReleased: {
+    label: 'Heat released',
+    symbol: 'Qᵥ',
+    unit: 'J/m2',
+    shape: 'times',
+    text: 'Heat that the source in the body has given off since time 0.',
+  },
+  innerHeatFlux: {
+    label: 'Heat flux at the inside',
+    symbol: 'q₁',
+    unit: 'W/m2',
+    shape: 'times',
+    text: 'Heat flux conducted into the body at its inner face, per m2 of that face.',
+  },
+  outerHeatFlux: {
+    label: 'Heat flux at the outside',
+    symbol: 'q₂',
+    unit: 'W/m2',
+    shape: 'times',
+    text: 'Heat flux conducted into the body at its outer face, per m2 of that face.',
   },
 } as const satisfies Record<string, OutputDescription>
 

@@ -69,6 +69,11 @@ describe.each(cases.map((c) => [c.id, c] as const))('%s over all admissible inpu
               body,
               outputs.filter((name) => !name.endsWith('eatFlux')),
             )
+          if (error.issues.every((issue) => issue.code === 'no-rate-at-change'))
+            return ask(
+              body,
+              outputs.filter((name) => name !== 'rate'),
+            )
           if (!absent) return `refused: ${JSON.stringify(error.issues[0])}`
           const left = outputs.filter((_, i) => !error.issues.some((issue) => issue.pointer === `#/outputs/${i}`))
           return left.length ? ask(body, left) : undefined
