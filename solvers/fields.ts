@@ -135,9 +135,14 @@ const coordinates = {
 }
 
 /** Points of a body of two or three dimensions. */
-export function pointsOf(axes: readonly (keyof typeof coordinates)[]) {
-  const point = z.strictObject(Object.fromEntries(axes.map((axis) => [axis, coordinates[axis]])))
-  const accepted = `1 to ${MAX_POSITIONS} points {${axes.join(', ')}}, in m`
+export function pointsOf(
+  axes: readonly (keyof typeof coordinates)[],
+  optional: readonly (keyof typeof coordinates)[] = [],
+) {
+  const shape = axes.map((axis) => [axis, optional.includes(axis) ? coordinates[axis].optional() : coordinates[axis]])
+  const point = z.strictObject(Object.fromEntries(shape) as Record<string, z.ZodType<number | undefined>>)
+  const named = axes.map((axis) => (optional.includes(axis) ? `${axis}?` : axis)).join(', ')
+  const accepted = `1 to ${MAX_POSITIONS} points {${named}}, in m`
   return z
     .array(point)
     .min(1)

@@ -60,6 +60,8 @@ function varied(c: Case, stated: unknown, field: Field | undefined, name = ''): 
     return field?.maximum !== undefined && field.minimum !== undefined ? within(field) : fc.constant(stated)
   if (Array.isArray(stated) && typeof stated[0] === 'number' && field?.items)
     return placeNames.includes(name) && (c.depthsEndAt || c.radiiBeginAt) ? someOf(share) : someOf(within(field.items))
+  if (name === 'points' && c.pointRanges)
+    return someOf(fc.record(Object.fromEntries(Object.keys((stated as Input[])[0]!).map((axis) => [axis, share]))))
   if (Array.isArray(stated) && typeof stated[0] === 'object' && field?.items)
     return someOf(varied(c, stated[0], field.items))
   if (typeof stated !== 'object' || stated === null || Array.isArray(stated)) return fc.constant(stated)
@@ -72,6 +74,19 @@ function propertiesOf(field: Field | undefined, stated: Input): Record<string, F
   const options = field?.anyOf ?? field?.oneOf
   const chosen = options?.find((one) => one.properties?.['kind']?.const === stated['kind']) ?? field
   return chosen?.properties ?? {}
+}
+
+/** Points that were drawn as shares of the body, laid into it; along an endless direction by decades. */
+function withPoints(c: Case, body: Input): Input {
+  const shares = body['points'] as Record<string, number>[] | undefined
+  if (!shares || !c.pointRanges) return body
+  const ranges = c.pointRanges(body) as Record<string, readonly [number, number]>
+  const laid = ([from, to]: readonly [number, number], one: number) =>
+    to === 1e5 && from === 0 ? to * 1e-14 ** (1 - one) * Math.sign(one) : Math.min(to, from + one * (to - from))
+  const points = shares.map((point) =>
+    Object.fromEntries(Object.entries(point).map(([axis, one]) => [axis, laid(ranges[axis]!, one)])),
+  )
+  return { ...body, points }
 }
 
 /** Places that were drawn as shares of the body, laid into it. */
@@ -92,8 +107,18 @@ function placed(c: Case, body: Input): Input {
   return { ...body, ...Object.fromEntries(laid) }
 }
 
+/** Two radii of one body, drawn apart, would seldom make one: the outer is laid at a multiple of the inner. */
+function hollowed(body: Input): Input {
+  const { innerRadius, outerRadius } = body
+  if (typeof innerRadius !== 'number' || typeof outerRadius !== 'number') return body
+  const share = Math.log(outerRadius / 1e-9) / Math.log(1e5 / 1e-9)
+  return { ...body, outerRadius: Math.min(1e5, innerRadius * Math.min(1e4, 1 + 1.001e-5 * 1e9 ** share)) }
+}
+
 export function admissible(c: Case): fc.Arbitrary<Input> {
   const schema = z.toJSONSchema(solve.input(c), { io: 'input' }) as Field
   const stated = [c.example, ...(c.variants ?? []).map((v) => v.input)]
-  return fc.oneof(...stated.map((one) => varied(c, one, schema) as fc.Arbitrary<Input>)).map((body) => placed(c, body))
+  return fc
+    .oneof(...stated.map((one) => varied(c, one, schema) as fc.Arbitrary<Input>))
+    .map((body) => withPoints(c, placed(c, hollowed(body))))
 }

@@ -2,6 +2,7 @@ import { readFileSync } from 'node:fs'
 import type { OutputName } from '../../solvers/outputs.ts'
 import type { Kinds } from './rows/ask.ts'
 import { closedForms } from './rows/closed-forms.ts'
+import { products } from './rows/products.ts'
 import { radial } from './rows/radial.ts'
 import { slabs } from './rows/slabs.ts'
 import { steps } from './rows/steps.ts'
@@ -30,7 +31,7 @@ function read(name: string): Row[] {
 }
 
 /* Each file of rows/ has a line here. */
-const kinds: Kinds = { ...steps, ...closedForms, ...radial, ...slabs }
+const kinds: Kinds = { ...steps, ...closedForms, ...radial, ...products, ...slabs }
 
 export const questions: Question[] = Object.entries(kinds).flatMap(([kind, { file, ask, names }]) =>
   read(file)

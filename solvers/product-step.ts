@@ -1,0 +1,122 @@
+import { type BodyStepInput, momentsOf, shortestOf } from './body-step.ts'
+import type { Point, PointAxis } from './case.ts'
+import { UnitCylinder } from './math/cylinder.ts'
+import { cylinderEigenvalues } from './math/cylinder-eigenvalues.ts'
+import { bodyFactor, type Factor, halfSpaceFactor, idleFactor, product, union } from './math/product.ts'
+import type { Estimate } from './math/rounding.ts'
+import { slabEigenvalues } from './math/slab-eigenvalues.ts'
+import { SlabFilm } from './math/slab-film.ts'
+import { SlabFixed } from './math/slab-fixed.ts'
+import type { FilmedBody, UnitBody } from './math/unit-body.ts'
+import { driveTemperature, type ProductDrive } from './product-drive.ts'
+import type { Solution } from './solution.ts'
+import { exactly, scaled, type StepResponse, stepOutputs } from './step-response.ts'
+
+/** What the bodies share whose answer is a product of one-dimensional ones. */
+export interface ProductInput extends BodyStepInput, ProductDrive {
+  points: readonly Point[]
+}
+
+/** A direction with two faces, or one and an insulated one. */
+export interface Span {
+  size: number
+  faces: 1 | 2
+}
+
+/** Distance from the mid-plane, or from the insulated face, to a face. */
+export const reachOf = ({ size, faces }: Span): number => size / faces
+
+/** A slab across `span`, the points measured along `axis` from its mid-plane or insulated face. */
+export function slabFactor(input: ProductInput, span: Span, axis: PointAxis, film: number): Factor {
+  const length = reachOf(span)
+  const unit = (body: FilmedBody, shortest: number) =>
+    film === Infinity ? new SlabFixed(body) : new SlabFilm(body, shortest)
+  return factorOf(input, length, axis, film, unit)
+}
+
+/** A cylinder, the points measured by their radius. */
+export function cylinderFactor(input: ProductInput, radius: number, film: number): Factor {
+  return factorOf(input, radius, 'r', film, (body, shortest) => new UnitCylinder(body, shortest))
+}
+
+function factorOf(
+  input: ProductInput,
+  size: number,
+  axis: PointAxis,
+  film: number,
+  unitOf: (body: FilmedBody, shortest: number) => UnitBody,
+): Factor {
+  if (film === 0) return idleFactor
+  const moments = momentsOf(input, size)
+  const distances = input.points.map((point) => Math.abs(point[axis]!))
+  const body = {
+    biot: (film * size) / input.conductivity,
+    deltas: Float64Array.from(distances, (x) => Math.min(1, Math.max(0, (size - x) / size))),
+    inner: Float64Array.from(distances, (x) => Math.min(1, x / size)),
+    // The depth is a difference, which keeps the rounding of the whole size.
+    shifts: Float64Array.from(distances, () => 6),
+  }
+  return bodyFactor(unitOf(body, shortestOf(moments)), moments)
+}
+
+/** A direction without end, the points measured along `axis` from its face. */
+export function endlessFactor(input: ProductInput, axis: PointAxis, film: number): Factor {
+  if (film === 0) return idleFactor
+  const reached = input.times.map((time) => Math.sqrt(input.diffusivity) * Math.sqrt(time))
+  const distances = input.points.map((point) => point[axis]!)
+  return halfSpaceFactor(
+    distances,
+    reached,
+    reached.map((length) => (film * length) / input.conductivity),
+  )
+}
+
+/** `capacity` is the heat per kelvin of the whole body, where it has an end. */
+export function solveProduct(input: ProductInput, factors: readonly Factor[], capacity?: number): Solution {
+  const { initialTemperature: initial, times, outputs, points } = input
+  const drive = driveTemperature(input)
+  const step = { times, places: points.length, outputs, initial, drive }
+  const started = times.flatMap((time, i) => (time > 0 ? [i] : []))
+  const terms = Math.max(0, ...factors.map((f) => started.reduce((most, i) => Math.max(most, f.terms(i)), 0)))
+  return {
+    ...stepOutputs(step, responseOf(times, factors, capacity)),
+    terms,
+    scale: Math.abs(drive - initial),
+  }
+}
+
+function responseOf(times: readonly number[], factors: readonly Factor[], capacity: number | undefined): StepResponse {
+  const started = (i: number) => times[i]! > 0
+  const remaining = (i: number, j: number): Estimate =>
+    started(i) ? product(factors.map((f) => f.remaining(j, i))) : exactly(1)
+  const completed = (i: number, j: number): Estimate =>
+    started(i) ? union(factors.map((f) => ({ done: f.completed(j, i), left: f.remaining(j, i) }))) : exactly(0)
+  const heatFraction = (i: number): Estimate =>
+    started(i) ? union(factors.map((f) => ({ done: f.heatFraction!(i), left: f.meanRemaining!(i) }))) : exactly(0)
+  const placed = {
+    share: (i: number, j: number) => ({ ...remaining(i, j), of: 'remaining' as const }),
+    remaining,
+    completed,
+  }
+  if (capacity === undefined) return placed
+  return {
+    ...placed,
+    heatFraction,
+    heat: (i) => scaled(capacity, heatFraction(i)),
+    meanRemaining: (i) => (started(i) ? product(factors.map((f) => f.meanRemaining!(i))) : exactly(1)),
+  }
+}
+
+/** Decay rate of the slowest mode of a slab, 1/s. */
+export function slabRate({ conductivity, diffusivity }: BodyStepInput, span: Span, film: number): number {
+  const length = reachOf(span)
+  const root = film === Infinity ? Math.PI / 2 : slabEigenvalues((film * length) / conductivity, 1)[0]!
+  return film === 0 ? 0 : diffusivity * (root / length) * (root / length)
+}
+
+/** Decay rate of the slowest mode of a cylinder, 1/s. */
+export function cylinderRate({ conductivity, diffusivity }: BodyStepInput, radius: number, film: number): number {
+  if (film === 0) return 0
+  const root = cylinderEigenvalues((film * radius) / conductivity, 1).roots[0]!
+  return diffusivity * (root / radius) * (root / radius)
+}
