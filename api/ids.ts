@@ -1,5 +1,7 @@
+import { nanoid } from 'nanoid'
 import { v7 as uuidv7 } from 'uuid'
 import { z } from 'zod'
+import { OWN_PREFIX } from '../solvers/materials/own-material.ts'
 
 type Kind = 'req' | 'acct' | 'prsn' | 'stff' | 'key' | 'aud'
 
@@ -21,6 +23,19 @@ export function idField(kind: Kind) {
     .regex(new RegExp(`^${kind}_[0-9a-f]{32}$`))
     .meta({ 'x-accepted': `${kind}_ and 32 digits from 0 to f` })
 }
+
+/** Ids of materials stand in the bodies of solves, so they are short, and tell nothing of when they were made. */
+export function newMaterialId(): string {
+  return OWN_PREFIX + nanoid()
+}
+
+/** As in a body, without the quotes around it. */
+export const MATERIAL_ID = `${OWN_PREFIX}[0-9A-Za-z_-]{21}`
+
+export const materialIdField = z
+  .string()
+  .regex(new RegExp(`^${MATERIAL_ID}$`))
+  .meta({ 'x-accepted': `${OWN_PREFIX} and 21 characters` })
 
 const requestId = /^req_[0-9a-f]{12}7[0-9a-f]{3}[89ab][0-9a-f]{15}$/
 

@@ -1,4 +1,6 @@
 import { z } from 'zod'
+import type { Material } from '../solvers/materials/material.ts'
+import { parseStated } from '../solvers/number-lists.ts'
 import { parse } from '../solvers/validate.ts'
 import type { Deps } from './deps.ts'
 import type { Permission, Reach, Role, StaffPermission, StaffRole } from './permissions.ts'
@@ -57,6 +59,8 @@ export interface Context<P, Q, B, A extends Access> {
   caller: Callers[A]
   call: CallRecord
   session: SessionHandle
+  /** The header If-Match, where the operation is conditional. */
+  ifMatch?: string
   deps: Deps
 }
 
@@ -68,20 +72,33 @@ export interface Reply {
   headers?: Record<string, string>
 }
 
+/** Materials of the caller's account, by id. */
+export type OwnMaterials = ReadonlyMap<string, Material>
+
 export interface Body<B> {
   schema: z.ZodType
   /** Bytes that it may have, after decompression. */
   limit: number
+  /** It may name materials of the account, which are looked up before it is parsed. */
+  materials?: true
   /** Throws DomainError. */
-  parse(raw: unknown): B
+  parse(raw: unknown, own: OwnMaterials): B
   /** Reads the bytes of a long body away from the event loop. Throws what the parser and `parse` throw. */
-  parseLong?(bytes: Uint8Array, deps: Deps): Promise<B>
+  parseLong?(bytes: Uint8Array, deps: Deps, own: OwnMaterials): Promise<B>
 }
 
-export type Method = 'get' | 'post'
+/** A body that is a text of its own kind. */
+export interface Upload {
+  kind: 'text/csv'
+  limit: number
+  description: string
+  example: string
+}
+
+export type Method = 'get' | 'post' | 'put' | 'delete'
 export type LimiterName = 'sign-up' | 'sign-in' | 'staff-sign-in' | 'try'
 
-export type Tag = 'Catalogue' | 'Cases' | 'Usage' | 'Requests' | 'Health' | 'Session' | 'Keys' | 'Try'
+export type Tag = 'Catalogue' | 'Cases' | 'Usage' | 'Requests' | 'Health' | 'Session' | 'Keys' | 'Materials' | 'Try'
 
 interface Description<P, Q, B, A extends Access> {
   id: string
@@ -101,6 +118,10 @@ interface Description<P, Q, B, A extends Access> {
   params?: z.ZodObject & z.ZodType<P>
   query?: z.ZodObject & z.ZodType<Q>
   body?: Body<B>
+  /** In place of a JSON body; handlers get it as text. */
+  upload?: Upload
+  /** A change that must state by If-Match which version it is of. */
+  conditional?: true
   status: 200 | 201 | 204
   answer?: z.ZodType
   /** Problems of its own, beside those that follow from access, body and query. */
@@ -131,6 +152,11 @@ export function jsonBody<S extends z.ZodObject>(schema: S): Body<z.output<S>> {
   return { schema, limit: SHORT, parse: (raw) => parse(schema, raw) }
 }
 
+/** A short JSON body with quantities, which may be stated with their units. */
+export function statedBody<S extends z.ZodObject>(schema: S): Body<z.output<S>> {
+  return { schema, limit: SHORT, parse: (raw) => parseStated(schema, raw) }
+}
+
 /** Needs the cookie of a session, to read or to change it. */
 export function usesSession(o: Operation): boolean {
   return o.session === true || o.access === 'session' || o.access === 'staff'
@@ -154,6 +180,8 @@ export function problemsOf(o: Operation): ProblemCode[] {
       'unsupported-media-type',
       'invalid-input',
     )
+  if (o.upload) codes.push('malformed-csv', 'body-too-large', 'unsupported-media-type', 'invalid-input')
+  if (o.conditional) codes.push('precondition-required', 'precondition-failed')
   if (o.metered) codes.push('quota-exceeded', 'too-many-points', 'solve-too-slow')
   if (o.limiter) codes.push('rate-limited')
   return [...new Set([...codes, ...(o.problems ?? [])])].sort()

@@ -3,6 +3,7 @@ import { caseOperationList, tryOperations } from './cases/operations.ts'
 import { catalogueOperations } from './catalogue/operations.ts'
 import { healthOperations } from './health/operations.ts'
 import { keyOperations } from './keys/operations.ts'
+import { materialOperations } from './materials/operations.ts'
 import type { Operation } from './operation.ts'
 import { keyRequest, memberRequestOperations } from './requests/operations.ts'
 import { supportOperations } from './support/operations.ts'
@@ -12,6 +13,7 @@ import { keyUsage, memberUsage } from './usage/operations.ts'
 export const operations: readonly Operation[] = [
   ...catalogueOperations,
   ...caseOperationList,
+  ...materialOperations,
   keyUsage,
   keyRequest,
   ...healthOperations,

@@ -22,6 +22,12 @@ export const problems = {
     text: 'The body must be one JSON value in UTF-8.',
     retryable: false,
   },
+  'malformed-csv': {
+    status: 400,
+    title: 'The body is not CSV',
+    text: 'The body must be comma-separated values as of RFC 4180, in UTF-8, with the names of the columns in its first line.',
+    retryable: false,
+  },
   'duplicate-name': {
     status: 400,
     title: 'A name stands twice in one object',
@@ -112,6 +118,18 @@ export const problems = {
     text: 'An account may have 100 keys that are not revoked. Revoke one that is no longer used.',
     retryable: false,
   },
+  'too-many-materials': {
+    status: 409,
+    title: 'The account has too many materials',
+    text: 'An account may have 5,000 materials of its own. Delete some that are no longer used.',
+    retryable: false,
+  },
+  'precondition-failed': {
+    status: 412,
+    title: 'It has changed meanwhile',
+    text: 'If-Match names another version than the present one. Read it again, and repeat the change on what you find.',
+    retryable: false,
+  },
   'body-too-large': {
     status: 413,
     title: 'The body is too large',
@@ -133,7 +151,7 @@ export const problems = {
   'unsupported-media-type': {
     status: 415,
     title: 'The body is of another kind',
-    text: 'Bodies are application/json in UTF-8.',
+    text: 'Bodies are in UTF-8, and application/json unless the operation says otherwise.',
     retryable: false,
   },
   'expectation-failed': {
@@ -152,6 +170,12 @@ export const problems = {
     status: 422,
     title: 'A parameter is refused',
     text: 'Each entry of errors names the query parameter, what is wrong with it and what would be accepted.',
+    retryable: false,
+  },
+  'precondition-required': {
+    status: 428,
+    title: 'The change must say which version it is of',
+    text: 'Send the ETag of the version that you read as If-Match, so that no change of somebody else is lost.',
     retryable: false,
   },
   'rate-limited': {

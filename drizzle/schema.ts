@@ -5,6 +5,7 @@ import {
   check,
   customType,
   date,
+  doublePrecision,
   index,
   integer,
   json,
@@ -211,6 +212,34 @@ export const audit = pgTable(
     reason: text(),
   },
   (t) => [index('audit_account').on(t.accountId, t.at), oneOf('audit_actor', t.actorKind, ['person', 'staff'])],
+)
+
+/** Materials that accounts keep for themselves; SI. */
+export const materials = pgTable(
+  'materials',
+  {
+    id: text().primaryKey(),
+    accountId: text()
+      .notNull()
+      .references(() => accounts.id),
+    name: text().notNull(),
+    group: text().notNull(),
+    conductivity: doublePrecision().notNull(),
+    density: doublePrecision().notNull(),
+    specificHeat: doublePrecision().notNull(),
+    state: text().notNull(),
+    source: text().notNull(),
+    confidence: text({ enum: ['high', 'medium', 'low'] }).notNull(),
+    /** The key or person that made it. */
+    createdBy: text().notNull(),
+    createdAt: createdAt(),
+    updatedAt: instant().notNull().defaultNow(),
+  },
+  (t) => [
+    index('materials_account').on(t.accountId, t.name, t.id),
+    oneOf('materials_confidence', t.confidence, ['high', 'medium', 'low']),
+    check('materials_positive', sql`${t.conductivity} > 0 AND ${t.density} > 0 AND ${t.specificHeat} > 0`),
+  ],
 )
 
 /** Counters of calls by address; unlogged, for they may be lost with a crash. */

@@ -46,6 +46,7 @@ const tags: Record<Tag, string> = {
   Health: 'The state of the service.',
   Session: 'Opening an account, signing in and out.',
   Keys: 'Keys of the account.',
+  Materials: 'The catalogue of materials, and those that the account keeps for itself.',
   Try: 'Questions asked of a case without a key, for the pages of the portal.',
 }
 
@@ -144,6 +145,7 @@ const header = (description: string, type: 'string' | 'integer' = 'string') => (
 const headers = {
   'Request-Id': header('Names the call, for its record and for support.'),
   ETag: header('Names the body by its bytes: equal answers have equal tags.'),
+  Location: header('Path of what was made.'),
   'Points-Charged': header('Points that the call cost.', 'integer'),
   'Points-Remaining': header('Points that are left to the key in this period.', 'integer'),
   'Retry-After': header('Seconds to wait.', 'integer'),
@@ -179,8 +181,22 @@ function requestOf(o: Operation): NonNullable<RouteConfig['request']> {
     required: true,
     content: { 'application/json': { schema: o.body.schema, example } },
   }
-  return { ...(params ? { params } : {}), ...(o.query ? { query: o.query } : {}), ...(body ? { body } : {}) }
+  const upload = o.upload && {
+    description: `${o.upload.description} At most ${sizeText(o.upload.limit)}, counted after decompression.`,
+    required: true,
+    content: { [o.upload.kind]: { schema: z.string(), example: o.upload.example } },
+  }
+  return {
+    ...(params ? { params } : {}),
+    ...(o.query ? { query: o.query } : {}),
+    ...((body ?? upload) ? { body: body ?? upload } : {}),
+    ...(o.conditional ? { headers: ifMatch } : {}),
+  }
 }
+
+const ifMatch = z.object({
+  'If-Match': z.string().meta({ description: 'ETag of the version that the change is of; * for whichever it is.' }),
+})
 
 function withExamples(params: z.ZodObject, examples: Record<string, string>): z.ZodObject {
   const shape = Object.entries(params.shape as Record<string, z.ZodType>)
@@ -195,6 +211,7 @@ function success(o: Operation): RouteConfig['responses'][string] {
   const names = [
     'Request-Id',
     ...(o.answer ? ['ETag'] : []),
+    ...(o.status === 201 && o.document === 'openapi' ? ['Location'] : []),
     ...(o.metered ? ['Points-Charged', 'Points-Remaining'] : []),
   ]
   return {

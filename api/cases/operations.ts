@@ -1,9 +1,10 @@
 import type { Case } from '../../solvers/case.ts'
 import { cases } from '../../solvers/cases/index.ts'
+import { withOwnMaterials } from '../../solvers/materials/own-material.ts'
 import { type Call, type CaseOperation, operationsOf } from '../../solvers/operations/index.ts'
 import { caseOperationPath } from '../catalogue/describe.ts'
 import { parseJson } from '../http/json.ts'
-import { type Body, operation } from '../operation.ts'
+import { type Body, type OwnMaterials, operation } from '../operation.ts'
 import { Problem } from '../problems.ts'
 import { BODY_LIMIT, MAX_POINTS, MAX_TRY_VALUES, TRY_BODY_LIMIT } from './limits.ts'
 import { solveMetered } from './solve-metered.ts'
@@ -13,15 +14,19 @@ import { answerOf, inputOf } from './schemas.ts'
 export interface PreparedCall {
   call: Call
   raw: unknown
+  /** Materials of the account that the body names. */
+  own: OwnMaterials
 }
 
 const bodyOf = (c: Case, o: CaseOperation, limit: number): Body<PreparedCall> => ({
   schema: inputOf(c, o),
   limit,
-  parse: (raw) => ({ call: o.prepare(c, raw, 'full'), raw }),
-  async parseLong(bytes, { compute }) {
-    const priced = await compute.prepare({ case: c.id, operation: o.id, bytes })
-    return { call: { ...priced, run: () => o.prepare(c, parseJson(bytes), 'full').run() }, raw: bytes }
+  materials: true,
+  parse: (raw, own) => ({ call: o.prepare(c, withOwnMaterials(raw, own), 'full'), raw, own }),
+  async parseLong(bytes, { compute }, own) {
+    const priced = await compute.prepare({ case: c.id, operation: o.id, bytes, own })
+    const run = () => o.prepare(c, withOwnMaterials(parseJson(bytes), own), 'full').run()
+    return { call: { ...priced, run }, raw: bytes, own }
   },
 })
 

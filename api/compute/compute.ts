@@ -1,6 +1,7 @@
 import { Piscina } from 'piscina'
 import type { Call } from '../../solvers/operations/index.ts'
 import { type Rendered, render } from '../http/render.ts'
+import type { OwnMaterials } from '../operation.ts'
 import { Problem } from '../problems.ts'
 import type { Prepared } from './solve-worker.ts'
 
@@ -20,11 +21,12 @@ export interface SolveTask {
   call: Call
   /** The body as a value or, where a thread has read it, as bytes. */
   raw: unknown
+  own: OwnMaterials
 }
 
 export interface Compute {
   /** Reads, validates and prices a long body. Throws the refusal. */
-  prepare(task: { case: string; operation: string; bytes: Uint8Array }): Promise<Priced>
+  prepare(task: { case: string; operation: string; bytes: Uint8Array; own: OwnMaterials }): Promise<Priced>
   solve(task: SolveTask): Promise<Rendered>
   hashPassword(password: string): Promise<string>
   /** Takes as long for an absent hash as for a wrong password. */

@@ -1,14 +1,17 @@
 import { cases } from '../../solvers/cases/index.ts'
 import { DomainError } from '../../solvers/errors.ts'
+import { withOwnMaterials } from '../../solvers/materials/own-material.ts'
 import { type Call, caseOperations } from '../../solvers/operations/index.ts'
 import { parseJson } from '../http/json.ts'
 import { type Rendered, render } from '../http/render.ts'
+import type { OwnMaterials } from '../operation.ts'
 import { Problem, invalidInput } from '../problems.ts'
 import type { Priced } from './compute.ts'
 
 interface Names {
   case: string
   operation: string
+  own: OwnMaterials
 }
 
 /** A priced call, or what a Problem is made of: errors lose their kind on the way between threads. */
@@ -18,7 +21,7 @@ function callOf(task: Names, body: unknown): Call {
   const c = cases.find((one) => one.id === task.case)
   const o = caseOperations.find((one) => one.id === task.operation)
   if (!c || !o) throw new Error(`there is no ${task.operation} of ${task.case}`)
-  return o.prepare(c, body, 'full')
+  return o.prepare(c, withOwnMaterials(body, task.own), 'full')
 }
 
 /** Runs in a thread: reads a body, validates it whole and prices it. */

@@ -10,14 +10,15 @@ function readerOf(limit: number): RequestHandler {
   return known
 }
 
-/** The bytes of a JSON body; their number is limited after decompression. */
-export async function readBody(req: Request, res: Response, limit: number): Promise<Buffer> {
-  refuseOtherKinds(req)
+/** The bytes of a body; their number is limited after decompression. */
+export async function readBody(req: Request, res: Response, limit: number, kind = 'application/json'): Promise<Buffer> {
+  refuseOtherKinds(req, kind)
   await new Promise<void>((resolve, reject) =>
     readerOf(limit)(req, res, (error?: unknown) => (error ? reject(translated(error, limit)) : resolve())),
   )
   const bytes: unknown = req.body
-  if (!Buffer.isBuffer(bytes) || bytes.length === 0) throw new Problem('malformed-json', 'The body is empty.')
+  if (!Buffer.isBuffer(bytes) || bytes.length === 0)
+    throw new Problem(kind === 'application/json' ? 'malformed-json' : 'malformed-csv', 'The body is empty.')
   return bytes
 }
 
@@ -30,9 +31,10 @@ function translated(error: unknown, limit: number): unknown {
 }
 
 /* A charset other than UTF-8 is refused however it is written; parameters of other names say nothing here. */
-function refuseOtherKinds(req: Request): void {
+function refuseOtherKinds(req: Request, kind: string): void {
   const [type = '', ...parameters] = (req.headers['content-type'] ?? '').toLowerCase().split(';')
   const charsets = parameters.map((p) => p.trim()).filter((p) => /^charset\s*=/.test(p))
   const known = charsets.length < 2 && charsets.every((p) => /^charset=("?)utf-8\1$/.test(p))
-  if (type.trim() !== 'application/json' || !known) throw new Problem('unsupported-media-type')
+  if (type.trim() !== kind || !known)
+    throw new Problem('unsupported-media-type', `The body of this operation is ${kind} in UTF-8.`)
 }

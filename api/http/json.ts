@@ -4,6 +4,7 @@ import { scan } from './scan.ts'
 /** The bytes of a body as a JSON value. Refuses what parsers disagree on: deep nesting first, then syntax, then equal names. */
 export function parseJson(bytes: Uint8Array): unknown {
   const text = decode(bytes)
+  if (text === undefined) throw new Problem('malformed-json', 'The body is not UTF-8.')
   if (text.startsWith('\uFEFF')) throw new Problem('malformed-json', 'The body starts with a byte order mark.')
   const found = scan(text)
   if (typeof found === 'string') throw new Problem(found)
@@ -17,11 +18,12 @@ export function parseJson(bytes: Uint8Array): unknown {
   return value
 }
 
-function decode(bytes: Uint8Array): string {
+/** The text of a body, or undefined where it is not UTF-8. */
+export function decode(bytes: Uint8Array): string | undefined {
   try {
     return new TextDecoder('utf-8', { fatal: true, ignoreBOM: true }).decode(bytes)
   } catch {
-    throw new Problem('malformed-json', 'The body is not UTF-8.')
+    return undefined
   }
 }
 

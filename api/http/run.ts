@@ -4,12 +4,13 @@ import { DomainError } from '../../solvers/errors.ts'
 import { parse } from '../../solvers/validate.ts'
 import type { Deps } from '../deps.ts'
 import { INLINE_BYTES } from '../compute/compute.ts'
-import type { Body, Caller, CallRecord, Context, Operation } from '../operation.ts'
+import type { Body, Caller, CallRecord, Context, Operation, OwnMaterials, Upload } from '../operation.ts'
 import { Problem, invalidInput, invalidParameter } from '../problems.ts'
 import { sendReply } from './answer.ts'
 import { authenticate } from './authenticate.ts'
+import { ownMaterialsIn } from '../materials/own-materials.ts'
 import { readBody } from './body.ts'
-import { parseJson } from './json.ts'
+import { decode, parseJson } from './json.ts'
 import { handleOf } from './session.ts'
 
 /** One operation as a handler: authenticate, authorise, validate, do, answer. Whatever is refused is thrown. */
@@ -21,9 +22,10 @@ export function run(o: Operation, deps: Deps): RequestHandler {
     if (!req.accepts('application/json')) throw new Problem('not-acceptable')
     const caller = await authenticate(o, req, deps)
     note(call, caller)
-    const input = await inputOf(o, req, res, deps)
+    const ifMatch = ifMatchOf(o, req)
+    const input = await inputOf(o, req, res, deps, caller)
     const session = handleOf(req)
-    sendReply(o, res, await o.handle({ ...input, caller, call, session, deps }))
+    sendReply(o, res, await o.handle({ ...input, ...ifMatch, caller, call, session, deps }))
   }
 }
 
@@ -35,19 +37,37 @@ function note(call: CallRecord, caller: Caller): void {
 
 type Input = Pick<Context<unknown, unknown, unknown, 'public'>, 'params' | 'query' | 'body'>
 
-async function inputOf(o: Operation, req: Request, res: Response, deps: Deps): Promise<Input> {
-  const params = readParams(o, req)
-  const query = readQuery(o, req)
-  if (!o.body) return { params, query, body: undefined }
-  const bytes = await readBody(req, res, o.body.limit)
-  return { params, query, body: await parseBody(o.body, bytes, deps) }
+/* The version is asked for before the body is read, since a change that names none is refused whatever it holds. */
+function ifMatchOf(o: Operation, req: Request): { ifMatch?: string } {
+  if (!o.conditional) return {}
+  const ifMatch = req.headers['if-match']
+  if (ifMatch === undefined) throw new Problem('precondition-required')
+  return { ifMatch }
 }
 
-async function parseBody(body: Body<unknown>, bytes: Buffer, deps: Deps): Promise<unknown> {
-  if (body.parseLong && bytes.length > INLINE_BYTES) return body.parseLong(bytes, deps)
+async function inputOf(o: Operation, req: Request, res: Response, deps: Deps, caller: Caller): Promise<Input> {
+  const params = readParams(o, req)
+  const query = readQuery(o, req)
+  if (o.upload) return { params, query, body: await readText(o.upload, req, res) }
+  if (!o.body) return { params, query, body: undefined }
+  const bytes = await readBody(req, res, o.body.limit)
+  const own = o.body.materials ? await ownMaterialsIn(bytes, caller, deps.db) : none
+  return { params, query, body: await parseBody(o.body, bytes, deps, own) }
+}
+
+const none: OwnMaterials = new Map()
+
+async function readText({ kind, limit }: Upload, req: Request, res: Response): Promise<string> {
+  const text = decode(await readBody(req, res, limit, kind))
+  if (text === undefined) throw new Problem('malformed-csv', 'The body is not UTF-8.')
+  return text
+}
+
+async function parseBody(body: Body<unknown>, bytes: Buffer, deps: Deps, own: OwnMaterials): Promise<unknown> {
+  if (body.parseLong && bytes.length > INLINE_BYTES) return body.parseLong(bytes, deps, own)
   const raw = parseJson(bytes)
   try {
-    return body.parse(raw)
+    return body.parse(raw, own)
   } catch (error) {
     throw error instanceof DomainError ? invalidInput(error.issues) : error
   }

@@ -17,6 +17,8 @@ export interface World {
   /** A key that may be revoked. */
   spareKey: { id: string; secret: string }
   strangersKey: { id: string; secret: string }
+  /** Materials of the account: one to be changed, one to be deleted. */
+  materials: Partial<Record<Operation['method'], string>>
 }
 
 const exampleOf = (id: string) =>
@@ -49,6 +51,13 @@ export async function createWorld({ url, databaseUrl, service }: TestService): P
     staff[role] = await signIn(url, '/support/v1/sign-in', { mail: address, password: member.password })
   }
   const { client: stranger } = await signUp(url)
+  const keepMaterial = async () => {
+    const { path, example } = operations.find((o) => o.id === 'createMaterial') as Operation
+    const made = await new Client(url).post(path, example?.body, { authorization: `Bearer ${key.secret}` })
+    if (made.status !== 201) throw new Error(`keeping a material answered ${made.status}: ${made.text}`)
+    return made.json.id as string
+  }
+  const materials = { put: await keepMaterial(), delete: await keepMaterial() }
   const solve = operations.find((o) => o.metered) as Operation
   const answer = await new Client(url).post(solve.path, solve.example?.body, { authorization: `Bearer ${key.secret}` })
   if (answer.status !== 200) throw new Error(`the first call answered ${answer.status}: ${answer.text}; ${mail}`)
@@ -64,6 +73,7 @@ export async function createWorld({ url, databaseUrl, service }: TestService): P
     requestId,
     spareKey: await makeKey(owner),
     strangersKey: await makeKey(stranger),
+    materials,
   }
 }
 
@@ -80,6 +90,7 @@ export function pathIn(world: World, o: Operation, ids: Record<string, string> =
     ...o.example?.params,
     requestId: world.requestId,
     keyId: world.spareKey.id,
+    ...(world.materials[o.method] ? { materialId: world.materials[o.method] } : {}),
     ...ids,
   }
   return o.path.replace(/\{(\w+)\}/g, (_, name: string) => known[name] ?? `no-${name}`)
@@ -87,8 +98,18 @@ export function pathIn(world: World, o: Operation, ids: Record<string, string> =
 
 /** Who may call an operation, as the client and headers with which it is called. */
 export function callerOf(world: World, o: Operation): { client: Client; headers: Record<string, string> } {
-  if (o.access === 'key') return { client: world.nobody, headers: { authorization: `Bearer ${world.key.secret}` } }
-  if (o.access === 'session') return { client: world.members.owner, headers: {} }
-  if (o.access === 'staff') return { client: world.staff.support, headers: {} }
-  return { client: new Client(world.nobody.url), headers: {} }
+  const headers = {
+    ...(o.access === 'key' ? { authorization: `Bearer ${world.key.secret}` } : {}),
+    ...(o.conditional ? { 'if-match': '*' } : {}),
+    ...(o.upload ? { 'content-type': o.upload.kind } : {}),
+  }
+  if (o.access === 'key') return { client: world.nobody, headers }
+  if (o.access === 'session') return { client: world.members.owner, headers }
+  if (o.access === 'staff') return { client: world.staff.support, headers }
+  return { client: new Client(world.nobody.url), headers }
+}
+
+/** The body of an operation's example. */
+export function exampleBody(o: Operation): unknown {
+  return o.body ? o.example?.body : o.upload?.example
 }
