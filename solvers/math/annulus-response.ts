@@ -1,5 +1,5 @@
-import { type Annulus, annulusModes, type Mode } from './annulus-modes.ts'
-import { AnnulusStart, type WallPlace } from './annulus-start.ts'
+import { type Annulus, annulusModes, type Face, type Mode } from './annulus-modes.ts'
+import { AnnulusStart, type FaceDrive, type WallPlace } from './annulus-start.ts'
 import { type Estimate, EPS, TINY } from './rounding.ts'
 
 /** Fourier number of the wall's thickness from which the eigenfunctions are summed. */
@@ -12,7 +12,8 @@ export interface AnnulusMoment {
   root: number
 }
 
-type Drives = readonly [number, number]
+type Drives = readonly [FaceDrive, FaceDrive]
+const IDLE: FaceDrive = { value: 0, slack: 0 }
 
 /**
  * A hollow cylinder that starts at zero and is driven at both faces from time 0 on.
@@ -74,7 +75,12 @@ export class AnnulusResponse {
     const end = this.endFlux(place)
     return better(
       this.risen(anchor, moment, this.drives, slope),
-      this.faded(end[0] + end[1], Math.abs(end[0]) + Math.abs(end[1]), moment, this.drives, slope),
+      this.faded(
+        { value: end[0].value + end[1].value, error: end[0].error + end[1].error, method: 'eigen-series' },
+        moment,
+        this.drives,
+        slope,
+      ),
     )
   }
 
@@ -92,7 +98,7 @@ export class AnnulusResponse {
       const alone = this.alone(drive)
       return better(
         this.risen(anchor, moment, alone, slope),
-        this.faded(sign * end[drive]!, Math.abs(end[drive]!), moment, alone, slope),
+        this.faded({ ...end[drive], value: sign * end[drive].value }, moment, alone, slope),
       )
     })
     return [near!, far!]
@@ -105,13 +111,8 @@ export class AnnulusResponse {
     return this.risen(anchor, moment, this.alone(face), (mode) => mode.content)
   }
 
-  /** The smallest eigenvalue above zero. */
-  get slowest(): number | undefined {
-    return this.modes.find(({ w }) => w > 0)?.w
-  }
-
   private alone(face: 0 | 1): Drives {
-    return face === 0 ? [this.drives[0], 0] : [0, this.drives[1]]
+    return face === 0 ? [this.drives[0], IDLE] : [IDLE, this.drives[1]]
   }
 
   private early({ root }: AnnulusMoment): AnnulusStart {
@@ -127,55 +128,80 @@ export class AnnulusResponse {
     return found
   }
 
+  /** From the anchor on, each mode having grown since. */
   private risen(anchor: Estimate, { fourier }: AnnulusMoment, drives: Drives, of: (mode: Mode) => number): Estimate {
     const later = fourier - SERIES_FROM
-    let { value, error } = anchor
-    for (const mode of this.modes) {
-      const { w } = mode
-      const grown = w === 0 ? later : (Math.exp(-w * SERIES_FROM) * -Math.expm1(-w * later)) / w
-      const factor = (of(mode) * grown) / mode.norm
-      const [inner, outer] = [drives[0] * mode.gains[0] * factor, drives[1] * mode.gains[1] * factor]
-      value += inner + outer
-      error += this.rounding * (1 + w * SERIES_FROM) * (Math.abs(inner) + Math.abs(outer))
-    }
-    return { value, error, method: 'eigen-series' }
+    const grown = ({ w }: Mode) => (w === 0 ? later : (Math.exp(-w * SERIES_FROM) * -Math.expm1(-w * later)) / w)
+    return this.summed(anchor, SERIES_FROM, drives, (mode) => of(mode) * grown(mode))
   }
 
-  private faded(
-    end: number,
-    size: number,
-    { fourier }: AnnulusMoment,
-    drives: Drives,
-    of: (mode: Mode) => number,
-  ): Estimate {
-    let value = end
-    let error = this.rounding * size + TINY
+  /** From the end back, each mode having faded so far. */
+  private faded(end: Estimate, { fourier }: AnnulusMoment, drives: Drives, of: (mode: Mode) => number): Estimate {
+    const left = ({ w }: Mode) => (w === 0 ? 0 : -Math.exp(-w * fourier) / w)
+    return this.summed(end, fourier, drives, (mode) => of(mode) * left(mode))
+  }
+
+  private summed(from: Estimate, fourier: number, drives: Drives, of: (mode: Mode) => number): Estimate {
+    let { value, error } = from
     for (const mode of this.modes) {
-      const { w } = mode
-      if (w === 0) continue
-      const factor = (-of(mode) * Math.exp(-w * fourier)) / (mode.norm * w)
-      const [inner, outer] = [drives[0] * mode.gains[0] * factor, drives[1] * mode.gains[1] * factor]
-      value += inner + outer
-      error += this.rounding * (1 + w * fourier) * (Math.abs(inner) + Math.abs(outer))
+      const factor = of(mode) / mode.norm
+      const relative = this.rounding * (1 + mode.w * fourier)
+      drives.forEach((drive, d) => {
+        const unit = mode.gains[d]! * factor
+        value += drive.value * unit
+        error += (Math.abs(drive.value) * relative + drive.slack) * Math.abs(unit)
+      })
     }
-    return { value, error, method: 'eigen-series' }
+    return { value, error: error + TINY, method: 'eigen-series' }
   }
 
   /** Outward flux at the end, by each drive: ρ·flux is the same at every radius, or falls evenly with the area where heat is kept. */
-  private endFlux({ fromInner: x, fromOuter: y }: WallPlace): [number, number] {
+  private endFlux({ fromInner: x, fromOuter: y }: WallPlace): readonly [Estimate, Estimate] {
     const { innerRadius: a, inner, outer } = this.annulus
     const b = a + 1
     const radius = a + x
-    const [g0, g1] = this.drives
-    if (this.modes[0]?.w === 0) {
-      const area = 2 * a + 1
-      return [(g0 * a * y * (radius + b)) / (area * radius), (-g1 * b * x * (radius + a)) / (area * radius)]
+    const end = (d: 0 | 1, unit: number): Estimate => {
+      const { value, slack } = this.drives[d]
+      const error = (this.rounding * Math.abs(value) + slack) * Math.abs(unit)
+      return { value: value * unit, error, method: 'eigen-series' }
     }
-    const [s0, l0] = inner.held ? [0, 1] : [1, inner.film]
-    const [s1, l1] = outer.held ? [0, 1] : [1, outer.film]
+    if (this.modes[0]?.w === 0) {
+      const area = (2 * a + 1) * radius
+      return [end(0, (a * y * (radius + b)) / area), end(1, (-b * x * (radius + a)) / area)]
+    }
+    const [s0, l0] = partsOf(inner)
+    const [s1, l1] = partsOf(outer)
     const across = (s0 * l1) / a + (s1 * l0) / b + l0 * l1 * Math.log1p(1 / a)
-    return [(g0 * l1) / across / radius, (-g1 * l0) / across / radius]
+    return [end(0, l1 / across / radius), end(1, -l0 / across / radius)]
+  }
+
+  /** The temperature at the end; undefined where the mean goes on. Where the fluxes of both faces balance it is told from the modes. */
+  steady(j: number): Estimate {
+    const { fromInner: x, fromOuter: y } = this.places[j]!
+    const { innerRadius: a, inner, outer } = this.annulus
+    if (this.modes[0]?.w === 0) {
+      const anchor = this.anchored(`T${j}`, () => this.first.temperature(this.places[j]!))
+      const grown = ({ w }: Mode) => (w === 0 ? 0 : Math.exp(-w * SERIES_FROM) / w)
+      return this.summed(anchor, SERIES_FROM, this.drives, (mode) => mode.values[j]! * grown(mode))
+    }
+    const [s0, l0] = partsOf(inner)
+    const [s1, l1] = partsOf(outer)
+    const across = (s0 * l1) / a + (s1 * l0) / (a + 1) + l0 * l1 * Math.log1p(1 / a)
+    const units = [s1 / (a + 1) + l1 * Math.log1p(y / (a + x)), s0 / a + l0 * Math.log1p(x / a)]
+    let value = 0
+    let error = 0
+    units.forEach((unit, d) => {
+      const drive = this.drives[d]!
+      value += (drive.value * unit) / across
+      // The radii are rounded, and their difference is the unit of length.
+      const relative = EPS * (24 + 4 * (2 * a + 1))
+      error += ((Math.abs(drive.value) * relative + drive.slack) * unit) / across
+    })
+    return { value, error, method: 'closed-form' }
   }
 }
+
+/** Part of the slope and of the temperature in the condition at a face. */
+const partsOf = (face: Face): readonly [number, number] => (face.held ? [0, 1] : [1, face.film])
 
 const better = (one: Estimate, other: Estimate): Estimate => (one.error <= other.error ? one : other)

@@ -1,11 +1,13 @@
 import type { Annulus } from './annulus-modes.ts'
-import { besselIK01 } from './complex-bessel.ts'
+import { besselI01, besselIK01, besselK01 } from './complex-bessel.ts'
 import { type Complex, exponential, modulus, over, plus, scale, times } from './complex.ts'
 import { type Contour, contourAt } from './contour.ts'
 import { type Estimate, EPS, TINY } from './rounding.ts'
 
 /** Beyond this many diffusion lengths nothing arrives that could be told from zero. */
 const FARTHEST = 60
+/** e^(−NOTHING) of what a drive does at its face is below the roundings of the rest. */
+const NOTHING = 45
 /** Roundings of the Bessel functions and of the quotient they stand in, beside those of the contour. */
 const OWN_ROUNDING = 40
 /**
@@ -18,6 +20,8 @@ const FAR_ROUNDING = 440
 /** Both faces of an annulus at one node of a contour, in units of the diffusion length. Brackets without their e^(q·thickness). */
 interface FaceNode {
   root: Complex
+  /** |q| */
+  length: number
   /** Weight over s and over the bracket of both faces. */
   front: Complex
   /** q·(K₁I₁ − I₁K₁) and the like, as they stand over the bracket in the flux of a face by its own drive. */
@@ -65,12 +69,19 @@ function faceNode({ a, b, thickness, slope, level }: Scaled, { root: q, weight }
   const bracket = plus(scale(slope[0], times(q, nearInner)), scale(level[0], mix(slope[1], c01, level[1], c00)))
   return {
     root: q,
+    length: modulus(q),
     front: over(over(weight, times(q, q)), bracket),
     near: [times(q, nearInner), times(q, nearOuter)],
     across,
     fromInner: [mix(slope[1], B.i1, level[1], B.i0), times(across, mix(slope[0], A.i1, -level[0], A.i0))],
     fromOuter: [times(across, mix(slope[1], B.k1, -level[1], B.k0)), mix(slope[0], A.k1, level[0], A.k0)],
   }
+}
+
+/** What drives a face, and by how much the rounding of its parts may have moved it. */
+export interface FaceDrive {
+  value: number
+  slack: number
 }
 
 /** A place of the wall by its distances from both faces, in units of the thickness. */
@@ -96,14 +107,15 @@ export interface WallPlace {
  */
 export class AnnulusStart {
   private readonly body: Scaled
-  private readonly drives: readonly [number, number]
+  private readonly drives: readonly [FaceDrive, FaceDrive]
   private readonly nodes: FaceNode[]
   private readonly rounding: number
   private readonly root: number
 
   /** The drives: kelvins where the face is held, kelvins a thickness where it is not. */
-  constructor(annulus: Annulus, drives: readonly [number, number], root: number) {
-    const own = (held: boolean, drive: number) => (held ? drive : drive * root)
+  constructor(annulus: Annulus, drives: readonly [FaceDrive, FaceDrive], root: number) {
+    const own = (held: boolean, { value, slack }: FaceDrive) =>
+      held ? { value, slack } : { value: value * root, slack: slack * root }
     this.body = scaled(annulus, root)
     this.drives = [own(annulus.inner.held, drives[0]), own(annulus.outer.held, drives[1])]
     const contour = contourAt(1)
@@ -127,83 +139,88 @@ export class AnnulusStart {
     const x = place.fromInner / this.root
     const y = place.fromOuter / this.root
     const radius = this.body.a + x
-    let value = 0
-    let size = 0
-    let moved = 0
-    const { slope, level } = this.body
-    const driven = this.drives.reduce((sum, g, d) => sum + Math.abs(g) / (slope[d]! + level[d]!), 0)
-    for (const node of this.nodes) {
-      const { root: q, front } = node
-      if (q.re * Math.min(x, y) > 700) continue
-      const bessel = besselIK01(scale(radius, q))
-      const inward = times(exponential(scale(-x, q)), bessel[k])
-      const outward = times(exponential(scale(-y, q)), bessel[i])
+    const sums = [new Sum(), new Sum()] as const
+    for (const { root: q, front, length, fromInner, fromOuter } of this.nodes) {
       const factor = k === 'k0' ? front : times(front, q)
-      for (const d of [0, 1] as const) {
-        const g = this.drives[d]
-        if (g === 0) continue
-        const first = scale(signK * g, times(factor, times(node.fromInner[d], inward)))
-        const second = scale(signI * g, times(factor, times(node.fromOuter[d], outward)))
-        value += first.re + second.re
-        const near = modulus(first)
-        const far = modulus(second)
-        size += near + far
-        moved += modulus(q) * ((x === 0 ? 0 : near) + (y === 0 ? 0 : far))
+      if (q.re * x < NOTHING) {
+        const bessel = besselK01(scale(radius, q))[k]
+        const inward = scale(signK, times(factor, times(exponential(scale(-x, q)), bessel)))
+        sums[0].add(times(fromInner[0], inward), x === 0 ? 0 : length)
+        sums[1].add(times(fromInner[1], inward), x === 0 ? 0 : length)
+      }
+      if (q.re * y < NOTHING) {
+        const bessel = besselI01(scale(radius, q))[i]
+        const outward = scale(signI, times(factor, times(exponential(scale(-y, q)), bessel)))
+        sums[0].add(times(fromOuter[0], outward), y === 0 ? 0 : length)
+        sums[1].add(times(fromOuter[1], outward), y === 0 ? 0 : length)
       }
     }
-    // Each of the two radii that a distance is made of is rounded.
-    return {
-      value,
-      error: EPS * (this.rounding * size + 2 * radius * moved) + LEFT_OUT * driven + TINY,
-      method: 'contour',
-    }
+    const [inner, outer] = [0, 1].map((d) => {
+      const { size, moved, value } = sums[d]!
+      const atFace = 1 / (this.body.slope[d]! + this.body.level[d]!)
+      // Each of the two radii that a distance is made of is rounded.
+      const error = EPS * (this.rounding * size + 2 * radius * moved) + LEFT_OUT * atFace
+      return driven(this.drives[d]!, 1, { value, error, method: 'contour' })
+    })
+    return { value: inner!.value + outer!.value, error: inner!.error + outer!.error + TINY, method: 'contour' }
   }
 
   /** Flux into the body at a face by the drive there, in kelvins a thickness. */
   nearFlux(face: 0 | 1): Estimate {
-    const g = this.drives[face]
-    const { value, error, method } = this.sum(this.nodes, this.rounding, (node) => times(node.front, node.near[face]))
-    return { value: (g * value) / this.root, error: (Math.abs(g) * error) / this.root, method }
+    const unit = sumOf(this.nodes, this.rounding, (node) => times(node.front, node.near[face]))
+    return driven(this.drives[face], 1 / this.root, unit)
   }
 
   /** Flux into the body at a face by the drive at the other, in kelvins a thickness: never of that drive's sign. */
   farFlux(face: 0 | 1): Estimate {
     const { thickness, level, a, b } = this.body
-    const g = this.drives[face === 0 ? 1 : 0]
-    if (g === 0 || level[face] === 0 || thickness > FARTHEST) return { value: 0, error: TINY, method: 'contour' }
+    if (level[face] === 0 || thickness > FARTHEST) return { value: 0, error: TINY, method: 'contour' }
     const contour = contourAt(1, thickness)
     const nodes = contour.nodes.map((node) => faceNode(this.body, node))
-    const { value, error, method } = this.sum(nodes, FAR_ROUNDING + roundingOf(contour), (node) => node.front)
-    const factor = (g * level[face]) / ((face === 0 ? a : b) * this.root)
-    const own = Math.abs(factor) * (error + 4 * EPS * a * thickness * Math.abs(value))
-    return { value: -factor * value, error: own, method }
+    const { value, error, method } = sumOf(nodes, FAR_ROUNDING + roundingOf(contour), (node) => node.front)
+    const factor = -level[face] / ((face === 0 ? a : b) * this.root)
+    const moved = 4 * EPS * a * thickness * Math.abs(value)
+    return driven(this.drives[face === 0 ? 1 : 0], factor, { value, error: error + moved, method })
   }
 
   /** ∫θρ dρ by the drive at a face, in kelvins times the square of the thickness. */
   content(face: 0 | 1): Estimate {
-    const g = this.drives[face]
     const { a, b, level } = this.body
     const radius = face === 0 ? a : b
     const other = level[face === 0 ? 1 : 0]
-    const { value, error, method } = this.sum(this.nodes, this.rounding, (node) => {
+    const unit = sumOf(this.nodes, this.rounding, (node) => {
       const { root: q, front, near, across } = node
       const flow = plus(scale(radius, near[face]), scale(-other, across))
       return over(times(front, flow), times(q, q))
     })
-    const factor = g * this.root * this.root
-    return { value: factor * value, error: Math.abs(factor) * error, method }
+    return driven(this.drives[face], this.root * this.root, unit)
   }
+}
 
-  private sum(nodes: readonly FaceNode[], rounding: number, at: (node: FaceNode) => Complex): Estimate {
-    let value = 0
-    let size = 0
-    for (const node of nodes) {
-      const one = at(node)
-      value += one.re
-      size += modulus(one)
-    }
-    return { value, error: EPS * rounding * size + TINY, method: 'contour' }
+/** A sum over the nodes of a contour, with the sizes that its error is told by. */
+class Sum {
+  value = 0
+  size = 0
+  moved = 0
+
+  add(one: Complex, length: number): void {
+    const share = Math.abs(one.re) + Math.abs(one.im)
+    this.value += one.re
+    this.size += share
+    this.moved += share * length
   }
+}
+
+function sumOf(nodes: readonly FaceNode[], rounding: number, at: (node: FaceNode) => Complex): Estimate {
+  const sum = new Sum()
+  for (const node of nodes) sum.add(at(node), 0)
+  return { value: sum.value, error: EPS * rounding * sum.size, method: 'contour' }
+}
+
+/** A response to a unit drive, times a factor and the drive. */
+function driven(drive: FaceDrive, factor: number, { value, error, method }: Estimate): Estimate {
+  const own = Math.abs(drive.value) * error + drive.slack * (Math.abs(value) + error)
+  return { value: drive.value * factor * value, error: Math.abs(factor) * own + TINY, method }
 }
 
 const roundingOf = ({ exponent }: Contour) => OWN_ROUNDING + 24 + 16 * exponent

@@ -3,7 +3,7 @@ import { type Complex, exponential, modulus, over, plus, scale, times } from './
 /** Up to here the power series of I; beyond, its terms cancel where z is near the imaginary axis. */
 const I_SERIES = 2
 /**
- * The power series of K is taken for |z| < 1.4 + |Im z|/|z|: beyond, its logarithmic and regular parts cancel, and before, the
+ * The power series of K is taken for |z| < 1.4 + min(1, |Im z|/(2·Re z)): beyond, its logarithmic and regular parts cancel, and before, the
  * continued fraction is long.
  */
 const K_SERIES = 1.4
@@ -28,7 +28,7 @@ const EULER = 0.5772156649015329
  * Source    M. Abramowitz, I. A. Stegun, Handbook of Mathematical Functions (1964), 9.6.10, 9.6.26, 9.6.33, 9.7.1 (from memory).
  */
 export function besselI01(z: Complex): { i0: Complex; i1: Complex } {
-  const size = modulus(z)
+  const size = sizeOf(z)
   if (size < I_SERIES) return seriesI(z)
   return size < ASYMPTOTIC ? recurrenceI(z, size) : asymptoticI(z)
 }
@@ -50,17 +50,18 @@ export function besselI01(z: Complex): { i0: Complex; i1: Complex } {
  *           Physics 19 (1975), for the fraction; Abramowitz and Stegun 9.6.11, 9.6.15, 9.7.2 (from memory).
  */
 export function besselK01(z: Complex): { k0: Complex; k1: Complex } {
-  const size = modulus(z)
-  if (size < K_SERIES + Math.abs(z.im) / size) return seriesK(z)
+  const size = sizeOf(z)
+  if (size < K_SERIES + turnOf(z)) return seriesK(z)
   return size < ASYMPTOTIC ? fractionK(z, size, besselI01(z)) : asymptoticK(z)
 }
 
 /** Both kinds, as `besselI01` and `besselK01` give them, in less time than the two. */
 export function besselIK01(z: Complex): { i0: Complex; i1: Complex; k0: Complex; k1: Complex } {
-  const size = modulus(z)
+  const size = sizeOf(z)
   const first = besselI01(z)
-  const fraction = size >= K_SERIES + Math.abs(z.im) / size && size < ASYMPTOTIC
-  return { ...first, ...(fraction ? fractionK(z, size, first) : besselK01(z)) }
+  const fraction = size >= K_SERIES + turnOf(z) && size < ASYMPTOTIC
+  const { k0, k1 } = fraction ? fractionK(z, size, first) : besselK01(z)
+  return { i0: first.i0, i1: first.i1, k0, k1 }
 }
 
 function seriesI(z: Complex) {
@@ -109,23 +110,29 @@ function recurrenceI(z: Complex, size: number) {
   return { i0: over({ re: lr, im: li }, whole), i1: over({ re: hr, im: hi }, whole) }
 }
 
-/** Σ a_k·(±1/z)^k of the orders 0 and 1: sums of the even and the odd terms. */
-function hankelSums({ re: ur, im: ui }: Complex, order: 0 | 1) {
+/** Σ a_k/z^k of one order: the sums of the even and of the odd terms. */
+function hankelSums({ re: ur, im: ui }: Complex, order: 0 | 1): { even: Complex; odd: Complex } {
   let tr = 1
   let ti = 0
-  const even = { re: 1, im: 0 }
-  const odd = { re: 0, im: 0 }
+  let er = 1
+  let ei = 0
+  let or = 0
+  let oi = 0
   for (let k = 1; k <= 40; k++) {
-    const factor = (4 * order - (2 * k - 1) ** 2) / (8 * k)
+    const factor = (4 * order - (2 * k - 1) * (2 * k - 1)) / (8 * k)
     const next = factor * (tr * ur - ti * ui)
     ti = factor * (tr * ui + ti * ur)
     tr = next
-    const side = k % 2 === 0 ? even : odd
-    side.re += tr
-    side.im += ti
+    if ((k & 1) === 0) {
+      er += tr
+      ei += ti
+    } else {
+      or += tr
+      oi += ti
+    }
     if (Math.abs(tr) + Math.abs(ti) < NEGLIGIBLE) break
   }
-  return { even, odd }
+  return { even: { re: er, im: ei }, odd: { re: or, im: oi } }
 }
 
 function asymptoticI(z: Complex) {
@@ -134,24 +141,32 @@ function asymptoticI(z: Complex) {
   // i·e^(−2z) above the real axis, −i·e^(−2z) below; on the axis it is nothing at these sizes. Beyond e^(−80) its angle means nothing.
   const other = z.re > 40 ? { re: 0, im: 0 } : exponential({ re: -2 * z.re, im: -2 * z.im })
   const turned = z.im >= 0 ? { re: -other.im, im: other.re } : { re: other.im, im: -other.re }
-  const sum = (order: 0 | 1) => {
-    const { even, odd } = hankelSums(inverse, order)
-    const add = times(turned, { re: even.re + odd.re, im: even.im + odd.im })
-    const sign = order === 0 ? 1 : -1
-    return times(front, { re: even.re - odd.re + sign * add.re, im: even.im - odd.im + sign * add.im })
-  }
-  return { i0: sum(0), i1: sum(1) }
+  return { i0: times(front, asymptotic(inverse, turned, 0)), i1: times(front, asymptotic(inverse, turned, 1)) }
+}
+
+function asymptotic(inverse: Complex, turned: Complex, order: 0 | 1): Complex {
+  const { even, odd } = hankelSums(inverse, order)
+  const add = times(turned, { re: even.re + odd.re, im: even.im + odd.im })
+  const sign = order === 0 ? 1 : -1
+  return { re: even.re - odd.re + sign * add.re, im: even.im - odd.im + sign * add.im }
 }
 
 function asymptoticK(z: Complex) {
   const inverse = over({ re: 1, im: 0 }, z)
   const front = rootOf(scale(Math.PI / 2, inverse))
-  const sum = (order: 0 | 1) => {
-    const { even, odd } = hankelSums(inverse, order)
-    return times(front, plus(even, odd))
-  }
-  return { k0: sum(0), k1: sum(1) }
+  return { k0: times(front, allOf(inverse, 0)), k1: times(front, allOf(inverse, 1)) }
 }
+
+function allOf(inverse: Complex, order: 0 | 1): Complex {
+  const { even, odd } = hankelSums(inverse, order)
+  return plus(even, odd)
+}
+
+/** How far z is turned from the real axis: |sin arg z| near it, at most 1. */
+const turnOf = (z: Complex) => Math.min(1, Math.abs(z.im) / z.re / 2)
+
+/** |z|, as it is needed to choose by: below 1e-154 it is 0, above 1e154 infinite, in less time than the exact one takes. */
+const sizeOf = (z: Complex) => Math.sqrt(z.re * z.re + z.im * z.im)
 
 /** The root of a number in the right half plane. */
 function rootOf(a: Complex): Complex {

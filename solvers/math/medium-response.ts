@@ -79,7 +79,8 @@ export class MediumResponse {
   private node(node: ContourNode): Node {
     const { slope, level } = this.face
     const { k0, k1 } = besselK01(scale(this.radius, node.root))
-    return { ...node, k0, k1, condition: plus(scale(slope, times(node.root, k1)), scale(level, k0)) }
+    const { root, weight } = node
+    return { root, weight, k0, k1, condition: plus(scale(slope, times(node.root, k1)), scale(level, k0)) }
   }
 
   private placed(q: Complex, distance: number, name: 'k0' | 'k1', atFace: Complex): Complex {
@@ -91,7 +92,11 @@ export class MediumResponse {
     const contour = distance === 0 ? this.contour : contourAt(1, distance)
     // As long as the saddle is left of the pole's own distance, the nodes are the same and only the weights differ.
     const same = contour.exponent === this.contour.exponent
-    const nodes = contour.nodes.map((node, k) => (same ? { ...this.nodes[k]!, weight: node.weight } : this.node(node)))
+    const nodes = contour.nodes.map((node, k): Node => {
+      if (!same) return this.node(node)
+      const { root, k0, k1, condition } = this.nodes[k]!
+      return { root, weight: node.weight, k0, k1, condition }
+    })
     return this.sum(distance, nodes, contour, distance, (node) => {
       const { root: q, weight, condition } = node
       const placed = this.placed(q, distance, name, node[name])

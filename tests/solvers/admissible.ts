@@ -115,10 +115,22 @@ function hollowed(body: Input): Input {
   return { ...body, outerRadius: Math.min(1e5, innerRadius * Math.min(1e4, 1 + 1.001e-5 * 1e9 ** share)) }
 }
 
+/** A profile goes from face to face and has a temperature at each of its depths, which increase. */
+function profiled(body: Input): Input {
+  const { initialProfile, thickness: end } = body
+  if (!initialProfile || typeof end !== 'number') return body
+  const { depths, temperatures } = initialProfile as Record<'depths' | 'temperatures', number[]>
+  const values = temperatures.length > 1 ? temperatures : [...temperatures, temperatures[0]!]
+  // At most one depth between, sometimes at a face: then the profile jumps there.
+  const share = Math.round(64 * Math.min(1, Math.max(0, (Math.log10(depths[0]! + 1e-12) + 12) / 17))) / 64
+  const between = Array.from({ length: values.length - 2 }, () => share * end)
+  return { ...body, initialProfile: { depths: [0, ...between, end], temperatures: values } }
+}
+
 export function admissible(c: Case): fc.Arbitrary<Input> {
   const schema = z.toJSONSchema(solve.input(c), { io: 'input' }) as Field
   const stated = [c.example, ...(c.variants ?? []).map((v) => v.input)]
   return fc
     .oneof(...stated.map((one) => varied(c, one, schema) as fc.Arbitrary<Input>))
-    .map((body) => withPoints(c, placed(c, hollowed(body))))
+    .map((body) => withPoints(c, placed(c, profiled(hollowed(body)))))
 }

@@ -77,6 +77,8 @@ export function solve(input: MediumInput): Solution {
   const distance = (i: number, j: number) => (radii[j]! - radius) / roots[i]!
   const level = (i: number) => (held ? 1 : (film * roots[i]!) / k)
   const known = !held && film === 0
+  // A line power was divided by the circumference.
+  const entering = scaled(1, exactly(flux))
 
   const rounded = Math.abs(initial) + Math.abs(drive.temperature)
   /** A response times a factor and the drive, which is rounded as its parts are. */
@@ -95,17 +97,21 @@ export function solve(input: MediumInput): Solution {
   const fields = {
     temperature: grid((i, j) => {
       if (times[i] === 0) return exactly(initial)
+      if (held && radii[j] === radius) return exactly(drive.temperature)
       const { value, error, method } = driven(held ? 1 : roots[i]! / k, at(i).temperature(distance(i, j)))
       return { value: initial + value, error: error + EPS * Math.abs(initial), method }
     }),
-    heatFlux: grid((i, j) => (times[i] === 0 ? atFaceFirst(j) : fluxAt(i, distance(i, j)))),
+    heatFlux: grid((i, j) => {
+      if (known && radii[j] === radius) return entering
+      return times[i] === 0 ? atFaceFirst(j) : fluxAt(i, distance(i, j))
+    }),
     surfaceHeatFlux: history((i) => {
-      if (known) return scaled(1, exactly(flux))
+      if (known) return entering
       return times[i] === 0 ? atFaceFirst(undefined) : fluxAt(i, 0)
     }, 'relative'),
     heatGained: history((i) => {
       const around = 2 * Math.PI * radius
-      if (known) return scaled(around * times[i]!, exactly(flux))
+      if (known) return scaled(around * times[i]!, entering)
       if (times[i] === 0) return exactly(0)
       return driven(around * (held ? capacity * roots[i]! : times[i]!), at(i).heat())
     }, 'relative'),
