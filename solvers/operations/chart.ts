@@ -4,13 +4,13 @@ import { cautions } from '../cautions.ts'
 import { quantities } from '../quantity.ts'
 import { type Kind, kindsOf } from './chart/curves.ts'
 import { drawingOf } from './chart/drawing.ts'
-import { MOST_CURVES, type Paper, type Planned, planOf } from './chart/plan.ts'
-import { accuracyScope, boundSchema, headed, headOf, scopeOf, tail, warningsOf } from './envelope.ts'
+import { type Fields, MOST_CURVES, type Paper, type Planned, planOf } from './chart/plan.ts'
+import { accuracyScope, boundSchema, echoOf, headed, headOf, scopeOf, tail, warningsOf } from './envelope.ts'
 import { partsOf } from './example.ts'
 import type { Call, CaseOperation } from './index.ts'
 import { once } from './once.ts'
 import { readBody } from './read-body.ts'
-import { inputOf, placeSchemas } from './solve-schemas.ts'
+import { inputOf } from './solve-schemas.ts'
 
 const plain = (title: string, description: string, accepted: string) => ({
   title,
@@ -63,28 +63,25 @@ const paper = {
     .meta(plain('Title', 'default the title of the case', 'a text of at most 120 characters')),
 }
 
-/** The classic kinds need no body, so its fields are all optional here; the other kinds read them as a solve does. */
+/** What is drawn of a body stands in `input`, as a solve takes it; the classic kinds need no body. */
 const inputSchema = once((c: Case) => {
   const kinds = kindsOf(c)
-  const optional = Object.fromEntries(
-    Object.entries(c.fields).map(([name, schema]) => [name, (schema as z.ZodType).optional()]),
-  )
-  const { times } = inputOf(c).shape as unknown as { times: z.ZodType }
+  const { outputs: _, detail: __, times, ...fields } = inputOf(c).shape as Record<string, z.ZodType>
+  const input = z.strictObject({ ...fields, times: times!.optional() }).meta({
+    title: 'Input',
+    description: 'Input: as of a solve; for profiles with times and without places, for histories the other way round.',
+    'x-accepted': 'the input of a solve, without outputs',
+  })
   return z.strictObject({
-    ...optional,
-    ...placeSchemas(c),
-    times: times.optional(),
     kind: z.enum(kinds).meta(plain('Kind', kinds.join(', '), kinds.join(', '))),
+    input: input.optional(),
     ...paper,
   })
 })
 
 function prepare(c: Case, body: unknown): Call {
-  const read = readBody(inputSchema(c), body)
-  const names = ['kind', ...Object.keys(paper)]
-  const own = Object.fromEntries(names.map((name) => [name, read[name]])) as unknown as Paper
-  const fields = Object.fromEntries(Object.entries(read).filter(([name]) => !names.includes(name) || name in c.fields))
-  const planned = planOf(c, own, fields)
+  const { input = {}, ...own } = readBody(inputSchema(c), body) as unknown as Paper & { input?: Fields }
+  const planned = planOf(c, own, input)
   const drawn = planned.count * own.points
   const points = c.weight * drawn + 50
   return { values: drawn, size: 2 * drawn, points, run: () => answer(c, own, planned, points) }
@@ -98,9 +95,8 @@ function answer(c: Case, own: Paper, planned: Planned, points: number) {
   const { input } = planned
   const echoed = input ? { ...(c.echo?.(input) ?? input) } : {}
   const rest = Object.entries({ ...own, title }).filter(([, value]) => value !== undefined)
-  const { points: _, ...chart } = Object.fromEntries(rest)
   return {
-    ...headed(c, 'chart', points, { ...echoed, ...chart }),
+    ...headed(c, 'chart', points, { ...Object.fromEntries(rest), ...(input ? { input: echoOf(echoed) } : {}) }),
     units,
     result: { series, lengthUsed: planned.length, svg },
     accuracy: { bound: { y: bound }, error, ...scopeOf },
@@ -154,12 +150,8 @@ export const chart: CaseOperation = {
   example: once((c) => {
     const { fields, axis, place, last } = partsOf(c)
     const given = (c.example as Record<string, unknown>)[axis ?? ''] as unknown[] | undefined
-    return {
-      ...fields,
-      ...(axis ? { [axis]: given?.slice(0, MOST_CURVES) ?? [place] } : {}),
-      kind: 'histories',
-      until: last,
-    }
+    const places = axis ? { [axis]: given?.slice(0, MOST_CURVES) ?? [place] } : {}
+    return { kind: 'histories', input: { ...fields, ...places }, until: last }
   }),
   prepare,
 }

@@ -1,10 +1,10 @@
 import { z } from 'zod'
 import type { Case } from '../case.ts'
-import { DomainError } from '../errors.ts'
 import type { Call, CaseOperation } from './index.ts'
 import { once } from './once.ts'
 import { chargeOf, FLOOR, MAX_POINTS } from './price.ts'
 import { readBody } from './read-body.ts'
+import { within } from './within.ts'
 
 const answerSchema = z.strictObject({
   points: z.number().meta({ description: 'Priced points of the call.' }),
@@ -59,15 +59,5 @@ export function costOf(operations: readonly CaseOperation[]): CaseOperation {
     answer: () => answerSchema,
     example: (c) => ({ operation: 'solve', input: c.example }),
     prepare,
-  }
-}
-
-/** Pointers of a refused input pass through the member that holds it. */
-function within<T>(prefix: string, prepare: () => T): T {
-  try {
-    return prepare()
-  } catch (error) {
-    if (!(error instanceof DomainError)) throw error
-    throw new DomainError(error.issues.map((issue) => ({ ...issue, pointer: prefix + issue.pointer.slice(1) })))
   }
 }

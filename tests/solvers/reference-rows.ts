@@ -31,7 +31,7 @@ function read(name: string): Row[] {
 }
 
 /* Each file of rows/ has a line here. */
-const kinds: Kinds = { ...steps, ...closedForms, ...radial, ...products, ...slabs }
+export const kinds: Kinds = { ...steps, ...closedForms, ...radial, ...products, ...slabs }
 
 export const questions: Question[] = Object.entries(kinds).flatMap(([kind, { file, ask, names }]) =>
   read(file)

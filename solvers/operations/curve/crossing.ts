@@ -73,7 +73,7 @@ function locate(curve: Curve, whole: Scan, target: number, low: number, high: nu
   const limits: Bracket = [points[low]!, points[high]!]
   const origin = originOf(breaks, limits[0])
   const near = narrowed(curve, past, limits, origin)
-  if (near[1] - near[0] <= 2 * spacing(near[1])) return { at: near[0], bound: near[1] - near[0], direction }
+  if (!near) return { at: origin, bound: nearest(origin), direction }
   const at = root(curve, past, near)
   const slope = slopeAt(curve, breaks, at, 2 * (limits[1] - limits[0]))
   const bound = certainty(curve, past, at, Math.abs(slope), limits)
@@ -86,17 +86,22 @@ const SECTIONS = 16
 /** Nearer to the start nothing is told apart from it. */
 const NOTHING = 1e-300
 
-/** Cuts a bracket by decades of the distance from the start of its stretch, until its ends are of one size. */
-function narrowed(curve: Curve, past: (value: number) => number, [a, b]: Bracket, origin: number): Bracket {
+const nearest = (origin: number) => Math.max(NOTHING, spacing(origin))
+
+/**
+ * Cuts a bracket by decades of the distance from the start of its stretch, until its ends are of one size. A curve that
+ * jumps at that start has nothing to cut.
+ */
+function narrowed(curve: Curve, past: (value: number) => number, [a, b]: Bracket, origin: number): Bracket | undefined {
   for (let round = 0; round < 8 && b - origin > 4 * (a - origin); round++) {
-    const least = a > origin ? a - origin : Math.max(NOTHING, spacing(origin))
+    const least = a > origin ? a - origin : nearest(origin)
     const ratio = (b - origin) / least
     const inside = Array.from({ length: SECTIONS - 1 }, (_, k) => origin + least * ratio ** (k / SECTIONS))
       .slice(a > origin ? 1 : 0)
       .filter((p) => p > a && p < b)
     const values = curve.sample(inside).values
     const first = values.findIndex((value) => past(value) >= 0)
-    if (first === 0 && a === origin) return [a, inside[0]!]
+    if (first === 0 && a === origin) return undefined
     const [before, after] = first < 0 ? [inside.at(-1) ?? a, b] : [inside[first - 1] ?? a, inside[first]!]
     ;[a, b] = [before, after]
   }

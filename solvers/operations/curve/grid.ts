@@ -5,8 +5,9 @@ export interface Grid {
   breaks: readonly number[]
 }
 
-/** Points a decade of the first look; where the curve changes, each gap is cut again. */
-const PER_DECADE = 3
+/** Points a decade of the first look over time; where the curve changes, each gap is cut to the finer figure. */
+const COARSE = 0.5
+export const PER_DECADE = 3
 
 /** Below this no time matters: a body of 1 nm with the largest diffusivity is done at 1e-20 s. */
 const SHORTEST = 1e-22
@@ -24,9 +25,9 @@ function distinct(points: readonly number[]): number[] {
 }
 
 /** Offsets by decades from the shortest to below a length. */
-function decades(shortest: number, length: number): number[] {
-  const count = Math.ceil(PER_DECADE * Math.log10(length / shortest))
-  return Array.from({ length: Math.max(0, count) }, (_, k) => shortest * 10 ** (k / PER_DECADE))
+function decades(shortest: number, length: number, each: number): number[] {
+  const count = Math.ceil(each * Math.log10(length / shortest))
+  return Array.from({ length: Math.max(0, count) }, (_, k) => shortest * 10 ** (k / each))
 }
 
 /** What the case says of its own course: where it changes its law, and the period of what repeats. */
@@ -49,7 +50,9 @@ export function timeGrid(course: Course, from: number, to: number): Grid {
         const shortest = start === 0 ? Math.min(SHORTEST, 1e-6 * length) : Math.max(NEAREST * start, 1e-9 * length)
         return [
           start,
-          ...(many ? fewShares.map((s) => s * length) : decades(shortest, length)).map((offset) => start + offset),
+          ...(many ? fewShares.map((s) => s * length) : decades(shortest, length, COARSE)).map(
+            (offset) => start + offset,
+          ),
         ]
       })
   const { period } = course
@@ -70,7 +73,7 @@ export function placeGrid(joints: readonly number[]): Grid {
     const next = breaks[i + 1]
     if (next === undefined) return [joint]
     const length = next - joint
-    const near = decades(length < ENDLESS ? 1e-9 * length : SHALLOWEST, length)
+    const near = decades(length < ENDLESS ? 1e-9 * length : SHALLOWEST, length, PER_DECADE)
     const even = Array.from({ length: 31 }, (_, k) => joint + ((k + 1) / 32) * length)
     return [joint, ...near.map((d) => joint + d), ...near.map((d) => next - d), ...even]
   })

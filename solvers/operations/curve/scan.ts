@@ -1,6 +1,6 @@
 import { EPS } from '../../math/rounding.ts'
 import type { Curve } from './curve.ts'
-import type { Grid } from './grid.ts'
+import { type Grid, PER_DECADE } from './grid.ts'
 import { derivative, type Interpolant, interpolate, isResolved, slopeError, valueAt } from './interpolant.ts'
 
 /** A curve as looked at, finely where it changes. */
@@ -33,21 +33,31 @@ function stretchOf(breaks: readonly number[], point: number): [number, number] {
   return [breaks[index]!, breaks[index + 1] ?? breaks[index]!]
 }
 
-/** A gap in which the curve changes by a larger share of its range is cut again, and so are its neighbours. */
-const CALM = 1e-4
+/**
+ * Gaps in which the curve changes by a larger share of its range are cut, and so are their neighbours: first to so
+ * many points a decade, then once more where it changes by a good deal.
+ */
+const passes = [
+  { calm: 1e-9, parts: (ratio: number) => (ratio > 0 ? Math.ceil(PER_DECADE * Math.log10(ratio)) : 1) },
+  { calm: 1e-4, parts: () => 3 },
+]
 
 export function scan(curve: Curve, grid: Grid): Scan {
-  const points = [...grid.points]
-  const { values, bounds } = curve.sample(points)
+  const first: Scan = { points: [...grid.points], ...curve.sample(grid.points), breaks: grid.breaks }
+  return passes.reduce((looked, { calm, parts }) => {
+    const cut = cutsOf(looked, calm, parts)
+    return cut.length ? merged(looked, { points: cut, ...curve.sample(cut) }) : looked
+  }, first)
+}
+
+function cutsOf({ points, values, breaks }: Scan, calm: number, parts: (ratio: number) => number): number[] {
   const range = spread(values)
-  const lively = values.map((v, i) => i > 0 && Math.abs(v - values[i - 1]!) > CALM * range)
-  const cut = points.flatMap((_, i) =>
+  const lively = values.map((v, i) => i > 0 && Math.abs(v - values[i - 1]!) > calm * range)
+  return points.flatMap((_, i) =>
     i > 0 && (lively[i] || lively[i - 1] || lively[i + 1])
-      ? between(points[i - 1]!, points[i]!, originOf(grid.breaks, points[i - 1]!))
+      ? between(points[i - 1]!, points[i]!, originOf(breaks, points[i - 1]!), parts)
       : [],
   )
-  const first: Scan = { points, values, bounds, breaks: grid.breaks }
-  return cut.length ? merged(first, { points: cut, ...curve.sample(cut) }) : first
 }
 
 function spread(values: readonly number[]): number {
@@ -55,11 +65,12 @@ function spread(values: readonly number[]): number {
   return most - values.reduce((m, v) => Math.min(m, v), Infinity)
 }
 
-/** Two points that cut a gap in three, by ratio of their distance from where the stretch starts if it has one. */
-function between(a: number, b: number, origin: number): number[] {
+/** Points that cut a gap in parts, by ratio of their distance from where the stretch starts if they have one. */
+function between(a: number, b: number, origin: number, parts: (ratio: number) => number): number[] {
   const [near, far] = [a - origin, b - origin]
-  const inside =
-    near > 0 ? [1 / 3, 2 / 3].map((s) => origin + near * (far / near) ** s) : [1 / 3, 2 / 3].map((s) => a + (b - a) * s)
+  const count = parts(near > 0 ? far / near : 0)
+  const shares = Array.from({ length: Math.max(0, count - 1) }, (_, k) => (k + 1) / count)
+  const inside = shares.map((s) => (near > 0 ? origin + near * (far / near) ** s : a + (b - a) * s))
   return inside.filter((p) => p > a && p < b)
 }
 
