@@ -17,7 +17,13 @@ const one = new D(1)
 
 /** Below Fo 0.006 images (the next is e^(−160) of them), above it the eigenfunctions. */
 export function exactSphere(biot: D | null, fourier: D, delta: D): ExactRound {
-  return fourier.lt('0.006') ? sphereImages(biot, fourier, delta) : sphereSeries(biot, fourier, one.minus(delta))
+  const found = fourier.lt('0.006') ? sphereImages(biot, fourier, delta) : sphereSeries(biot, fourier, one.minus(delta))
+  return atHeldFace(biot, delta, found)
+}
+
+/** Of a face that is held nothing remains, where the sums leave 1e-60. */
+function atHeldFace(biot: D | null, delta: D, found: ExactRound): ExactRound {
+  return biot || !delta.isZero() ? found : { ...found, remaining: new D(0), completed: one }
 }
 
 function sphereImages(biot: D | null, fourier: D, delta: D): ExactRound {
@@ -26,14 +32,23 @@ function sphereImages(biot: D | null, fourier: D, delta: D): ExactRound {
   const near = delta.div(root.mul(2))
   const far = one.plus(rho).div(root.mul(2))
   const step = biot ? filmStep(biot, root) : heldStep(root)
+  if (rho.isZero()) {
+    const completed = step.slope(near).mul(2)
+    return { completed, remaining: one.minus(completed), flux: rho, heat: step.heat, mean: one.minus(step.heat) }
+  }
   const w = step.image(near).minus(step.image(far))
   const completed = w.div(rho)
   const flux = rho
     .mul(step.slope(near).plus(step.slope(far)))
     .minus(w)
     .div(rho.mul(rho))
-  const left = delta.isZero() && biot ? one.minus(step.image(near)) : one.minus(completed)
-  return { completed, remaining: left, flux: flux.div(biot ?? 1), heat: step.heat, mean: one.minus(step.heat) }
+  return {
+    completed,
+    remaining: one.minus(completed),
+    flux: flux.div(biot ?? 1),
+    heat: step.heat,
+    mean: one.minus(step.heat),
+  }
 }
 
 /** Beyond, every term is below 1e-17000 and only lengthens the sums. */
@@ -129,7 +144,14 @@ export function exactCylinder(biot: D | null, fourier: D, delta: D): ExactRound 
     mean = mean.plus(weight.mul(2).mul(j1).div(z))
     if (decay.lt('1e-50')) break
   }
-  return { remaining, completed: one.minus(remaining), flux: flux.div(biot ?? 1), heat: one.minus(mean), mean }
+  const completed = one.minus(remaining)
+  return atHeldFace(biot, delta, {
+    remaining,
+    completed,
+    flux: flux.div(biot ?? 1),
+    heat: one.minus(mean),
+    mean,
+  })
 }
 
 /* The terms of the power series grow to e^x, so 60 digits beyond that of x = 130. */
