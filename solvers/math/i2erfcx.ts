@@ -28,5 +28,5 @@ export function i2erfcx(x: number): number {
 
 /** Levels after which the ratios no longer change in double precision. */
 function ratioDepth(x: number): number {
-  return Math.ceil(10 + 62 / x + 110 / (x * x))
+  return Math.ceil(15 + 93 / x + 165 / (x * x))
 }
