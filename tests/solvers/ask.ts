@@ -70,7 +70,7 @@ function replaced(value: unknown, [first, ...rest]: readonly (string | number)[]
   return { ...object, [first]: replaced(object[first], rest, leaf) }
 }
 
-const isTemperature = (name: string) => /temperature$/i.test(name) || name === 'cycleMean' || name === 'start'
+const isTemperature = (name: string) => /temperatures?$/i.test(name) || name === 'cycleMean' || name === 'start'
 const isDrive = (name: string) =>
   /flux$|power|rate$|^amplitude$|density$|rise$|^energy$/i.test(name) && name !== 'density'
 /** These may only be moved inward, and those only outward: there the body ends. */
