@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import type { Material } from '../solvers/materials/material.ts'
-import { parseStated } from '../solvers/number-lists.ts'
+import { readBody } from '../solvers/operations/read-body.ts'
 import { parse } from '../solvers/validate.ts'
 import type { Deps } from './deps.ts'
 import type { Permission, Reach, Role, StaffPermission, StaffRole } from './permissions.ts'
@@ -154,7 +154,7 @@ export function jsonBody<S extends z.ZodObject>(schema: S): Body<z.output<S>> {
 
 /** A short JSON body with quantities, which may be stated with their units. */
 export function statedBody<S extends z.ZodObject>(schema: S): Body<z.output<S>> {
-  return { schema, limit: SHORT, parse: (raw) => parseStated(schema, raw) }
+  return { schema, limit: SHORT, parse: (raw) => readBody(schema, raw) as z.output<S> }
 }
 
 /** Needs the cookie of a session, to read or to change it. */

@@ -93,6 +93,8 @@ export interface CaseDescription<Shape_ extends z.ZodRawShape, R extends Resolve
   depthsEndAt?: string & keyof Shape_
   /** The field that says at which radius a body with a hole begins. */
   radiiBeginAt?: string & keyof Shape_
+  /** The fields that give the body a length of 1, where it may also be asked by biot, fourier and positionRatio. */
+  dimensionless?: Readonly<Record<string, number>>
   /** The field with the temperature that the body is driven to; absent where no one field says it. */
   drive?: string & keyof Shape_
   outputs: Partial<Record<OutputName, Partial<Pick<OutputDescription, 'unit' | 'shape' | 'text'>>>>

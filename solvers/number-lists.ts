@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { DomainError, type Issue, MAX_ISSUES } from './errors.ts'
+import { type Issue, MAX_ISSUES } from './errors.ts'
 import { OwnMaterial } from './materials/own-material.ts'
 import { readStated } from './units-read.ts'
 import { issueAt, issuesOf, metaOf, shapeFor, unwrap } from './validate.ts'
@@ -90,15 +90,6 @@ export function withLists(parsed: Record<string, unknown>, lists: Read['lists'])
     at[path.at(-1)!] = values
   }
   return parsed
-}
-
-/** Parses a body that may state quantities with their units, or throws a DomainError. */
-export function parseStated<S extends z.ZodObject>(schema: S, raw: unknown): z.output<S> {
-  const { body, lists, issues } = readLists(schema, raw)
-  const parsed = schema.safeParse(body, { reportInput: true })
-  if (!parsed.success) issues.unshift(...issuesOf(schema, parsed.error))
-  if (!parsed.success || issues.length > 0) throw new DomainError(issues)
-  return withLists(parsed.data, lists) as z.output<S>
 }
 
 const isPlain = (value: unknown): value is Record<string, unknown> =>

@@ -31,6 +31,8 @@ export interface CaseOperation {
   answer(c: Case): z.ZodType
   /** Absent where there is nothing to leave out. */
   compactAnswer?(c: Case): z.ZodType
+  /** A second way to ask, with an answer of its own; absent where the case has none. */
+  other?(c: Case): { input: z.ZodObject; answer: z.ZodObject } | undefined
   example(c: Case): Record<string, unknown>
   /** Throws DomainError for anything the call may not ask; after it, run() cannot refuse. */
   prepare(c: Case, body: unknown, defaultDetail: 'full' | 'compact'): Call

@@ -1,13 +1,15 @@
 import { type Case, type Resolved, countOfPlaces, outputNamesOf, outputOf, placeFields } from '../case.ts'
 import type { Issue } from '../errors.ts'
-import type { OutputName, Shape } from '../outputs.ts'
+import type { OutputName } from '../outputs.ts'
 import { kindOf } from '../validate.ts'
+import { countValues } from './count-values.ts'
 import { refuseDerived, solveWithDerived } from './derived.ts'
+import { asksDimensionless, dimensionlessAnswer, dimensionlessInput, prepareDimensionless } from './dimensionless.ts'
 import { headed, scopeOf, tailOf, warningsOf } from './envelope.ts'
 import type { Call, CaseOperation } from './index.ts'
 import { type Read, refusePlaces } from './places.ts'
 import { readBody } from './read-body.ts'
-import { answeredShape, answerSchema, compactSchema, inputOf } from './solve-schemas.ts'
+import { answerSchema, compactSchema, inputOf } from './solve-schemas.ts'
 
 /** An output that the case lacks is refused with the reason, and with those it has. */
 function withReason(c: Case, body: unknown, issue: Issue): Issue {
@@ -23,27 +25,17 @@ function withReason(c: Case, body: unknown, issue: Issue): Issue {
 }
 
 function prepare(c: Case, body: unknown, defaultDetail: 'full' | 'compact'): Call {
+  if (asksDimensionless(c, body)) return prepareDimensionless(c, body, defaultDetail)
   const read = readBody(inputOf(c), body, (issue) => withReason(c, body, issue))
   const { detail = defaultDetail, ...input } = read as Read & { detail?: 'full' | 'compact' }
   input.outputs = [...new Set(input.outputs)]
   refusePlaces(c, input)
   const resolved = c.resolve(input)
   refuseDerived(c, resolved)
-  const values = countValues(c, resolved, () => 1)
+  const values = countValues(c, resolved)
   const points = c.weight * countValues(c, resolved, (name) => outputOf(c, name).cost ?? 1) + c.setUp
   const size = Math.max(values, resolved.times.length, countOfPlaces(resolved))
   return { values, size, points, run: () => answer(c, resolved, points, detail === 'compact') }
-}
-
-function countValues(c: Case, input: Resolved, costOf: (name: OutputName) => number): number {
-  const places = countOfPlaces(input)
-  const counts: Record<Shape, number> = {
-    grid: input.times.length * places,
-    times: input.times.length,
-    places,
-    single: 1,
-  }
-  return input.outputs.reduce((sum, name) => sum + costOf(name) * counts[answeredShape(c, name)], 0)
 }
 
 function answer(c: Case, input: Resolved, points: number, compact: boolean) {
@@ -85,6 +77,7 @@ export const solve = {
   input: inputOf,
   answer: answerSchema,
   compactAnswer: compactSchema,
+  other: (c) => (c.dimensionless ? { input: dimensionlessInput(c), answer: dimensionlessAnswer(c) } : undefined),
   example: (c) => c.example,
   prepare,
 } satisfies CaseOperation

@@ -38,6 +38,7 @@ export default defineCase<typeof fields, Resolved>({
   fields,
   places: 'depths-or-radii',
   depthsEndAt: 'radius',
+  dimensionless: { radius: 1 },
   drive: 'ambientTemperature',
   outputs: roundOutputs('J/m'),
   absentOutputs: roundAbsentOutputs('ambient'),

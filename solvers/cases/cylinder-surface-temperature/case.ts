@@ -34,6 +34,7 @@ export default defineCase<typeof fields, Resolved>({
   fields,
   places: 'depths-or-radii',
   depthsEndAt: 'radius',
+  dimensionless: { radius: 1 },
   drive: 'surfaceTemperature',
   outputs: roundOutputs('J/m'),
   absentOutputs: roundAbsentOutputs('surface'),

@@ -25,6 +25,7 @@ export default defineCase<typeof fields, SlabResolved>({
   fields,
   places: 'depths',
   depthsEndAt: 'thickness',
+  dimensionless: { thickness: 1, exposedFaces: 1 },
   drive: 'surfaceTemperature',
   outputs: {
     temperature: {},
