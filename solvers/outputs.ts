@@ -191,6 +191,41 @@ export const outputCatalogue = {
     shape: 'times',
     text: 'Heat flux conducted into the body at its outer face, per m2 of that face.',
   },
+  admittance: {
+    label: 'Admittance',
+    symbol: 'Y',
+    unit: 'W/(m2.K)',
+    shape: 'single',
+    text: 'Amplitude of the heat flux into one exposed face per kelvin of the driving cycle.',
+  },
+  admittanceTimeLead: {
+    label: 'Time lead of the admittance',
+    symbol: 'ΔtY',
+    unit: 's',
+    shape: 'single',
+    text: 'Time by which the heat flux is ahead of the driving cycle.',
+  },
+  arealHeatCapacity: {
+    label: 'Areal heat capacity',
+    symbol: 'κ',
+    unit: 'J/(m2.K)',
+    shape: 'single',
+    text: 'Period over 2π times the admittance.',
+  },
+  bathTemperature: {
+    label: 'Bath temperature',
+    symbol: 'Tᵦ',
+    unit: 'Cel',
+    shape: 'times',
+    text: 'Temperature of the bath at each time.',
+  },
+  equilibriumTemperature: {
+    label: 'Equilibrium temperature',
+    symbol: 'T∞',
+    unit: 'Cel',
+    shape: 'single',
+    text: 'Temperature that body and bath come to.',
+  },
 } as const satisfies Record<string, OutputDescription>
 
 export type OutputName = keyof typeof outputCatalogue

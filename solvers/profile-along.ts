@@ -22,7 +22,7 @@ export function placeOf(depth: number, profile: InitialProfile, length: number, 
   const uniform = profile.temperatures.every((T) => T === reference)
   const near = depth / length
   const far = (length - depth) / length
-  if (uniform) return { near, far, piece: 0, fromStart: near, toEnd: far, initial: 0 }
+  if (uniform) return { near, far, piece: 0, fromStart: near, toEnd: far, initial: 0, shift: 0 }
   const piece = pieceOf(profile, depth)
   const from = profile.depths[piece]!
   const to = profile.depths[piece + 1]!
@@ -33,6 +33,7 @@ export function placeOf(depth: number, profile: InitialProfile, length: number, 
     fromStart: (depth - from) / length,
     toEnd: (to - depth) / length,
     initial: linear(profile, piece, depth) - reference,
+    shift: piece === 0 ? 0 : 4,
   }
 }
 

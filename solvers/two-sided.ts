@@ -21,6 +21,8 @@ export interface TwoSidedProblem {
   /** The flux of the left side acts for so long, then it is insulated. */
   pulse?: number | undefined
   depths: readonly number[]
+  /** Depths that are differences: reckoned from another face, they keep the rounding of the thickness. */
+  mirrored?: readonly boolean[]
   times: readonly number[]
 }
 
@@ -53,7 +55,10 @@ export class TwoSided {
     const given = [...this.profile.temperatures, temperatureOf(left) ?? 0, temperatureOf(right) ?? 0]
     this.rounding = 3 * EPS * given.reduce((most, T) => Math.max(most, Math.abs(T)), 0)
     const rises = risesOf(this.profile, length)
-    this.places = problem.depths.map((depth) => placeOf(depth, this.profile, length, this.reference))
+    this.places = problem.depths.map((depth, j) => {
+      const place = placeOf(depth, this.profile, length, this.reference)
+      return problem.mirrored?.[j] ? { ...place, shift: 8 } : place
+    })
     const body = {
       left: faceOf(sideBiot(left, length, conductivity)),
       right: faceOf(sideBiot(right, length, conductivity)),

@@ -64,6 +64,8 @@ export interface Place {
   toEnd: number
   /** Initial temperature there, above the reference. */
   initial: number
+  /** What the distances may be off in units of EPS of the thickness, where they are differences; `fromStart` may be exact. */
+  shift: number
 }
 
 /** One time: the Fourier number, and its root, which is computed apart since the first can vanish. */

@@ -1,15 +1,11 @@
 import { type Complex, complex, exponential, minus, modulus, over, plus, scale, times } from './complex.ts'
-import { contourAt } from './contour.ts'
 import { type Estimate, EPS, TINY } from './rounding.ts'
 import { type Face, type Load, meanDecay, type Moment, type Place, type TwoSidedBody } from './two-sided-body.ts'
+import { REAL, sinhShare, timeOneNodes as nodes, timeOneExponent, turned, turnedFlux } from './two-sided-turning.ts'
 import { exponentialLessOne, type Node, type Waves, wavesAt } from './two-sided-waves.ts'
 
-/* The contour for time 1: on it √p·√Fo has one real part, and its imaginary parts are equally spaced. */
-const { nodes, exponent } = contourAt(1)
-const REAL = nodes[0]!.root.re
-const STEP = nodes[1]!.root.im
 /** What one wave is off by in units of EPS: as `invert` counts it, and the turning from node to node. */
-const AMPLIFIED = 64 + 16 * exponent
+const AMPLIFIED = 64 + 16 * timeOneExponent
 /**
  * What the rule itself leaves of a wave that has faded, as a share of what it is off by unfaded: about e^(−40) of the wave,
  * measured at up to 6e-17 and taken as a few roundings.
@@ -165,10 +161,15 @@ export class EarlyValues {
   }
 
   /** e^(−√p·x) and e^(−√p·x′) in size, with what the rounding of the place adds. */
-  private fading({ fromStart, toEnd }: Place): { first: number; second: number } {
-    const near = (REAL * fromStart) / this.m.root
-    const far = (REAL * toEnd) / this.m.root
-    return { first: Math.exp(-near) * (1 + 0.2 * near), second: Math.exp(-far) * (1 + 0.2 * far) }
+  private fading({ fromStart, toEnd, shift }: Place): { first: number; second: number } {
+    const perLength = REAL / this.m.root
+    const faded = (distance: number, shifted: number) => {
+      const x = perLength * distance
+      // A place that is on the spot where a wave starts is there whatever the rounding.
+      const slip = distance === 0 ? 0 : (shifted * perLength) / AMPLIFIED
+      return Math.exp(-x) * (1 + 0.2 * x + slip)
+    }
+    return { first: faded(fromStart, shift), second: faded(toEnd, 4 + shift) }
   }
 
   /** Σ Re(A·e^(−√p·x) + sign·B·e^(−√p·x′)): the exponentials turn by the same angle from node to node. */
@@ -205,54 +206,4 @@ export class EarlyValues {
     }, 0)
     return (piece.slope / 2) * own + this.fluxWave({ fromStart, toEnd } as Place, piece)
   }
-}
-
-/** Σ Re(cₙ·e^(−√pₙ·x)), x in units of √Fo. */
-function turned(c: Float64Array, x: number): number {
-  const size = Math.exp(-REAL * x)
-  if (size === 0) return 0
-  const stepRe = Math.cos(STEP * x)
-  const stepIm = -Math.sin(STEP * x)
-  let re = 1
-  let im = 0
-  let sum = 0
-  for (let n = 0; n < c.length; n += 2) {
-    sum += c[n]! * re - c[n + 1]! * im
-    const next = re * stepRe - im * stepIm
-    im = re * stepIm + im * stepRe
-    re = next
-  }
-  return size * sum
-}
-
-/** Σ Re(√pₙ√Fo·cₙ·e^(−√pₙ·x)). */
-function turnedFlux(c: Float64Array, x: number): number {
-  const size = Math.exp(-REAL * x)
-  if (size === 0) return 0
-  const stepRe = Math.cos(STEP * x)
-  const stepIm = -Math.sin(STEP * x)
-  let re = 1
-  let im = 0
-  let sum = 0
-  for (let n = 0; n < c.length; n += 2) {
-    const waveRe = c[n]! * re - c[n + 1]! * im
-    const waveIm = c[n]! * im + c[n + 1]! * re
-    sum += REAL * waveRe - (n / 2) * STEP * waveIm
-    const next = re * stepRe - im * stepIm
-    im = re * stepIm + im * stepRe
-    re = next
-  }
-  return size * sum
-}
-
-/** sinh x/x. */
-function sinhShare(x: Complex): Complex {
-  const square = times(x, x)
-  let term = complex(1)
-  let sum = complex(1)
-  for (let k = 1; k <= 12; k++) {
-    term = scale(1 / (2 * k * (2 * k + 1)), times(term, square))
-    sum = plus(sum, term)
-  }
-  return sum
 }

@@ -39,6 +39,7 @@ export function problemOf(input: InternalHeatInput): TwoSidedProblem {
     ...input,
     length: folded ? thickness / 2 : thickness,
     depths: folded ? depths.map((depth) => (depth > thickness / 2 ? thickness - depth : depth)) : depths,
+    mirrored: depths.map((depth) => folded && depth > thickness / 2),
     left: film,
     right: exposedFaces === 2 && !folded ? film : { kind: 'insulated' },
     start: input,
