@@ -62,18 +62,24 @@ export class MediumResponse {
   remaining(distance: number): Estimate {
     const { slope, level } = this.face
     if (slope === 0 && distance === 0) return { value: 0, error: 0, method: 'closed-form' }
-    return this.sum(distance, this.nodes, this.contour, 0, ({ root: q, weight, k0, k1, condition }) => {
-      const fallen = minus(k0, times(exponential(scale(-distance, q)), this.placed(q, distance, 'k0', k0)))
-      const left = plus(scale(slope, times(q, k1)), scale(level, distance === 0 ? complex(0) : fallen))
-      return over(over(times(weight, left), condition), times(q, q))
-    })
+    const sum = new Sum()
+    for (const { root: q, weight, k0, k1, condition } of this.nodes) {
+      const front = over(over(weight, condition), times(q, q))
+      const arrived = times(exponential(scale(-distance, q)), this.placed(q, distance, 'k0', k0))
+      // At the face itself the two are one, and leave nothing.
+      const left = distance === 0 ? complex(0) : scale(level, minus(k0, arrived))
+      sum.add(times(front, plus(scale(slope, times(q, k1)), left)))
+      if (distance > 0) sum.move(times(front, scale(level, arrived)), q)
+    }
+    return this.estimate(sum, distance, this.contour)
   }
 
   /** Heat taken up per unit of circumference. */
   heat(): Estimate {
-    return this.sum(0, this.nodes, this.contour, 0, ({ root: q, weight, k1, condition }) =>
-      over(over(times(times(weight, q), k1), condition), times(times(q, q), times(q, q))),
-    )
+    const sum = new Sum()
+    for (const { root: q, weight, k1, condition } of this.nodes)
+      sum.add(over(over(times(times(weight, q), k1), condition), times(times(q, q), times(q, q))))
+    return this.estimate(sum, 0, this.contour)
   }
 
   private node(node: ContourNode): Node {
@@ -97,33 +103,36 @@ export class MediumResponse {
       const { root, k0, k1, condition } = this.nodes[k]!
       return { root, weight: node.weight, k0, k1, condition }
     })
-    return this.sum(distance, nodes, contour, distance, (node) => {
+    const sum = new Sum()
+    for (const node of nodes) {
       const { root: q, weight, condition } = node
-      const placed = this.placed(q, distance, name, node[name])
       const factor = name === 'k0' ? weight : times(weight, q)
-      return over(over(times(factor, placed), condition), times(q, q))
-    })
+      const one = over(over(times(factor, this.placed(q, distance, name, node[name])), condition), times(q, q))
+      sum.add(one)
+      if (distance > 0) sum.move(one, q)
+    }
+    return this.estimate(sum, distance, contour)
   }
 
-  private sum(
-    distance: number,
-    nodes: readonly Node[],
-    { exponent }: Contour,
-    reach: number,
-    of: (node: Node) => Complex,
-  ) {
-    let value = 0
-    let size = 0
-    let moved = 0
-    for (const node of nodes) {
-      const one = of(node)
-      const share = modulus(one)
-      value += one.re
-      size += share
-      moved += share * modulus(node.root)
-    }
-    const radii = distance === 0 ? 0 : 2 * (this.radius + distance) + reach
-    const error = EPS * ((OWN_ROUNDING + 24 + 16 * exponent) * size + radii * moved) + TINY
-    return { value, error, method: 'contour' } as const
+  /** Beside the roundings of the terms, those of both radii move what has come through the distance between them. */
+  private estimate({ value, size, moved }: Sum, distance: number, { exponent }: Contour): Estimate {
+    const error = EPS * ((OWN_ROUNDING + 24 + 16 * exponent) * size + (2 * this.radius + 3 * distance) * moved)
+    return { value, error: error + TINY, method: 'contour' }
+  }
+}
+
+/** A sum over the nodes of a contour, with the sizes that its error is told by. */
+class Sum {
+  value = 0
+  size = 0
+  moved = 0
+
+  add(one: Complex): void {
+    this.value += one.re
+    this.size += modulus(one)
+  }
+
+  move(one: Complex, q: Complex): void {
+    this.moved += modulus(one) * modulus(q)
   }
 }
