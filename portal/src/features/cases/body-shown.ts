@@ -78,9 +78,10 @@ export function shownOf(c: Case, body: Body): Shown {
 function driversOf({ fields }: Case, body: Body): string[] {
   const of = (list: Case['fields'][number]['fields'] & object, given: Body) =>
     driving.filter((name) => name in given).flatMap((name) => list.find((field) => field.name === name)?.symbol ?? [])
-  const inside = fields.flatMap(({ name, kinds }) => {
+  const inside = fields.flatMap(({ name, kinds = [] }) => {
     const given = (body[name] ?? {}) as Body
-    return of(kinds?.find(({ kind }) => kind === given['kind'])?.fields ?? [], given)
+    const own = kinds.find(({ kind }) => kind === given['kind'])
+    return own ? of(own.fields, given) : []
   })
   return [...new Set([...of(fields, body), ...inside])]
 }

@@ -35,7 +35,11 @@ export function CurveBand({ description: c, solved: { body, answer }, stale }: P
       </div>
       <StaleFrame stale={stale}>
         <QueryView query={query} what="Solving for the curve.">
-          {(drawing) => <Shown drawing={drawing} view={view} body={c.sketch.body} />}
+          {(drawing) => (
+            <div data-drawn={drawing.kind}>
+              <Shown drawing={drawing} view={view} body={c.sketch.body} />
+            </div>
+          )}
         </QueryView>
       </StaleFrame>
     </Band>

@@ -60,7 +60,7 @@ interface KindsProps {
 function Kinds({ kinds, optional, error, register }: KindsProps) {
   const options = [...(optional ? [{ kind: '', title: 'Not given' }] : []), ...kinds]
   return (
-    <div className="seg my-2" role="radiogroup" aria-label="Kind">
+    <div className="seg my-2" role="radiogroup" aria-label="Kind" data-choice>
       {options.map((one) => (
         <label key={one.kind}>
           <input

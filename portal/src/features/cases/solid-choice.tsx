@@ -17,7 +17,7 @@ export function SolidChoice({ fields, example, register }: Props) {
   const given = ways.flat().some((name) => name in example)
   const legend = ways.flat().includes('material') ? 'Solid by' : 'Heat capacity by'
   return (
-    <fieldset className="field">
+    <fieldset className="field" data-choice>
       <legend className="sr-only">{legend}</legend>
       <span aria-hidden="true" />
       <span className="label" aria-hidden="true">
