@@ -114,9 +114,9 @@ export interface CaseDescription<Shape_ extends z.ZodRawShape, R extends Resolve
   echo?(input: R): Record<string, unknown>
   /**
    * The temperature that the body ends at there, or null where it has none: it grows without end, or goes on with a
-   * cycle. Left out, it is the steady temperature if that is an output, else the field that drives the body.
+   * cycle. Left out or undefined, it is the steady temperature if that is an output, else the field that drives the body.
    */
-  end?(input: R, place: number | Point | undefined): number | null
+  end?(input: R, place: number | Point | undefined): number | null | undefined
   numbers(input: R): Numbers
   checks(input: R): Check[]
   warnings(input: R): Warning[]

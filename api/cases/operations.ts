@@ -1,7 +1,7 @@
 import type { Case } from '../../solvers/case.ts'
 import { cases } from '../../solvers/cases/index.ts'
 import { withOwnMaterials } from '../../solvers/materials/own-material.ts'
-import { type Call, type CaseOperation, operationsOf } from '../../solvers/operations/index.ts'
+import { type Call, type CaseOperation, caseOperations, operationsOf } from '../../solvers/operations/index.ts'
 import { caseOperationPath } from '../catalogue/describe.ts'
 import { parseJson } from '../http/json.ts'
 import { type Body, type OwnMaterials, operation } from '../operation.ts'
@@ -39,7 +39,7 @@ function withKey(c: Case, o: CaseOperation) {
     path: caseOperationPath(c.id, o.id),
     tag: 'Cases',
     summary: `${c.title}: ${o.title.toLowerCase()}`,
-    description: `${o.summary}\n\n${c.summary}\n\n${c.notes}\n\nPrice: ${o.price(c)}.`,
+    description: `${o.summary}\n\n${c.summary}${notesOf(c, o)}\n\nPrice: ${o.price(c)}.`,
     access: 'key',
     metered: !free,
     body: bodyOf(c, o, BODY_LIMIT),
@@ -88,6 +88,9 @@ function withoutKey(c: Case, o: CaseOperation) {
     },
   })
 }
+
+/** What the case is for and where it stops is told once, where it is solved. */
+const notesOf = (c: Case, o: CaseOperation) => (o === caseOperations[0] ? `\n\n${c.notes}` : '')
 
 const each = (make: typeof withKey) => cases.flatMap((c) => operationsOf(c).map((o) => make(c, o)))
 

@@ -96,7 +96,9 @@ function answer(c: Case, q: Question, asked: Asked, points: number, compact: boo
   }
   const absolute = crossings.reduce((most, { bound }) => Math.max(most, bound), 0)
   const bound = { [all]: { absolute, relative: 0 } }
-  const resolved = c.resolve({ ...q.asked, [axis]: places, times: [time], outputs: ['temperature'] })
+  // Without a place that is answered, numbers and checks are told of the whole body.
+  const found = { ...q.asked, [axis]: places, times: [time], outputs: ['temperature'] }
+  const resolved = deepest ? c.resolve(found) : q.resolved
   const echoed = echoedOf(c, q, { time, target })
   const warnings = warningsOf(c, resolved, echoed)
   if (compact) return { result, accuracy: { bound }, warnings: warnings.map((w) => w.code) }
@@ -128,7 +130,7 @@ function outcomeOf(c: Case, q: Question, asked: Asked, { values }: Scan): 'every
         .values
   const before = typeof start === 'number' ? start : (start as number[][])[0]![0]!
   const now = values[0]!
-  if (before === target) return values.every((value) => value === target) ? 'everywhere' : 'nowhere'
+  if (before === target) return 'everywhere'
   return (now - target) * (before - target) > 0 ? 'nowhere' : 'everywhere'
 }
 

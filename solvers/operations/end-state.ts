@@ -47,7 +47,8 @@ const endNames = ['steadyTemperature', 'contactTemperature', 'equilibriumTempera
 const endName = (c: Case) => endNames.find((name) => Object.hasOwn(c.outputs, name)) as OutputName | undefined
 
 function temperatureAt(c: Case, q: Question, j: number | undefined): number | null {
-  if (c.end) return c.end(q.resolved, j === undefined ? undefined : q.places[j])
+  const told = c.end?.(q.resolved, j === undefined ? undefined : q.places[j])
+  if (told !== undefined) return told
   const output = endName(c)
   if (output) return steadyAt(c, q.asked, output, j)
   const name = c.drive && (isIdle(q.asked) ? 'initialTemperature' : c.drive)
@@ -69,7 +70,8 @@ function steadyAt(c: Case, asked: Asked, output: OutputName, j: number | undefin
 /** Where each place has an end of its own, the mean's is asked of the body itself, after the longest time. */
 function meanOf(c: Case, q: Question): number | null {
   const output = endName(c)
-  if (c.end || !output || answeredShape(c, output) === 'single') return temperatureAt(c, q, undefined)
+  if (c.end?.(q.resolved, undefined) !== undefined || !output || answeredShape(c, output) === 'single')
+    return temperatureAt(c, q, undefined)
   const axis = c.places === 'radii' ? 'radii' : 'depths'
   const [first] = extentOf(c, q.asked, axis)
   if (steadyAt(c, { ...q.asked, [axis]: [first] }, output, 0) === null) return null

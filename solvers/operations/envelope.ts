@@ -16,16 +16,29 @@ export const detailField = z.enum(['full', 'compact']).optional().meta({
   'x-accepted': 'full or compact',
 })
 
-export const boundSchema = z.strictObject({ absolute: z.number(), relative: z.number() })
+export const boundSchema = z.strictObject({ absolute: z.number(), relative: z.number() }).meta({ id: 'Bound' })
 
-const numbersSchema = z.strictObject(
-  Object.fromEntries(
-    Object.entries(numberCatalogue).map(([name, { unit, series, text }]) => [
-      name,
-      (series ? z.array(z.number()) : z.number()).optional().meta({ description: `${text} Unit ${unit}.` }),
-    ]),
-  ),
-)
+/* What is the same in every answer has a name, so that the documents hold it once. */
+
+const numbersSchema = z
+  .strictObject(
+    Object.fromEntries(
+      Object.entries(numberCatalogue).map(([name, { unit, series, text }]) => [
+        name,
+        (series ? z.array(z.number()) : z.number()).optional().meta({ description: `${text} Unit ${unit}.` }),
+      ]),
+    ),
+  )
+  .meta({ id: 'AnswerNumbers' })
+const checkSchema = z
+  .strictObject({ id: z.string(), holds: z.boolean(), value: z.number(), limit: z.number(), text: z.string() })
+  .meta({ id: 'AnswerCheck' })
+const warningSchema = z
+  .strictObject({ code: z.string(), text: z.string(), value: z.number() })
+  .meta({ id: 'AnswerWarning' })
+const cautionSchema = z
+  .strictObject({ id: z.string(), version: z.number(), text: z.string() })
+  .meta({ id: 'AnswerCaution' })
 
 /** What stands before the result of an answer, and after it. */
 export const headOf = (c: Case, operation: string) => ({
@@ -48,11 +61,9 @@ export const accuracyScope = {
 
 export const tail = {
   numbers: numbersSchema,
-  checks: z.array(
-    z.strictObject({ id: z.string(), holds: z.boolean(), value: z.number(), limit: z.number(), text: z.string() }),
-  ),
-  warnings: z.array(z.strictObject({ code: z.string(), text: z.string(), value: z.number() })),
-  cautions: z.array(z.strictObject({ id: z.string(), version: z.number(), text: z.string() })),
+  checks: z.array(checkSchema),
+  warnings: z.array(warningSchema),
+  cautions: z.array(cautionSchema),
   sources: z.array(z.string()),
 }
 

@@ -142,7 +142,8 @@ function answer(c: Case, q: Question, curve: Curve, asked: Target, points: numbe
   }
   const absolute = crossings.reduce((most, { bound }) => Math.max(most, bound), 0)
   const bound = { crossings: { absolute, relative: 0 } }
-  const resolved = c.resolve({ ...q.asked, times, outputs: [q.output] })
+  // Without a time that is answered, numbers and checks are told at the last that was looked at.
+  const resolved = times.length > 0 ? c.resolve({ ...q.asked, times, outputs: [q.output] }) : q.resolved
   const own = { quantity: q.output, target, sense, ...(until === undefined ? {} : { until }) }
   const echoed = echoedOf(c, q, own)
   const warnings = warningsOf(c, resolved, echoed)

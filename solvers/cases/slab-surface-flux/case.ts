@@ -144,6 +144,10 @@ export default defineCase<typeof fields, SurfaceFluxResolved>({
     return resolved
   },
   solve,
+  end({ back, pulseDuration, initialTemperature, imposedHeatFlux, volumetricHeatCapacity, thickness }) {
+    if (back.kind !== 'insulated' || pulseDuration === undefined) return undefined
+    return initialTemperature + (imposedHeatFlux * pulseDuration) / (volumetricHeatCapacity * thickness)
+  },
   numbers(input) {
     const problem = problemOf(input)
     // After a pulse only the back goes on.

@@ -130,6 +130,25 @@ test('a pulse is passed on the way up and on the way down, and its kink is seen'
   expect(reach('semi-infinite-surface-flux', { ...pulse, depth: 0, target: peak + 1e-6 }).result.outcome).toBe('never')
 })
 
+test('a flash ends where its heat is spread evenly, which half of it is reached on the way to', () => {
+  const [a, thickness] = [1e-5, 0.003]
+  const body = { conductivity: 30, diffusivity: a, thickness, initialTemperature: 20, back: { kind: 'insulated' } }
+  const flash = { imposedHeatFlux: 1e10, pulseDuration: 1e-6 }
+  const end = 20 + 1e4 / ((30 / a) * thickness)
+  const asked = { ...body, ...flash, depth: thickness }
+  const { result } = reach('slab-surface-flux', { ...asked, target: (20 + end) / 2 })
+  expect(result.asymptote).toBeCloseTo(end, 12)
+  // Half of the rise of the back: a t = 0.1388 L2, to as much as the pulse is not one instant.
+  expect((a * result.crossings[0]!) / thickness ** 2).toBeCloseTo(0.1388, 4)
+  const [mean] = refusalOf('time-to-reach', 'slab-surface-flux', {
+    ...body,
+    ...flash,
+    quantity: 'meanTemperature',
+    target: end,
+  })
+  expect(mean).toMatchObject({ code: 'target-at-asymptote' })
+})
+
 test('a face that jumps is there at once, without a rate', () => {
   const body = {
     conductivity: 1,
