@@ -118,9 +118,9 @@ describe('sources', () => {
     expect(peak(instant) / largest).toBeCloseTo(1, 13)
     expect(peak(instant * 1.01)).toBeLessThan(peak(instant))
     expect(peak(instant * 0.99)).toBeLessThan(peak(instant))
-    const radii = Array.from({ length: 2000 }, (_, i) => (i + 0.5) * 0.001)
+    const radii = Array.from({ length: 2000 }, (_, i) => (i + 0.5) * 0.002)
     const rises = (ask('point-source', { ...dose, radii, times: [1e5] }).result['temperature'] as number[][])[0]!
-    const stored = rises.reduce((sum, T, i) => sum + 2.5e6 * T * 4 * Math.PI * radii[i]! ** 2 * 0.001, 0)
+    const stored = rises.reduce((sum, T, i) => sum + 2.5e6 * T * 4 * Math.PI * radii[i]! ** 2 * 0.002, 0)
     expect(stored / 1e5).toBeCloseTo(1, 8)
   })
   it('a power is doses one after the other, and a line is points side by side', () => {
