@@ -74,6 +74,8 @@ describe('what a drive leaves behind after it has ended', () => {
         label,
       ).toBeLessThan(1)
       if (eta > 0) expect(excess(stepAfter(at), flux.flux), label).toBeLessThan(1)
+      const planted = rampAfter(at, 1)
+      expect(excess({ ...planted, value: planted.value * (1 + 1e-10) }, ramp.temperature), label).toBeGreaterThan(1)
       for (const found of [rampAfter(at, 1), rootAfter(at, 1)]) expect(found.error / found.value).toBeLessThan(1e-11)
     }
   })
