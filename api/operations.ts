@@ -3,7 +3,7 @@ import { caseOperationList, tryOperations } from './cases/operations.ts'
 import { catalogueOperations } from './catalogue/operations.ts'
 import { healthOperations } from './health/operations.ts'
 import { keyOperations } from './keys/operations.ts'
-import { materialOperations } from './materials/operations.ts'
+import { materialOperations, memberMaterialOperations } from './materials/operations.ts'
 import type { Operation } from './operation.ts'
 import { keyRequest, memberRequestOperations } from './requests/operations.ts'
 import { supportOperations } from './support/operations.ts'
@@ -19,6 +19,7 @@ export const operations: readonly Operation[] = [
   ...healthOperations,
   ...accountOperations,
   ...keyOperations,
+  ...memberMaterialOperations,
   memberUsage,
   ...memberRequestOperations,
   ...tryOperations,

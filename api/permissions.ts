@@ -13,6 +13,8 @@ export const permissions = {
   'keys:read': { owner: 'all', integrator: 'own' },
   'keys:create': { owner: 'all', integrator: 'own' },
   'keys:revoke': { owner: 'all', integrator: 'own' },
+  'materials:read': { owner: 'all', integrator: 'all' },
+  'materials:write': { owner: 'all', integrator: 'own' },
   'usage:read': { owner: 'all', integrator: 'all', reader: 'all' },
   'requests:read': { owner: 'all', integrator: 'all', reader: 'all' },
 } as const satisfies Record<string, Partial<Record<Role, Reach>>>

@@ -230,7 +230,7 @@ export const materials = pgTable(
     state: text().notNull(),
     source: text().notNull(),
     confidence: text({ enum: ['high', 'medium', 'low'] }).notNull(),
-    /** The key or person that made it. */
+    /** The person who made it, or the key that did. */
     createdBy: text().notNull(),
     createdAt: createdAt(),
     updatedAt: instant().notNull().defaultNow(),

@@ -70,7 +70,7 @@ moisture is not stated (\`moisture-state-unspecified\`), and where a temperature
 Every figure is generic, none is of a product, and all are recalled from the tables named: compare them with the current edition, or keep your own.
 \`state\` says what the figures hold for: \`design\` is a design table at the moisture usual in use.
 
-An account keeps materials of its own under \`/v1/materials\`: they are seen by its keys alone. A change states by \`If-Match\` which version it is of.
+An account keeps materials of its own under \`/v1/materials\`: they are seen by its members and keys alone. A change states by \`If-Match\` which version it is of.
 \`npm run solve\` knows the catalogue only. \`POST /v1/materials/import\` takes CSV with the columns \`name\`, \`conductivity\`, \`density\`, \`specificHeat\`,
 \`state\`, \`source\`, \`confidence\` and, where wanted, \`group\`, in any order and in SI, and reports on every row.
 

@@ -12,7 +12,11 @@ interface Rule {
 
 /** Who may know whom. The first rule that fits a file counts. */
 const rules: readonly Rule[] = [
-  { files: /^solvers\//, knows: /^solvers\//, packages: /^(zod|@stdlib\/.+|@lhncbc\/ucum-lhc|node:crypto)$/ },
+  {
+    files: /^solvers\//,
+    knows: /^solvers\//,
+    packages: /^(zod|@stdlib\/.+|@lhncbc\/ucum-lhc|d3-(scale|shape)|node:crypto)$/,
+  },
   { files: /^drizzle\//, knows: /^drizzle\//, packages: /^drizzle-orm/ },
   { files: /^api\//, knows: /^(api|solvers|drizzle)\//, packages: /^(?!react|vite|@tanstack)/ },
   { files: /^openapi\//, knows: /^(openapi|api)\//, packages: /^(?!pg$|drizzle-|node:(net|http|https|tls|dns)$)/ },

@@ -5,7 +5,7 @@ import { type Permission, type StaffPermission, roles, staffRoles } from '../../
 import { Client } from './harness/client.ts'
 import { makeKey, query } from './harness/people.ts'
 import { type TestService, startTestService } from './harness/service.ts'
-import { type World, createWorld, pathIn } from './harness/world.ts'
+import { type World, createWorld, exampleBody, exampleHeaders, pathIn } from './harness/world.ts'
 
 /* What the roles promise, stated apart from the table that the service reads. */
 const promised: Record<Permission | StaffPermission, string> = {
@@ -13,6 +13,8 @@ const promised: Record<Permission | StaffPermission, string> = {
   'keys:read': 'owner integrator',
   'keys:create': 'owner integrator',
   'keys:revoke': 'owner integrator',
+  'materials:read': 'owner integrator',
+  'materials:write': 'owner integrator',
   'usage:read': 'owner integrator reader',
   'requests:read': 'owner integrator reader',
   'staff-session:read': 'support supervisor',
@@ -33,7 +35,11 @@ const everyone = [...roles, ...staffRoles, 'nobody'] as const
 const guarded = operations.filter((o) => o.access === 'session' || o.access === 'staff')
 
 const ask = (client: Client, o: Operation, ids: Record<string, string> = {}) =>
-  client.call(pathIn(world, o, ids), { method: o.method.toUpperCase(), body: o.body ? o.example?.body : undefined })
+  client.call(pathIn(world, o, ids), {
+    method: o.method.toUpperCase(),
+    body: exampleBody(o),
+    headers: exampleHeaders(o),
+  })
 
 function expected(o: Operation, who: (typeof everyone)[number]): number {
   const signedIn = o.access === 'session' ? roles : staffRoles
@@ -45,7 +51,10 @@ describe.each(guarded.map((o) => [o.id, o] as const))('%s', (_, o) => {
   test.each(everyone)('as %s', async (who) => {
     /* A key of the caller's own, so that only the role decides. */
     const maker = who === 'integrator' ? world.members.integrator : world.members.owner
-    const ids = o.path.includes('{keyId}') ? { keyId: (await makeKey(maker)).id } : {}
+    const ids: Record<string, string> = {
+      ...(o.path.includes('{keyId}') ? { keyId: (await makeKey(maker)).id } : {}),
+      ...(o.path.includes('{materialId}') ? { materialId: await world.keepMaterial(maker) } : {}),
+    }
     const answer = await ask(clients()[who], o, ids)
     expect(answer.status, answer.text).toBe(expected(o, who))
   })
@@ -55,8 +64,8 @@ describe.each(guarded.map((o) => [o.id, o] as const))('%s', (_, o) => {
     const method = o.method.toUpperCase()
     const answer = await world.nobody.call(pathIn(world, o), {
       method,
-      headers,
-      body: o.body ? o.example?.body : undefined,
+      headers: { ...exampleHeaders(o), ...headers },
+      body: exampleBody(o),
     })
     expect(answer.status).toBe(401)
     const other = new Client(service.url)
@@ -110,6 +119,24 @@ test('an integrator lists and revokes own keys only, the owner all', async () =>
   expect(listed).not.toContain(owners.id)
   expect((await world.members.integrator.post(`/portal/v1/keys/${owners.id}/revoke`)).status).toBe(404)
   expect((await world.members.owner.post(`/portal/v1/keys/${own.id}/revoke`)).json.key.revokedAt).not.toBeNull()
+})
+
+test('an integrator reads all materials and changes own ones only, the owner all', async () => {
+  const { owner, integrator } = world.members
+  const [owners, own] = [await world.keepMaterial(owner), await world.keepMaterial(integrator)]
+  const body = exampleBody(operations.find(({ id }) => id === 'replaceAccountMaterial') as Operation)
+  const change = (client: Client, id: string, method: string) =>
+    client.call(`/portal/v1/materials/${id}`, {
+      method,
+      headers: { 'if-match': '*' },
+      body: method === 'PUT' ? body : undefined,
+    })
+  expect((await change(integrator, owners, 'GET')).status).toBe(200)
+  for (const method of ['PUT', 'DELETE']) expect((await change(integrator, owners, method)).status).toBe(404)
+  expect((await change(integrator, own, 'PUT')).status).toBe(200)
+  expect((await change(owner, own, 'DELETE')).status).toBe(204)
+  const done = await query(service.databaseUrl, 'SELECT action FROM audit WHERE subject = $1 ORDER BY at, id', [own])
+  expect(done).toEqual(['kept', 'replaced', 'deleted'].map((action) => ({ action: `material ${action}` })))
 })
 
 test('a role that changes counts at the next call', async () => {

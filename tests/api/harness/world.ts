@@ -17,8 +17,10 @@ export interface World {
   /** A key that may be revoked. */
   spareKey: { id: string; secret: string }
   strangersKey: { id: string; secret: string }
-  /** Materials of the account: one to be changed, one to be deleted. */
-  materials: Partial<Record<Operation['method'], string>>
+  /** Keeps a material of the account, made by a member, and gives its id. */
+  keepMaterial(maker: Client): Promise<string>
+  /** Materials of the account, by the operation that reads, changes or deletes each. */
+  materials: Record<string, string>
 }
 
 const exampleOf = (id: string) =>
@@ -51,13 +53,15 @@ export async function createWorld({ url, databaseUrl, service }: TestService): P
     staff[role] = await signIn(url, '/support/v1/sign-in', { mail: address, password: member.password })
   }
   const { client: stranger } = await signUp(url)
-  const keepMaterial = async () => {
-    const { path, example } = operations.find((o) => o.id === 'createMaterial') as Operation
-    const made = await new Client(url).post(path, example?.body, { authorization: `Bearer ${key.secret}` })
+  const keepMaterial = async (maker: Client) => {
+    const { path, example } = operations.find((o) => o.id === 'createAccountMaterial') as Operation
+    const made = await maker.post(path, example?.body)
     if (made.status !== 201) throw new Error(`keeping a material answered ${made.status}: ${made.text}`)
     return made.json.id as string
   }
-  const materials = { put: await keepMaterial(), delete: await keepMaterial() }
+  const materials: Record<string, string> = {}
+  for (const o of operations.filter(({ path }) => path.endsWith('/{materialId}')))
+    materials[o.id] = await keepMaterial(owner)
   const solve = operations.find((o) => o.metered) as Operation
   const answer = await new Client(url).post(solve.path, solve.example?.body, { authorization: `Bearer ${key.secret}` })
   if (answer.status !== 200) throw new Error(`the first call answered ${answer.status}: ${answer.text}; ${mail}`)
@@ -73,6 +77,7 @@ export async function createWorld({ url, databaseUrl, service }: TestService): P
     requestId,
     spareKey: await makeKey(owner),
     strangersKey: await makeKey(stranger),
+    keepMaterial,
     materials,
   }
 }
@@ -90,7 +95,7 @@ export function pathIn(world: World, o: Operation, ids: Record<string, string> =
     ...o.example?.params,
     requestId: world.requestId,
     keyId: world.spareKey.id,
-    ...(world.materials[o.method] ? { materialId: world.materials[o.method] } : {}),
+    ...(world.materials[o.id] ? { materialId: world.materials[o.id] } : {}),
     ...ids,
   }
   return o.path.replace(/\{(\w+)\}/g, (_, name: string) => known[name] ?? `no-${name}`)
@@ -98,11 +103,8 @@ export function pathIn(world: World, o: Operation, ids: Record<string, string> =
 
 /** Who may call an operation, as the client and headers with which it is called. */
 export function callerOf(world: World, o: Operation): { client: Client; headers: Record<string, string> } {
-  const headers = {
-    ...(o.access === 'key' ? { authorization: `Bearer ${world.key.secret}` } : {}),
-    ...(o.conditional ? { 'if-match': '*' } : {}),
-    ...(o.upload ? { 'content-type': o.upload.kind } : {}),
-  }
+  const key = o.access === 'key' ? { authorization: `Bearer ${world.key.secret}` } : {}
+  const headers = { ...key, ...exampleHeaders(o) }
   if (o.access === 'key') return { client: world.nobody, headers }
   if (o.access === 'session') return { client: world.members.owner, headers }
   if (o.access === 'staff') return { client: world.staff.support, headers }
@@ -112,4 +114,9 @@ export function callerOf(world: World, o: Operation): { client: Client; headers:
 /** The body of an operation's example. */
 export function exampleBody(o: Operation): unknown {
   return o.body ? o.example?.body : o.upload?.example
+}
+
+/** What goes with it: the version of what is changed, and the kind of a body that is no JSON. */
+export function exampleHeaders(o: Operation): Record<string, string> {
+  return { ...(o.conditional ? { 'if-match': '*' } : {}), ...(o.upload ? { 'content-type': o.upload.kind } : {}) }
 }
