@@ -104,7 +104,7 @@ export function isSound(
     if (depths[j]! < depths[j - 1]!) {
       const detail = `This depth is ${depths[j]} m, the one before it ${depths[j - 1]} m.`
       refuse({ pointer: at(j), code: 'out-of-range', detail, accepted: 'depths that do not fall' })
-    } else if (j > 1 && depths[j] === depths[j - 2]) {
+    } else if (j > 1 && depths[j] === depths[j - 1] && depths[j] === depths[j - 2]) {
       const detail = `The depth ${depths[j]} m stands three times.`
       refuse({ pointer: at(j), code: 'conflicting-fields', detail, accepted: 'a depth once, or twice for a jump' })
     } else if (depths[j] !== depths[j - 1] && depths[j]! - depths[j - 1]! < LEAST_STEP * thickness) {

@@ -2,6 +2,7 @@ import fc from 'fast-check'
 import { z } from 'zod'
 import type { Case } from '../../solvers/case.ts'
 import { solve } from '../../solvers/operations/solve.ts'
+import { uniform } from './draw.ts'
 
 /*
  * Inputs over the whole admissible ranges, made from the description of a case alone: its example and variants say which
@@ -25,10 +26,9 @@ interface Field {
 function within(field: Field): fc.Arbitrary<number> {
   const from = field['x-zero-or'] ?? field.minimum!
   const to = field.maximum!
-  const unit = fc.double({ min: 0, max: 1, noNaN: true })
   if (from < 0) return twoSided(from, to)
   const low = Math.log(Math.max(from, 1e-12))
-  const inside = unit.map((u) => Math.min(to, Math.max(from, Math.exp(low + (Math.log(to) - low) * u))))
+  const inside = uniform.map((u) => Math.min(to, Math.max(from, Math.exp(low + (Math.log(to) - low) * u))))
   const ends = from === 0 || field['x-zero-or'] !== undefined ? [0, to] : [from, to]
   const tiny = from === 0 ? [5e-324, 1e-300, 1e-200] : []
   return fc.oneof({ weight: 15, arbitrary: inside }, { weight: 1, arbitrary: fc.constantFrom(...ends, ...tiny) })
@@ -36,9 +36,8 @@ function within(field: Field): fc.Arbitrary<number> {
 
 /** Both signs: by decades where the range spans many, else evenly. */
 function twoSided(from: number, to: number): fc.Arbitrary<number> {
-  const unit = fc.double({ min: 0, max: 1, noNaN: true })
-  const even = unit.map((u) => from + u * (to - from))
-  const decades = unit.map((u) => {
+  const even = uniform.map((u) => from + u * (to - from))
+  const decades = uniform.map((u) => {
     const v = 2 * u - 1
     return Math.sign(v) * Math.min(v < 0 ? -from : to, 1e-6 * (to / 1e-6) ** Math.abs(v))
   })
@@ -50,7 +49,7 @@ function twoSided(from: number, to: number): fc.Arbitrary<number> {
 
 const someOf = <T>(value: fc.Arbitrary<T>) => fc.array(value, { minLength: 1, maxLength: 3 })
 /** Places as shares of the body, where it ends. */
-const share = fc.oneof(fc.double({ min: 0, max: 1, noNaN: true }), fc.constantFrom(0, 0.5, 1))
+const share = fc.oneof(uniform, fc.constantFrom(0, 0.5, 1))
 
 const placeNames = ['depths', 'radii']
 
@@ -125,6 +124,18 @@ function profiled(body: Input): Input {
   const share = Math.round(64 * Math.min(1, Math.max(0, (Math.log10(depths[0]! + 1e-12) + 12) / 17))) / 64
   const between = Array.from({ length: values.length - 2 }, () => share * end)
   return { ...body, initialProfile: { depths: [0, ...between, end], temperatures: values } }
+}
+
+/** A profile along the whole body: what was drawn are shares of the thickness, put in order, with both ends. */
+function withProfile(body: Input): Input {
+  const profile = body['initialProfile'] as { depths: number[]; temperatures: number[] } | undefined
+  const thickness = body['thickness']
+  if (!profile || typeof thickness !== 'number') return body
+  const shares = profile.depths.map((depth) => Math.abs(Math.sin(depth + Math.log(depth + 1)))).sort((a, b) => a - b)
+  const inside = shares.filter((one, i) => one > 1e-6 && one < 1 - 1e-6 && (i === 0 || one - shares[i - 1]! > 1e-6))
+  const depths = [0, ...inside.map((one) => one * thickness), thickness]
+  const temperatures = depths.map((_, i) => profile.temperatures[i % profile.temperatures.length]!)
+  return { ...body, initialProfile: { depths, temperatures } }
 }
 
 export function admissible(c: Case): fc.Arbitrary<Input> {
