@@ -10,7 +10,9 @@ import { randomRows } from './random-rows.ts'
 
 /* Bounds against exact answers: never below the true error, never far above it, never above ten times the promise. */
 
-const count = proof ? 10_000 : 200
+const count = proof ? 10_000 : 40
+/** What is so small may be answered as zero, times the unit that it has. */
+const NOTHING = 1e-270
 
 describe.each(Object.entries(randomRows))('bounds of %s', (_id, arbitrary) => {
   it('hold, are no more than ten times the promise, and follow the true error', { timeout: 3_600_000 }, () => {
@@ -26,7 +28,7 @@ describe.each(Object.entries(randomRows))('bounds of %s', (_id, arbitrary) => {
         const error = Number(new D(value).minus(row.exact[name]!).abs())
         if (!(error <= bound)) failures.push(`${name} off ${error}, bound ${bound}: ${row.label}`)
         const promised = contract(name, value, condition(row.caseId, row.body, name), row)
-        if (!(bound <= 10 * promised))
+        if (!(bound <= 10 * promised + NOTHING))
           failures.push(`${name} bound ${bound}, ten times promised ${10 * promised}: ${row.label}`)
         if (error > 0) ratios.push(bound / error)
       }

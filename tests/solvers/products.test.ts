@@ -4,12 +4,11 @@ import { product, union } from '../../solvers/math/product.ts'
 import { EPS, type Estimate } from '../../solvers/math/rounding.ts'
 import { ask, askSingle, solveDirect } from './ask.ts'
 import { proof, seed } from './counts.ts'
+import { decades, uniform } from './draw.ts'
 
 /* A product of one-dimensional answers, held to those answers, to the equation it solves and to its limits. */
 
 const runs = { numRuns: proof ? 500 : 40, seed }
-const uniform = fc.noBias(fc.maxSafeNat()).map((n) => n / Number.MAX_SAFE_INTEGER)
-const decades = (from: number, to: number) => uniform.map((u) => from * (to / from) ** u)
 
 const solid = { conductivity: 1.3, density: 2000, specificHeat: 950, initialTemperature: 15 }
 const film = { filmCoefficient: 20, ambientTemperature: -7 }

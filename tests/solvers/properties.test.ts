@@ -2,13 +2,11 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { ask, askSingle, single } from './ask.ts'
 import { proof, seed } from './counts.ts'
+import { decades, uniform as share } from './draw.ts'
 
 /* Relations that hold whatever the numbers are. They need no source. */
 
 const runs = { numRuns: proof ? 2000 : 150, seed }
-const decades = (from: number, to: number) =>
-  fc.noBias(fc.double({ min: Math.log10(from), max: Math.log10(to), noNaN: true })).map((e) => 10 ** e)
-const share = fc.double({ min: 0, max: 1, noNaN: true })
 const wall = { conductivity: 1.3, density: 2000, specificHeat: 950, initialTemperature: 15, ambientTemperature: -7 }
 const value = (id: string, body: object, output = 'temperature') =>
   askSingle(id, body as Record<string, unknown>, output).value

@@ -1,5 +1,6 @@
 import fc from 'fast-check'
 import type { OutputName } from '../../solvers/outputs.ts'
+import { exactDecades as decades, exactTemperature as temperature, uniform } from './draw.ts'
 import { exactCylinder, type ExactRound, exactSphere } from './exact/round.ts'
 import { D, PI } from './exact/functions.ts'
 
@@ -17,19 +18,6 @@ export interface RadialRow {
   surface: number
   label: string
 }
-
-/* Not fc.double, which draws evenly among the doubles there are, most of which are next to nothing. */
-const uniform = fc.noBias(fc.maxSafeNat()).map((n) => n / Number.MAX_SAFE_INTEGER)
-const decades = (from: number, to: number) =>
-  fc.tuple(uniform, uniform).map(([u, v]) =>
-    new D(from)
-      .mul(new D(10).pow(Math.log10(to / from) * u))
-      .mul(new D(1).plus(new D(v).mul('1e-9')))
-      .toSignificantDigits(20),
-  )
-const temperature = fc
-  .tuple(uniform, uniform)
-  .map(([u, v]) => new D(u).mul(100).minus(50).plus(new D(v).mul('1e-16')).toSignificantDigits(20))
 
 const number = (d: D) => d.toNumber()
 

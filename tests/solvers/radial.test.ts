@@ -12,14 +12,12 @@ import { SphereImages } from '../../solvers/math/sphere-images.ts'
 import type { OutputName } from '../../solvers/outputs.ts'
 import { ask, askSingle, condition, contract, single, solveDirect } from './ask.ts'
 import { proof, seed } from './counts.ts'
+import { decades, uniform } from './draw.ts'
 import { D } from './exact/functions.ts'
 import { exactJ } from './exact/round.ts'
 import { radialRows } from './radial-rows.ts'
 
 const runs = { numRuns: proof ? 1000 : 60, seed }
-/* Not fc.double, which draws evenly among the doubles there are, most of which are next to nothing. */
-const uniform = fc.noBias(fc.maxSafeNat()).map((n) => n / Number.MAX_SAFE_INTEGER)
-const decades = (from: number, to: number) => uniform.map((u) => from * (to / from) ** u)
 const near = (a: Estimate, b: Estimate) => expect(Math.abs(a.value - b.value)).toBeLessThanOrEqual(a.error + b.error)
 
 const places = (delta: number) => ({

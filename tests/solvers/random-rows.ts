@@ -1,5 +1,6 @@
 import fc from 'fast-check'
 import type { OutputName } from '../../solvers/outputs.ts'
+import { uniform } from './draw.ts'
 import { D, erf, erfc, PI } from './exact/functions.ts'
 import { exactEnergy, exactHalfSpace, exactSlab } from './exact/film.ts'
 import { exactFixedSlab } from './exact/fixed.ts'
@@ -19,7 +20,6 @@ export interface RandomRow {
   label: string
 }
 
-const uniform = fc.noBias(fc.double({ min: 0, max: 1, noNaN: true }))
 const decades = (from: number, to: number) =>
   fc.tuple(uniform, uniform).map(([u, v]) =>
     new D(from)
