@@ -1,8 +1,6 @@
-import { fieldOutputs, grid, history } from '../../field-outputs.ts'
 import {
   completed,
   completedError,
-  completedPerFilm,
   ENERGY_ERROR,
   energyFraction,
   fluxError,
@@ -10,10 +8,11 @@ import {
   remaining,
   REMAINING_ERROR,
 } from '../../math/convective-half-space.ts'
-import { EPS, type Estimate, TINY } from '../../math/rounding.ts'
+import { EPS, TINY } from '../../math/rounding.ts'
 import type { OutputName } from '../../outputs.ts'
 import type { Solution } from '../../solution.ts'
 import { exactly, scaled, type StepResponse, stepOutputs, untouched } from '../../step-response.ts'
+import { solveWithFlux } from './with-flux.ts'
 
 export interface HalfSpaceInput {
   conductivity: number
@@ -48,7 +47,7 @@ export function solve(input: HalfSpaceInput): Solution {
   const { initialTemperature, ambientTemperature, times, depths, outputs } = input
   const step = { times, places: depths.length, outputs, initial: initialTemperature, drive: ambientTemperature }
   const response = input.filmCoefficient === 0 ? untouched : responseOf(input)
-  if (input.imposedHeatFlux) return withFlux(input, input.imposedHeatFlux, response)
+  if (input.imposedHeatFlux) return solveWithFlux(input, input.imposedHeatFlux, response)
   return { ...stepOutputs(step, response), terms: 0, scale: Math.abs(ambientTemperature - initialTemperature) }
 }
 
@@ -82,50 +81,4 @@ function responseOf(input: HalfSpaceInput): StepResponse {
       return { value, error: value * (ENERGY_ERROR + 6 * EPS), method: 'closed-form' }
     },
   }
-}
-
-/** Film and absorbed flux together: the fractions are the film's, the rest is the sum of the two. */
-function withFlux(input: HalfSpaceInput, q0: number, response: StepResponse): Solution {
-  const { conductivity: k, diffusivity: a, filmCoefficient: h, times, depths, outputs } = input
-  const { initialTemperature: initial, ambientTemperature: ambient } = input
-  const roots = times.map((t) => Math.sqrt(a) * Math.sqrt(t))
-  const eta = (i: number, j: number) => depths[j]! / (2 * roots[i]!)
-  const beta = (i: number) => (h / k) * roots[i]!
-  const step = ambient - initial
-  // What a film brings from a difference that has the rounding of both temperatures, and the flux beside it.
-  const drive = { value: h * step + q0, error: EPS * (h * (Math.abs(initial) + Math.abs(ambient)) + 2 * Math.abs(q0)) }
-  const driven = (share: number, error: number): Estimate => {
-    const size = (h * Math.abs(step) + Math.abs(q0)) * (error + 8 * EPS * share)
-    return { value: drive.value * share, error: size + drive.error * share + TINY, method: 'closed-form' }
-  }
-  const flux = (i: number, at: number): Estimate => {
-    const share = times[i] === 0 ? (at === 0 ? 1 : 0) : fluxFraction(at, beta(i))
-    return driven(share, times[i] === 0 ? 0 : fluxError(at) * share)
-  }
-  const rise = (i: number, j: number): Estimate => {
-    if (times[i] === 0) return exactly(0)
-    const relative = completedError(eta(i, j))
-    const film = completed(eta(i, j), beta(i))
-    const absorbed = (q0 / k) * roots[i]! * completedPerFilm(eta(i, j), beta(i))
-    const error = Math.abs(step) * film * relative + Math.abs(absorbed) * (relative + 8 * EPS)
-    const inputs = EPS * (Math.abs(initial) + Math.abs(ambient)) * film
-    return { value: step * film + absorbed, error: error + inputs + TINY, method: 'closed-form' }
-  }
-  const fields = {
-    temperature: grid((i, j) => {
-      const { value, error, method } = rise(i, j)
-      return { value: initial + value, error: error + EPS * Math.abs(initial), method }
-    }),
-    heatFlux: grid((i, j) => flux(i, times[i] === 0 ? depths[j]! : eta(i, j))),
-    surfaceHeatFlux: history((i) => flux(i, 0)),
-    heatGained: history((i) => {
-      const share = times[i]! * energyFraction(beta(i))
-      return driven(share, share * (ENERGY_ERROR + 6 * EPS))
-    }),
-    completedFraction: grid((i, j) => response.completed(i, j), 'relative'),
-    remainingFraction: grid((i, j) => response.remaining(i, j), 'relative'),
-  }
-  const widest = roots.reduce((most, root) => Math.max(most, (1.1283791670955126 * root) / k), 0)
-  const scale = Math.abs(step) + Math.abs(q0) * Math.min(h === 0 ? widest : 1 / h, widest)
-  return { ...fieldOutputs({ times, places: depths.length, outputs }, fields), terms: 0, scale }
 }
