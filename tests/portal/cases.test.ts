@@ -116,6 +116,25 @@ test.each(cases.map(({ id }) => id))(
   },
 )
 
+test('another question is asked on the page with the numbers of the reader, and answers as with a key', async () => {
+  const page = sheet
+  await page.goto(`${portal.url}/cases/slab-convection`)
+  await page.getByRole('region', { name: 'Answer as JSON' }).waitFor()
+  await page.locator('[data-operation=time-to-reach] summary').click()
+  const form = page.locator('[data-operation=time-to-reach] form')
+  await form.locator('[data-own=target] input').fill('1')
+  await form.getByRole('button', { name: 'Ask' }).click()
+  const shown = JSON.parse(await form.getByRole('region', { name: /answer$/ }).innerText()) as Record<string, unknown>
+  const curl = await form.getByRole('region', { name: /curl$/ }).innerText()
+  expect(curl).toContain('"target": 1')
+  expect(JSON.parse((await runWithKey('bash', ['-c', curl])).stdout)).toEqual(shown)
+  await form.locator('[data-own=target] input').fill('warm')
+  await form.getByRole('button', { name: 'Ask' }).click()
+  await form.getByRole('alert').waitFor()
+  expect(await form.getByRole('alert').innerText()).toContain('target')
+  faults.length = 0
+})
+
 /** Every field that any choice of the form shows, by its place in the body. */
 async function fieldsOffered(page: Page): Promise<string[]> {
   await page.getByText('Other ways to give it').click()

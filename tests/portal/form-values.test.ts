@@ -3,6 +3,8 @@ import { describedCase } from '../../api/catalogue/describe.ts'
 import { refusalAt } from '../../portal/src/features/cases/refusals.ts'
 import { bodyOf, isComplete, valuesOf } from '../../portal/src/features/cases/form-values.ts'
 import type { Field } from '../../portal/src/features/cases/fields.ts'
+import { type Operation, ownNames, ownText, questionOf } from '../../portal/src/features/cases/asking.ts'
+import type { Case } from '../../portal/src/features/cases/described.ts'
 import { rowsOf, rowsText } from '../../portal/src/features/cases/number-text.ts'
 import { cases } from '../../solvers/cases/index.ts'
 
@@ -28,6 +30,16 @@ test('every field that a case describes has a title or a symbol, and a control',
     for (const field of fieldsOf(c)) {
       const inside = [...(field.fields ?? []), ...(field.kinds ?? []).flatMap(({ fields }) => fields)]
       for (const one of [field, ...inside]) expect(one.title, `${c.id} ${one.name}`).toBeDefined()
+    }
+})
+
+test('another question of each case is asked with the body that was solved and what is its own', () => {
+  for (const c of described)
+    for (const operation of c.operations.filter(({ id }) => id !== 'solve')) {
+      const [about, one] = [c as unknown as Case, operation as unknown as Operation]
+      const typed = Object.fromEntries(ownNames(about, one).map((name) => [name, ownText(about, one.example[name])]))
+      expect(questionOf(about, one, c.example, typed), `${c.id} ${operation.id}`).toEqual(operation.example)
+      expect(ownNames(about, one).length, `${c.id} ${operation.id} has fields of its own`).toBeGreaterThan(0)
     }
 })
 

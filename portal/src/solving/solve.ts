@@ -16,6 +16,12 @@ export function trySolve(caseId: string, body: Body, signal?: AbortSignal): Prom
   return unwrap(portalApi.POST(path, { body: body as never, ...(signal ? { signal } : {}) }))
 }
 
+/** Asks another question of a case without a key. What its answer holds depends on the question. */
+export function tryQuestion(caseId: string, operationId: string, body: Body): Promise<unknown> {
+  const path = `/portal/v1/try/${caseId}/${operationId}` as TryPath
+  return unwrap(portalApi.POST(path, { body: body as never }))
+}
+
 export function isFull(answer: AnyAnswer): answer is Answer {
   return 'case' in answer
 }

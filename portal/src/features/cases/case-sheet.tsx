@@ -10,6 +10,7 @@ import { CallView } from './call-view.tsx'
 import { CaseForm } from './case-form.tsx'
 import { CurveBand } from './curve-band.tsx'
 import { AboutBody } from './about-body.tsx'
+import { OperationsBand } from './operations-band.tsx'
 import type { Case } from './described.ts'
 import type { Stale } from './stale-frame.tsx'
 import { type Solved, useSolve } from './use-solve.ts'
@@ -63,6 +64,7 @@ export function CaseSheet({ description: c }: { description: Case }) {
               <CallView description={c} solved={solved} stale={stale} />
             </div>
           </Band>
+          <OperationsBand description={c} solved={solved.body} />
         </>
       ) : (
         <Band>
