@@ -75,7 +75,7 @@ function locate(curve: Curve, whole: Scan, target: number, low: number, high: nu
   const near = narrowed(curve, past, limits, origin)
   if (!near) return { at: origin, bound: nearest(origin), direction }
   const at = root(curve, past, near)
-  const slope = slopeAt(curve, breaks, at, 2 * (limits[1] - limits[0]))
+  const slope = slopeAt(curve, breaks, at, (limits[1] - limits[0]) / 2)
   const bound = certainty(curve, past, at, Math.abs(slope), limits)
   return { at, bound, direction, ...(Number.isFinite(slope) ? { slope } : {}) }
 }

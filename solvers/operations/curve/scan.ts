@@ -38,16 +38,45 @@ function stretchOf(breaks: readonly number[], point: number): [number, number] {
  * many points a decade, then once more where it changes by a good deal.
  */
 const passes = [
-  { calm: 1e-9, parts: (ratio: number) => (ratio > 0 ? Math.ceil(PER_DECADE * Math.log10(ratio)) : 1) },
-  { calm: 1e-4, parts: () => 3 },
+  { calm: 1e-6, parts: (ratio: number) => (ratio > 0 ? Math.ceil(PER_DECADE * Math.log10(ratio)) : 1) },
+  { calm: 1e-2, parts: () => 3 },
 ]
 
 export function scan(curve: Curve, grid: Grid): Scan {
-  const first: Scan = { points: [...grid.points], ...curve.sample(grid.points), breaks: grid.breaks }
-  return passes.reduce((looked, { calm, parts }) => {
-    const cut = cutsOf(looked, calm, parts)
-    return cut.length ? merged(looked, { points: cut, ...curve.sample(cut) }) : looked
-  }, first)
+  return passes.reduce(
+    (looked, { calm, parts }) => {
+      const cut = cutsOf(looked, calm, parts)
+      return cut.length ? merged(looked, { points: cut, ...curve.sample(cut) }) : looked
+    },
+    firstLook(curve, grid),
+  )
+}
+
+/** Points that are asked for together, and those that are looked at from the last to the first. */
+const TOGETHER = 4
+const FEW = 64
+
+/**
+ * The points of a grid from the last on, as far as the curve differs from its start: what has not been felt at a time
+ * was not felt before, and early times are dear.
+ */
+function firstLook(curve: Curve, { points, breaks }: Grid): Scan {
+  const all = (): Scan => ({ points: [...points], ...curve.sample(points), breaks })
+  if (points.length > FEW) return all()
+  const first = points[0]!
+  let looked: Scan = { points: [first], ...curve.sample([first]), breaks }
+  const start = looked.values[0]!
+  // At the end the curve may be back at its start: only before it was felt there is nothing more to see.
+  let felt = false
+  for (let end = points.length; end > 1; end -= TOGETHER) {
+    const asked = points.slice(Math.max(1, end - TOGETHER), end)
+    const { values, bounds } = curve.sample(asked)
+    looked = merged(looked, { points: asked, values, bounds })
+    const touched = values.some((value, i) => Math.abs(value - start) > bounds[i]!)
+    if (felt && !touched && asked.at(-1)! < breaks[1]!) break
+    felt ||= touched
+  }
+  return looked
 }
 
 function cutsOf({ points, values, breaks }: Scan, calm: number, parts: (ratio: number) => number): number[] {
@@ -166,6 +195,9 @@ function zeroOf(slope: Interpolant, sign: 1 | -1): number | undefined {
   return undefined
 }
 
+/** A derivative is told to more digits than anyone reads. */
+const ENOUGH = 1e-12
+
 /**
  * The derivative at a point, from a series over a window of some width to either side, which is narrowed until its last
  * terms tell that it has converged as far as noise lets it.
@@ -183,7 +215,7 @@ export function slopeAt(curve: Curve, breaks: readonly number[], at: number, wid
     if (!isResolved(fit)) continue
     if (best && !(error < best.error)) break
     best = { slope, error }
-    if (error < 1e-13 * Math.abs(slope)) break
+    if (error < ENOUGH * Math.abs(slope)) break
   }
   return best?.slope ?? NaN
 }
