@@ -22,6 +22,7 @@ const VANISHED = 680
 export class CylinderContour {
   private readonly body: FilmedBody
   private readonly unit: number
+  private known: { moment: Moment; exponent: number; drives: readonly Complex[] } | undefined
 
   constructor(body: FilmedBody) {
     this.body = body
@@ -36,10 +37,13 @@ export class CylinderContour {
 
   /** In units of Bi, or of 1 where the face is held. */
   flux(j: number, m: Moment): Estimate {
+    const { inner, deltas, shifts } = this.body
     const found = this.at(j, m, ({ i1 }, p) => times(p, i1))
-    const bend = this.moved(j, m) * Math.max(1, Math.min(1 / (EPS * this.body.shifts[j]!), this.bendAt(j, m)))
-    const error = found.error + (this.body.shifts[j] === 0 ? 0 : bend)
-    return { ...found, value: this.body.inner[j] === 0 ? 0 : found.value / this.unit, error: error / this.unit }
+    // The flux falls by its own size over the depth reached.
+    const bend = (2 * (deltas[j]! / (2 * m.root) + 1)) / m.root
+    const moved = shifts[j] === 0 ? 0 : this.steepest(j, m) * Math.min(1, EPS * shifts[j]! * bend)
+    const value = inner[j] === 0 ? 0 : found.value / this.unit
+    return { ...found, value, error: (found.error + moved) / this.unit }
   }
 
   /** 1 − completed while that is small; from there on the transform of θ itself, which keeps its digits at the face. */
@@ -72,11 +76,20 @@ export class CylinderContour {
     const depth = delta / (2 * m.root)
     if (depth * depth > VANISHED) return { value: 0, error: TINY, method: 'contour' }
     const contour = contourAt(m.fourier, delta)
-    const found = invert(contour, ({ root: p }) => {
-      const there = besselI01(scale(this.body.inner[j]!, p))
-      return times(this.drive(delta === 0 ? there : besselI01(p), p), of(there, p))
-    })
+    const drives = this.drivesAt(contour, m)
+    const found = invert(contour, ({ root: p }, k) =>
+      times(drives[k]!, of(besselI01(scale(this.body.inner[j]!, p)), p)),
+    )
     return { ...found, error: widened(found, contour) }
+  }
+
+  /** The drive at the nodes of a contour. All places that are not deep have the same nodes, and share them. */
+  private drivesAt({ nodes, exponent }: Contour, m: Moment): readonly Complex[] {
+    if (this.known?.moment !== m || this.known.exponent !== exponent) {
+      const drives = nodes.map(({ root }) => this.drive(besselI01(root), root))
+      this.known = { moment: m, exponent, drives }
+    }
+    return this.known.drives
   }
 
   /** Bi/(s·(p·I₁ + Bi·I₀)). */
@@ -96,20 +109,19 @@ export class CylinderContour {
     return 8 * Math.exp(-36 - exponent) * Math.min(1, nearness)
   }
 
-  /** What the rounding of a depth that is reckoned from a radius moves the response by; a half space is at least as steep. */
+  /** What the rounding of a depth that is reckoned from a radius moves the response by. */
   private moved(j: number, m: Moment): number {
-    const { biot, deltas, inner, shifts } = this.body
-    const shift = EPS * shifts[j]!
-    if (shift === 0) return 0
-    const near = Math.max(0, deltas[j]! - shift) / (2 * m.root)
-    const steepest =
-      biot === Infinity ? Math.exp(-near * near) / (1.77 * m.root) : biot * fluxFraction(near, biot * m.root)
-    return (1.5 * shift * steepest) / Math.sqrt(Math.max(inner[j]!, m.fourier))
+    const shift = EPS * this.body.shifts[j]!
+    return shift === 0 ? 0 : shift * this.steepest(j, m)
   }
 
-  /** How steep the flux itself is, relative to it. */
-  private bendAt(j: number, m: Moment): number {
-    return (2 * (this.body.deltas[j]! / (2 * m.root) + 1)) / m.root
+  /** The most that the slope of the response is within that rounding: a half space is at least as steep. */
+  private steepest(j: number, m: Moment): number {
+    const { biot, deltas, inner, shifts } = this.body
+    const near = Math.max(0, deltas[j]! - EPS * shifts[j]!) / (2 * m.root)
+    const slope =
+      biot === Infinity ? Math.exp(-near * near) / (1.77 * m.root) : biot * fluxFraction(near, biot * m.root)
+    return (1.5 * slope) / Math.sqrt(Math.max(inner[j]!, m.fourier))
   }
 }
 

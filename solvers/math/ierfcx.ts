@@ -9,9 +9,9 @@ const INVERSE_SQRT_PI = 0.5641895835477563
  *
  * Shapes    a number.
  * Units     none.
- * Domain    x ≥ 0; Infinity gives 0.
- * Accuracy  relative error ≤ 100ε below 1.5, where the difference cancels by a factor of up to 7; ≤ 6ε from there on.
- * Errors    none: for x ≥ 0 it is finite and never negative.
+ * Domain    x ≥ −26; Infinity gives 0.
+ * Accuracy  relative error ≤ 100ε below 1.5, where the difference cancels by a factor of up to 7; ≤ 6ε from there on. Below 0 nothing cancels.
+ * Errors    none: it is finite and never negative.
  * Source    M. Abramowitz, I. A. Stegun, Handbook of Mathematical Functions, 7.1.14 (continued fraction), 7.2.5.
  */
 export function ierfcx(x: number): number {
