@@ -30,6 +30,7 @@ async function drawingOf(
   signal: AbortSignal,
 ): Promise<Drawing> {
   const asked = askedIn(body)
+  if (body['times'] === undefined) return { kind: 'none', why: 'Only an answer over times is drawn, in °C.' }
   const first = isFull(answer) ? answer : await trySolve(c.id, { ...body, detail: 'full' }, signal)
   if (!isFull(first)) throw new Error('a full answer was asked for')
   if (c.places !== 'none' && !body['points'] && asked.places.length === 0 && (hasClock(c) || !mayLackPlaces(c)))

@@ -49,8 +49,9 @@ function Section({ shown, title, width }: { shown: Shown; title: string; width: 
   const frame = frameOf(shown, width)
   const [x, y] = shape.mark(frame, place.along, place.across)
   const flat = body === 'slab' || body === 'half-space' || body === 'two-bodies'
-  const level = flat || body === 'hole' || body === 'endless'
-  const left = x > frame.left + (frame.right - frame.left) * 0.6
+  const ring = body === 'hollow-cylinder'
+  const level = flat || ring || body === 'hole' || body === 'endless'
+  const left = !ring && x > frame.left + (frame.right - frame.left) * 0.6
   const measured = shape.measured(frame).filter(({ field }) => shown.symbols[field])
   const base = frame.bottom + 22
   const depth = flat && place.along > 0 && !shown.signed

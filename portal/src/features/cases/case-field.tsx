@@ -25,7 +25,7 @@ export function CaseField({ field, path, register, error }: Props) {
   const access = { 'aria-invalid': error ? (true as const) : undefined, 'aria-describedby': described }
   const parts = (
     <>
-      <span className="sym" aria-hidden="true">
+      <span className={(field.symbol ?? '').length > 3 ? 'sym long' : 'sym'} aria-hidden="true">
         <Symbol of={field.symbol ?? ''} />
       </span>
       <span className="label">
