@@ -4,8 +4,10 @@ import { parse } from '../../solvers/validate.ts'
 import { Problem, invalidInput } from '../problems.ts'
 import { type NewMaterial, newMaterialSchema } from './schemas.ts'
 
-/** Rows of one import, few enough to be examined in a few tens of milliseconds. */
-const MOST_ROWS = 2000
+/** Rows of one import, few enough to be examined in some tens of milliseconds. */
+const MOST_ROWS = 1000
+/** More columns than these are no columns: something else is in the first line. */
+const MOST_COLUMNS = 50
 
 /** The columns are the fields of a material; numbers are in SI. */
 const columns = Object.keys(newMaterialSchema.shape)
@@ -22,7 +24,7 @@ export function readMaterials(text: string): ImportedRow[] {
   refuseColumns(names)
   if (records.length === 0) throw new Problem('malformed-csv', 'There is no row below the names of the columns.')
   if (records.length > MOST_ROWS)
-    throw new Problem('malformed-csv', `There are ${records.length} rows; one import takes ${MOST_ROWS}.`)
+    throw new Problem('malformed-csv', `There are more than ${MOST_ROWS} rows; one import takes no more.`)
   return records.map((record, i) => ({ row: i + 1, ...readRow(names, record) }))
 }
 
@@ -34,6 +36,8 @@ function recordsIn(text: string): string[][] {
       skip_empty_lines: true,
       max_record_size: 8192,
       relax_column_count: true,
+      /* The names, and one row more than there may be: the rest is not looked at. */
+      to: MOST_ROWS + 2,
     })
   } catch (error) {
     const { lines } = error as { lines?: unknown }
@@ -43,6 +47,8 @@ function recordsIn(text: string): string[][] {
 }
 
 function refuseColumns(names: readonly string[]): void {
+  if (names.length > MOST_COLUMNS)
+    throw new Problem('malformed-csv', `The first line has ${names.length} cells; it names the columns.`)
   const accepted = columns.join(', ')
   const quoted = (name: string) => name.slice(0, 60)
   const issues: Issue[] = [

@@ -136,7 +136,7 @@ const importAll = {
   summary: 'Import materials from CSV',
   description:
     'The first line names the columns, in any order: those of a new material, where group may be left out. Numbers are in SI, with a decimal point. ' +
-    'Rows that will do are kept, the others reported with what is wrong; at most 2,000 rows.',
+    'Rows that will do are kept, the others reported with what is wrong; at most 1,000 rows.',
   upload: {
     kind: 'text/csv',
     limit: 256 * 1024,

@@ -304,7 +304,7 @@ describe('an import', () => {
     ['an open quote', `${head}\n"open,1,1,1,dry,lab,low`, 400, 'malformed-csv'],
     ['no rows', head, 400, 'malformed-csv'],
     ['nothing', '', 400, 'malformed-csv'],
-    ['too many rows', `${head}\n${`${row}\n`.repeat(2001)}`, 400, 'malformed-csv'],
+    ['too many rows', `${head}\n${`${row}\n`.repeat(1001)}`, 400, 'malformed-csv'],
     ['a long line', `${head}\n${'x'.repeat(10_000)},1`, 400, 'malformed-csv'],
     ['an unknown, a missing and a second column', `name,name,colour,conductivity\nx,y,z,1`, 422, 'invalid-input'],
     ['a name of every object', `${head},__proto__\n${row},1`, 422, 'invalid-input'],
@@ -326,11 +326,22 @@ describe('an import', () => {
     expect(await answer.json()).toMatchObject({ status: 400, code: 'malformed-csv' })
   })
 
-  test('of its most rows holds up nobody for long', async () => {
-    const text = `${head}\n${`${row}\n`.repeat(2000)}`
-    const started = performance.now()
-    const answer = await importCsv(text, '/import?dryRun=true')
-    expect(answer.json.accepted).toBe(2000)
-    expect(performance.now() - started).toBeLessThan(1000)
+  test('takes its most rows', async () => {
+    const answer = await importCsv(`${head}\n${`${row}\n`.repeat(1000)}`, '/import?dryRun=true')
+    expect(answer.json.accepted).toBe(1000)
+  })
+
+  /* Read to its end, a body of many small rows took seconds; what is beyond the most rows is not looked at. */
+  test.each([
+    ['small rows', `${head}\n${'a\n'.repeat(125_000)}`],
+    ['names', ','.repeat(250_000)],
+    ['quotes', `${head}\n${'"",'.repeat(80_000)}`],
+    ['blank lines', `${head}\n${'\n'.repeat(250_000)}`],
+    ['wrong cells', `${head}\n${',,,,,,\n'.repeat(1000)}`],
+  ])('holds up nobody for long with %s', async (_____, text) => {
+    const before = process.cpuUsage()
+    await importCsv(text, '/import?dryRun=true')
+    const { user } = process.cpuUsage(before)
+    expect(user / 1000).toBeLessThan(500)
   })
 })
