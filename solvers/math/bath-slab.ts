@@ -1,9 +1,9 @@
 import { type Bath, type BathModes, bathModes } from './bath-roots.ts'
-import { complex, type Complex, exponential, modulus, over, plus, scale, times } from './complex.ts'
+import { complex, type Complex, exponential, over, plus, scale, times } from './complex.ts'
 import { contourAt } from './contour.ts'
 import { type Estimate, EPS, TINY } from './rounding.ts'
 import type { Moment } from './two-sided-body.ts'
-import { exponentialLessOne } from './two-sided-waves.ts'
+import { exponentialLessOne, sizeOf } from './two-sided-waves.ts'
 
 const { nodes, exponent } = contourAt(1)
 /** What one node is off by in units of EPS, with what the rule leaves. */
@@ -131,7 +131,7 @@ function earlyValues(own: Bath, m: Moment): BathValues {
     for (const node of all) {
       const each = times(node.weight, of(node))
       value += each.re
-      size += modulus(each)
+      size += sizeOf(each)
     }
     return { value, error: EPS * AMPLIFIED * size + TINY, method: 'contour' }
   }

@@ -1,8 +1,8 @@
-import { type Complex, complex, exponential, minus, modulus, over, plus, scale, times } from './complex.ts'
+import { type Complex, complex, exponential, minus, over, plus, scale, times } from './complex.ts'
 import { type Estimate, EPS, TINY } from './rounding.ts'
 import { type Face, type Load, meanDecay, type Moment, type Place, type TwoSidedBody } from './two-sided-body.ts'
 import { REAL, sinhShare, timeOneNodes as nodes, timeOneExponent, turned, turnedFlux } from './two-sided-turning.ts'
-import { exponentialLessOne, type Node, type Waves, wavesAt } from './two-sided-waves.ts'
+import { exponentialLessOne, type Node, sizeOf, type Waves, wavesAt } from './two-sided-waves.ts'
 
 /** What one wave is off by in units of EPS: as `invert` counts it, and the turning from node to node. */
 const AMPLIFIED = 64 + 16 * timeOneExponent
@@ -107,7 +107,7 @@ export class EarlyValues {
       const { root } = nodes[k]!
       const each = over(complex(fourier), times(root, root))
       value += times(each, plus(left.value, right.value)).re
-      error += EPS * modulus(each) * (left.size + right.size)
+      error += EPS * sizeOf(each) * (left.size + right.size)
     })
     return { value, error: error + TINY, method: 'contour' }
   }
@@ -128,7 +128,7 @@ export class EarlyValues {
   private unfaded(): number {
     return this.waves.reduce((sum, { forwardSizes, backwardSizes }, n) => {
       const sent = [...forwardSizes, ...backwardSizes].reduce((all, { given }) => all + given, 0)
-      return sum + modulus(this.roots[n]!) * sent
+      return sum + sizeOf(this.roots[n]!) * sent
     }, 0)
   }
 
@@ -149,13 +149,13 @@ export class EarlyValues {
       const b = minus(w.backward[k]!, own)
       forward.set([a.re, a.im], 2 * n)
       backward.set([b.re, b.im], 2 * n)
-      const share = AMPLIFIED * (narrow ? modulus(w.unit) * Math.abs(rise!.rise.value) : modulus(own))
-      const told = slope === 0 ? 0 : Math.min(1, 1 / (modulus(root) * width))
-      const given = share + 0.75 * told * modulus(w.unit) * (rise?.rise.slack ?? 0)
+      const share = AMPLIFIED * (narrow ? sizeOf(w.unit) * Math.abs(rise!.rise.value) : sizeOf(own))
+      const told = slope === 0 ? 0 : Math.min(1, 1 / (sizeOf(root) * width))
+      const given = share + 0.75 * told * sizeOf(w.unit) * (rise?.rise.slack ?? 0)
       sizes.forwardSize += w.forwardSizes[k]!.own + share
       sizes.backwardSize += w.backwardSizes[k]!.own + share
-      sizes.forwardFluxSize += modulus(root) * (w.forwardSizes[k]!.given + given)
-      sizes.backwardFluxSize += modulus(root) * (w.backwardSizes[k]!.given + given)
+      sizes.forwardFluxSize += sizeOf(root) * (w.forwardSizes[k]!.given + given)
+      sizes.backwardFluxSize += sizeOf(root) * (w.backwardSizes[k]!.given + given)
     })
     return { ...piece, ...sizes }
   }

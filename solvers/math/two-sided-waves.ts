@@ -54,7 +54,7 @@ export function wavesAt(body: TwoSidedBody, load: Load, m: Moment, node: Node, a
   const steps = load.rises.map(({ width, rise }) => {
     const x = scale(width / m.root, root)
     const sent = scale(-rise.value / 2, times(unit, meanDecayOf(x)))
-    const size = modulus(unit) * Math.min(1, 2 / modulus(x) || 1)
+    const size = sizeOf(unit) * Math.min(1, 2 / sizeOf(x) || 1)
     const sizes = {
       own: 0.5 * amplified * size * Math.abs(rise.value),
       given: 0.5 * size * (amplified * Math.abs(rise.value) + 1.5 * rise.slack),
@@ -74,8 +74,8 @@ export function wavesAt(body: TwoSidedBody, load: Load, m: Moment, node: Node, a
   for (const { fade, sent, sizes } of steps.slice(0, -1)) forward.push(added(faded(forward.at(-1)!, fade), sent, sizes))
   for (const { fade, sent, sizes } of steps.slice(1).reverse())
     backward.unshift(added(faded(backward[0]!, fade), scale(-1, sent), sizes))
-  const intoLeft = added(toLeft, times(b.value, across), sizesTimes(b.sizes, modulus(across)))
-  const intoRight = added(toRight, times(a.value, across), sizesTimes(a.sizes, modulus(across)))
+  const intoLeft = added(toLeft, times(b.value, across), sizesTimes(b.sizes, sizeOf(across)))
+  const intoRight = added(toRight, times(a.value, across), sizesTimes(a.sizes, sizeOf(across)))
   return {
     forward: forward.map(({ value }) => value),
     backward: backward.map(({ value }) => value),
@@ -95,7 +95,7 @@ const nothing: Sent = { value: complex(0), sizes: { own: 0, given: 0 } }
 const sizesTimes = (s: Sizes, factor: number): Sizes => ({ own: s.own * factor, given: s.given * factor })
 const faded = ({ value, sizes }: Sent, fade: Complex): Sent => ({
   value: times(value, fade),
-  sizes: sizesTimes(sizes, modulus(fade)),
+  sizes: sizesTimes(sizes, sizeOf(fade)),
 })
 const added = (sent: Sent, value: Complex, sizes: Sizes): Sent => ({
   value: plus(sent.value, value),
@@ -114,18 +114,25 @@ function lawOf(
 ): Law {
   const { alpha, beta } = face
   const whole = alpha + beta * m.root
-  const law = {
-    own: plus(scale(alpha / whole, root), complex((beta * m.root) / whole)),
-    mirror: minus(scale(alpha / whole, root), complex((beta * m.root) / whole)),
-    gain: m.root / whole,
-  }
+  const passed = scale(alpha / whole, root)
+  const held = complex((beta * m.root) / whole)
   const { size, rate } = load.source
+  const sent = scale(drive.value - beta * initial, unit)
   // What is released raises the body alike everywhere; the face answers to the difference.
-  const square = times(root, root)
-  const heated = size === 0 ? complex(0) : over(scale(size * m.fourier, unit), plus(square, complex(rate * m.fourier)))
-  const direct = minus(scale(drive.value - beta * initial, unit), scale(beta, heated))
-  const own = amplified * (modulus(unit) * (Math.abs(drive.value) + Math.abs(beta * initial)) + beta * modulus(heated))
-  return { ...law, direct, directSize: { own, given: own + 1.5 * modulus(unit) * drive.slack } }
+  const heated = size === 0 ? nothing.value : releasedAt(size, rate, m.fourier, root, unit)
+  const unitSize = sizeOf(unit)
+  const own = amplified * (unitSize * (Math.abs(drive.value) + Math.abs(beta * initial)) + beta * sizeOf(heated))
+  return {
+    own: plus(passed, held),
+    mirror: minus(passed, held),
+    gain: m.root / whole,
+    direct: size === 0 ? sent : minus(sent, scale(beta, heated)),
+    directSize: { own, given: own + 1.5 * unitSize * drive.slack },
+  }
+}
+
+function releasedAt(size: number, rate: number, fourier: number, root: Complex, unit: Complex): Complex {
+  return over(scale(size * fourier, unit), plus(times(root, root), complex(rate * fourier)))
 }
 
 /** What the two faces send, each thrown back by the other any number of times. */
@@ -136,9 +143,9 @@ function emitted(left: Law, right: Law, toLeft: Sent, toRight: Sent, across: Com
   const second = answered(right, toRight)
   const one = (own: Law, other: Law, near: Sent, far: Sent): Sent => {
     const echo = times(times(own.mirror, across), far.value)
-    const size = modulus(divisor)
-    const direct = modulus(other.own) / size
-    const thrown = (modulus(own.mirror) * modulus(across)) / size
+    const size = sizeOf(divisor)
+    const direct = sizeOf(other.own) / size
+    const thrown = (sizeOf(own.mirror) * sizeOf(across)) / size
     return {
       value: over(plus(times(other.own, near.value), echo), divisor),
       sizes: {
@@ -152,7 +159,7 @@ function emitted(left: Law, right: Law, toLeft: Sent, toRight: Sent, across: Com
 
 /** Drive and mirrored wave of a face. */
 function answered(law: Law, incoming: Sent): Sent {
-  const mirror = modulus(law.mirror)
+  const mirror = sizeOf(law.mirror)
   return {
     value: plus(scale(law.gain, law.direct), times(law.mirror, incoming.value)),
     sizes: {
@@ -166,12 +173,18 @@ function answered(law: Law, incoming: Sent): Sent {
 function faceFlux(face: Face, law: Law, incoming: Sent, m: Moment, root: Complex): FaceFlux {
   const factor = over(scale(1 / (face.alpha + face.beta * m.root), root), law.own)
   const value = times(factor, minus(law.direct, scale(2 * face.beta, incoming.value)))
-  return { value, size: modulus(factor) * (law.directSize.given + 2 * face.beta * incoming.sizes.given) }
+  return { value, size: sizeOf(factor) * (law.directSize.given + 2 * face.beta * incoming.sizes.given) }
+}
+
+/** As `modulus`, at a third of its cost where nothing can overflow on the way. */
+export function sizeOf(a: Complex): number {
+  const square = a.re * a.re + a.im * a.im
+  return square > 1e-280 && square < 1e280 ? Math.sqrt(square) : modulus(a)
 }
 
 /** (1 − e^(−x))/x in the right half plane. */
 export function meanDecayOf(x: Complex): Complex {
-  if (modulus(x) === 0) return complex(1)
+  if (sizeOf(x) === 0) return complex(1)
   return over(scale(-1, exponentialLessOne(scale(-1, x))), x)
 }
 
