@@ -5,11 +5,11 @@ import type { OutputName } from '../../solvers/outputs.ts'
 import { ask, contract, sensitivity, single, solveDirect, temperaturesOf } from './ask.ts'
 import { proof, seed } from './counts.ts'
 import { D } from './exact/bessel.ts'
-import { hollow, medium } from './round-rows.ts'
+import { hollow, medium, thin } from './round-rows.ts'
 
 /* The hollow cylinder and the medium around one: exact answers, other routes, limits, published values and refusals. */
 
-const count = proof ? 300 : 5
+const count = proof ? 300 : 4
 /** By inversion a hundredth of the digits that closed forms promise are promised; see the accuracy of each case. */
 const INVERSION = 100
 
@@ -41,6 +41,21 @@ describe.each(Object.entries({ hollow, medium }))('bounds of the %s', (_name, ar
     expect(failures).toEqual([])
     expect(ratios[Math.floor(ratios.length / 2)]).toBeLessThan(1000)
   })
+})
+
+it('a thin wall is told to 1e-8 of its scale, the rounding of its radii included', { timeout: 3_600_000 }, () => {
+  for (const row of fc.sample(thin, { numRuns: count, seed })) {
+    const names = Object.keys(row.exact) as OutputName[]
+    const { outputs, scale } = solveDirect(row.caseId, { ...row.body, outputs: names })
+    for (const name of names) {
+      const { values, bound } = outputs[name]!
+      const value = single(values)
+      const error = Number(new D(value).minus(row.exact[name]!).abs())
+      const allowed = bound.absolute + bound.relative * Math.abs(value)
+      expect(error, `${name}: ${row.label}`).toBeLessThanOrEqual(allowed + 1e-20 * Math.max(1, scale))
+    }
+    expect(outputs.temperature!.bound.absolute, row.label).toBeLessThan(1e-8 * scale + 1e-12)
+  }
 })
 
 const wall = {

@@ -60,49 +60,53 @@ const bodyOf = (r: {
   initialTemperature: r.initial.toNumber(),
 })
 
-export const hollow = fc
-  .record({
-    ...solid,
-    r1: exactDecades(1e-3, 1),
-    wall: exactDecades(1e-3, 1e3),
-    fo: exactDecades(1e-3, 10),
-    share: place,
-    inner: side,
-    outer: side,
-  })
-  .map((r): RoundRow => {
-    const [k, capacity, initial, r1] = [decimal(r.k), decimal(r.capacity), decimal(r.initial), decimal(r.r1)]
-    const r2 = decimal(r1.mul(decimal(r.wall).plus(1)).toSignificantDigits(20))
-    const L = r2.minus(r1)
-    const radius = r.share === 1 ? r2 : decimal(r1.plus(L.mul(r.share)).toSignificantDigits(20))
-    const time = decimal(decimal(r.fo).mul(L).mul(L).mul(capacity).div(k).toSignificantDigits(20))
-    const fourier = time.mul(k).div(capacity).div(L).div(L)
-    const faces = [r.inner.face(initial, L, k), r.outer.face(initial, L, k)] as const
-    const at = exactAnnulus(r1.div(L), r2.div(L), radius.div(L), fourier, faces)
-    const unit = k.div(L)
-    const area = r1.plus(r2).div(L).div(2)
-    return {
-      caseId: 'hollow-cylinder-convection',
-      body: {
-        ...bodyOf(r),
-        innerRadius: r1.toNumber(),
-        outerRadius: r2.toNumber(),
-        inner: r.inner.body,
-        outer: r.outer.body,
-        radii: [radius.toNumber()],
-        times: [time.toNumber()],
-      },
-      exact: {
-        temperature: initial.plus(at.temperature),
-        heatFlux: unit.mul(at.flux),
-        innerHeatFlux: unit.mul(at.inner),
-        outerHeatFlux: unit.mul(at.outer),
-        heatGained: D.acos(-1).mul(2).mul(capacity).mul(L).mul(L).mul(at.content),
-        meanTemperature: initial.plus(at.content.div(area)),
-      },
-      label: `r2/r1 ${r2.div(r1).toPrecision(4)} Fo ${fourier.toPrecision(3)} share ${r.share.toFixed(3)} ${String(r.inner.body['kind'])} ${String(r.outer.body['kind'])}`,
-    }
-  })
+const walls = (...wall: [number, number]) =>
+  fc
+    .record({
+      ...solid,
+      r1: exactDecades(1e-3, 1),
+      wall: exactDecades(...wall),
+      fo: exactDecades(1e-3, 10),
+      share: place,
+      inner: side,
+      outer: side,
+    })
+    .map((r): RoundRow => {
+      const [k, capacity, initial, r1] = [decimal(r.k), decimal(r.capacity), decimal(r.initial), decimal(r.r1)]
+      const r2 = decimal(r1.mul(decimal(r.wall).plus(1)).toSignificantDigits(20))
+      const L = r2.minus(r1)
+      const radius = r.share === 1 ? r2 : decimal(r1.plus(L.mul(r.share)).toSignificantDigits(20))
+      const time = decimal(decimal(r.fo).mul(L).mul(L).mul(capacity).div(k).toSignificantDigits(20))
+      const fourier = time.mul(k).div(capacity).div(L).div(L)
+      const faces = [r.inner.face(initial, L, k), r.outer.face(initial, L, k)] as const
+      const at = exactAnnulus(r1.div(L), r2.div(L), radius.div(L), fourier, faces)
+      const unit = k.div(L)
+      const area = r1.plus(r2).div(L).div(2)
+      return {
+        caseId: 'hollow-cylinder-convection',
+        body: {
+          ...bodyOf(r),
+          innerRadius: r1.toNumber(),
+          outerRadius: r2.toNumber(),
+          inner: r.inner.body,
+          outer: r.outer.body,
+          radii: [radius.toNumber()],
+          times: [time.toNumber()],
+        },
+        exact: {
+          temperature: initial.plus(at.temperature),
+          heatFlux: unit.mul(at.flux),
+          innerHeatFlux: unit.mul(at.inner),
+          outerHeatFlux: unit.mul(at.outer),
+          heatGained: D.acos(-1).mul(2).mul(capacity).mul(L).mul(L).mul(at.content),
+          meanTemperature: initial.plus(at.content.div(area)),
+        },
+        label: `r2/r1 ${r2.div(r1).toPrecision(4)} Fo ${fourier.toPrecision(3)} share ${r.share.toFixed(3)} ${String(r.inner.body['kind'])} ${String(r.outer.body['kind'])}`,
+      }
+    })
+export const hollow = walls(1e-3, 9e3)
+/** So thin that the rounding of the radii is what an answer errs by most. */
+export const thin = walls(1.01e-5, 1e-3)
 
 export const medium = fc
   .record({

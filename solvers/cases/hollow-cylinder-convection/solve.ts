@@ -85,6 +85,11 @@ export function solve(input: HollowInput): Solution {
   }
   const perMetre = 2 * Math.PI * capacity * length * length
   const area = input.innerRadius / length + 0.5
+  const mean = (i: number): Estimate => {
+    const { value, error, method } = scaled(1 / area, content(i))
+    // The heat is spread over a wall as thick as two rounded radii say.
+    return { value, error: error + 4 * EPS * area * Math.abs(value), method }
+  }
   const alone = drivesOf(input) <= 1
   // What comes through from the other face keeps its digits only where the own drive is not there to be told from it.
   const told = (own: Side) => (alone && (passesNoHeat(own) || drivenBy(own, initial)) ? 'relative' : 'absolute')
@@ -98,7 +103,7 @@ export function solve(input: HollowInput): Solution {
     innerHeatFlux: history((i) => faceFlux(i, 0), told(inner)),
     outerHeatFlux: history((i) => faceFlux(i, 1), told(outer)),
     heatGained: history((i) => scaled(perMetre, content(i)), alone ? 'relative' : 'absolute'),
-    meanTemperature: history((i) => (started(i) ? celsius(scaled(1 / area, content(i))) : exactly(initial))),
+    meanTemperature: history((i) => (started(i) ? celsius(mean(i)) : exactly(initial))),
     steadyTemperature: profile((j) => {
       const held = heldAt(input, radii[j]!)
       return held === undefined ? celsius(response.steady(j)) : exactly(held)
