@@ -2,17 +2,10 @@ import { z } from 'zod'
 import type { Issue } from './errors.ts'
 import { film, surfaceTemperature } from './fields.ts'
 import { filmWarnings } from './film.ts'
+import type { ProductDrive } from './product-films.ts'
 import type { Warning } from './warnings.ts'
 
 /* What drives a body whose answer is a product: one temperature at all its faces, or one fluid behind films. */
-
-export interface ProductDrive {
-  surfaceTemperature?: number
-  ambientTemperature?: number
-  filmCoefficient?: number
-  /** By direction. */
-  filmCoefficients?: Record<string, number>
-}
 
 const ways = 'surfaceTemperature, or ambientTemperature with filmCoefficient, or with filmCoefficients'
 
@@ -78,23 +71,6 @@ export function resolveDrive(input: DriveInput, refuse: (issue: Issue) => void):
     ...(filmCoefficient === undefined ? {} : { filmCoefficient }),
     ...(filmCoefficients === undefined ? {} : { filmCoefficients }),
   }
-}
-
-/** Temperature that all faces are driven to. */
-export function driveTemperature({ surfaceTemperature, ambientTemperature }: ProductDrive): number {
-  return surfaceTemperature ?? ambientTemperature!
-}
-
-/** Film coefficient in a direction; Infinity where the faces themselves are held. */
-export function filmIn(drive: ProductDrive, direction: string): number {
-  if (drive.surfaceTemperature !== undefined) return Infinity
-  return drive.filmCoefficient ?? drive.filmCoefficients![direction]!
-}
-
-/** Where the body ends: at the drive, or where no face passes heat as it was. */
-export function productEnd(drive: ProductDrive & { initialTemperature: number }): number {
-  const films = Object.values(drive.filmCoefficients ?? { all: drive.filmCoefficient ?? Infinity })
-  return films.every((h) => h === 0) ? drive.initialTemperature : driveTemperature(drive)
 }
 
 export function productWarnings(drive: ProductDrive): Warning[] {

@@ -8,7 +8,7 @@ import { slabEigenvalues } from './math/slab-eigenvalues.ts'
 import { SlabFilm } from './math/slab-film.ts'
 import { SlabFixed } from './math/slab-fixed.ts'
 import type { FilmedBody, UnitBody } from './math/unit-body.ts'
-import { driveTemperature, type ProductDrive } from './product-drive.ts'
+import { driveTemperature, type ProductDrive } from './product-films.ts'
 import type { Solution } from './solution.ts'
 import { exactly, scaled, type StepResponse, stepOutputs } from './step-response.ts'
 

@@ -8,7 +8,8 @@ import {
   type ProductResolved,
   refusePoints,
 } from '../../product-case.ts'
-import { driveFields, productEnd, productWarnings, resolveDrive } from '../../product-drive.ts'
+import { driveFields, productWarnings, resolveDrive } from '../../product-drive.ts'
+import { productEnd } from '../../product-films.ts'
 import { resolveSolid } from '../../solid.ts'
 import { solve } from './solve.ts'
 

@@ -1,4 +1,4 @@
-import { filmIn } from '../../product-drive.ts'
+import { filmIn } from '../../product-films.ts'
 import { endlessFactor, type ProductInput, solveProduct } from '../../product-step.ts'
 import type { Solution } from '../../solution.ts'
 

@@ -15,7 +15,8 @@ import {
   refusePoints,
   width,
 } from '../../product-case.ts'
-import { driveFields, productEnd, productWarnings, resolveDrive } from '../../product-drive.ts'
+import { driveFields, productWarnings, resolveDrive } from '../../product-drive.ts'
+import { productEnd } from '../../product-films.ts'
 import { resolveSolid } from '../../solid.ts'
 import { type BarEndInput, type Section, solve } from './solve.ts'
 

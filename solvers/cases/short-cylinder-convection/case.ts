@@ -13,7 +13,8 @@ import {
   refusePoints,
   slowestOf,
 } from '../../product-case.ts'
-import { driveFields, productEnd, productWarnings, resolveDrive, filmIn } from '../../product-drive.ts'
+import { driveFields, productWarnings, resolveDrive } from '../../product-drive.ts'
+import { productEnd, filmIn } from '../../product-films.ts'
 import { cylinderRate, slabRate } from '../../product-step.ts'
 import { resolveSolid } from '../../solid.ts'
 import { solve, type ShortCylinderInput } from './solve.ts'

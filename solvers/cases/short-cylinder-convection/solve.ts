@@ -1,4 +1,4 @@
-import { filmIn } from '../../product-drive.ts'
+import { filmIn } from '../../product-films.ts'
 import { cylinderFactor, type ProductInput, slabFactor, solveProduct } from '../../product-step.ts'
 import { cylinder } from '../../radial-step.ts'
 import type { Solution } from '../../solution.ts'
