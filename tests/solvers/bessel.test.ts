@@ -4,6 +4,7 @@ import { besselI01, besselIK01, besselK01 } from '../../solvers/math/complex-bes
 import { type Complex, modulus, plus, times } from '../../solvers/math/complex.ts'
 import { EPS } from '../../solvers/math/rounding.ts'
 import { proof, seed } from './counts.ts'
+import { decades, uniform } from './draw.ts'
 import { add, divide, exact, exactBessel, type ExactComplex, multiply, size } from './exact/bessel.ts'
 
 /* Scaled modified Bessel functions of complex argument, against decimal series and identities. */
@@ -13,16 +14,8 @@ const count = proof ? 1500 : 60
 const SECTOR = (75 * Math.PI) / 180
 const points = (from: number, to: number) =>
   fc
-    .sample(
-      fc.noBias(
-        fc.tuple(
-          fc.double({ min: Math.log(from), max: Math.log(to), noNaN: true }),
-          fc.double({ min: -SECTOR, max: SECTOR, noNaN: true }),
-        ),
-      ),
-      { numRuns: count, seed },
-    )
-    .map(([log, angle]) => at(Math.exp(log), angle))
+    .sample(fc.noBias(fc.tuple(decades(from, to), uniform)), { numRuns: count, seed })
+    .map(([radius, share]) => at(radius, SECTOR * (2 * share - 1)))
 const at = (radius: number, angle: number): Complex => ({ re: radius * Math.cos(angle), im: radius * Math.sin(angle) })
 /** Relative error in units of the roundoff. */
 const errorIn = (value: Complex, true_: ExactComplex) =>

@@ -12,7 +12,8 @@ const STEPS = 2 ** 31 - 1
 export const uniform: fc.Arbitrary<number> = fc.noBias(fc.integer({ min: 0, max: STEPS })).map((n) => n / STEPS)
 
 /** Evenly in the logarithm. */
-export const decades = (from: number, to: number): fc.Arbitrary<number> => uniform.map((u) => from * (to / from) ** u)
+export const decades = (from: number, to: number): fc.Arbitrary<number> =>
+  uniform.map((u) => 10 ** (Math.log10(from) + u * (Math.log10(to) - Math.log10(from))))
 
 /** The same as a decimal of 20 digits, which no double is. */
 export const exactDecades = (from: number, to: number): fc.Arbitrary<D> =>

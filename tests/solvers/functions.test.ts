@@ -17,14 +17,13 @@ import { ierfcx } from '../../solvers/math/ierfcx.ts'
 import { EPS, ERFCX_ERROR } from '../../solvers/math/rounding.ts'
 import { slabEigenvalues } from '../../solvers/math/slab-eigenvalues.ts'
 import { proof, seed } from './counts.ts'
+import { decades } from './draw.ts'
 import { exactEnergy, exactHalfSpace } from './exact/film.ts'
 import { D, erf as exactErf, erfc as exactErfc, erfcx as exactErfcx, PI } from './exact/functions.ts'
 
 /* Special functions against decimal arithmetic at 60 digits, over the arguments that the domain reaches. */
 
 const count = proof ? 4000 : 250
-const decades = (from: number, to: number) =>
-  fc.noBias(fc.double({ min: Math.log10(from), max: Math.log10(to), noNaN: true })).map((e) => 10 ** e)
 const errorIn = (value: number, exact: D) => Number(new D(value).minus(exact).div(exact).abs().div(EPS))
 /** Worst error over a sample, in units of the roundoff. */
 const worst = (arguments_: fc.Arbitrary<number>, value: (x: number) => number, exact: (x: D) => D) =>

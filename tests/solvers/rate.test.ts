@@ -3,9 +3,8 @@ import { describe, expect, it } from 'vitest'
 import { cases } from '../../solvers/cases/index.ts'
 import { ask, askSingle } from './ask.ts'
 import { seed } from './counts.ts'
+import { decades } from './draw.ts'
 
-const decades = (from: number, to: number) =>
-  fc.double({ min: 0, max: 1, noNaN: true }).map((u) => from * (to / from) ** u)
 const runs = { seed, numRuns: 200 }
 
 describe('the rate of temperature', () => {

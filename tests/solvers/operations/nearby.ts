@@ -1,5 +1,6 @@
 import fc from 'fast-check'
 import type { Case } from '../../../solvers/case.ts'
+import { decades } from '../draw.ts'
 
 /* Inputs of the size that people ask: the example and the variants of a case with every number moved by up to a factor. */
 
@@ -20,7 +21,7 @@ const isTemperature = (name: string) => /temperature$|^temperatures$|^values$|^c
 /** Sizes keep their proportions, and so do times: what lies inside a body or a history stays there. */
 export function nearby(c: Case): fc.Arbitrary<Record<string, unknown>> {
   const stated = [c.example, ...(c.variants ?? []).map(({ input }) => input)]
-  const factor = fc.double({ min: -1, max: 1, noNaN: true }).map((u) => 10 ** (u / 2))
+  const factor = decades(0.1 ** 0.5, 10 ** 0.5)
   return fc
     .record({
       base: fc.constantFrom(...stated),

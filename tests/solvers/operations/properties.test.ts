@@ -7,6 +7,7 @@ import { operationsOf } from '../../../solvers/operations/index.ts'
 import { quantitiesOf } from '../../../solvers/operations/question.ts'
 import { proof, seed } from '../counts.ts'
 import { askOperation, type Depths, type Extremes, partsOf, type Reached, valueAt } from './ask-operation.ts'
+import { uniform } from '../draw.ts'
 import { nearby } from './nearby.ts'
 
 const numRuns = proof ? 300 : 8
@@ -64,30 +65,26 @@ describe.each(having('time-to-reach'))('%s', (_, c) => {
 describe.each(having('extremes'))('%s', (_, c) => {
   test('is nowhere above its maximum or below its minimum', () => {
     fc.assert(
-      fc.property(
-        nearby(c),
-        fc.array(fc.double({ min: 0, max: 1, noNaN: true }), { maxLength: 12 }),
-        (input, shares) => {
-          const parts = inputOf(c, input)
-          if (!parts || parts.time === 0) return
-          const { asked, output, time } = parts
-          const { result, accuracy } = askOperation<Extremes>('extremes', c.id, {
-            ...asked,
-            quantity: output,
-            until: time,
-          })
-          const bound = accuracy.bound['value']!.absolute
-          for (const share of [0, ...shares, 1]) {
-            const there = valueAt(c, asked, output, share * time)
-            expect(there.value).toBeLessThanOrEqual(result.maximum.value + bound + there.bound)
-            expect(there.value).toBeGreaterThanOrEqual(result.minimum.value - bound - there.bound)
-          }
-          for (const { value, time: at } of [result.maximum, result.minimum]) {
-            const there = valueAt(c, asked, output, at)
-            expect(Math.abs(there.value - value)).toBeLessThanOrEqual(bound + there.bound)
-          }
-        },
-      ),
+      fc.property(nearby(c), fc.array(uniform, { maxLength: 12 }), (input, shares) => {
+        const parts = inputOf(c, input)
+        if (!parts || parts.time === 0) return
+        const { asked, output, time } = parts
+        const { result, accuracy } = askOperation<Extremes>('extremes', c.id, {
+          ...asked,
+          quantity: output,
+          until: time,
+        })
+        const bound = accuracy.bound['value']!.absolute
+        for (const share of [0, ...shares, 1]) {
+          const there = valueAt(c, asked, output, share * time)
+          expect(there.value).toBeLessThanOrEqual(result.maximum.value + bound + there.bound)
+          expect(there.value).toBeGreaterThanOrEqual(result.minimum.value - bound - there.bound)
+        }
+        for (const { value, time: at } of [result.maximum, result.minimum]) {
+          const there = valueAt(c, asked, output, at)
+          expect(Math.abs(there.value - value)).toBeLessThanOrEqual(bound + there.bound)
+        }
+      }),
       { numRuns, seed },
     )
   })
