@@ -50,7 +50,12 @@ function prepare(c: Case, body: unknown, defaultDetail: 'full' | 'compact'): Cal
   refuseLongCycles(q.course, from, until)
   const points = 24 * basePrice(c, q.places)
   const compact = (read['detail'] ?? defaultDetail) === 'compact'
-  return { values: 2, size: work(c, q.course), points, run: () => answer(c, q, from, until, points, compact) }
+  return {
+    values: 2,
+    size: work(c, q.course, until - from),
+    points,
+    run: () => answer(c, q, from, until, points, compact),
+  }
 }
 
 function answer(c: Case, q: Question, from: number, until: number, points: number, compact: boolean) {

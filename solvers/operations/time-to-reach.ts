@@ -81,7 +81,7 @@ function prepare(c: Case, body: unknown, defaultDetail: 'full' | 'compact'): Cal
   const points = 12 * basePrice(c, q.places)
   const compact = (read['detail'] ?? defaultDetail) === 'compact'
   const asked = { target, sense: read['sense'] as Sense | undefined, until, end }
-  return { values: 1, size: work(c, q.course), points, run: () => answer(c, q, curve, asked, points, compact) }
+  return { values: 1, size: work(c, q.course, until), points, run: () => answer(c, q, curve, asked, points, compact) }
 }
 
 /** A target with a unit is a temperature; a difference would take its zero along, and a fraction has none. */
