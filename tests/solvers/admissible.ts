@@ -126,18 +126,6 @@ function profiled(body: Input): Input {
   return { ...body, initialProfile: { depths: [0, ...between, end], temperatures: values } }
 }
 
-/** A profile along the whole body: what was drawn are shares of the thickness, put in order, with both ends. */
-function withProfile(body: Input): Input {
-  const profile = body['initialProfile'] as { depths: number[]; temperatures: number[] } | undefined
-  const thickness = body['thickness']
-  if (!profile || typeof thickness !== 'number') return body
-  const shares = profile.depths.map((depth) => Math.abs(Math.sin(depth + Math.log(depth + 1)))).sort((a, b) => a - b)
-  const inside = shares.filter((one, i) => one > 1e-6 && one < 1 - 1e-6 && (i === 0 || one - shares[i - 1]! > 1e-6))
-  const depths = [0, ...inside.map((one) => one * thickness), thickness]
-  const temperatures = depths.map((_, i) => profile.temperatures[i % profile.temperatures.length]!)
-  return { ...body, initialProfile: { depths, temperatures } }
-}
-
 export function admissible(c: Case): fc.Arbitrary<Input> {
   const schema = z.toJSONSchema(solve.input(c), { io: 'input' }) as Field
   const stated = [c.example, ...(c.variants ?? []).map((v) => v.input)]

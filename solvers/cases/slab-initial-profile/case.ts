@@ -1,7 +1,8 @@
 import { defineCase, type Resolved } from '../../case.ts'
 import { solid, thickness } from '../../fields.ts'
-import { initialProfile, isSound } from '../../initial-profile.ts'
-import { sideField } from '../../side.ts'
+import { isSound } from '../../initial-profile.ts'
+import { initialProfile } from '../../initial-profile-field.ts'
+import { sideField } from '../../side-field.ts'
 import { resolveSolid } from '../../solid.ts'
 import {
   balanceCheck,

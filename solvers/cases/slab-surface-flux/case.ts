@@ -1,7 +1,8 @@
 import { defineCase, type Resolved } from '../../case.ts'
 import { imposedHeatFlux, initialTemperature, solid, thickness } from '../../fields.ts'
 import { quantity } from '../../quantity.ts'
-import { passesNoHeat, sideField } from '../../side.ts'
+import { passesNoHeat } from '../../side.ts'
+import { sideField } from '../../side-field.ts'
 import { resolveSolid } from '../../solid.ts'
 import {
   balanceCheck,
