@@ -24,7 +24,7 @@ export function CatalogueScreen() {
   const found = narrowed(list, narrowing)
   const waiting = query.isError ? '–' : 'reading'
   const operations = [...new Set(cases.flatMap((c) => c.operations.map(({ id }) => id)))]
-  const go = (next: URLSearchParams) => setSearch(next, { replace: true, preventScrollReset: true })
+  const go = (next: URLSearchParams) => setSearch(next, { replace: true, preventScrollReset: true, flushSync: true })
   const clear = () => go(new URLSearchParams())
   return (
     <Sheet title="Cases">
