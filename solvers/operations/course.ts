@@ -44,8 +44,9 @@ export function jointsOf(asked: Asked): number[] {
 export function extentOf(c: Case, asked: Asked, axis: 'depths' | 'radii'): [number, number] {
   const number = (name: string) => (typeof asked[name] === 'number' ? asked[name] : undefined)
   if (axis === 'radii') {
-    const inner = number('innerRadius') ?? number('radius') ?? LEAST
-    return [inner, number('outerRadius') ?? MOST]
+    const begin = c.radiiBeginAt && number(c.radiiBeginAt)
+    const end = c.depthsEndAt && number(c.depthsEndAt)
+    return [typeof begin === 'number' ? begin : LEAST, typeof end === 'number' ? end : MOST]
   }
   if (c.signedDepths) return [-MOST, MOST]
   const end = c.depthsEndAt && number(c.depthsEndAt)

@@ -1,8 +1,9 @@
 import { createHash } from 'node:crypto'
 import { fileURLToPath } from 'node:url'
 import { readFileSync, writeFileSync } from 'node:fs'
-import { outputNamesOf } from '../../solvers/case.ts'
+import { type Case, outputNamesOf } from '../../solvers/case.ts'
 import { cases } from '../../solvers/cases/index.ts'
+import { DomainError } from '../../solvers/errors.ts'
 import { solve } from '../../solvers/operations/solve.ts'
 import { SOLVER_VERSION } from '../../solvers/version.ts'
 
@@ -19,11 +20,25 @@ export interface Golden {
   digests: Record<string, string>
 }
 
+type Asked = Record<string, unknown> & { outputs: string[] }
+
+/** The answer with every output that the example can have: some are refused by what it states. */
+function answerOf(c: Case, body: Asked): { result: unknown; accuracy: unknown } {
+  try {
+    return solve.prepare(c, body, 'compact').run() as { result: unknown; accuracy: unknown }
+  } catch (error) {
+    const refused = error instanceof DomainError ? error.issues : []
+    const left = body.outputs.filter((_, i) => !refused.some(({ pointer }) => pointer === `#/outputs/${i}`))
+    if (left.length === body.outputs.length) throw error
+    return answerOf(c, { ...body, outputs: left })
+  }
+}
+
 export function compute(): Golden {
   const times = Array.from({ length: 41 }, (_, i) => 10 ** (i / 5))
   const digests = cases.map((c) => {
     const body = { ...c.example, times, outputs: outputNamesOf(c) }
-    const { result, accuracy } = solve.prepare(c, body, 'compact').run() as { result: unknown; accuracy: unknown }
+    const { result, accuracy } = answerOf(c, body)
     return [
       c.id,
       createHash('sha256')
