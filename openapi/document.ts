@@ -9,6 +9,7 @@ import { cautions, warningCodes } from '../api/catalogue/codes.ts'
 import { sizeText } from '../api/http/size-text.ts'
 import { type Operation, type Tag, problemsOf } from '../api/operation.ts'
 import { rolesWith } from '../api/permissions.ts'
+import { sharedFields } from './shared-fields.ts'
 import { type SessionKind, cookieName } from '../api/session-kinds.ts'
 import { type ProblemCode, domainCodes, problemCodes, problems } from '../api/problems.ts'
 import { withUnits } from './units.ts'
@@ -120,7 +121,10 @@ export function documentOf(name: DocumentName, operations: readonly Operation[],
     'x-warnings': warningCodes,
     'x-cautions': cautions,
   }
-  return { ...withUnits(sharedFailures(document as unknown as Json)), ...(name === 'openapi' ? codes : {}) }
+  return {
+    ...withUnits(sharedFields(sharedFailures(document as unknown as Json))),
+    ...(name === 'openapi' ? codes : {}),
+  }
 }
 
 type Responses = Record<string, Json>

@@ -4,7 +4,10 @@ import type { Body } from './body.ts'
 import type { paths } from '../../../openapi/portal.d.ts'
 
 type TryPath = Extract<keyof paths, `/portal/v1/try/${string}`>
-type AnyAnswer = paths[TryPath]['post']['responses'][200]['content']['application/json']
+type SolvePath = Extract<TryPath, `${string}/solve`>
+/** Answers by dimensionless numbers have fractions alone; the pages never ask for them. */
+type WithTemperature<A> = A extends { result: infer R } ? ('temperature' extends keyof R ? A : never) : never
+type AnyAnswer = WithTemperature<paths[SolvePath]['post']['responses'][200]['content']['application/json']>
 
 /** An answer in full. */
 export type Answer = Extract<AnyAnswer, { case: string }>
@@ -12,8 +15,8 @@ export type CompactAnswer = Exclude<AnyAnswer, { case: string }>
 
 /** Solves without a key. The path names the case; that its body fits is for the service to say. */
 export function trySolve(caseId: string, body: Body, signal?: AbortSignal): Promise<AnyAnswer> {
-  const path = `/portal/v1/try/${caseId}/solve` as TryPath
-  return unwrap(portalApi.POST(path, { body: body as never, ...(signal ? { signal } : {}) }))
+  const path = `/portal/v1/try/${caseId}/solve` as SolvePath
+  return unwrap(portalApi.POST(path, { body: body as never, ...(signal ? { signal } : {}) })) as Promise<AnyAnswer>
 }
 
 /** Asks another question of a case without a key. What its answer holds depends on the question. */
