@@ -7,9 +7,9 @@ import { solve } from '../../solvers/operations/solve.ts'
 import type { OutputName } from '../../solvers/outputs.ts'
 import { admissible } from './admissible.ts'
 import { temperaturesOf } from './ask.ts'
-import { proof, seed } from './counts.ts'
+import { brief, proof, seed } from './counts.ts'
 
-const count = Math.ceil((proof ? 1_000_000 : 100_000) / cases.length)
+const count = Math.ceil((proof ? 1_000_000 : brief ? 10_000 : 100_000) / cases.length)
 
 interface Answer {
   result: Partial<Record<OutputName, number | number[] | number[][]>>
