@@ -6,6 +6,7 @@ import {
 } from '@asteasolutions/zod-to-openapi'
 import { z } from 'zod'
 import { cautions, warningCodes } from '../api/catalogue/codes.ts'
+import { caseList } from '../api/catalogue/describe.ts'
 import { sizeText } from '../api/http/size-text.ts'
 import { type Operation, type Tag, problemsOf } from '../api/operation.ts'
 import { rolesWith } from '../api/permissions.ts'
@@ -113,7 +114,7 @@ export function documentOf(name: DocumentName, operations: readonly Operation[],
     openapi: '3.1.0',
     info: { ...about[name], version, license: { name: 'Proprietary', identifier: 'LicenseRef-Soakstone' } },
     servers: [{ url: '/' }],
-    tags: [...new Set(own.map((o) => o.tag))].map((tag) => ({ name: tag, description: tags[tag] })),
+    tags: tagsOf(own),
   })
   const codes = {
     'x-problems': problems,
@@ -125,6 +126,18 @@ export function documentOf(name: DocumentName, operations: readonly Operation[],
     ...withUnits(sharedFields(sharedFailures(document as unknown as Json))),
     ...(name === 'openapi' ? codes : {}),
   }
+}
+
+/** By subject; the questions of each case stand together under its id. */
+function tagsOf(own: readonly Operation[]): { name: string; description: string }[] {
+  const asked = new Set(own.flatMap((o) => o.caseId ?? []))
+  const subjects = [...new Set(own.flatMap((o) => (o.caseId ? [] : [o.tag])))]
+  return [
+    ...subjects.map((tag) => ({ name: tag, description: tags[tag] })),
+    ...caseList()
+      .cases.filter(({ id }) => asked.has(id))
+      .map(({ id, summary }) => ({ name: id, description: summary })),
+  ]
 }
 
 type Responses = Record<string, Json>
@@ -165,7 +178,7 @@ function routeOf(o: Operation): RouteConfig {
     method: o.method,
     path: o.path,
     operationId: o.id,
-    tags: [o.tag],
+    tags: [o.caseId ?? o.tag],
     summary: o.summary,
     ...(o.description ? { description: o.description } : {}),
     security: security[o.access],

@@ -4769,6 +4769,8 @@ export interface components {
             /** @enum {string} */
             shape: "grid" | "times" | "places" | "single";
             text: string;
+            /** @description How many values of others one of these is priced as. */
+            cost?: number;
         };
         Contract: {
             [key: string]: unknown;

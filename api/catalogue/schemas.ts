@@ -82,7 +82,15 @@ const fieldSchema = z
   .meta({ id: 'CaseField' })
 
 const outputSchema = z
-  .strictObject({ name: z.enum(outputNames), label: text, symbol: text, unit: text, shape, text })
+  .strictObject({
+    name: z.enum(outputNames),
+    label: text,
+    symbol: text,
+    unit: text,
+    shape,
+    text,
+    cost: z.number().optional().meta({ description: 'How many values of others one of these is priced as.' }),
+  })
   .meta({ id: 'CaseOutput' })
 
 const exampleSchema = z.record(text, z.unknown())

@@ -12,6 +12,14 @@ export interface AnnulusMoment {
   root: number
 }
 
+/** What of a mode an output holds, and how fast that changes along the wall. */
+interface Share {
+  of(mode: Mode): number
+  moved(mode: Mode): number
+}
+/** At a face no place can be moved. */
+const still = () => 0
+
 type Drives = readonly [FaceDrive, FaceDrive]
 const IDLE: FaceDrive = { value: 0, slack: 0 }
 
@@ -39,6 +47,8 @@ export class AnnulusResponse {
   private readonly places: readonly WallPlace[]
   private readonly modes: Mode[]
   private readonly rounding: number
+  /** What the rounding of a radius moves a place by. */
+  private readonly shift: number
   private start: { root: number; body: AnnulusStart } | undefined
   private readonly first: AnnulusStart
   private readonly anchors = new Map<string, Estimate>()
@@ -53,6 +63,7 @@ export class AnnulusResponse {
     this.first = new AnnulusStart(annulus, drives, ROOT_FROM)
     // Beside the roundings of a mode, both radii are rounded, and their difference is the unit of length.
     this.rounding = EPS * (200 + 2 * (2 * annulus.innerRadius + 1))
+    this.shift = 4 * EPS * (annulus.innerRadius + 1)
   }
 
   get terms(): number {
@@ -63,7 +74,7 @@ export class AnnulusResponse {
     const place = this.places[j]!
     if (moment.fourier < SERIES_FROM) return this.early(moment).temperature(place)
     const anchor = this.anchored(`T${j}`, () => this.first.temperature(place))
-    return this.risen(anchor, moment, this.drives, (mode) => mode.values[j]!)
+    return this.risen(anchor, moment, this.drives, { of: (mode) => mode.values[j]!, moved: (mode) => mode.slopes[j]! })
   }
 
   /** Outward, in kelvins a thickness. */
@@ -71,7 +82,7 @@ export class AnnulusResponse {
     const place = this.places[j]!
     if (moment.fourier < SERIES_FROM) return this.early(moment).flux(place)
     const anchor = this.anchored(`q${j}`, () => this.first.flux(place))
-    const slope = (mode: Mode) => mode.slopes[j]!
+    const slope = { of: (mode: Mode) => mode.slopes[j]!, moved: (mode: Mode) => mode.w * mode.values[j]! }
     const end = this.endFlux(place)
     return better(
       this.risen(anchor, moment, this.drives, slope),
@@ -91,7 +102,7 @@ export class AnnulusResponse {
     const parts = (body: AnnulusStart) => [body.nearFlux(face), body.farFlux(face)] as const
     if (moment.fourier < SERIES_FROM) return [...parts(this.early(moment))]
     const j = this.places.length + face
-    const slope = (mode: Mode) => sign * mode.slopes[j]!
+    const slope = { of: (mode: Mode) => sign * mode.slopes[j]!, moved: still }
     const end = this.endFlux({ fromInner: face, fromOuter: 1 - face })
     const [near, far] = ([face, other] as const).map((drive, k) => {
       const anchor = this.anchored(`f${face}${k}`, () => parts(this.first)[k]!)
@@ -108,7 +119,7 @@ export class AnnulusResponse {
   content(moment: AnnulusMoment, face: 0 | 1): Estimate {
     if (moment.fourier < SERIES_FROM) return this.early(moment).content(face)
     const anchor = this.anchored(`Q${face}`, () => this.first.content(face))
-    return this.risen(anchor, moment, this.alone(face), (mode) => mode.content)
+    return this.risen(anchor, moment, this.alone(face), { of: (mode) => mode.content, moved: still })
   }
 
   private alone(face: 0 | 1): Drives {
@@ -129,27 +140,35 @@ export class AnnulusResponse {
   }
 
   /** From the anchor on, each mode having grown since. */
-  private risen(anchor: Estimate, { fourier }: AnnulusMoment, drives: Drives, of: (mode: Mode) => number): Estimate {
+  private risen(anchor: Estimate, { fourier }: AnnulusMoment, drives: Drives, share: Share): Estimate {
     const later = fourier - SERIES_FROM
     const grown = ({ w }: Mode) => (w === 0 ? later : (Math.exp(-w * SERIES_FROM) * -Math.expm1(-w * later)) / w)
-    return this.summed(anchor, SERIES_FROM, drives, (mode) => of(mode) * grown(mode))
+    return this.summed(anchor, SERIES_FROM, drives, share, grown)
   }
 
   /** From the end back, each mode having faded so far. */
-  private faded(end: Estimate, { fourier }: AnnulusMoment, drives: Drives, of: (mode: Mode) => number): Estimate {
+  private faded(end: Estimate, { fourier }: AnnulusMoment, drives: Drives, share: Share): Estimate {
     const left = ({ w }: Mode) => (w === 0 ? 0 : -Math.exp(-w * fourier) / w)
-    return this.summed(end, fourier, drives, (mode) => of(mode) * left(mode))
+    return this.summed(end, fourier, drives, share, left)
   }
 
-  private summed(from: Estimate, fourier: number, drives: Drives, of: (mode: Mode) => number): Estimate {
+  private summed(
+    from: Estimate,
+    fourier: number,
+    drives: Drives,
+    { of, moved }: Share,
+    weight: (mode: Mode) => number,
+  ): Estimate {
     let { value, error } = from
     for (const mode of this.modes) {
-      const factor = of(mode) / mode.norm
+      const factor = weight(mode) / mode.norm
       const relative = this.rounding * (1 + mode.w * fourier)
+      const shift = this.shift * Math.abs(moved(mode))
       drives.forEach((drive, d) => {
         const unit = mode.gains[d]! * factor
-        value += drive.value * unit
-        error += (Math.abs(drive.value) * relative + drive.slack) * Math.abs(unit)
+        const size = Math.abs(of(mode))
+        value += drive.value * unit * of(mode)
+        error += (Math.abs(drive.value) * (relative * size + shift) + drive.slack * size) * Math.abs(unit)
       })
     }
     return { value, error: error + TINY, method: 'eigen-series' }
@@ -160,14 +179,18 @@ export class AnnulusResponse {
     const { innerRadius: a, inner, outer } = this.annulus
     const b = a + 1
     const radius = a + x
-    const end = (d: 0 | 1, unit: number): Estimate => {
+    const end = (d: 0 | 1, unit: number, slope = 0): Estimate => {
       const { value, slack } = this.drives[d]
-      const error = (this.rounding * Math.abs(value) + slack) * Math.abs(unit)
+      const moved = x === 0 || y === 0 ? 0 : this.shift * slope
+      const error = Math.abs(value) * (this.rounding * Math.abs(unit) + moved) + slack * Math.abs(unit)
       return { value: value * unit, error, method: 'eigen-series' }
     }
     if (this.modes[0]?.w === 0) {
       const area = (2 * a + 1) * radius
-      return [end(0, (a * y * (radius + b)) / area), end(1, (-b * x * (radius + a)) / area)]
+      return [
+        end(0, (a * y * (radius + b)) / area, (a * (radius + b + y)) / area),
+        end(1, (-b * x * (radius + a)) / area, (b * (radius + a + x)) / area),
+      ]
     }
     const [s0, l0] = partsOf(inner)
     const [s1, l1] = partsOf(outer)
@@ -182,7 +205,8 @@ export class AnnulusResponse {
     if (this.modes[0]?.w === 0) {
       const anchor = this.anchored(`T${j}`, () => this.first.temperature(this.places[j]!))
       const grown = ({ w }: Mode) => (w === 0 ? 0 : Math.exp(-w * SERIES_FROM) / w)
-      return this.summed(anchor, SERIES_FROM, this.drives, (mode) => mode.values[j]! * grown(mode))
+      const share = { of: (mode: Mode) => mode.values[j]!, moved: (mode: Mode) => mode.slopes[j]! }
+      return this.summed(anchor, SERIES_FROM, this.drives, share, grown)
     }
     const [s0, l0] = partsOf(inner)
     const [s1, l1] = partsOf(outer)

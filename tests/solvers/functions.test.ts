@@ -47,7 +47,7 @@ describe('special functions of the library', () => {
     expect(errorIn(erfc(22.92750178251511), exactErfc(new D(22.92750178251511)))).toBeGreaterThan(500)
     const scaled = (x: number) => Math.exp(-x * x) * erfcx(x)
     for (const x of fc.sample(decades(1e-3, 26), { numRuns: count, seed }))
-      expect(errorIn(scaled(x), exactErfc(new D(x)))).toBeLessThan(13 + 2 * x * x)
+      expect(errorIn(scaled(x), exactErfc(new D(x)))).toBeLessThan(16 + 2 * x * x)
   })
 
   it('ierfcx holds where the plain difference has cancelled', () => {
