@@ -150,10 +150,14 @@ test.each(['slab-convection', 'semi-infinite-convection'])(
     await page.getByLabel('Times').fill('1e17')
     await solveButton(page).click()
     await page.getByRole('region', { name: 'Answer as JSON' }).getByText('100000000000000000').first().waitFor()
-    await page.getByRole('slider', { name: 'Cut A–A at time' }).press('End')
-    expect(await page.getByRole('slider', { name: 'Cut A–A at time' }).getAttribute('aria-valuetext')).toMatch(
-      /^3\.169 × 10⁹ a$/,
-    )
+    // The curve of the example stands until the new one is solved.
+    const cut = page.getByRole('slider', { name: 'Cut A–A at time' })
+    await expect
+      .poll(async () => {
+        await cut.press('End')
+        return cut.getAttribute('aria-valuetext')
+      })
+      .toMatch(/^3\.169 × 10⁹ a$/)
     expect(await page.locator('.state').count()).toBe(0)
     await page.close()
   },
