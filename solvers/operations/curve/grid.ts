@@ -7,7 +7,7 @@ export interface Grid {
 
 /** Points a decade of the first look over time; where the curve changes, each gap is cut to the finer figure. */
 const COARSE = 0.5
-export const PER_DECADE = 3
+export const PER_DECADE = 6
 
 /** Below this no time matters: a body of 1 nm with the largest diffusivity is done at 1e-20 s. */
 const SHORTEST = 1e-22
@@ -16,6 +16,8 @@ const NEAREST = 1e-9
 /** Up to so many stretches each is looked at by decades, beyond it at a few shares of its length. */
 const MANY_STRETCHES = 40
 const fewShares = [1e-3, 0.03, 0.15, 0.4, 0.7]
+/** Shares of the span before its end: a turn between the last two points of a decade would not be seen. */
+const beforeEnd = [0.3, 0.1, 0.03, 0.01, 1e-3]
 /** Points of a cycle. */
 const PER_PERIOD = 24
 
@@ -58,7 +60,8 @@ export function timeGrid(course: Course, from: number, to: number): Grid {
   const { period } = course
   const step = period && period / PER_PERIOD
   const turns = step ? Array.from({ length: Math.ceil((to - from) / step) }, (_, k) => from + k * step) : []
-  const inside = [...points, ...turns].filter((t) => t > from && t < to)
+  const late = many ? [] : beforeEnd.map((share) => to - share * (to - from))
+  const inside = [...points, ...turns, ...late].filter((t) => t > from && t < to)
   return { points: distinct([from, ...inside, to]), breaks: distinct([from, ...instants.filter((t) => t > from), to]) }
 }
 
