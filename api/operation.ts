@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import type { Material } from '../solvers/materials/material.ts'
 import { readBody } from '../solvers/operations/read-body.ts'
-import { parse } from '../solvers/validate.ts'
+import { parse } from '../solvers/statement/validate.ts'
 import type { Deps } from './deps.ts'
 import type { Permission, Reach, Role, StaffPermission, StaffRole } from './permissions.ts'
 import type { ProblemCode } from './problems.ts'

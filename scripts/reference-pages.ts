@@ -3,7 +3,7 @@ import { fileURLToPath } from 'node:url'
 import prettier from 'prettier'
 import { genericMaterials } from '../solvers/materials/generic.ts'
 import { derivedOf, uncertaintyOf } from '../solvers/materials/material.ts'
-import { dimensions } from '../solvers/units.ts'
+import { dimensions } from '../solvers/units/units.ts'
 
 /* Pages of docs/ that are made from what the program reads. Run: npx tsx scripts/reference-pages.ts */
 

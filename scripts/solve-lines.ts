@@ -5,7 +5,7 @@ import { Problem, type ProblemDetails, invalidInput, problemDetails } from '../a
 import { cases } from '../solvers/cases/index.ts'
 import { DomainError } from '../solvers/errors.ts'
 import { operationsOf } from '../solvers/operations/index.ts'
-import { parse } from '../solvers/validate.ts'
+import { parse } from '../solvers/statement/validate.ts'
 import { type Line, linesOf } from './lines.ts'
 
 const lineSchema = z.strictObject({

@@ -1,7 +1,7 @@
 import type { Request, RequestHandler, Response } from 'express'
 import { z } from 'zod'
 import { DomainError } from '../../solvers/errors.ts'
-import { parse } from '../../solvers/validate.ts'
+import { parse } from '../../solvers/statement/validate.ts'
 import type { Deps } from '../deps.ts'
 import { INLINE_BYTES } from '../compute/compute.ts'
 import type { Body, Caller, CallRecord, Context, Operation, OwnMaterials, Upload } from '../operation.ts'

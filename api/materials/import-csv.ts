@@ -1,6 +1,6 @@
 import { parse as parseCsv } from 'csv-parse/sync'
 import { DomainError, type Issue } from '../../solvers/errors.ts'
-import { parse } from '../../solvers/validate.ts'
+import { parse } from '../../solvers/statement/validate.ts'
 import { Problem, invalidInput } from '../problems.ts'
 import { type NewMaterial, newMaterialSchema } from './schemas.ts'
 

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { solid } from '../../solvers/fields.ts'
+import { solid } from '../../solvers/statement/fields.ts'
 import { genericMaterials } from '../../solvers/materials/generic.ts'
 import { type Material, confidences, derivedOf, states, uncertaintyOf } from '../../solvers/materials/material.ts'
 import { materialIdField } from '../ids.ts'

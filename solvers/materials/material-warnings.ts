@@ -1,4 +1,4 @@
-import { figure } from '../validate.ts'
+import { figure } from '../statement/validate.ts'
 import type { Warning } from '../warnings.ts'
 import { genericMaterial } from './generic.ts'
 import { type MaterialUsed, uncertaintyOf } from './material.ts'

@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import type { Case } from '../case.ts'
 import { cautions } from '../cautions.ts'
-import { quantities } from '../quantity.ts'
+import { quantities } from '../statement/quantity.ts'
 import { type Kind, kindsOf } from './chart/curves.ts'
 import { drawingOf } from './chart/drawing.ts'
 import { type Fields, MOST_CURVES, type Paper, type Planned, planOf } from './chart/plan.ts'

@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import { type Case, placeFields } from '../case.ts'
 import type { Issue } from '../errors.ts'
-import { quantity } from '../quantity.ts'
+import { quantity } from '../statement/quantity.ts'
 import { courseOf, extentOf, jointsOf } from './course.ts'
 import { type Crossing, crossingsOf } from './curve/crossing.ts'
 import { overPlaces } from './curve/curve.ts'

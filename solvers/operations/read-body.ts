@@ -1,7 +1,7 @@
 import type { z } from 'zod'
 import { DomainError, type Issue } from '../errors.ts'
-import { readLists, withLists } from '../number-lists.ts'
-import { issuesOf } from '../validate.ts'
+import { readLists, withLists } from '../statement/number-lists.ts'
+import { issuesOf } from '../statement/validate.ts'
 
 /** A body by its schema, its long lists read apart; throws a DomainError with every issue found. */
 export function readBody(

@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { type Case, outputNamesOf, outputOf, placeFields, shapeOf } from '../case.ts'
-import { clockTimes, depths, pointsOf, radii, signedDepths, times } from '../fields.ts'
+import { clockTimes, depths, pointsOf, radii, signedDepths, times } from '../statement/fields.ts'
 import type { OutputName, Shape } from '../outputs.ts'
 import { accuracyScope, boundSchema, compactOf, detailField, headOf, tail } from './envelope.ts'
 

@@ -1,7 +1,7 @@
 import { type Case, type Resolved, countOfPlaces, outputNamesOf, outputOf, placeFields } from '../case.ts'
 import type { Issue } from '../errors.ts'
 import type { OutputName } from '../outputs.ts'
-import { kindOf } from '../validate.ts'
+import { kindOf } from '../statement/validate.ts'
 import { countValues } from './count-values.ts'
 import { refuseDerived, solveWithDerived } from './derived.ts'
 import { asksDimensionless, dimensionlessAnswer, dimensionlessInput, prepareDimensionless } from './dimensionless.ts'

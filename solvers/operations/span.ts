@@ -1,6 +1,6 @@
 import type { Case } from '../case.ts'
 import { DomainError, type Issue } from '../errors.ts'
-import { quantity } from '../quantity.ts'
+import { quantity } from '../statement/quantity.ts'
 import type { Course } from './curve/grid.ts'
 
 /* The span of time that is looked at. */

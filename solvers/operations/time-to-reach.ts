@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import type { Case } from '../case.ts'
 import { DomainError, type Issue } from '../errors.ts'
-import { quantity } from '../quantity.ts'
+import { quantity } from '../statement/quantity.ts'
 import { crossingsOf } from './curve/crossing.ts'
 import { type Curve, overTime } from './curve/curve.ts'
 import { timeGrid } from './curve/grid.ts'

@@ -1,6 +1,6 @@
 import type { z } from 'zod'
 import type { Case } from '../case.ts'
-import { figure, metaOf } from '../validate.ts'
+import { figure, metaOf } from '../statement/validate.ts'
 import type { Warning } from '../warnings.ts'
 
 interface Typical {

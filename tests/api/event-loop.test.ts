@@ -9,6 +9,7 @@ import { type ApiProcess, startProcess } from './harness/processes.ts'
 
 const CONNECTIONS = 8
 const ROUNDS = 2
+const ATTEMPTS = 5
 /** Milliseconds that a call beside them may wait: a busy machine, but no body read on the way. */
 const PATIENCE = 400
 
@@ -59,26 +60,32 @@ test.each(
     'content-type': 'application/json',
     'content-encoding': 'gzip',
   }
-  let under = true
-  const send = async () => {
-    const statuses: number[] = []
-    for (let n = 0; n < ROUNDS; n++) {
-      const answer = await fetch(service.url + path, { method: 'POST', headers, body })
-      await answer.arrayBuffer()
-      statuses.push(answer.status)
+  const once = async () => {
+    let under = true
+    const send = async () => {
+      const statuses: number[] = []
+      for (let n = 0; n < ROUNDS; n++) {
+        const answer = await fetch(service.url + path, { method: 'POST', headers, body })
+        await answer.arrayBuffer()
+        statuses.push(answer.status)
+      }
+      return statuses
     }
-    return statuses
+    const sending = Promise.all(Array.from({ length: CONNECTIONS }, send)).finally(() => (under = false))
+    let longest = 0
+    while (under) {
+      const started = performance.now()
+      expect((await fetch(`${service.url}/healthz`)).status).toBe(200)
+      longest = Math.max(longest, performance.now() - started)
+      await new Promise((resolve) => setTimeout(resolve, 5))
+    }
+    const statuses = (await sending).flat()
+    if (process.env['SHOW']) console.log(`MEASURED ${path} ${bytes} ${name}: ${longest.toFixed(0)} ms, ${statuses}`)
+    expect(statuses.every((status) => status === 400 || status === 422)).toBe(true)
+    return longest
   }
-  const sending = Promise.all(Array.from({ length: CONNECTIONS }, send)).finally(() => (under = false))
-  let longest = 0
-  while (under) {
-    const started = performance.now()
-    expect((await fetch(`${service.url}/healthz`)).status).toBe(200)
-    longest = Math.max(longest, performance.now() - started)
-    await new Promise((resolve) => setTimeout(resolve, 5))
-  }
-  const statuses = (await sending).flat()
-  if (process.env['SHOW']) console.log(`MEASURED ${path} ${bytes} ${name}: ${longest.toFixed(0)} ms, ${statuses}`)
-  expect(statuses.every((status) => status === 400 || status === 422)).toBe(true)
-  expect(longest).toBeLessThan(PATIENCE)
+  // A neighbour on the same machine holds a call up now and then; a body read on the way does so every time.
+  let least = Infinity
+  for (let n = 0; n < ATTEMPTS && least >= PATIENCE; n++) least = Math.min(least, await once())
+  expect(least).toBeLessThan(PATIENCE)
 })

@@ -12,11 +12,11 @@ import {
   refusePoints,
   slowestOf,
   width,
-} from '../../product-case.ts'
-import { driveFields, productWarnings, resolveDrive } from '../../product-drive.ts'
-import { productEnd, filmIn } from '../../product-films.ts'
-import { slabRate } from '../../product-step.ts'
-import { resolveSolid } from '../../solid.ts'
+} from '../../bodies/product-case.ts'
+import { driveFields, productWarnings, resolveDrive } from '../../bodies/product-drive.ts'
+import { productEnd, filmIn } from '../../bodies/product-films.ts'
+import { slabRate } from '../../bodies/product-step.ts'
+import { resolveSolid } from '../../statement/solid.ts'
 import { solve, type BarInput } from './solve.ts'
 
 type Body = BarInput & ProductResolved

@@ -1,5 +1,5 @@
-import { filmIn } from '../../product-films.ts'
-import { type ProductInput, slabFactor, solveProduct } from '../../product-step.ts'
+import { filmIn } from '../../bodies/product-films.ts'
+import { type ProductInput, slabFactor, solveProduct } from '../../bodies/product-step.ts'
 import type { Solution } from '../../solution.ts'
 
 export interface BrickInput extends ProductInput {

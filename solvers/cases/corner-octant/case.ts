@@ -7,10 +7,10 @@ import {
   productOutputs,
   type ProductResolved,
   refusePoints,
-} from '../../product-case.ts'
-import { driveFields, productWarnings, resolveDrive } from '../../product-drive.ts'
-import { productEnd } from '../../product-films.ts'
-import { resolveSolid } from '../../solid.ts'
+} from '../../bodies/product-case.ts'
+import { driveFields, productWarnings, resolveDrive } from '../../bodies/product-drive.ts'
+import { productEnd } from '../../bodies/product-films.ts'
+import { resolveSolid } from '../../statement/solid.ts'
 import { solve } from './solve.ts'
 
 type Body = ProductResolved

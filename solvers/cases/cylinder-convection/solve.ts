@@ -1,4 +1,4 @@
-import { cylinder, type FilmDrive, type RadialStepInput, solveBehindFilm } from '../../radial-step.ts'
+import { cylinder, type FilmDrive, type RadialStepInput, solveBehindFilm } from '../../bodies/radial-step.ts'
 import type { Solution } from '../../solution.ts'
 
 export type CylinderInput = RadialStepInput & FilmDrive

@@ -1,10 +1,10 @@
-import { fieldOutputs, grid, history } from '../../field-outputs.ts'
+import { fieldOutputs, grid, history } from '../../bodies/field-outputs.ts'
 import { type MediumFace, MediumResponse } from '../../math/medium-response.ts'
 import { EPS, type Estimate, TINY } from '../../math/rounding.ts'
 import type { OutputName } from '../../outputs.ts'
-import { fluxOf, type Side } from '../../side.ts'
+import { fluxOf, type Side } from '../../statement/side.ts'
 import type { Solution } from '../../solution.ts'
-import { exactly, scaled } from '../../step-response.ts'
+import { exactly, scaled } from '../../bodies/step-response.ts'
 
 /** What happens at the cylinder: a side of the medium, or a power that enters along it. */
 export type MediumBoundary = Side | { kind: 'line-power'; linePower: number }

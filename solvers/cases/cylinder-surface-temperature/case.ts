@@ -1,6 +1,6 @@
 import { defineCase } from '../../case.ts'
-import { surfaceTemperature } from '../../fields.ts'
-import { cylinder, slowestMode } from '../../radial-step.ts'
+import { surfaceTemperature } from '../../statement/fields.ts'
+import { cylinder, slowestMode } from '../../bodies/radial-step.ts'
 import {
   allRoundOutputs,
   fourierOf,
@@ -9,9 +9,9 @@ import {
   roundAbsentOutputs,
   roundFields,
   roundOutputs,
-} from '../../round-case.ts'
-import { refuseFluxAtStep } from '../../singular.ts'
-import { resolveSolid } from '../../solid.ts'
+} from '../../bodies/round-case.ts'
+import { refuseFluxAtStep } from '../../bodies/singular.ts'
+import { resolveSolid } from '../../statement/solid.ts'
 import { solve, type CylinderInput } from './solve.ts'
 
 type Resolved = CylinderInput & RadialResolved

@@ -1,4 +1,4 @@
-import { cylinder, type HeldDrive, type RadialStepInput, solveHeld } from '../../radial-step.ts'
+import { cylinder, type HeldDrive, type RadialStepInput, solveHeld } from '../../bodies/radial-step.ts'
 import type { Solution } from '../../solution.ts'
 
 export type CylinderInput = RadialStepInput & HeldDrive

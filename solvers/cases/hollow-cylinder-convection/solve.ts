@@ -1,12 +1,12 @@
-import { fieldOutputs, grid, history, profile } from '../../field-outputs.ts'
+import { fieldOutputs, grid, history, profile } from '../../bodies/field-outputs.ts'
 import { type Annulus, annulusModes, type Face } from '../../math/annulus-modes.ts'
 import { type AnnulusMoment, AnnulusResponse } from '../../math/annulus-response.ts'
 import type { FaceDrive } from '../../math/annulus-start.ts'
 import { EPS, type Estimate } from '../../math/rounding.ts'
 import type { OutputName } from '../../outputs.ts'
-import { filmOf, fluxOf, passesNoHeat, type Side, temperatureOf } from '../../side.ts'
+import { filmOf, fluxOf, passesNoHeat, type Side, temperatureOf } from '../../statement/side.ts'
 import type { Solution } from '../../solution.ts'
-import { exactly, scaled } from '../../step-response.ts'
+import { exactly, scaled } from '../../bodies/step-response.ts'
 
 export interface HollowInput {
   conductivity: number

@@ -1,8 +1,8 @@
 import { type Check, defineCase, type Resolved } from '../../case.ts'
-import { initialTemperature, solid } from '../../fields.ts'
-import { quantity } from '../../quantity.ts'
-import { resolveSolid } from '../../solid.ts'
-import { fourierAtNearest, lateForLogarithm, refuseAtSource } from '../../source-radii.ts'
+import { initialTemperature, solid } from '../../statement/fields.ts'
+import { quantity } from '../../statement/quantity.ts'
+import { resolveSolid } from '../../statement/solid.ts'
+import { fourierAtNearest, lateForLogarithm, refuseAtSource } from '../../bodies/source-radii.ts'
 import { solve, type LineSourceInput } from './solve.ts'
 
 interface LineSourceResolved extends LineSourceInput, Resolved {

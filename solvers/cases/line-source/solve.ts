@@ -1,10 +1,10 @@
-import { fieldOutputs, grid } from '../../field-outputs.ts'
+import { fieldOutputs, grid } from '../../bodies/field-outputs.ts'
 import { exponentialIntegral } from '../../math/exponential-integral.ts'
 import { leastError } from '../../math/half-space-pulse.ts'
 import { EPS, type Estimate } from '../../math/rounding.ts'
 import type { OutputName } from '../../outputs.ts'
 import type { Solution } from '../../solution.ts'
-import { exactly, scaled } from '../../step-response.ts'
+import { exactly, scaled } from '../../bodies/step-response.ts'
 
 export interface LineSourceInput {
   conductivity: number

@@ -1,12 +1,12 @@
 import { defineCase, type Resolved } from '../../case.ts'
 import type { Issue } from '../../errors.ts'
-import { film, initialTemperature } from '../../fields.ts'
-import { filmWarnings } from '../../film.ts'
-import { biotWarnings, lumpedNumbers, oneTemperatureWillDo } from '../../lumped-biot.ts'
-import { type LumpedBody, noBody, resolveBody } from '../../lumped-body.ts'
-import { lumpedBody } from '../../lumped-fields.ts'
+import { film, initialTemperature } from '../../statement/fields.ts'
+import { filmWarnings } from '../../statement/film.ts'
+import { biotWarnings, lumpedNumbers, oneTemperatureWillDo } from '../../bodies/lumped-biot.ts'
+import { type LumpedBody, noBody, resolveBody } from '../../bodies/lumped-body.ts'
+import { lumpedBody } from '../../statement/lumped-fields.ts'
 import type { OutputName } from '../../outputs.ts'
-import { quantity } from '../../quantity.ts'
+import { quantity } from '../../statement/quantity.ts'
 import { solve, type LumpedInput } from './solve.ts'
 
 interface LumpedResolved extends LumpedInput, Resolved {

@@ -1,7 +1,7 @@
 import { EPS, type Estimate, lastPlaces, TINY } from '../../math/rounding.ts'
 import type { OutputName } from '../../outputs.ts'
 import type { Output, Solution } from '../../solution.ts'
-import { type StepResponse, stepOutputs } from '../../step-response.ts'
+import { type StepResponse, stepOutputs } from '../../bodies/step-response.ts'
 
 export interface LumpedInput {
   /** Heat capacity of what the heat is counted for: the body, or its m2 or m. J/K, J/(m2.K) or J/(m.K). */

@@ -1,4 +1,4 @@
-import { type Field, fieldOutputs, grid, history } from '../../field-outputs.ts'
+import { type Field, fieldOutputs, grid, history } from '../../bodies/field-outputs.ts'
 import { type Ambient, cosineShare, rampShare, rangeSoFar, stepShare } from '../../math/lumped-response.ts'
 import { EPS, type Estimate } from '../../math/rounding.ts'
 import type { OutputName } from '../../outputs.ts'

@@ -1,9 +1,9 @@
 import { defineCase, type Resolved } from '../../case.ts'
 import type { Issue } from '../../errors.ts'
-import { initialTemperature, solid } from '../../fields.ts'
-import { quantity } from '../../quantity.ts'
-import { resolveSolid } from '../../solid.ts'
-import { fourierAtNearest, refuseAtSource } from '../../source-radii.ts'
+import { initialTemperature, solid } from '../../statement/fields.ts'
+import { quantity } from '../../statement/quantity.ts'
+import { resolveSolid } from '../../statement/solid.ts'
+import { fourierAtNearest, refuseAtSource } from '../../bodies/source-radii.ts'
 import { solve, type PointSourceInput } from './solve.ts'
 
 interface PointSourceResolved extends PointSourceInput, Resolved {

@@ -1,10 +1,10 @@
 import erfcx from '@stdlib/math-base-special-erfcx'
-import { fieldOutputs, grid } from '../../field-outputs.ts'
+import { fieldOutputs, grid } from '../../bodies/field-outputs.ts'
 import { decayOf, FAR, leastError, responseError } from '../../math/half-space-pulse.ts'
 import { EPS, type Estimate } from '../../math/rounding.ts'
 import type { OutputName } from '../../outputs.ts'
 import type { Solution } from '../../solution.ts'
-import { exactly } from '../../step-response.ts'
+import { exactly } from '../../bodies/step-response.ts'
 
 export interface PointSourceInput {
   conductivity: number

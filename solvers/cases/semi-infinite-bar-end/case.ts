@@ -1,6 +1,6 @@
 import { defineCase } from '../../case.ts'
 import type { Issue } from '../../errors.ts'
-import { radius, thickness } from '../../fields.ts'
+import { radius, thickness } from '../../statement/fields.ts'
 import {
   absentHeat,
   ENDLESS,
@@ -14,10 +14,10 @@ import {
   rangeAcross,
   refusePoints,
   width,
-} from '../../product-case.ts'
-import { driveFields, productWarnings, resolveDrive } from '../../product-drive.ts'
-import { productEnd } from '../../product-films.ts'
-import { resolveSolid } from '../../solid.ts'
+} from '../../bodies/product-case.ts'
+import { driveFields, productWarnings, resolveDrive } from '../../bodies/product-drive.ts'
+import { productEnd } from '../../bodies/product-films.ts'
+import { resolveSolid } from '../../statement/solid.ts'
 import { type BarEndInput, type Section, solve } from './solve.ts'
 
 const sectionFields = {

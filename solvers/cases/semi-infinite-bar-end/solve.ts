@@ -1,5 +1,11 @@
-import { filmIn } from '../../product-films.ts'
-import { cylinderFactor, endlessFactor, type ProductInput, slabFactor, solveProduct } from '../../product-step.ts'
+import { filmIn } from '../../bodies/product-films.ts'
+import {
+  cylinderFactor,
+  endlessFactor,
+  type ProductInput,
+  slabFactor,
+  solveProduct,
+} from '../../bodies/product-step.ts'
 import type { Solution } from '../../solution.ts'
 
 /** The section across a bar that goes on from its end: round, a plate, or a rectangle. */

@@ -1,6 +1,6 @@
 import erf from '@stdlib/math-base-special-erf'
 import erfcx from '@stdlib/math-base-special-erfcx'
-import { constant, fieldOutputs, grid, history } from '../../field-outputs.ts'
+import { constant, fieldOutputs, grid, history } from '../../bodies/field-outputs.ts'
 import {
   completed,
   completedError,
@@ -15,7 +15,7 @@ import { decayOf, leastError, responseError } from '../../math/half-space-pulse.
 import { EPS, type Estimate } from '../../math/rounding.ts'
 import type { OutputName } from '../../outputs.ts'
 import type { Solution } from '../../solution.ts'
-import { exactly } from '../../step-response.ts'
+import { exactly } from '../../bodies/step-response.ts'
 
 export interface ContactBody {
   diffusivity: number

@@ -1,10 +1,10 @@
 import { defineCase, type Resolved } from '../../case.ts'
 import type { Issue } from '../../errors.ts'
-import { film, imposedHeatFlux, initialTemperature, solid } from '../../fields.ts'
-import { filmWarnings } from '../../film.ts'
-import { changeHasArrived, penetrationDepth } from '../../half-space-reach.ts'
+import { film, imposedHeatFlux, initialTemperature, solid } from '../../statement/fields.ts'
+import { filmWarnings } from '../../statement/film.ts'
+import { changeHasArrived, penetrationDepth } from '../../bodies/half-space-reach.ts'
 import type { OutputName } from '../../outputs.ts'
-import { resolveSolid } from '../../solid.ts'
+import { resolveSolid } from '../../statement/solid.ts'
 import { solve, type HalfSpaceInput } from './solve.ts'
 
 type HalfSpaceResolved = HalfSpaceInput & Resolved

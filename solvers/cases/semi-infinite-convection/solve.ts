@@ -11,7 +11,7 @@ import {
 import { EPS, TINY } from '../../math/rounding.ts'
 import type { OutputName } from '../../outputs.ts'
 import type { Solution } from '../../solution.ts'
-import { exactly, scaled, type StepResponse, stepOutputs, untouched } from '../../step-response.ts'
+import { exactly, scaled, type StepResponse, stepOutputs, untouched } from '../../bodies/step-response.ts'
 import { solveWithFlux } from './with-flux.ts'
 
 export interface HalfSpaceInput {

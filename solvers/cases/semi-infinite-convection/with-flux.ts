@@ -1,4 +1,4 @@
-import { fieldOutputs, grid, history } from '../../field-outputs.ts'
+import { fieldOutputs, grid, history } from '../../bodies/field-outputs.ts'
 import {
   completed,
   completedError,
@@ -10,7 +10,7 @@ import {
 } from '../../math/convective-half-space.ts'
 import { EPS, type Estimate, TINY } from '../../math/rounding.ts'
 import type { Solution } from '../../solution.ts'
-import { exactly, type StepResponse } from '../../step-response.ts'
+import { exactly, type StepResponse } from '../../bodies/step-response.ts'
 import type { HalfSpaceInput } from './solve.ts'
 
 /** Film and absorbed flux together: the fractions are the film's, the rest is the sum of what the two do. */

@@ -1,9 +1,9 @@
 import { defineCase, type Resolved } from '../../case.ts'
-import { cycleEcho, resolveCycle } from '../../cycle.ts'
-import { cycle, film, solid } from '../../fields.ts'
-import { filmWarnings } from '../../film.ts'
-import { cycleIsFelt, periodicAbsent, periodicOutputs } from '../../periodic-half-space.ts'
-import { resolveSolid } from '../../solid.ts'
+import { cycleEcho, resolveCycle } from '../../statement/cycle.ts'
+import { cycle, film, solid } from '../../statement/fields.ts'
+import { filmWarnings } from '../../statement/film.ts'
+import { cycleIsFelt, periodicAbsent, periodicOutputs } from '../../bodies/periodic-half-space.ts'
+import { resolveSolid } from '../../statement/solid.ts'
 import { type AmbientInput, solve } from './solve.ts'
 
 type AmbientResolved = AmbientInput & Resolved

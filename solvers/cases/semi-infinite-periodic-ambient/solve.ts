@@ -1,4 +1,4 @@
-import { dampingDepthOf, type PeriodicInput, solvePeriodic } from '../../periodic-half-space.ts'
+import { dampingDepthOf, type PeriodicInput, solvePeriodic } from '../../bodies/periodic-half-space.ts'
 import type { Solution } from '../../solution.ts'
 
 export interface AmbientInput extends PeriodicInput {

@@ -1,8 +1,8 @@
 import { defineCase, type Resolved } from '../../case.ts'
-import { cycleEcho, resolveCycle } from '../../cycle.ts'
-import { cycle, solid } from '../../fields.ts'
-import { cycleIsFelt, type PeriodicInput, periodicAbsent, periodicOutputs } from '../../periodic-half-space.ts'
-import { resolveSolid } from '../../solid.ts'
+import { cycleEcho, resolveCycle } from '../../statement/cycle.ts'
+import { cycle, solid } from '../../statement/fields.ts'
+import { cycleIsFelt, type PeriodicInput, periodicAbsent, periodicOutputs } from '../../bodies/periodic-half-space.ts'
+import { resolveSolid } from '../../statement/solid.ts'
 import { solve } from './solve.ts'
 
 type PeriodicResolved = PeriodicInput & Resolved

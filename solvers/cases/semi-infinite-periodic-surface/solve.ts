@@ -1,4 +1,4 @@
-import { type PeriodicInput, solvePeriodic } from '../../periodic-half-space.ts'
+import { type PeriodicInput, solvePeriodic } from '../../bodies/periodic-half-space.ts'
 import type { Solution } from '../../solution.ts'
 
 /**

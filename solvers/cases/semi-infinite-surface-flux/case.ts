@@ -1,8 +1,8 @@
 import { defineCase, type Resolved } from '../../case.ts'
-import { imposedHeatFlux, initialTemperature, solid } from '../../fields.ts'
-import { changeHasArrived, penetrationDepth } from '../../half-space-reach.ts'
-import { quantity } from '../../quantity.ts'
-import { resolveSolid } from '../../solid.ts'
+import { imposedHeatFlux, initialTemperature, solid } from '../../statement/fields.ts'
+import { changeHasArrived, penetrationDepth } from '../../bodies/half-space-reach.ts'
+import { quantity } from '../../statement/quantity.ts'
+import { resolveSolid } from '../../statement/solid.ts'
 import { solve, type HalfSpaceInput } from './solve.ts'
 
 type HalfSpaceResolved = HalfSpaceInput & Resolved

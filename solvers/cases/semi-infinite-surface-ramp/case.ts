@@ -1,9 +1,9 @@
 import { defineCase, type Resolved } from '../../case.ts'
-import { initialTemperature, solid } from '../../fields.ts'
-import { changeHasArrived, penetrationDepth } from '../../half-space-reach.ts'
-import { quantity } from '../../quantity.ts'
-import { resolveSolid } from '../../solid.ts'
-import { rampRate } from '../../ramp.ts'
+import { initialTemperature, solid } from '../../statement/fields.ts'
+import { changeHasArrived, penetrationDepth } from '../../bodies/half-space-reach.ts'
+import { quantity } from '../../statement/quantity.ts'
+import { resolveSolid } from '../../statement/solid.ts'
+import { rampRate } from '../../statement/ramp.ts'
 import { solve, type HalfSpaceInput } from './solve.ts'
 
 type HalfSpaceResolved = HalfSpaceInput & Resolved

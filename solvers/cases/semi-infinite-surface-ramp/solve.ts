@@ -1,10 +1,10 @@
-import { fieldOutputs, grid, history } from '../../field-outputs.ts'
+import { fieldOutputs, grid, history } from '../../bodies/field-outputs.ts'
 import { etaOf, rampAfter, rampDuring, rootAfter, rootAfterAtFace, rootDuring } from '../../math/half-space-drives.ts'
 import { afterPulse } from '../../math/half-space-pulse.ts'
 import { EPS, type Estimate } from '../../math/rounding.ts'
 import type { OutputName } from '../../outputs.ts'
 import type { Solution } from '../../solution.ts'
-import { exactly, scaled } from '../../step-response.ts'
+import { exactly, scaled } from '../../bodies/step-response.ts'
 
 export interface HalfSpaceInput {
   conductivity: number

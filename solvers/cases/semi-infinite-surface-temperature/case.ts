@@ -1,8 +1,8 @@
 import { defineCase, type Resolved } from '../../case.ts'
-import { initialTemperature, solid, surfaceTemperature } from '../../fields.ts'
-import { changeHasArrived, penetrationDepth } from '../../half-space-reach.ts'
-import { refuseFluxAtStep } from '../../singular.ts'
-import { resolveSolid } from '../../solid.ts'
+import { initialTemperature, solid, surfaceTemperature } from '../../statement/fields.ts'
+import { changeHasArrived, penetrationDepth } from '../../bodies/half-space-reach.ts'
+import { refuseFluxAtStep } from '../../bodies/singular.ts'
+import { resolveSolid } from '../../statement/solid.ts'
 import { solve, type HalfSpaceInput } from './solve.ts'
 
 type HalfSpaceResolved = HalfSpaceInput & Resolved

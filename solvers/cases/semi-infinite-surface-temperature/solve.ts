@@ -3,7 +3,7 @@ import erfcx from '@stdlib/math-base-special-erfcx'
 import { EPS, type Estimate, TINY } from '../../math/rounding.ts'
 import type { OutputName } from '../../outputs.ts'
 import type { Solution } from '../../solution.ts'
-import { exactly, type StepResponse, stepOutputs } from '../../step-response.ts'
+import { exactly, type StepResponse, stepOutputs } from '../../bodies/step-response.ts'
 
 export interface HalfSpaceInput {
   conductivity: number

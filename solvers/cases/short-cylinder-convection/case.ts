@@ -1,5 +1,5 @@
 import { defineCase } from '../../case.ts'
-import { radius } from '../../fields.ts'
+import { radius } from '../../statement/fields.ts'
 import {
   absentFluxes,
   closedOutputs,
@@ -12,11 +12,11 @@ import {
   rangeAcross,
   refusePoints,
   slowestOf,
-} from '../../product-case.ts'
-import { driveFields, productWarnings, resolveDrive } from '../../product-drive.ts'
-import { productEnd, filmIn } from '../../product-films.ts'
-import { cylinderRate, slabRate } from '../../product-step.ts'
-import { resolveSolid } from '../../solid.ts'
+} from '../../bodies/product-case.ts'
+import { driveFields, productWarnings, resolveDrive } from '../../bodies/product-drive.ts'
+import { productEnd, filmIn } from '../../bodies/product-films.ts'
+import { cylinderRate, slabRate } from '../../bodies/product-step.ts'
+import { resolveSolid } from '../../statement/solid.ts'
 import { solve, type ShortCylinderInput } from './solve.ts'
 
 type Body = ShortCylinderInput & ProductResolved

@@ -1,6 +1,6 @@
-import { filmIn } from '../../product-films.ts'
-import { cylinderFactor, type ProductInput, slabFactor, solveProduct } from '../../product-step.ts'
-import { cylinder } from '../../radial-step.ts'
+import { filmIn } from '../../bodies/product-films.ts'
+import { cylinderFactor, type ProductInput, slabFactor, solveProduct } from '../../bodies/product-step.ts'
+import { cylinder } from '../../bodies/radial-step.ts'
 import type { Solution } from '../../solution.ts'
 
 export interface ShortCylinderInput extends ProductInput {

@@ -1,8 +1,8 @@
 import { defineCase, type Resolved } from '../../case.ts'
-import { exposedFaces, film, initialTemperature, solid, thickness } from '../../fields.ts'
-import { filmWarnings } from '../../film.ts'
-import { resolveSolid } from '../../solid.ts'
-import { characteristicLength } from '../../slab-step.ts'
+import { exposedFaces, film, initialTemperature, solid, thickness } from '../../statement/fields.ts'
+import { filmWarnings } from '../../statement/film.ts'
+import { resolveSolid } from '../../statement/solid.ts'
+import { characteristicLength } from '../../bodies/slab-step.ts'
 import { solve, type SlabInput } from './solve.ts'
 
 type SlabResolved = SlabInput & Resolved

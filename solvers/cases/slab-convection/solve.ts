@@ -1,8 +1,8 @@
-import { momentsOf, shortestOf } from '../../body-step.ts'
+import { momentsOf, shortestOf } from '../../bodies/body-step.ts'
 import { SlabFilm } from '../../math/slab-film.ts'
-import { characteristicLength, slabPlaces, type SlabStepInput, solveSlab } from '../../slab-step.ts'
+import { characteristicLength, slabPlaces, type SlabStepInput, solveSlab } from '../../bodies/slab-step.ts'
 import type { Solution } from '../../solution.ts'
-import { stepOutputs, untouched } from '../../step-response.ts'
+import { stepOutputs, untouched } from '../../bodies/step-response.ts'
 
 export interface SlabInput extends SlabStepInput {
   filmCoefficient: number

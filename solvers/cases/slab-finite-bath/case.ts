@@ -1,11 +1,11 @@
 import { defineCase, type Resolved } from '../../case.ts'
-import { exposedFaces, film, initialTemperature, solid, thickness } from '../../fields.ts'
-import { filmWarnings } from '../../film.ts'
+import { exposedFaces, film, initialTemperature, solid, thickness } from '../../statement/fields.ts'
+import { filmWarnings } from '../../statement/film.ts'
 import { bathModes } from '../../math/bath-roots.ts'
-import { quantity } from '../../quantity.ts'
-import { refuseFluxAtStep } from '../../singular.ts'
-import { resolveSolid } from '../../solid.ts'
-import { insideCheck } from '../../two-sided-case.ts'
+import { quantity } from '../../statement/quantity.ts'
+import { refuseFluxAtStep } from '../../bodies/singular.ts'
+import { resolveSolid } from '../../statement/solid.ts'
+import { insideCheck } from '../../bodies/two-sided-case.ts'
 import { bathLength, type BathInput, biotOf, ratioOf, solve } from './solve.ts'
 
 type BathResolved = BathInput & Resolved

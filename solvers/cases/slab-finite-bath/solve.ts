@@ -1,9 +1,9 @@
-import { constant, fieldOutputs, grid, history } from '../../field-outputs.ts'
+import { constant, fieldOutputs, grid, history } from '../../bodies/field-outputs.ts'
 import { BathSlab, type BathValues } from '../../math/bath-slab.ts'
 import { EPS, type Estimate } from '../../math/rounding.ts'
 import type { OutputName } from '../../outputs.ts'
 import type { Solution } from '../../solution.ts'
-import { exactly, scaled } from '../../step-response.ts'
+import { exactly, scaled } from '../../bodies/step-response.ts'
 
 export interface BathInput {
   conductivity: number

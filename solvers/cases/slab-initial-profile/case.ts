@@ -1,9 +1,9 @@
 import { defineCase, type Resolved } from '../../case.ts'
-import { solid, thickness } from '../../fields.ts'
-import { isSound } from '../../initial-profile.ts'
-import { initialProfile } from '../../initial-profile-field.ts'
-import { sideField } from '../../side-field.ts'
-import { resolveSolid } from '../../solid.ts'
+import { solid, thickness } from '../../statement/fields.ts'
+import { isSound } from '../../statement/initial-profile.ts'
+import { initialProfile } from '../../statement/initial-profile-field.ts'
+import { sideField } from '../../statement/side-field.ts'
+import { resolveSolid } from '../../statement/solid.ts'
 import {
   balanceCheck,
   insideCheck,
@@ -12,7 +12,7 @@ import {
   refuseSteady,
   sideWarnings,
   twoSidedNumbers,
-} from '../../two-sided-case.ts'
+} from '../../bodies/two-sided-case.ts'
 import { problemOf, type ProfileInput, solve } from './solve.ts'
 
 type ProfileResolved = ProfileInput & Resolved

@@ -1,12 +1,18 @@
 import { z } from 'zod'
 import { defineCase, type Resolved } from '../../case.ts'
-import { exposedFaces, film, solid, thickness } from '../../fields.ts'
-import { filmWarnings } from '../../film.ts'
-import { resolveStart } from '../../initial-profile.ts'
-import { start } from '../../initial-profile-field.ts'
-import { quantity } from '../../quantity.ts'
-import { resolveSolid } from '../../solid.ts'
-import { balanceCheck, insideCheck, refuseFluxAtJump, refuseSteady, twoSidedNumbers } from '../../two-sided-case.ts'
+import { exposedFaces, film, solid, thickness } from '../../statement/fields.ts'
+import { filmWarnings } from '../../statement/film.ts'
+import { resolveStart } from '../../statement/initial-profile.ts'
+import { start } from '../../statement/initial-profile-field.ts'
+import { quantity } from '../../statement/quantity.ts'
+import { resolveSolid } from '../../statement/solid.ts'
+import {
+  balanceCheck,
+  insideCheck,
+  refuseFluxAtJump,
+  refuseSteady,
+  twoSidedNumbers,
+} from '../../bodies/two-sided-case.ts'
 import type { Warning } from '../../warnings.ts'
 import { type InternalHeatInput, lengthOf, problemOf, releasedBy, solve } from './solve.ts'
 

@@ -1,11 +1,11 @@
-import { grid, history } from '../../field-outputs.ts'
-import { profileOf, type Start } from '../../initial-profile.ts'
+import { grid, history } from '../../bodies/field-outputs.ts'
+import { profileOf, type Start } from '../../statement/initial-profile.ts'
 import { EPS, type Estimate } from '../../math/rounding.ts'
 import type { OutputName } from '../../outputs.ts'
-import type { Side } from '../../side.ts'
+import type { Side } from '../../statement/side.ts'
 import type { Solution } from '../../solution.ts'
-import type { TwoSidedProblem } from '../../two-sided.ts'
-import { solveTwoSided } from '../../two-sided-outputs.ts'
+import type { TwoSidedProblem } from '../../bodies/two-sided.ts'
+import { solveTwoSided } from '../../bodies/two-sided-outputs.ts'
 
 export type HeatSource =
   | { kind: 'constant'; powerDensity: number }

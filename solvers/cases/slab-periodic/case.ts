@@ -1,10 +1,10 @@
 import { type Check, defineCase, type Resolved } from '../../case.ts'
-import { cycleEcho, resolveCycle } from '../../cycle.ts'
-import { cycle, exposedFaces, film, solid, thickness } from '../../fields.ts'
-import { filmWarnings } from '../../film.ts'
+import { cycleEcho, resolveCycle } from '../../statement/cycle.ts'
+import { cycle, exposedFaces, film, solid, thickness } from '../../statement/fields.ts'
+import { filmWarnings } from '../../statement/film.ts'
 import { faceOf } from '../../math/two-sided-body.ts'
 import { twoSidedModes } from '../../math/two-sided-modes.ts'
-import { resolveSolid } from '../../solid.ts'
+import { resolveSolid } from '../../statement/solid.ts'
 import { dampingOf, type SlabCycleInput, solve } from './solve.ts'
 
 type SlabCycleResolved = SlabCycleInput & Resolved

@@ -1,4 +1,4 @@
-import { constant, fieldOutputs, grid, history, profile } from '../../field-outputs.ts'
+import { constant, fieldOutputs, grid, history, profile } from '../../bodies/field-outputs.ts'
 import { type Cycle, phaseAt, waveAt } from '../../math/cycle-phase.ts'
 import { EPS, type Estimate, TINY } from '../../math/rounding.ts'
 import { fluxInCycle, type Follower, temperatureInCycle, throughFilm } from '../../math/slab-cycle.ts'

@@ -1,9 +1,9 @@
 import { defineCase, type Resolved } from '../../case.ts'
-import { imposedHeatFlux, initialTemperature, solid, thickness } from '../../fields.ts'
-import { quantity } from '../../quantity.ts'
-import { passesNoHeat } from '../../side.ts'
-import { sideField } from '../../side-field.ts'
-import { resolveSolid } from '../../solid.ts'
+import { imposedHeatFlux, initialTemperature, solid, thickness } from '../../statement/fields.ts'
+import { quantity } from '../../statement/quantity.ts'
+import { passesNoHeat } from '../../statement/side.ts'
+import { sideField } from '../../statement/side-field.ts'
+import { resolveSolid } from '../../statement/solid.ts'
 import {
   balanceCheck,
   insideCheck,
@@ -12,7 +12,7 @@ import {
   refuseSteady,
   sideWarnings,
   twoSidedNumbers,
-} from '../../two-sided-case.ts'
+} from '../../bodies/two-sided-case.ts'
 import { problemOf, solve, type SurfaceFluxInput } from './solve.ts'
 
 type SurfaceFluxResolved = SurfaceFluxInput & Resolved

@@ -1,8 +1,8 @@
 import type { OutputName } from '../../outputs.ts'
-import type { Side } from '../../side.ts'
+import type { Side } from '../../statement/side.ts'
 import type { Solution } from '../../solution.ts'
-import type { TwoSidedProblem } from '../../two-sided.ts'
-import { solveTwoSided, twoSidedScale } from '../../two-sided-outputs.ts'
+import type { TwoSidedProblem } from '../../bodies/two-sided.ts'
+import { solveTwoSided, twoSidedScale } from '../../bodies/two-sided-outputs.ts'
 
 export interface SurfaceFluxInput {
   conductivity: number

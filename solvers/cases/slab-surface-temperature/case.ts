@@ -1,8 +1,8 @@
 import { defineCase, type Resolved } from '../../case.ts'
-import { exposedFaces, initialTemperature, solid, surfaceTemperature, thickness } from '../../fields.ts'
-import { refuseFluxAtStep } from '../../singular.ts'
-import { characteristicLength } from '../../slab-step.ts'
-import { resolveSolid } from '../../solid.ts'
+import { exposedFaces, initialTemperature, solid, surfaceTemperature, thickness } from '../../statement/fields.ts'
+import { refuseFluxAtStep } from '../../bodies/singular.ts'
+import { characteristicLength } from '../../bodies/slab-step.ts'
+import { resolveSolid } from '../../statement/solid.ts'
 import { solve, type SlabInput } from './solve.ts'
 
 type SlabResolved = SlabInput & Resolved

@@ -1,6 +1,6 @@
-import { momentsOf } from '../../body-step.ts'
+import { momentsOf } from '../../bodies/body-step.ts'
 import { SlabFixed } from '../../math/slab-fixed.ts'
-import { characteristicLength, slabPlaces, type SlabStepInput, solveSlab } from '../../slab-step.ts'
+import { characteristicLength, slabPlaces, type SlabStepInput, solveSlab } from '../../bodies/slab-step.ts'
 import type { Solution } from '../../solution.ts'
 
 export interface SlabInput extends SlabStepInput {

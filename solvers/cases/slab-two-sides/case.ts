@@ -1,9 +1,9 @@
 import { defineCase, type Resolved } from '../../case.ts'
-import { solid, thickness } from '../../fields.ts'
-import { resolveStart } from '../../initial-profile.ts'
-import { start } from '../../initial-profile-field.ts'
-import { sideField } from '../../side-field.ts'
-import { resolveSolid } from '../../solid.ts'
+import { solid, thickness } from '../../statement/fields.ts'
+import { resolveStart } from '../../statement/initial-profile.ts'
+import { start } from '../../statement/initial-profile-field.ts'
+import { sideField } from '../../statement/side-field.ts'
+import { resolveSolid } from '../../statement/solid.ts'
 import {
   balanceCheck,
   insideCheck,
@@ -12,7 +12,7 @@ import {
   refuseSteady,
   sideWarnings,
   twoSidedNumbers,
-} from '../../two-sided-case.ts'
+} from '../../bodies/two-sided-case.ts'
 import { problemOf, solve, type TwoSidesInput } from './solve.ts'
 
 type TwoSidesResolved = TwoSidesInput & Resolved

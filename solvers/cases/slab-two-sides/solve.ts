@@ -1,9 +1,9 @@
-import type { Start } from '../../initial-profile.ts'
+import type { Start } from '../../statement/initial-profile.ts'
 import type { OutputName } from '../../outputs.ts'
-import type { Side } from '../../side.ts'
+import type { Side } from '../../statement/side.ts'
 import type { Solution } from '../../solution.ts'
-import type { TwoSidedProblem } from '../../two-sided.ts'
-import { solveTwoSided, twoSidedScale } from '../../two-sided-outputs.ts'
+import type { TwoSidedProblem } from '../../bodies/two-sided.ts'
+import { solveTwoSided, twoSidedScale } from '../../bodies/two-sided-outputs.ts'
 
 export type TwoSidesInput = Start & {
   conductivity: number

@@ -1,7 +1,7 @@
 import { defineCase } from '../../case.ts'
-import { film } from '../../fields.ts'
-import { filmWarnings } from '../../film.ts'
-import { sphere, slowestMode } from '../../radial-step.ts'
+import { film } from '../../statement/fields.ts'
+import { filmWarnings } from '../../statement/film.ts'
+import { sphere, slowestMode } from '../../bodies/radial-step.ts'
 import {
   allRoundOutputs,
   fourierOf,
@@ -11,8 +11,8 @@ import {
   roundAbsentOutputs,
   roundFields,
   roundOutputs,
-} from '../../round-case.ts'
-import { resolveSolid } from '../../solid.ts'
+} from '../../bodies/round-case.ts'
+import { resolveSolid } from '../../statement/solid.ts'
 import { solve, type SphereInput } from './solve.ts'
 
 type Resolved = SphereInput & RadialResolved

@@ -1,4 +1,4 @@
-import { sphere, type FilmDrive, type RadialStepInput, solveBehindFilm } from '../../radial-step.ts'
+import { sphere, type FilmDrive, type RadialStepInput, solveBehindFilm } from '../../bodies/radial-step.ts'
 import type { Solution } from '../../solution.ts'
 
 export type SphereInput = RadialStepInput & FilmDrive

@@ -1,4 +1,4 @@
-import { sphere, type HeldDrive, type RadialStepInput, solveHeld } from '../../radial-step.ts'
+import { sphere, type HeldDrive, type RadialStepInput, solveHeld } from '../../bodies/radial-step.ts'
 import type { Solution } from '../../solution.ts'
 
 export type SphereInput = RadialStepInput & HeldDrive

@@ -1,6 +1,6 @@
 import { type Case, placeFields, type Resolved } from '../../case.ts'
 import type { Bound } from '../../solution.ts'
-import { figure } from '../../validate.ts'
+import { figure } from '../../statement/validate.ts'
 import { once } from '../once.ts'
 import type { Drawing, Series } from './drawing.ts'
 

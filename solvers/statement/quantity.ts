@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { asNumberList } from './number-lists.ts'
-import { acceptedUnits } from './units.ts'
+import { acceptedUnits } from '../units/units.ts'
 import { figure } from './validate.ts'
 
 /** A physical quantity as a field: how it is named, what it may be and what it usually is. */

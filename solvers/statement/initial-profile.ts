@@ -1,4 +1,4 @@
-import type { Issue } from './errors.ts'
+import type { Issue } from '../errors.ts'
 
 /** Temperatures along a body before the change, linear between the depths; the same depth twice is a jump. */
 export interface InitialProfile {

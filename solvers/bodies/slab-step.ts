@@ -1,6 +1,6 @@
 import { type BodyStepInput, type Drive, solveBody } from './body-step.ts'
-import type { Moment, UnitBody, UnitPlaces } from './math/unit-body.ts'
-import type { Solution } from './solution.ts'
+import type { Moment, UnitBody, UnitPlaces } from '../math/unit-body.ts'
+import type { Solution } from '../solution.ts'
 
 /** What the slab cases share: a uniform body, one drive, one exposed face or two alike. */
 export interface SlabStepInput extends BodyStepInput {

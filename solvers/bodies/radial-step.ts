@@ -1,9 +1,9 @@
 import { type BodyStepInput, momentsOf, shortestOf, solveBody } from './body-step.ts'
-import type { Numbers } from './case.ts'
-import { UnitCylinder } from './math/cylinder.ts'
-import { UnitSphere } from './math/sphere.ts'
-import type { FilmedBody, UnitPlaces } from './math/unit-body.ts'
-import type { Solution } from './solution.ts'
+import type { Numbers } from '../case.ts'
+import { UnitCylinder } from '../math/cylinder.ts'
+import { UnitSphere } from '../math/sphere.ts'
+import type { FilmedBody, UnitPlaces } from '../math/unit-body.ts'
+import type { Solution } from '../solution.ts'
 import { stepOutputs, untouched } from './step-response.ts'
 
 /** What cylinders and spheres share: a uniform body, one drive, and places by their depths or their radii. */

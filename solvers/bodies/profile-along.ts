@@ -1,5 +1,5 @@
-import type { InitialProfile } from './initial-profile.ts'
-import type { Place, Rise } from './math/two-sided-body.ts'
+import type { InitialProfile } from '../statement/initial-profile.ts'
+import type { Place, Rise } from '../math/two-sided-body.ts'
 
 /** The pieces of a profile, above its first temperature and along a body of length 1; none where it is uniform. */
 export function risesOf({ depths, temperatures }: InitialProfile, length: number): Rise[] {

@@ -1,6 +1,6 @@
-import { type Estimate, EPS, lastPlaces, TINY } from './math/rounding.ts'
-import type { OutputName } from './outputs.ts'
-import type { Bound, Method, Output, Solution } from './solution.ts'
+import { type Estimate, EPS, lastPlaces, TINY } from '../math/rounding.ts'
+import type { OutputName } from '../outputs.ts'
+import type { Bound, Method, Output, Solution } from '../solution.ts'
 
 export type Share = Estimate & { of: 'remaining' | 'completed' }
 

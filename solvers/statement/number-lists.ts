@@ -1,7 +1,7 @@
 import { z } from 'zod'
-import { type Issue, MAX_ISSUES } from './errors.ts'
-import { OwnMaterial } from './materials/own-material.ts'
-import { readStated } from './units-read.ts'
+import { type Issue, MAX_ISSUES } from '../errors.ts'
+import { OwnMaterial } from '../materials/own-material.ts'
+import { readStated } from '../units/read.ts'
 import { issueAt, issuesOf, metaOf, shapeFor, unwrap } from './validate.ts'
 
 interface NumberList {

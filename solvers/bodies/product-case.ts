@@ -1,10 +1,10 @@
 import { z } from 'zod'
-import type { Check, Numbers, Point, PointAxis, Resolved } from './case.ts'
-import type { Issue } from './errors.ts'
-import { exposedFaces, initialTemperature, solid } from './fields.ts'
+import type { Check, Numbers, Point, PointAxis, Resolved } from '../case.ts'
+import type { Issue } from '../errors.ts'
+import { exposedFaces, initialTemperature, solid } from '../statement/fields.ts'
 import type { ProductInput } from './product-step.ts'
-import { quantity } from './quantity.ts'
-import { figure } from './validate.ts'
+import { quantity } from '../statement/quantity.ts'
+import { figure } from '../statement/validate.ts'
 
 /* What the descriptions of products share. */
 

@@ -1,5 +1,5 @@
 import type { z } from 'zod'
-import { type DomainCode, type Issue, DomainError, MAX_ISSUES, pointerOf } from './errors.ts'
+import { type DomainCode, type Issue, DomainError, MAX_ISSUES, pointerOf } from '../errors.ts'
 
 /** Parses by a schema, or throws a DomainError whose issues name each field and what it would accept. */
 export function parse<S extends z.ZodType>(schema: S, value: unknown): z.output<S> {

@@ -1,9 +1,9 @@
 import { z } from 'zod'
-import type { Issue } from './errors.ts'
-import { film, surfaceTemperature } from './fields.ts'
-import { filmWarnings } from './film.ts'
+import type { Issue } from '../errors.ts'
+import { film, surfaceTemperature } from '../statement/fields.ts'
+import { filmWarnings } from '../statement/film.ts'
 import type { ProductDrive } from './product-films.ts'
-import type { Warning } from './warnings.ts'
+import type { Warning } from '../warnings.ts'
 
 /* What drives a body whose answer is a product: one temperature at all its faces, or one fluid behind films. */
 

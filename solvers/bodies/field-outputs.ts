@@ -1,6 +1,6 @@
-import { type Estimate, lastPlaces, type Method, TINY } from './math/rounding.ts'
-import type { OutputName, Shape } from './outputs.ts'
-import type { Bound, Output, Solution } from './solution.ts'
+import { type Estimate, lastPlaces, type Method, TINY } from '../math/rounding.ts'
+import type { OutputName, Shape } from '../outputs.ts'
+import type { Bound, Output, Solution } from '../solution.ts'
 
 /** How one output is found, at time i and place j; a value that has no time or no place ignores it. */
 export interface Field {

@@ -1,5 +1,5 @@
-import type { Issue } from './errors.ts'
-import type { Cycle } from './math/cycle-phase.ts'
+import type { Issue } from '../errors.ts'
+import type { Cycle } from '../math/cycle-phase.ts'
 
 interface CycleInput {
   cycleMean: number

@@ -1,5 +1,5 @@
 import { UcumLhcUtils } from '@lhncbc/ucum-lhc'
-import { type Fraction, fractionOf, minus, numberOf, productOf, times } from './units-exact.ts'
+import { type Fraction, fractionOf, minus, numberOf, productOf, times } from './exact.ts'
 import { unitOf } from './units.ts'
 
 export type Conversion = (value: number) => number

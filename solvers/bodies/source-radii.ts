@@ -1,5 +1,5 @@
-import type { Check } from './case.ts'
-import type { Issue } from './errors.ts'
+import type { Check } from '../case.ts'
+import type { Issue } from '../errors.ts'
 
 /** A source has no size: at it the temperature is infinite, so radii begin at less than an atom. */
 const LEAST = 1e-12

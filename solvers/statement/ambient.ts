@@ -1,8 +1,8 @@
 import { z } from 'zod'
 import { resolveCycle } from './cycle.ts'
-import type { Issue } from './errors.ts'
+import type { Issue } from '../errors.ts'
 import { cycle } from './fields.ts'
-import type { Ambient } from './math/lumped-response.ts'
+import type { Ambient } from '../math/lumped-response.ts'
 import { quantity } from './quantity.ts'
 import { rampRate } from './ramp.ts'
 

@@ -1,5 +1,5 @@
-import type { Issue } from './errors.ts'
-import type { OutputName } from './outputs.ts'
+import type { Issue } from '../errors.ts'
+import type { OutputName } from '../outputs.ts'
 
 interface Asked {
   times: readonly number[]

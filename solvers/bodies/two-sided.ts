@@ -1,9 +1,9 @@
-import { type InitialProfile, profileOf, type Start } from './initial-profile.ts'
-import { EPS, type Estimate } from './math/rounding.ts'
-import { type Drive, faceOf, type Load, type Moment, type Place } from './math/two-sided-body.ts'
-import { type SlabValues, TwoSidedSlab } from './math/two-sided-slab.ts'
+import { type InitialProfile, profileOf, type Start } from '../statement/initial-profile.ts'
+import { EPS, type Estimate } from '../math/rounding.ts'
+import { type Drive, faceOf, type Load, type Moment, type Place } from '../math/two-sided-body.ts'
+import { type SlabValues, TwoSidedSlab } from '../math/two-sided-slab.ts'
 import { meanOf, placeOf, risesOf, slopesAt, startAtFaces, temperatureIn } from './profile-along.ts'
-import { fluxOf, passesNoHeat, type Side, sideBiot, temperatureOf } from './side.ts'
+import { fluxOf, passesNoHeat, type Side, sideBiot, temperatureOf } from '../statement/side.ts'
 import { exactly, scaled } from './step-response.ts'
 
 /** A slab between two sides, in SI and degrees Celsius: what the cases with two sides, a flux or a source share. */

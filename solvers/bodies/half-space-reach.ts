@@ -1,4 +1,4 @@
-import type { Check } from './case.ts'
+import type { Check } from '../case.ts'
 
 /** Depth at which 1 % of a step at the surface has arrived after a time: erfc(1.8214) = 0.01. */
 export function penetrationDepth(diffusivity: number, times: readonly number[]): number {

@@ -1,6 +1,6 @@
-import type { Issue } from './errors.ts'
-import { type MaterialInput, findMaterial } from './materials/find-material.ts'
-import { type Material, type MaterialUsed, derivedOf, usedOf } from './materials/material.ts'
+import type { Issue } from '../errors.ts'
+import { type MaterialInput, findMaterial } from '../materials/find-material.ts'
+import { type Material, type MaterialUsed, derivedOf, usedOf } from '../materials/material.ts'
 
 export interface SolidInput {
   material?: MaterialInput | undefined

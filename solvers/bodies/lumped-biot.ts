@@ -1,6 +1,6 @@
-import type { Check, Numbers } from './case.ts'
+import type { Check, Numbers } from '../case.ts'
 import type { LumpedBody } from './lumped-body.ts'
-import type { Warning } from './warnings.ts'
+import type { Warning } from '../warnings.ts'
 
 /* What the Biot number says of a body with one temperature; it is known where the body was stated by shape and solid. */
 

@@ -1,9 +1,9 @@
-import type { Check } from './case.ts'
+import type { Check } from '../case.ts'
 import { type Field, constant, fieldOutputs, grid, history, profile } from './field-outputs.ts'
-import { type Cycle, phaseAt, waveAt } from './math/cycle-phase.ts'
-import { EPS, type Estimate, TINY } from './math/rounding.ts'
-import type { OutputName } from './outputs.ts'
-import type { Solution } from './solution.ts'
+import { type Cycle, phaseAt, waveAt } from '../math/cycle-phase.ts'
+import { EPS, type Estimate, TINY } from '../math/rounding.ts'
+import type { OutputName } from '../outputs.ts'
+import type { Solution } from '../solution.ts'
 
 /** What the half spaces in a settled cycle share. */
 export interface PeriodicInput {

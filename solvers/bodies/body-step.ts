@@ -1,7 +1,7 @@
-import type { Estimate } from './math/rounding.ts'
-import type { Moment, UnitBody } from './math/unit-body.ts'
-import type { OutputName } from './outputs.ts'
-import type { Solution } from './solution.ts'
+import type { Estimate } from '../math/rounding.ts'
+import type { Moment, UnitBody } from '../math/unit-body.ts'
+import type { OutputName } from '../outputs.ts'
+import type { Solution } from '../solution.ts'
 import { exactly, scaled, type StepResponse, stepOutputs } from './step-response.ts'
 
 /** What the cases of one body and one drive share: slab, cylinder, sphere and what is made of them. */

@@ -1,7 +1,7 @@
-import { type Issue, pointerOf } from './errors.ts'
-import { conversionOf } from './units-convert.ts'
+import { type Issue, pointerOf } from '../errors.ts'
+import { conversionOf } from './convert.ts'
 import { acceptedUnits, unitOf } from './units.ts'
-import { kindOf } from './validate.ts'
+import { kindOf } from '../statement/validate.ts'
 
 /** A number with the code of its unit, as a body may state any quantity. */
 type Stated = Record<string, unknown>

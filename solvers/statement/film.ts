@@ -1,4 +1,4 @@
-import type { Warning } from './warnings.ts'
+import type { Warning } from '../warnings.ts'
 
 /** A film weaker than radiation alone in a room is rarely the total. */
 export function filmWarnings(filmCoefficient: number): Warning[] {

@@ -1,9 +1,9 @@
 import { type Field, fieldOutputs, grid, history, profile } from './field-outputs.ts'
 import { TwoSided, type TwoSidedProblem } from './two-sided.ts'
-import type { OutputName } from './outputs.ts'
-import { filmOf, fluxOf, passesNoHeat, type Side, temperatureOf } from './side.ts'
-import { profileOf } from './initial-profile.ts'
-import type { Solution } from './solution.ts'
+import type { OutputName } from '../outputs.ts'
+import { filmOf, fluxOf, passesNoHeat, type Side, temperatureOf } from '../statement/side.ts'
+import { profileOf } from '../statement/initial-profile.ts'
+import type { Solution } from '../solution.ts'
 
 /** The outputs of a slab between two sides, under their names in the cases; `also` gives a case's own. */
 export function solveTwoSided(

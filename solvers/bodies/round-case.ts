@@ -1,5 +1,5 @@
-import type { Check, Resolved } from './case.ts'
-import { initialTemperature, radius, solid } from './fields.ts'
+import type { Check, Resolved } from '../case.ts'
+import { initialTemperature, radius, solid } from '../statement/fields.ts'
 import type { RadialStepInput } from './radial-step.ts'
 
 /* What the descriptions of cylinders and spheres share. */

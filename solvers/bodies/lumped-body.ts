@@ -1,5 +1,5 @@
-import type { Issue } from './errors.ts'
-import { resolveHeatCapacity, resolveSolid, type Solid, type SolidInput } from './solid.ts'
+import type { Issue } from '../errors.ts'
+import { resolveHeatCapacity, resolveSolid, type Solid, type SolidInput } from '../statement/solid.ts'
 
 export interface BodyInput extends SolidInput {
   body?: 'slab' | 'cylinder' | 'sphere' | undefined
