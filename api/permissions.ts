@@ -13,7 +13,7 @@ export const permissions = {
   'keys:read': { owner: 'all', integrator: 'own' },
   'keys:create': { owner: 'all', integrator: 'own' },
   'keys:revoke': { owner: 'all', integrator: 'own' },
-  'materials:read': { owner: 'all', integrator: 'all' },
+  'materials:read': { owner: 'all', integrator: 'all', reader: 'all' },
   'materials:write': { owner: 'all', integrator: 'own' },
   'usage:read': { owner: 'all', integrator: 'all', reader: 'all' },
   'requests:read': { owner: 'all', integrator: 'all', reader: 'all' },

@@ -69,6 +69,14 @@ export const router = createBrowserRouter([
         path: '/requests/:requestId',
         lazy: async () => ({ Component: (await import('./features/requests/request-screen.tsx')).RequestScreen }),
       },
+      {
+        path: '/materials',
+        lazy: async () => ({ Component: (await import('./features/materials/materials-screen.tsx')).MaterialsScreen }),
+      },
+      {
+        path: '/materials/:materialId',
+        lazy: async () => ({ Component: (await import('./features/materials/material-screen.tsx')).MaterialScreen }),
+      },
     ],
   },
   {

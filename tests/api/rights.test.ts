@@ -13,7 +13,7 @@ const promised: Record<Permission | StaffPermission, string> = {
   'keys:read': 'owner integrator',
   'keys:create': 'owner integrator',
   'keys:revoke': 'owner integrator',
-  'materials:read': 'owner integrator',
+  'materials:read': 'owner integrator reader',
   'materials:write': 'owner integrator',
   'usage:read': 'owner integrator reader',
   'requests:read': 'owner integrator reader',

@@ -38,6 +38,7 @@ test.each([
   'cases/case-screen',
   'keys/keys-screen',
   'usage/usage-screen',
+  'materials/materials-screen',
 ])('the first load of %s is under 170 kB of compressed JavaScript', (screen) => {
   const names = loaded(`src/features/${screen}.tsx`, loaded('index.html'))
   const size = kilobytes(names)

@@ -29,6 +29,7 @@ test.each([
   '/usage',
   '/requests',
   '/requests?status=refused',
+  '/materials?group=concrete',
 ])('tab reaches everything on %s in reading order', async (address) => {
   const page = await browser.context.newPage()
   await signInAs(page, portal, 'owner')

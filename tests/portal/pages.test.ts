@@ -44,6 +44,8 @@ const owners: Sheet[] = [
   { path: '/usage', ready: '.series' },
   { path: '/requests', ready: 'td' },
   { path: '/requests?status=refused', ready: 'td' },
+  { path: '/materials', ready: 'td' },
+  { path: '/materials/concrete-dense-2400', ready: 'td' },
 ]
 const staff: Sheet[] = [{ path: '/staff', ready: 'form' }]
 

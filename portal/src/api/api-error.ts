@@ -57,12 +57,16 @@ interface Result<D> {
 }
 
 /** The data of an answer, or an ApiError. */
-export async function unwrap<D>(call: Promise<Result<D>>): Promise<D> {
+export const unwrap = async <D>(call: Promise<Result<D>>): Promise<D> => (await unwrapTagged(call)).data
+
+/** The same with the tag of its version, which a change of it names. */
+export async function unwrapTagged<D>(call: Promise<Result<D>>): Promise<{ data: D; etag: string }> {
   const result = await call.catch((cause: unknown) => {
     if (cause instanceof DOMException && cause.name === 'AbortError') throw cause
     throw new ApiError(undefined)
   })
-  if (result.response.ok) return result.data as D
+  const { ok, headers } = result.response
+  if (ok) return { data: result.data as D, etag: headers.get('etag') ?? '' }
   throw new ApiError(problemOf(result.error, result.response), secondsOf(result.response), whoseCall(result.response))
 }
 

@@ -4,6 +4,7 @@ import { ApiError } from '../api/api-error.ts'
 import { QueryView } from '../components/query-view.tsx'
 import { sessionQuery } from '../features/access/queries.ts'
 import { SignOut } from '../features/access/sign-out.tsx'
+import type { Permissions } from '../api/may.ts'
 import { useSignedIn } from '../api/signed-in.ts'
 import { Masthead } from './masthead.tsx'
 import { Page } from './page.tsx'
@@ -13,6 +14,7 @@ const sheets = [
   { to: '/keys', text: 'Keys' },
   { to: '/usage', text: 'Usage' },
   { to: '/requests', text: 'Requests' },
+  { to: '/materials', text: 'Materials' },
 ]
 
 /** The sheets of an account; whoever is not signed in is asked to, and comes back. */
@@ -28,10 +30,10 @@ export function AccountPage() {
         <SignOut />
       </Masthead>
       <QueryView query={query} what="Reading your session.">
-        {({ account, role }) => (
+        {({ account, role, permissions }) => (
           <div className="with-rail">
             <Rail label="Account sheets" owner={`${account.name} · ${role}`} sheets={sheets} />
-            <Outlet />
+            <Outlet context={permissions satisfies Permissions} />
           </div>
         )}
       </QueryView>
