@@ -4691,7 +4691,7 @@ export interface components {
             outputs: components["schemas"]["CaseOutput"][];
             absentOutputs: {
                 /** @enum {string} */
-                name: "temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "meanTemperature" | "remainingFraction" | "completedFraction" | "heatFraction" | "steadyTemperature" | "timeConstant" | "amplitude" | "timeLag" | "dampingDepth" | "heatPerHalfCycle" | "contactTemperature" | "idealTemperature" | "surfaceTemperature" | "otherSurfaceTemperature" | "leftHeatFlux" | "rightHeatFlux" | "backHeatFlux" | "heatReleased" | "innerHeatFlux" | "outerHeatFlux" | "admittance" | "admittanceTimeLead" | "arealHeatCapacity" | "bathTemperature" | "equilibriumTemperature";
+                name: "temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "meanTemperature" | "remainingFraction" | "completedFraction" | "heatFraction" | "steadyTemperature" | "timeConstant" | "amplitude" | "timeLag" | "dampingDepth" | "heatPerHalfCycle" | "contactTemperature" | "idealTemperature" | "surfaceTemperature" | "otherSurfaceTemperature" | "leftHeatFlux" | "rightHeatFlux" | "backHeatFlux" | "heatReleased" | "innerHeatFlux" | "outerHeatFlux" | "admittance" | "admittanceTimeLead" | "arealHeatCapacity" | "bathTemperature" | "equilibriumTemperature";
                 reason: string;
             }[];
             cautions: {
@@ -4762,12 +4762,12 @@ export interface components {
         };
         CaseOutput: {
             /** @enum {string} */
-            name: "temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "meanTemperature" | "remainingFraction" | "completedFraction" | "heatFraction" | "steadyTemperature" | "timeConstant" | "amplitude" | "timeLag" | "dampingDepth" | "heatPerHalfCycle" | "contactTemperature" | "idealTemperature" | "surfaceTemperature" | "otherSurfaceTemperature" | "leftHeatFlux" | "rightHeatFlux" | "backHeatFlux" | "heatReleased" | "innerHeatFlux" | "outerHeatFlux" | "admittance" | "admittanceTimeLead" | "arealHeatCapacity" | "bathTemperature" | "equilibriumTemperature";
+            name: "temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "meanTemperature" | "remainingFraction" | "completedFraction" | "heatFraction" | "steadyTemperature" | "timeConstant" | "amplitude" | "timeLag" | "dampingDepth" | "heatPerHalfCycle" | "contactTemperature" | "idealTemperature" | "surfaceTemperature" | "otherSurfaceTemperature" | "leftHeatFlux" | "rightHeatFlux" | "backHeatFlux" | "heatReleased" | "innerHeatFlux" | "outerHeatFlux" | "admittance" | "admittanceTimeLead" | "arealHeatCapacity" | "bathTemperature" | "equilibriumTemperature";
             label: string;
             symbol: string;
             unit: string;
             /** @enum {string} */
-            shape: "grid" | "times" | "places" | "single";
+            shape: "grid" | "grids" | "times" | "places" | "single";
             text: string;
             /** @description How many values of others one of these is priced as. */
             cost?: number;
@@ -4800,6 +4800,10 @@ export interface components {
                 temperature?: number[];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[];
+                };
                 /** @description Energy stored since time 0; negative where the body cools. Unit J. */
                 heatGained?: number[];
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
@@ -4821,6 +4825,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
@@ -4896,6 +4901,10 @@ export interface components {
                 temperature?: number[];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[];
+                };
                 /** @description Energy stored since time 0; negative where the body cools. Unit J. */
                 heatGained?: number[];
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
@@ -4913,6 +4922,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
@@ -4957,12 +4967,12 @@ export interface components {
             filmCoefficient: components["schemas"]["FilmCoefficientField"];
             times: components["schemas"]["TimesField"];
             /**
-             * @description Outputs: some of temperature, rate, heatGained, remainingFraction, completedFraction, heatFraction, steadyTemperature, timeConstant. Default temperature.
+             * @description Outputs: some of temperature, rate, sensitivities, heatGained, remainingFraction, completedFraction, heatFraction, steadyTemperature, timeConstant. Default temperature.
              * @default [
              *       "temperature"
              *     ]
              */
-            outputs: ("temperature" | "rate" | "heatGained" | "remainingFraction" | "completedFraction" | "heatFraction" | "steadyTemperature" | "timeConstant")[];
+            outputs: ("temperature" | "rate" | "sensitivities" | "heatGained" | "remainingFraction" | "completedFraction" | "heatFraction" | "steadyTemperature" | "timeConstant")[];
             /**
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
@@ -5314,6 +5324,10 @@ export interface components {
                 temperature?: number[];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[];
+                };
                 /** @description Energy stored since time 0; negative where the body cools. Unit J. */
                 heatGained?: number[];
             };
@@ -5325,6 +5339,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
                 };
                 /**
@@ -5348,6 +5363,10 @@ export interface components {
                 temperature?: number[];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[];
+                };
                 /** @description Energy stored since time 0; negative where the body cools. Unit J. */
                 heatGained?: number[];
             };
@@ -5355,6 +5374,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
                 };
             };
@@ -5397,12 +5417,12 @@ export interface components {
             ambient: components["schemas"]["AmbientField"];
             times: components["schemas"]["TimesField"];
             /**
-             * @description Outputs: some of temperature, rate, heatGained. Default temperature.
+             * @description Outputs: some of temperature, rate, sensitivities, heatGained. Default temperature.
              * @default [
              *       "temperature"
              *     ]
              */
-            outputs: ("temperature" | "rate" | "heatGained")[];
+            outputs: ("temperature" | "rate" | "sensitivities" | "heatGained")[];
             /**
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
@@ -5776,6 +5796,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -5795,6 +5819,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -5822,6 +5847,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -5837,6 +5866,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -6312,6 +6342,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -6327,6 +6361,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -6352,6 +6387,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -6363,6 +6402,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -6855,6 +6895,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -6870,6 +6914,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -6895,6 +6940,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -6906,6 +6955,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -7398,6 +7448,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -7417,6 +7471,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -7444,6 +7499,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -7459,6 +7518,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -7956,6 +8016,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -7977,6 +8041,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     amplitude?: components["schemas"]["Bound"];
@@ -8005,6 +8070,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -8022,6 +8091,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     amplitude?: components["schemas"]["Bound"];
@@ -8534,6 +8604,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -8555,6 +8629,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     amplitude?: components["schemas"]["Bound"];
@@ -8583,6 +8658,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -8600,6 +8679,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     amplitude?: components["schemas"]["Bound"];
@@ -9123,6 +9203,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Temperature at each time and place if nothing resisted between the faces. Unit Cel. */
                 idealTemperature?: number[][];
                 /** @description Local heat flux, positive towards greater depths: from the other body to the own. Unit W/m2. */
@@ -9150,6 +9234,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     idealTemperature?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
@@ -9181,6 +9266,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Temperature at each time and place if nothing resisted between the faces. Unit Cel. */
                 idealTemperature?: number[][];
                 /** @description Local heat flux, positive towards greater depths: from the other body to the own. Unit W/m2. */
@@ -9204,6 +9293,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     idealTemperature?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
@@ -9254,12 +9344,12 @@ export interface components {
             depths?: components["schemas"]["DepthsField3"];
             times: components["schemas"]["TimesField"];
             /**
-             * @description Outputs: some of temperature, rate, idealTemperature, heatFlux, surfaceHeatFlux, heatGained, remainingFraction, completedFraction, contactTemperature, surfaceTemperature, otherSurfaceTemperature. Default temperature.
+             * @description Outputs: some of temperature, rate, sensitivities, idealTemperature, heatFlux, surfaceHeatFlux, heatGained, remainingFraction, completedFraction, contactTemperature, surfaceTemperature, otherSurfaceTemperature. Default temperature.
              * @default [
              *       "temperature"
              *     ]
              */
-            outputs: ("temperature" | "rate" | "idealTemperature" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "remainingFraction" | "completedFraction" | "contactTemperature" | "surfaceTemperature" | "otherSurfaceTemperature")[];
+            outputs: ("temperature" | "rate" | "sensitivities" | "idealTemperature" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "remainingFraction" | "completedFraction" | "contactTemperature" | "surfaceTemperature" | "otherSurfaceTemperature")[];
             /**
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
@@ -9735,6 +9825,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -9758,6 +9852,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -9787,6 +9882,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -9806,6 +9905,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -10380,6 +10480,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -10403,6 +10507,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -10432,6 +10537,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -10451,6 +10560,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -11017,6 +11127,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at its left face. Unit W/m2. */
@@ -11038,6 +11152,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     leftHeatFlux?: components["schemas"]["Bound"];
                     rightHeatFlux?: components["schemas"]["Bound"];
@@ -11066,6 +11181,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at its left face. Unit W/m2. */
@@ -11083,6 +11202,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     leftHeatFlux?: components["schemas"]["Bound"];
                     rightHeatFlux?: components["schemas"]["Bound"];
@@ -11640,6 +11760,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -11661,6 +11785,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     backHeatFlux?: components["schemas"]["Bound"];
@@ -11689,6 +11814,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -11706,6 +11835,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     backHeatFlux?: components["schemas"]["Bound"];
@@ -11753,12 +11883,12 @@ export interface components {
             depths?: components["schemas"]["DepthsField"];
             times: components["schemas"]["TimesField"];
             /**
-             * @description Outputs: some of temperature, rate, heatFlux, surfaceHeatFlux, backHeatFlux, heatGained, meanTemperature, steadyTemperature. Default temperature.
+             * @description Outputs: some of temperature, rate, sensitivities, heatFlux, surfaceHeatFlux, backHeatFlux, heatGained, meanTemperature, steadyTemperature. Default temperature.
              * @default [
              *       "temperature"
              *     ]
              */
-            outputs: ("temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "backHeatFlux" | "heatGained" | "meanTemperature" | "steadyTemperature")[];
+            outputs: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "backHeatFlux" | "heatGained" | "meanTemperature" | "steadyTemperature")[];
             /**
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
@@ -12236,6 +12366,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -12257,6 +12391,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     meanTemperature?: components["schemas"]["Bound"];
@@ -12285,6 +12420,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -12302,6 +12441,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     meanTemperature?: components["schemas"]["Bound"];
@@ -12355,12 +12495,12 @@ export interface components {
             depths?: components["schemas"]["DepthsField"];
             times: components["schemas"]["TimesField"];
             /**
-             * @description Outputs: some of temperature, rate, heatFlux, surfaceHeatFlux, meanTemperature, heatGained, heatReleased, steadyTemperature. Default temperature.
+             * @description Outputs: some of temperature, rate, sensitivities, heatFlux, surfaceHeatFlux, meanTemperature, heatGained, heatReleased, steadyTemperature. Default temperature.
              * @default [
              *       "temperature"
              *     ]
              */
-            outputs: ("temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "meanTemperature" | "heatGained" | "heatReleased" | "steadyTemperature")[];
+            outputs: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "meanTemperature" | "heatGained" | "heatReleased" | "steadyTemperature")[];
             /**
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
@@ -12863,6 +13003,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -12886,6 +13030,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     amplitude?: components["schemas"]["Bound"];
@@ -12915,6 +13060,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -12934,6 +13083,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     amplitude?: components["schemas"]["Bound"];
@@ -12985,12 +13135,12 @@ export interface components {
             depths?: components["schemas"]["DepthsField"];
             times: components["schemas"]["TimesField2"];
             /**
-             * @description Outputs: some of temperature, rate, heatFlux, surfaceHeatFlux, amplitude, timeLag, admittance, admittanceTimeLead, arealHeatCapacity. Default temperature.
+             * @description Outputs: some of temperature, rate, sensitivities, heatFlux, surfaceHeatFlux, amplitude, timeLag, admittance, admittanceTimeLead, arealHeatCapacity. Default temperature.
              * @default [
              *       "temperature"
              *     ]
              */
-            outputs: ("temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "amplitude" | "timeLag" | "admittance" | "admittanceTimeLead" | "arealHeatCapacity")[];
+            outputs: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "amplitude" | "timeLag" | "admittance" | "admittanceTimeLead" | "arealHeatCapacity")[];
             /**
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
@@ -13489,6 +13639,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at its left face. Unit W/m2. */
@@ -13510,6 +13664,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     leftHeatFlux?: components["schemas"]["Bound"];
                     rightHeatFlux?: components["schemas"]["Bound"];
@@ -13538,6 +13693,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at its left face. Unit W/m2. */
@@ -13555,6 +13714,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     leftHeatFlux?: components["schemas"]["Bound"];
                     rightHeatFlux?: components["schemas"]["Bound"];
@@ -14191,6 +14351,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -14214,6 +14378,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -14243,6 +14408,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -14262,6 +14431,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -14310,12 +14480,12 @@ export interface components {
             depths?: components["schemas"]["DepthsField"];
             times: components["schemas"]["TimesField"];
             /**
-             * @description Outputs: some of temperature, rate, heatFlux, surfaceHeatFlux, heatGained, meanTemperature, heatFraction, bathTemperature, equilibriumTemperature. Default temperature.
+             * @description Outputs: some of temperature, rate, sensitivities, heatFlux, surfaceHeatFlux, heatGained, meanTemperature, heatFraction, bathTemperature, equilibriumTemperature. Default temperature.
              * @default [
              *       "temperature"
              *     ]
              */
-            outputs: ("temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "meanTemperature" | "heatFraction" | "bathTemperature" | "equilibriumTemperature")[];
+            outputs: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "meanTemperature" | "heatFraction" | "bathTemperature" | "equilibriumTemperature")[];
             /**
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
@@ -14793,6 +14963,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -14816,6 +14990,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -14845,6 +15020,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -14864,6 +15043,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -15421,6 +15601,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -15444,6 +15628,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -15473,6 +15658,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -15492,6 +15681,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -16042,6 +16232,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -16065,6 +16259,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -16094,6 +16289,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -16113,6 +16312,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -16670,6 +16870,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -16693,6 +16897,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -16722,6 +16927,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -16741,6 +16950,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -17290,6 +17500,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive outward. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at its inner face, per m2 of that face. Unit W/m2. */
@@ -17311,6 +17525,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     innerHeatFlux?: components["schemas"]["Bound"];
                     outerHeatFlux?: components["schemas"]["Bound"];
@@ -17339,6 +17554,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive outward. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at its inner face, per m2 of that face. Unit W/m2. */
@@ -17356,6 +17575,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     innerHeatFlux?: components["schemas"]["Bound"];
                     outerHeatFlux?: components["schemas"]["Bound"];
@@ -17409,12 +17629,12 @@ export interface components {
             radii?: components["schemas"]["RadiiField"];
             times: components["schemas"]["TimesField"];
             /**
-             * @description Outputs: some of temperature, rate, heatFlux, innerHeatFlux, outerHeatFlux, heatGained, meanTemperature, steadyTemperature. Default temperature.
+             * @description Outputs: some of temperature, rate, sensitivities, heatFlux, innerHeatFlux, outerHeatFlux, heatGained, meanTemperature, steadyTemperature. Default temperature.
              * @default [
              *       "temperature"
              *     ]
              */
-            outputs: ("temperature" | "rate" | "heatFlux" | "innerHeatFlux" | "outerHeatFlux" | "heatGained" | "meanTemperature" | "steadyTemperature")[];
+            outputs: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "innerHeatFlux" | "outerHeatFlux" | "heatGained" | "meanTemperature" | "steadyTemperature")[];
             /**
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
@@ -17919,6 +18139,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive outward from the cylinder. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the medium at the surface of the cylinder, per m2 of it. Unit W/m2. */
@@ -17938,6 +18162,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -17965,6 +18190,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive outward from the cylinder. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the medium at the surface of the cylinder, per m2 of it. Unit W/m2. */
@@ -17980,6 +18209,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -18502,6 +18732,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -18521,6 +18755,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -18548,6 +18783,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -18563,6 +18802,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -19019,6 +19259,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -19038,6 +19282,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -19065,6 +19310,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -19080,6 +19329,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -19561,6 +19811,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -19580,6 +19834,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -19607,6 +19862,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -19622,6 +19881,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -20070,6 +20330,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -20083,6 +20347,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                 };
@@ -20107,6 +20372,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -20116,6 +20385,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                 };
@@ -20565,6 +20835,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -20578,6 +20852,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                 };
@@ -20602,6 +20877,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -20611,6 +20890,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                 };
@@ -21028,6 +21308,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -21041,6 +21325,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                 };
@@ -21065,6 +21350,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -21074,6 +21363,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                 };
@@ -21495,6 +21785,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive outward from the line. Unit W/m2. */
                 heatFlux?: number[][];
             };
@@ -21506,6 +21800,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                 };
                 /**
@@ -21529,6 +21824,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive outward from the line. Unit W/m2. */
                 heatFlux?: number[][];
             };
@@ -21536,6 +21835,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                 };
             };
@@ -22020,6 +22320,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive outward from the point. Unit W/m2. */
                 heatFlux?: number[][];
             };
@@ -22031,6 +22335,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                 };
                 /**
@@ -22054,6 +22359,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive outward from the point. Unit W/m2. */
                 heatFlux?: number[][];
             };
@@ -22061,6 +22370,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                 };
             };
@@ -22806,12 +23116,12 @@ export interface components {
         /** @description Depths: inward from the exposed face. Unit m; 1 to 2000 values, each a number from 0 to 100000 m. */
         DepthsField: (number | components["schemas"]["LengthWithUnit"])[];
         /**
-         * @description Outputs: some of temperature, rate, heatFlux, surfaceHeatFlux, heatGained, remainingFraction, completedFraction. Default temperature.
+         * @description Outputs: some of temperature, rate, sensitivities, heatFlux, surfaceHeatFlux, heatGained, remainingFraction, completedFraction. Default temperature.
          * @default [
          *       "temperature"
          *     ]
          */
-        OutputsField: ("temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "remainingFraction" | "completedFraction")[];
+        OutputsField: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "remainingFraction" | "completedFraction")[];
         /** @description Depth: of one place. Unit m; a number from 0 to 100000 m. */
         DepthField: number | components["schemas"]["LengthWithUnit"];
         /** @description Depths: one place, or two: the first less the second. Unit m; 1 to 2 values, each a number from 0 to 100000 m. */
@@ -22836,12 +23146,12 @@ export interface components {
         /** @description Ramp duration: then the surface is held; left out, the ramp never ends. Unit s; a number from 1e-9 to 1e17 s. */
         RampDurationField: number | components["schemas"]["TimeWithUnit"];
         /**
-         * @description Outputs: some of temperature, rate, heatFlux, surfaceHeatFlux, heatGained. Default temperature.
+         * @description Outputs: some of temperature, rate, sensitivities, heatFlux, surfaceHeatFlux, heatGained. Default temperature.
          * @default [
          *       "temperature"
          *     ]
          */
-        OutputsField2: ("temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "heatGained")[];
+        OutputsField2: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "heatGained")[];
         /** @description Imposed heat flux: absorbed at the face, positive into the body. Unit W/m2; a number from -1e12 to 1e12 W/m2. */
         ImposedHeatFluxField: number | components["schemas"]["HeatFluxWithUnit"];
         /** @description Pulse duration: the flux acts as long, then the face is insulated; left out, it never ends. Unit s; a number from 1e-9 to 1e17 s. */
@@ -22859,19 +23169,19 @@ export interface components {
         /** @description Times: of the clock of the cycle, any sign. Unit s; 1 to 100000 values, each a number from -1e17 to 1e17 s. */
         TimesField2: (number | components["schemas"]["TimeWithUnit"])[];
         /**
-         * @description Outputs: some of temperature, rate, heatFlux, surfaceHeatFlux, amplitude, timeLag, dampingDepth, heatPerHalfCycle. Default temperature.
+         * @description Outputs: some of temperature, rate, sensitivities, heatFlux, surfaceHeatFlux, amplitude, timeLag, dampingDepth, heatPerHalfCycle. Default temperature.
          * @default [
          *       "temperature"
          *     ]
          */
-        OutputsField3: ("temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "amplitude" | "timeLag" | "dampingDepth" | "heatPerHalfCycle")[];
+        OutputsField3: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "amplitude" | "timeLag" | "dampingDepth" | "heatPerHalfCycle")[];
         /** @description Time: of the clock. Unit s; a number from -1e17 to 1e17 s. */
         TimeField2: number | components["schemas"]["TimeWithUnit"];
         /** @description From: the first time looked at; default 0. Unit s; a number from -1e17 to 1e17 s. */
         FromField3: number | components["schemas"]["TimeWithUnit"];
         /** @description Until: the last time looked at. Unit s; a number from -1e17 to 1e17 s. */
         UntilField4: number | components["schemas"]["TimeWithUnit"];
-        /** @description Thickness: of this body, to check how long the answer holds; changes no number. Unit m; a number from 1e-9 to 100000 m. */
+        /** @description Thickness: of the body, to check how long the answer holds; changes no number. Unit m; a number from 1e-9 to 100000 m. */
         ThicknessField2: number | components["schemas"]["LengthWithUnit"];
         /** @description Other body: the solid that is touched, with its initial temperature; it lies at depths below 0. */
         OtherField: {
@@ -22889,7 +23199,7 @@ export interface components {
             diffusivity?: number | components["schemas"]["DiffusivityWithUnit"];
             /** @description Initial temperature: the same everywhere at time 0. Unit Cel; a number from -273.15 to 10000 Cel. */
             initialTemperature: number | components["schemas"]["TemperatureWithUnit"];
-            /** @description Thickness: of this body, to check how long the answer holds; changes no number. Unit m; a number from 1e-9 to 100000 m. */
+            /** @description Thickness: of the body, to check how long the answer holds; changes no number. Unit m; a number from 1e-9 to 100000 m. */
             thickness?: number | components["schemas"]["LengthWithUnit"];
         };
         /** @description Contact conductance: left out: perfect contact; skin 500 to 2000, pressed metal 1e3 to 1e4. Unit W/(m2.K); a number from 1e-9 to 1e12 W/(m2.K). */
@@ -22901,12 +23211,12 @@ export interface components {
         /** @description Depths: one place, or two: the first less the second. Unit m; 1 to 2 values, each a number from -100000 to 100000 m. */
         DepthsField4: (number | components["schemas"]["LengthWithUnit"])[];
         /**
-         * @description Outputs: some of temperature, rate, heatFlux, surfaceHeatFlux, heatGained, meanTemperature, remainingFraction, completedFraction, heatFraction. Default temperature.
+         * @description Outputs: some of temperature, rate, sensitivities, heatFlux, surfaceHeatFlux, heatGained, meanTemperature, remainingFraction, completedFraction, heatFraction. Default temperature.
          * @default [
          *       "temperature"
          *     ]
          */
-        OutputsField4: ("temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "meanTemperature" | "remainingFraction" | "completedFraction" | "heatFraction")[];
+        OutputsField4: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "meanTemperature" | "remainingFraction" | "completedFraction" | "heatFraction")[];
         /** @description Biot number: hL/k. Unit 1; 0, or a number from 1e-9 to 1e9. */
         BiotField: number | components["schemas"]["RatioWithUnit"];
         /** @description Fourier numbers: at/L². Unit 1; 1 to 100000 values, each a number from 0 to 1e17. */
@@ -22986,12 +23296,12 @@ export interface components {
             kind: "insulated";
         };
         /**
-         * @description Outputs: some of temperature, rate, heatFlux, leftHeatFlux, rightHeatFlux, heatGained, meanTemperature, steadyTemperature. Default temperature.
+         * @description Outputs: some of temperature, rate, sensitivities, heatFlux, leftHeatFlux, rightHeatFlux, heatGained, meanTemperature, steadyTemperature. Default temperature.
          * @default [
          *       "temperature"
          *     ]
          */
-        OutputsField6: ("temperature" | "rate" | "heatFlux" | "leftHeatFlux" | "rightHeatFlux" | "heatGained" | "meanTemperature" | "steadyTemperature")[];
+        OutputsField6: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "leftHeatFlux" | "rightHeatFlux" | "heatGained" | "meanTemperature" | "steadyTemperature")[];
         /**
          * @description Quantity: temperature, meanTemperature. Default temperature.
          * @enum {string}
@@ -23216,12 +23526,12 @@ export interface components {
             y: number | components["schemas"]["LengthWithUnit"];
         }[];
         /**
-         * @description Outputs: some of temperature, rate, remainingFraction, completedFraction, heatGained, meanTemperature, heatFraction. Default temperature.
+         * @description Outputs: some of temperature, rate, sensitivities, remainingFraction, completedFraction, heatGained, meanTemperature, heatFraction. Default temperature.
          * @default [
          *       "temperature"
          *     ]
          */
-        OutputsField7: ("temperature" | "rate" | "remainingFraction" | "completedFraction" | "heatGained" | "meanTemperature" | "heatFraction")[];
+        OutputsField7: ("temperature" | "rate" | "sensitivities" | "remainingFraction" | "completedFraction" | "heatGained" | "meanTemperature" | "heatFraction")[];
         /** @description Point: a point {x, y}, in m. */
         PointField: {
             /** @description x. Unit m; a number from -100000 to 100000 m. */
@@ -23325,12 +23635,12 @@ export interface components {
             r?: number | components["schemas"]["LengthWithUnit"];
         }[];
         /**
-         * @description Outputs: some of temperature, rate, remainingFraction, completedFraction. Default temperature.
+         * @description Outputs: some of temperature, rate, sensitivities, remainingFraction, completedFraction. Default temperature.
          * @default [
          *       "temperature"
          *     ]
          */
-        OutputsField8: ("temperature" | "rate" | "remainingFraction" | "completedFraction")[];
+        OutputsField8: ("temperature" | "rate" | "sensitivities" | "remainingFraction" | "completedFraction")[];
         /** @description Point: a point {x, y, z, r}, in m. */
         PointField4: {
             /** @description x. Unit m; a number from -100000 to 100000 m. */
@@ -23374,12 +23684,12 @@ export interface components {
         /** @description Probe radius: to check how well a line stands for the probe; changes no number. Unit m; a number from 1e-9 to 100000 m. */
         ProbeRadiusField: number | components["schemas"]["LengthWithUnit"];
         /**
-         * @description Outputs: some of temperature, rate, heatFlux. Default temperature.
+         * @description Outputs: some of temperature, rate, sensitivities, heatFlux. Default temperature.
          * @default [
          *       "temperature"
          *     ]
          */
-        OutputsField9: ("temperature" | "rate" | "heatFlux")[];
+        OutputsField9: ("temperature" | "rate" | "sensitivities" | "heatFlux")[];
         /** @description Power: released from time 0 on; or energy. Unit W; a number from -1e15 to 1e15 W. */
         PowerField2: number | components["schemas"]["PowerWithUnit"];
         /** @description Energy: released all at once at time 0; or power. Unit J; a number from -1e15 to 1e15 J. */

@@ -4194,6 +4194,10 @@ export interface components {
                 temperature?: number[];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[];
+                };
                 /** @description Energy stored since time 0; negative where the body cools. Unit J. */
                 heatGained?: number[];
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
@@ -4215,6 +4219,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
@@ -4290,6 +4295,10 @@ export interface components {
                 temperature?: number[];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[];
+                };
                 /** @description Energy stored since time 0; negative where the body cools. Unit J. */
                 heatGained?: number[];
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
@@ -4307,6 +4316,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
@@ -4351,12 +4361,12 @@ export interface components {
             filmCoefficient: components["schemas"]["FilmCoefficientField"];
             times: components["schemas"]["TimesField"];
             /**
-             * @description Outputs: some of temperature, rate, heatGained, remainingFraction, completedFraction, heatFraction, steadyTemperature, timeConstant. Default temperature.
+             * @description Outputs: some of temperature, rate, sensitivities, heatGained, remainingFraction, completedFraction, heatFraction, steadyTemperature, timeConstant. Default temperature.
              * @default [
              *       "temperature"
              *     ]
              */
-            outputs: ("temperature" | "rate" | "heatGained" | "remainingFraction" | "completedFraction" | "heatFraction" | "steadyTemperature" | "timeConstant")[];
+            outputs: ("temperature" | "rate" | "sensitivities" | "heatGained" | "remainingFraction" | "completedFraction" | "heatFraction" | "steadyTemperature" | "timeConstant")[];
             /**
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
@@ -4708,6 +4718,10 @@ export interface components {
                 temperature?: number[];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[];
+                };
                 /** @description Energy stored since time 0; negative where the body cools. Unit J. */
                 heatGained?: number[];
             };
@@ -4719,6 +4733,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
                 };
                 /**
@@ -4742,6 +4757,10 @@ export interface components {
                 temperature?: number[];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[];
+                };
                 /** @description Energy stored since time 0; negative where the body cools. Unit J. */
                 heatGained?: number[];
             };
@@ -4749,6 +4768,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
                 };
             };
@@ -4791,12 +4811,12 @@ export interface components {
             ambient: components["schemas"]["AmbientField"];
             times: components["schemas"]["TimesField"];
             /**
-             * @description Outputs: some of temperature, rate, heatGained. Default temperature.
+             * @description Outputs: some of temperature, rate, sensitivities, heatGained. Default temperature.
              * @default [
              *       "temperature"
              *     ]
              */
-            outputs: ("temperature" | "rate" | "heatGained")[];
+            outputs: ("temperature" | "rate" | "sensitivities" | "heatGained")[];
             /**
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
@@ -5170,6 +5190,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -5189,6 +5213,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -5216,6 +5241,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -5231,6 +5260,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -5706,6 +5736,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -5721,6 +5755,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -5746,6 +5781,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -5757,6 +5796,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -6249,6 +6289,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -6264,6 +6308,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -6289,6 +6334,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -6300,6 +6349,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -6792,6 +6842,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -6811,6 +6865,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -6838,6 +6893,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -6853,6 +6912,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -7350,6 +7410,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -7371,6 +7435,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     amplitude?: components["schemas"]["Bound"];
@@ -7399,6 +7464,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -7416,6 +7485,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     amplitude?: components["schemas"]["Bound"];
@@ -7928,6 +7998,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -7949,6 +8023,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     amplitude?: components["schemas"]["Bound"];
@@ -7977,6 +8052,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -7994,6 +8073,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     amplitude?: components["schemas"]["Bound"];
@@ -8517,6 +8597,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Temperature at each time and place if nothing resisted between the faces. Unit Cel. */
                 idealTemperature?: number[][];
                 /** @description Local heat flux, positive towards greater depths: from the other body to the own. Unit W/m2. */
@@ -8544,6 +8628,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     idealTemperature?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
@@ -8575,6 +8660,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Temperature at each time and place if nothing resisted between the faces. Unit Cel. */
                 idealTemperature?: number[][];
                 /** @description Local heat flux, positive towards greater depths: from the other body to the own. Unit W/m2. */
@@ -8598,6 +8687,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     idealTemperature?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
@@ -8648,12 +8738,12 @@ export interface components {
             depths?: components["schemas"]["DepthsField3"];
             times: components["schemas"]["TimesField"];
             /**
-             * @description Outputs: some of temperature, rate, idealTemperature, heatFlux, surfaceHeatFlux, heatGained, remainingFraction, completedFraction, contactTemperature, surfaceTemperature, otherSurfaceTemperature. Default temperature.
+             * @description Outputs: some of temperature, rate, sensitivities, idealTemperature, heatFlux, surfaceHeatFlux, heatGained, remainingFraction, completedFraction, contactTemperature, surfaceTemperature, otherSurfaceTemperature. Default temperature.
              * @default [
              *       "temperature"
              *     ]
              */
-            outputs: ("temperature" | "rate" | "idealTemperature" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "remainingFraction" | "completedFraction" | "contactTemperature" | "surfaceTemperature" | "otherSurfaceTemperature")[];
+            outputs: ("temperature" | "rate" | "sensitivities" | "idealTemperature" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "remainingFraction" | "completedFraction" | "contactTemperature" | "surfaceTemperature" | "otherSurfaceTemperature")[];
             /**
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
@@ -9129,6 +9219,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -9152,6 +9246,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -9181,6 +9276,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -9200,6 +9299,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -9774,6 +9874,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -9797,6 +9901,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -9826,6 +9931,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -9845,6 +9954,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -10411,6 +10521,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at its left face. Unit W/m2. */
@@ -10432,6 +10546,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     leftHeatFlux?: components["schemas"]["Bound"];
                     rightHeatFlux?: components["schemas"]["Bound"];
@@ -10460,6 +10575,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at its left face. Unit W/m2. */
@@ -10477,6 +10596,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     leftHeatFlux?: components["schemas"]["Bound"];
                     rightHeatFlux?: components["schemas"]["Bound"];
@@ -11034,6 +11154,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -11055,6 +11179,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     backHeatFlux?: components["schemas"]["Bound"];
@@ -11083,6 +11208,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -11100,6 +11229,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     backHeatFlux?: components["schemas"]["Bound"];
@@ -11147,12 +11277,12 @@ export interface components {
             depths?: components["schemas"]["DepthsField"];
             times: components["schemas"]["TimesField"];
             /**
-             * @description Outputs: some of temperature, rate, heatFlux, surfaceHeatFlux, backHeatFlux, heatGained, meanTemperature, steadyTemperature. Default temperature.
+             * @description Outputs: some of temperature, rate, sensitivities, heatFlux, surfaceHeatFlux, backHeatFlux, heatGained, meanTemperature, steadyTemperature. Default temperature.
              * @default [
              *       "temperature"
              *     ]
              */
-            outputs: ("temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "backHeatFlux" | "heatGained" | "meanTemperature" | "steadyTemperature")[];
+            outputs: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "backHeatFlux" | "heatGained" | "meanTemperature" | "steadyTemperature")[];
             /**
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
@@ -11630,6 +11760,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -11651,6 +11785,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     meanTemperature?: components["schemas"]["Bound"];
@@ -11679,6 +11814,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -11696,6 +11835,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     meanTemperature?: components["schemas"]["Bound"];
@@ -11749,12 +11889,12 @@ export interface components {
             depths?: components["schemas"]["DepthsField"];
             times: components["schemas"]["TimesField"];
             /**
-             * @description Outputs: some of temperature, rate, heatFlux, surfaceHeatFlux, meanTemperature, heatGained, heatReleased, steadyTemperature. Default temperature.
+             * @description Outputs: some of temperature, rate, sensitivities, heatFlux, surfaceHeatFlux, meanTemperature, heatGained, heatReleased, steadyTemperature. Default temperature.
              * @default [
              *       "temperature"
              *     ]
              */
-            outputs: ("temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "meanTemperature" | "heatGained" | "heatReleased" | "steadyTemperature")[];
+            outputs: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "meanTemperature" | "heatGained" | "heatReleased" | "steadyTemperature")[];
             /**
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
@@ -12257,6 +12397,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -12280,6 +12424,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     amplitude?: components["schemas"]["Bound"];
@@ -12309,6 +12454,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -12328,6 +12477,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     amplitude?: components["schemas"]["Bound"];
@@ -12379,12 +12529,12 @@ export interface components {
             depths?: components["schemas"]["DepthsField"];
             times: components["schemas"]["TimesField2"];
             /**
-             * @description Outputs: some of temperature, rate, heatFlux, surfaceHeatFlux, amplitude, timeLag, admittance, admittanceTimeLead, arealHeatCapacity. Default temperature.
+             * @description Outputs: some of temperature, rate, sensitivities, heatFlux, surfaceHeatFlux, amplitude, timeLag, admittance, admittanceTimeLead, arealHeatCapacity. Default temperature.
              * @default [
              *       "temperature"
              *     ]
              */
-            outputs: ("temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "amplitude" | "timeLag" | "admittance" | "admittanceTimeLead" | "arealHeatCapacity")[];
+            outputs: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "amplitude" | "timeLag" | "admittance" | "admittanceTimeLead" | "arealHeatCapacity")[];
             /**
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
@@ -12883,6 +13033,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at its left face. Unit W/m2. */
@@ -12904,6 +13058,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     leftHeatFlux?: components["schemas"]["Bound"];
                     rightHeatFlux?: components["schemas"]["Bound"];
@@ -12932,6 +13087,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at its left face. Unit W/m2. */
@@ -12949,6 +13108,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     leftHeatFlux?: components["schemas"]["Bound"];
                     rightHeatFlux?: components["schemas"]["Bound"];
@@ -13585,6 +13745,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -13608,6 +13772,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -13637,6 +13802,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -13656,6 +13825,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -13704,12 +13874,12 @@ export interface components {
             depths?: components["schemas"]["DepthsField"];
             times: components["schemas"]["TimesField"];
             /**
-             * @description Outputs: some of temperature, rate, heatFlux, surfaceHeatFlux, heatGained, meanTemperature, heatFraction, bathTemperature, equilibriumTemperature. Default temperature.
+             * @description Outputs: some of temperature, rate, sensitivities, heatFlux, surfaceHeatFlux, heatGained, meanTemperature, heatFraction, bathTemperature, equilibriumTemperature. Default temperature.
              * @default [
              *       "temperature"
              *     ]
              */
-            outputs: ("temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "meanTemperature" | "heatFraction" | "bathTemperature" | "equilibriumTemperature")[];
+            outputs: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "meanTemperature" | "heatFraction" | "bathTemperature" | "equilibriumTemperature")[];
             /**
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
@@ -14187,6 +14357,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -14210,6 +14384,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -14239,6 +14414,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -14258,6 +14437,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -14815,6 +14995,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -14838,6 +15022,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -14867,6 +15052,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -14886,6 +15075,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -15436,6 +15626,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -15459,6 +15653,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -15488,6 +15683,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -15507,6 +15706,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -16064,6 +16264,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -16087,6 +16291,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -16116,6 +16321,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive inward from the exposed face. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at the exposed face. Unit W/m2. */
@@ -16135,6 +16344,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -16684,6 +16894,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive outward. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at its inner face, per m2 of that face. Unit W/m2. */
@@ -16705,6 +16919,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     innerHeatFlux?: components["schemas"]["Bound"];
                     outerHeatFlux?: components["schemas"]["Bound"];
@@ -16733,6 +16948,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive outward. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the body at its inner face, per m2 of that face. Unit W/m2. */
@@ -16750,6 +16969,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     innerHeatFlux?: components["schemas"]["Bound"];
                     outerHeatFlux?: components["schemas"]["Bound"];
@@ -16803,12 +17023,12 @@ export interface components {
             radii?: components["schemas"]["RadiiField"];
             times: components["schemas"]["TimesField"];
             /**
-             * @description Outputs: some of temperature, rate, heatFlux, innerHeatFlux, outerHeatFlux, heatGained, meanTemperature, steadyTemperature. Default temperature.
+             * @description Outputs: some of temperature, rate, sensitivities, heatFlux, innerHeatFlux, outerHeatFlux, heatGained, meanTemperature, steadyTemperature. Default temperature.
              * @default [
              *       "temperature"
              *     ]
              */
-            outputs: ("temperature" | "rate" | "heatFlux" | "innerHeatFlux" | "outerHeatFlux" | "heatGained" | "meanTemperature" | "steadyTemperature")[];
+            outputs: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "innerHeatFlux" | "outerHeatFlux" | "heatGained" | "meanTemperature" | "steadyTemperature")[];
             /**
              * @description Detail: full, or compact (result, bound and warning codes only).
              * @enum {string}
@@ -17313,6 +17533,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive outward from the cylinder. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the medium at the surface of the cylinder, per m2 of it. Unit W/m2. */
@@ -17332,6 +17556,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -17359,6 +17584,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive outward from the cylinder. Unit W/m2. */
                 heatFlux?: number[][];
                 /** @description Heat flux conducted into the medium at the surface of the cylinder, per m2 of it. Unit W/m2. */
@@ -17374,6 +17603,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                     surfaceHeatFlux?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -17896,6 +18126,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -17915,6 +18149,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -17942,6 +18177,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -17957,6 +18196,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -18413,6 +18653,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -18432,6 +18676,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -18459,6 +18704,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -18474,6 +18723,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -18955,6 +19205,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -18974,6 +19228,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -19001,6 +19256,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -19016,6 +19275,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                     heatGained?: components["schemas"]["Bound"];
@@ -19464,6 +19724,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -19477,6 +19741,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                 };
@@ -19501,6 +19766,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -19510,6 +19779,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                 };
@@ -19959,6 +20229,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -19972,6 +20246,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                 };
@@ -19996,6 +20271,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -20005,6 +20284,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                 };
@@ -20422,6 +20702,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -20435,6 +20719,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                 };
@@ -20459,6 +20744,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Share of the initial difference to the end state that is left: 1 at the start. Unit 1. */
                 remainingFraction?: number[][];
                 /** @description Share of the change that is done, computed without cancellation. Unit 1. */
@@ -20468,6 +20757,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     remainingFraction?: components["schemas"]["Bound"];
                     completedFraction?: components["schemas"]["Bound"];
                 };
@@ -20889,6 +21179,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive outward from the line. Unit W/m2. */
                 heatFlux?: number[][];
             };
@@ -20900,6 +21194,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                 };
                 /**
@@ -20923,6 +21218,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive outward from the line. Unit W/m2. */
                 heatFlux?: number[][];
             };
@@ -20930,6 +21229,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                 };
             };
@@ -21414,6 +21714,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive outward from the point. Unit W/m2. */
                 heatFlux?: number[][];
             };
@@ -21425,6 +21729,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                 };
                 /**
@@ -21448,6 +21753,10 @@ export interface components {
                 temperature?: number[][];
                 /** @description How fast the temperature rises at each time and place. Unit K/s. */
                 rate?: number[][];
+                /** @description By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient. Unit K. */
+                sensitivities?: {
+                    [key: string]: number[][];
+                };
                 /** @description Local heat flux, positive outward from the point. Unit W/m2. */
                 heatFlux?: number[][];
             };
@@ -21455,6 +21764,7 @@ export interface components {
                 bound: {
                     temperature?: components["schemas"]["Bound"];
                     rate?: components["schemas"]["Bound"];
+                    sensitivities?: components["schemas"]["Bound"];
                     heatFlux?: components["schemas"]["Bound"];
                 };
             };
@@ -22014,12 +22324,12 @@ export interface components {
         /** @description Depths: inward from the exposed face. Unit m; 1 to 2000 values, each a number from 0 to 100000 m. */
         DepthsField: (number | components["schemas"]["LengthWithUnit"])[];
         /**
-         * @description Outputs: some of temperature, rate, heatFlux, surfaceHeatFlux, heatGained, remainingFraction, completedFraction. Default temperature.
+         * @description Outputs: some of temperature, rate, sensitivities, heatFlux, surfaceHeatFlux, heatGained, remainingFraction, completedFraction. Default temperature.
          * @default [
          *       "temperature"
          *     ]
          */
-        OutputsField: ("temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "remainingFraction" | "completedFraction")[];
+        OutputsField: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "remainingFraction" | "completedFraction")[];
         /** @description Depth: of one place. Unit m; a number from 0 to 100000 m. */
         DepthField: number | components["schemas"]["LengthWithUnit"];
         /** @description Depths: one place, or two: the first less the second. Unit m; 1 to 2 values, each a number from 0 to 100000 m. */
@@ -22044,12 +22354,12 @@ export interface components {
         /** @description Ramp duration: then the surface is held; left out, the ramp never ends. Unit s; a number from 1e-9 to 1e17 s. */
         RampDurationField: number | components["schemas"]["TimeWithUnit"];
         /**
-         * @description Outputs: some of temperature, rate, heatFlux, surfaceHeatFlux, heatGained. Default temperature.
+         * @description Outputs: some of temperature, rate, sensitivities, heatFlux, surfaceHeatFlux, heatGained. Default temperature.
          * @default [
          *       "temperature"
          *     ]
          */
-        OutputsField2: ("temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "heatGained")[];
+        OutputsField2: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "heatGained")[];
         /** @description Imposed heat flux: absorbed at the face, positive into the body. Unit W/m2; a number from -1e12 to 1e12 W/m2. */
         ImposedHeatFluxField: number | components["schemas"]["HeatFluxWithUnit"];
         /** @description Pulse duration: the flux acts as long, then the face is insulated; left out, it never ends. Unit s; a number from 1e-9 to 1e17 s. */
@@ -22067,19 +22377,19 @@ export interface components {
         /** @description Times: of the clock of the cycle, any sign. Unit s; 1 to 100000 values, each a number from -1e17 to 1e17 s. */
         TimesField2: (number | components["schemas"]["TimeWithUnit"])[];
         /**
-         * @description Outputs: some of temperature, rate, heatFlux, surfaceHeatFlux, amplitude, timeLag, dampingDepth, heatPerHalfCycle. Default temperature.
+         * @description Outputs: some of temperature, rate, sensitivities, heatFlux, surfaceHeatFlux, amplitude, timeLag, dampingDepth, heatPerHalfCycle. Default temperature.
          * @default [
          *       "temperature"
          *     ]
          */
-        OutputsField3: ("temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "amplitude" | "timeLag" | "dampingDepth" | "heatPerHalfCycle")[];
+        OutputsField3: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "amplitude" | "timeLag" | "dampingDepth" | "heatPerHalfCycle")[];
         /** @description Time: of the clock. Unit s; a number from -1e17 to 1e17 s. */
         TimeField2: number | components["schemas"]["TimeWithUnit"];
         /** @description From: the first time looked at; default 0. Unit s; a number from -1e17 to 1e17 s. */
         FromField3: number | components["schemas"]["TimeWithUnit"];
         /** @description Until: the last time looked at. Unit s; a number from -1e17 to 1e17 s. */
         UntilField4: number | components["schemas"]["TimeWithUnit"];
-        /** @description Thickness: of this body, to check how long the answer holds; changes no number. Unit m; a number from 1e-9 to 100000 m. */
+        /** @description Thickness: of the body, to check how long the answer holds; changes no number. Unit m; a number from 1e-9 to 100000 m. */
         ThicknessField2: number | components["schemas"]["LengthWithUnit"];
         /** @description Other body: the solid that is touched, with its initial temperature; it lies at depths below 0. */
         OtherField: {
@@ -22097,7 +22407,7 @@ export interface components {
             diffusivity?: number | components["schemas"]["DiffusivityWithUnit"];
             /** @description Initial temperature: the same everywhere at time 0. Unit Cel; a number from -273.15 to 10000 Cel. */
             initialTemperature: number | components["schemas"]["TemperatureWithUnit"];
-            /** @description Thickness: of this body, to check how long the answer holds; changes no number. Unit m; a number from 1e-9 to 100000 m. */
+            /** @description Thickness: of the body, to check how long the answer holds; changes no number. Unit m; a number from 1e-9 to 100000 m. */
             thickness?: number | components["schemas"]["LengthWithUnit"];
         };
         /** @description Contact conductance: left out: perfect contact; skin 500 to 2000, pressed metal 1e3 to 1e4. Unit W/(m2.K); a number from 1e-9 to 1e12 W/(m2.K). */
@@ -22109,12 +22419,12 @@ export interface components {
         /** @description Depths: one place, or two: the first less the second. Unit m; 1 to 2 values, each a number from -100000 to 100000 m. */
         DepthsField4: (number | components["schemas"]["LengthWithUnit"])[];
         /**
-         * @description Outputs: some of temperature, rate, heatFlux, surfaceHeatFlux, heatGained, meanTemperature, remainingFraction, completedFraction, heatFraction. Default temperature.
+         * @description Outputs: some of temperature, rate, sensitivities, heatFlux, surfaceHeatFlux, heatGained, meanTemperature, remainingFraction, completedFraction, heatFraction. Default temperature.
          * @default [
          *       "temperature"
          *     ]
          */
-        OutputsField4: ("temperature" | "rate" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "meanTemperature" | "remainingFraction" | "completedFraction" | "heatFraction")[];
+        OutputsField4: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "surfaceHeatFlux" | "heatGained" | "meanTemperature" | "remainingFraction" | "completedFraction" | "heatFraction")[];
         /** @description Biot number: hL/k. Unit 1; 0, or a number from 1e-9 to 1e9. */
         BiotField: number | components["schemas"]["RatioWithUnit"];
         /** @description Fourier numbers: at/L². Unit 1; 1 to 100000 values, each a number from 0 to 1e17. */
@@ -22194,12 +22504,12 @@ export interface components {
             kind: "insulated";
         };
         /**
-         * @description Outputs: some of temperature, rate, heatFlux, leftHeatFlux, rightHeatFlux, heatGained, meanTemperature, steadyTemperature. Default temperature.
+         * @description Outputs: some of temperature, rate, sensitivities, heatFlux, leftHeatFlux, rightHeatFlux, heatGained, meanTemperature, steadyTemperature. Default temperature.
          * @default [
          *       "temperature"
          *     ]
          */
-        OutputsField6: ("temperature" | "rate" | "heatFlux" | "leftHeatFlux" | "rightHeatFlux" | "heatGained" | "meanTemperature" | "steadyTemperature")[];
+        OutputsField6: ("temperature" | "rate" | "sensitivities" | "heatFlux" | "leftHeatFlux" | "rightHeatFlux" | "heatGained" | "meanTemperature" | "steadyTemperature")[];
         /**
          * @description Quantity: temperature, meanTemperature. Default temperature.
          * @enum {string}
@@ -22424,12 +22734,12 @@ export interface components {
             y: number | components["schemas"]["LengthWithUnit"];
         }[];
         /**
-         * @description Outputs: some of temperature, rate, remainingFraction, completedFraction, heatGained, meanTemperature, heatFraction. Default temperature.
+         * @description Outputs: some of temperature, rate, sensitivities, remainingFraction, completedFraction, heatGained, meanTemperature, heatFraction. Default temperature.
          * @default [
          *       "temperature"
          *     ]
          */
-        OutputsField7: ("temperature" | "rate" | "remainingFraction" | "completedFraction" | "heatGained" | "meanTemperature" | "heatFraction")[];
+        OutputsField7: ("temperature" | "rate" | "sensitivities" | "remainingFraction" | "completedFraction" | "heatGained" | "meanTemperature" | "heatFraction")[];
         /** @description Point: a point {x, y}, in m. */
         PointField: {
             /** @description x. Unit m; a number from -100000 to 100000 m. */
@@ -22533,12 +22843,12 @@ export interface components {
             r?: number | components["schemas"]["LengthWithUnit"];
         }[];
         /**
-         * @description Outputs: some of temperature, rate, remainingFraction, completedFraction. Default temperature.
+         * @description Outputs: some of temperature, rate, sensitivities, remainingFraction, completedFraction. Default temperature.
          * @default [
          *       "temperature"
          *     ]
          */
-        OutputsField8: ("temperature" | "rate" | "remainingFraction" | "completedFraction")[];
+        OutputsField8: ("temperature" | "rate" | "sensitivities" | "remainingFraction" | "completedFraction")[];
         /** @description Point: a point {x, y, z, r}, in m. */
         PointField4: {
             /** @description x. Unit m; a number from -100000 to 100000 m. */
@@ -22582,12 +22892,12 @@ export interface components {
         /** @description Probe radius: to check how well a line stands for the probe; changes no number. Unit m; a number from 1e-9 to 100000 m. */
         ProbeRadiusField: number | components["schemas"]["LengthWithUnit"];
         /**
-         * @description Outputs: some of temperature, rate, heatFlux. Default temperature.
+         * @description Outputs: some of temperature, rate, sensitivities, heatFlux. Default temperature.
          * @default [
          *       "temperature"
          *     ]
          */
-        OutputsField9: ("temperature" | "rate" | "heatFlux")[];
+        OutputsField9: ("temperature" | "rate" | "sensitivities" | "heatFlux")[];
         /** @description Power: released from time 0 on; or energy. Unit W; a number from -1e15 to 1e15 W. */
         PowerField2: number | components["schemas"]["PowerWithUnit"];
         /** @description Energy: released all at once at time 0; or power. Unit J; a number from -1e15 to 1e15 J. */

@@ -165,9 +165,9 @@ export function defineCase<S extends z.ZodRawShape, R extends Resolved>(descript
     if (issues.length > 0) throw new DomainError(issues)
     return resolved
   }
-  // A rate follows from the temperatures of any case.
+  // Rates and sensitivities follow from the temperatures of any case.
   const { temperature, ...others } = description.outputs
-  const outputs = temperature ? { temperature, rate: {}, ...others } : others
+  const outputs = temperature ? { temperature, rate: {}, sensitivities: {}, ...others } : others
   return { ...(description as unknown as Case), outputs, resolve }
 }
 

@@ -61,7 +61,7 @@ export const domainCodes = {
   },
   'no-rate-at-change': {
     title: 'There is no rate at this time',
-    text: 'A temperature has one rate before a change of what drives it and another after it. Ask for a time to either side.',
+    text: 'A temperature has one rate before a change of what drives it and another after it, and no one sensitivity to a duration that ends there. Ask for a time to either side.',
   },
   'singular-at-time-zero': {
     title: 'The output diverges at time zero',

@@ -1,7 +1,7 @@
 import { SLOPE_COST } from './rate.ts'
 
-/** Where an output has numbers: at each time and place, at each time, at each place, or once. */
-export type Shape = 'grid' | 'times' | 'places' | 'single'
+/** Where an output has numbers: at each time and place, the same for each parameter, at each time, at each place, or once. */
+export type Shape = 'grid' | 'grids' | 'times' | 'places' | 'single'
 
 export interface OutputDescription {
   label: string
@@ -28,6 +28,14 @@ export const outputCatalogue = {
     unit: 'K/s',
     shape: 'grid',
     text: 'How fast the temperature rises at each time and place.',
+    cost: SLOPE_COST,
+  },
+  sensitivities: {
+    label: 'Sensitivities',
+    symbol: '∂T/∂ln p',
+    unit: 'K',
+    shape: 'grids',
+    text: 'By how much the temperature at each time and place changes with the logarithm of each parameter that the input states, all others kept: a hundredth of it for 1 %. An object with the parameters as names, such as conductivity or left.filmCoefficient.',
     cost: SLOPE_COST,
   },
   heatFlux: {

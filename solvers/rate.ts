@@ -1,9 +1,5 @@
+import { extrapolated, type Slope } from './extrapolate.ts'
 import { EPS } from './math/rounding.ts'
-
-export interface Slope {
-  value: number
-  error: number
-}
 
 /** Halvings of the first step. */
 const LEVELS = 6
@@ -14,10 +10,7 @@ export const SLOPE_COST = 2 * LEVELS
 /**
  * The times at which a history must be known for its slopes, and the slopes that follow.
  *
- *   D(H) = [T(t + H) − T(t − H)]/(2H),   H = H₀·2^(−n),   D ← D + (D(H/2) − D(H))/(4^m − 1)
- *
- * an extrapolation to a vanishing step. Of the table the entry is taken whose distance to its neighbours and the roundings
- * together are least; both are the error.
+ *   D(H) = [T(t + H) − T(t − H)]/(2H),   H = H₀·2^(−n),   extrapolated to a vanishing step
  *
  * Shapes    n times; 12 n times asked; n slopes from 12 n values.
  * Units     those of the history over seconds.
@@ -39,29 +32,9 @@ export function stencilOf(times: readonly number[], firstStepOf: (t: number) => 
     })
     const told = differences.filter((d) => Number.isFinite(d.value) && Number.isFinite(d.error))
     // Where times are so small that nothing can be told, the bound says so.
-    return told.length === 0 ? { value: 0, error: Number.MAX_VALUE } : extrapolated(told)
+    return told.length === 0 ? { value: 0, error: Number.MAX_VALUE } : extrapolated(told, 4)
   }
   return { asked, slope }
 }
 
 const levels = Array.from({ length: LEVELS }, (_, n) => n)
-
-/** The best entry of the table: rows are halved steps, columns have an error term less each. A lone row tells nothing. */
-function extrapolated(differences: readonly Slope[]): Slope {
-  let best: Slope = { value: differences[0]!.value, error: Number.MAX_VALUE }
-  let above: Slope[] = []
-  for (const difference of differences) {
-    const row: Slope[] = [difference]
-    for (let m = 1; m <= above.length; m++) {
-      const [fine, coarse] = [row[m - 1]!, above[m - 1]!]
-      const factor = 4 ** m
-      const value = fine.value + (fine.value - coarse.value) / (factor - 1)
-      const rounding = (factor * fine.error + coarse.error) / (factor - 1)
-      row.push({ value, error: rounding })
-      const distance = Math.max(Math.abs(value - fine.value), Math.abs(value - (above[m]?.value ?? coarse.value)))
-      if (distance + rounding < best.error) best = { value, error: distance + rounding }
-    }
-    above = row
-  }
-  return best
-}

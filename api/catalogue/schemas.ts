@@ -3,7 +3,7 @@ import { cautions } from '../../solvers/cautions.ts'
 import { outputNames } from '../../solvers/outputs.ts'
 
 const text = z.string()
-const shape = z.enum(['grid', 'times', 'places', 'single'])
+const shape = z.enum(['grid', 'grids', 'times', 'places', 'single'])
 
 const caseOperationSchema = z.strictObject({
   id: text,

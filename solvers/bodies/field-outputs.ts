@@ -4,7 +4,7 @@ import type { Bound, Output, Solution } from '../solution.ts'
 
 /** How one output is found, at time i and place j; a value that has no time or no place ignores it. */
 export interface Field {
-  shape: Shape
+  shape: Exclude<Shape, 'grids'>
   /** How the bound is told: fractions and what follows one drive alone keep their digits however small they are. */
   bound: 'absolute' | 'relative'
   at(i: number, j: number): Estimate
@@ -53,7 +53,7 @@ export function fieldOutputs(
 }
 
 function fill(
-  shape: Shape,
+  shape: Field['shape'],
   { times, places }: { times: readonly number[]; places: number | undefined },
   collect: (i: number, j: number) => number,
 ): Output['values'] {

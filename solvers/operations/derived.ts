@@ -1,15 +1,22 @@
 import type { Case, Resolved } from '../case.ts'
 import { DomainError } from '../errors.ts'
 import { lastPlaces } from '../math/rounding.ts'
+import type { OutputName } from '../outputs.ts'
 import { stencilOf } from '../rate.ts'
 import type { Output, Solution } from '../solution.ts'
 import { courseOf } from './course.ts'
+import type { Read } from './places.ts'
+import { refuseSensitivities, type Sensitivities, sensitivitiesOf } from './sensitivities/sensitivities.ts'
 
 /* Outputs that follow from the temperatures of any case; the cases know nothing of them. */
 
-/** Refuses a rate where there is none: at the change itself, and where what drives the case changes its law. */
-export function refuseDerived(c: Case, input: Resolved): void {
-  if (!input.outputs.includes('rate')) return
+/** Refuses what there is none of: a rate at the change itself, and where what drives the case changes its law. */
+export function refuseDerived(c: Case, asked: Read, input: Resolved): void {
+  if (input.outputs.includes('rate')) refuseRate(c, input)
+  if (input.outputs.includes('sensitivities')) refuseSensitivities(c, asked)
+}
+
+function refuseRate(c: Case, input: Resolved): void {
   const { instants } = courseOf(c, { ...input }, input)
   const issues = input.times.flatMap((time, i) => {
     if (!(time === 0 && !c.clock) && !instants.includes(time)) return []
@@ -19,11 +26,25 @@ export function refuseDerived(c: Case, input: Resolved): void {
   if (issues.length > 0) throw new DomainError(issues)
 }
 
+const derived: readonly OutputName[] = ['rate', 'sensitivities']
+
 /** The solution of a case with what follows from it. */
-export function solveWithDerived(c: Case, input: Resolved): Solution {
-  if (!input.outputs.includes('rate')) return c.solve(input)
-  const own = c.solve({ ...input, outputs: input.outputs.filter((name) => name !== 'rate') })
-  return { ...own, outputs: { ...own.outputs, rate: rateOf(c, input) } }
+export interface WithDerived extends Omit<Solution, 'outputs'> {
+  outputs: Partial<Record<OutputName, Output | Sensitivities>>
+}
+
+export function solveWithDerived(c: Case, asked: Read, input: Resolved): WithDerived {
+  const own = input.outputs.filter((name) => !derived.includes(name))
+  if (own.length === input.outputs.length) return c.solve(input)
+  const solution = c.solve({ ...input, outputs: own })
+  return {
+    ...solution,
+    outputs: {
+      ...solution.outputs,
+      ...(input.outputs.includes('rate') ? { rate: rateOf(c, input) } : {}),
+      ...(input.outputs.includes('sensitivities') ? { sensitivities: sensitivitiesOf(c, asked) } : {}),
+    },
+  }
 }
 
 function rateOf(c: Case, input: Resolved): Output {

@@ -20,6 +20,9 @@ const placesAccepted = {
   none: 'no places',
 }
 
+const needsPlaces = (c: Case, name: OutputName) =>
+  c.places !== 'none' && ['grid', 'grids', 'places'].includes(answeredShape(c, name))
+
 /** Places that are missing, given in two ways, or outside the body. */
 export function refusePlaces(c: Case, input: Read): void {
   const names = placeFields[c.places]
@@ -29,7 +32,7 @@ export function refusePlaces(c: Case, input: Read): void {
     const detail = 'The places are given twice: by depths and by radii.'
     throw new DomainError([{ pointer: '#/radii', code: 'conflicting-fields', detail, accepted }])
   }
-  const placed = input.outputs.find((name) => ['grid', 'places'].includes(answeredShape(c, name)))
+  const placed = input.outputs.find((name) => needsPlaces(c, name))
   if (placed && given.length === 0) {
     const detail = `${placed} needs ${names.join(' or ')}.`
     throw new DomainError([{ pointer: `#/${names[0]}`, code: 'missing-field', detail, accepted }])

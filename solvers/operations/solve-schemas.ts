@@ -39,6 +39,7 @@ function inputSchema(c: Case) {
 
 const valuesSchema: Record<Shape, z.ZodType> = {
   grid: z.array(z.array(z.number())),
+  grids: z.record(z.string(), z.array(z.array(z.number()))),
   times: z.array(z.number()),
   places: z.array(z.number()),
   single: z.number(),
@@ -64,7 +65,10 @@ export function answerSchema(c: Case) {
     z.strictObject(Object.fromEntries(names.map((name) => [name, schemaOf(name).optional()])))
   const result = perOutput((name) => {
     const o = outputOf(c, name)
-    return valuesSchema[answeredShape(c, name)].meta({
+    const shape = answeredShape(c, name)
+    const schema =
+      shape === 'grids' && c.places === 'none' ? z.record(z.string(), valuesSchema.times) : valuesSchema[shape]
+    return schema.meta({
       title: o.label,
       description: `${o.text} Unit ${o.unit}.`,
       'x-ucum': o.unit,

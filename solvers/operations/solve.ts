@@ -9,6 +9,7 @@ import { headed, scopeOf, tailOf, warningsOf } from './envelope.ts'
 import type { Call, CaseOperation } from './index.ts'
 import { type Read, refusePlaces } from './places.ts'
 import { readBody } from './read-body.ts'
+import { countParameters } from './sensitivities/parameters.ts'
 import { answerSchema, compactSchema, inputOf } from './solve-schemas.ts'
 
 /** An output that the case lacks is refused with the reason, and with those it has. */
@@ -31,15 +32,17 @@ function prepare(c: Case, body: unknown, defaultDetail: 'full' | 'compact'): Cal
   input.outputs = [...new Set(input.outputs)]
   refusePlaces(c, input)
   const resolved = c.resolve(input)
-  refuseDerived(c, resolved)
-  const values = countValues(c, resolved)
-  const points = c.weight * countValues(c, resolved, (name) => outputOf(c, name).cost ?? 1) + c.setUp
-  const size = Math.max(values, resolved.times.length, countOfPlaces(resolved))
-  return { values, size, points, run: () => answer(c, resolved, points, detail === 'compact') }
+  refuseDerived(c, input, resolved)
+  const parameters = resolved.outputs.includes('sensitivities') ? countParameters(c, input) : 0
+  const values = countValues(c, resolved, () => 1, parameters)
+  const solved = countValues(c, resolved, (name) => outputOf(c, name).cost ?? 1, parameters)
+  const points = c.weight * solved + c.setUp
+  const size = Math.max(solved, resolved.times.length, countOfPlaces(resolved))
+  return { values, size, points, run: () => answer(c, input, resolved, points, detail === 'compact') }
 }
 
-function answer(c: Case, input: Resolved, points: number, compact: boolean) {
-  const solution = solveWithDerived(c, input)
+function answer(c: Case, asked: Read, input: Resolved, points: number, compact: boolean) {
+  const solution = solveWithDerived(c, asked, input)
   const result: Record<string, unknown> = {}
   const bound: Record<string, unknown> = {}
   const units: Record<string, string> = {}

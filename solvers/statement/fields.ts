@@ -100,6 +100,15 @@ export const film = {
 
 const length = { unit: 'm', min: 1e-9, max: 1e5, typical: [0.005, 1] } as const
 export const thickness = quantity({ ...length, symbol: 'd', label: 'Thickness', hint: 'whole, never half' })
+/** Of a body that is taken to have no end. */
+export const checkedThickness = quantity({
+  ...length,
+  typical: [0.001, 10],
+  symbol: 'd',
+  label: 'Thickness',
+  hint: 'of the body, to check how long the answer holds; changes no number',
+  changesNoNumber: true,
+}).optional()
 export const radius = quantity({ ...length, symbol: 'R', label: 'Radius' })
 
 export const exposedFaces = z.union([z.literal(1), z.literal(2)]).meta({

@@ -14,6 +14,8 @@ export interface QuantityDescription {
   max: number
   /** Zero is allowed beside min..max. */
   zero?: boolean
+  /** Only checks read it. */
+  changesNoNumber?: true
   /** Values met in practice; outside them the answer carries a warning. */
   typical?: readonly [number, number]
   /** One short line for the form and the reference. */
@@ -41,6 +43,7 @@ export function quantity(d: QuantityDescription) {
     'x-units': [...acceptedUnits(d.unit)],
     'x-accepted': acceptedOf(d),
     ...(d.hint ? { 'x-hint': d.hint } : {}),
+    ...(d.changesNoNumber ? { 'x-changes-no-number': true } : {}),
     ...(d.zero ? { 'x-zero-or': d.min } : {}),
     ...(d.typical ? { 'x-typical': [...d.typical] } : {}),
   })

@@ -37,7 +37,9 @@ function answerOf(c: Case, body: Asked): { result: unknown; accuracy: unknown } 
 export function compute(): Golden {
   const times = Array.from({ length: 41 }, (_, i) => 10 ** (i / 5))
   const digests = cases.map((c) => {
-    const body = { ...c.example, times, outputs: outputNamesOf(c) }
+    // Sensitivities are made of temperatures alone, and of very many.
+    const outputs = outputNamesOf(c).filter((name) => name !== 'sensitivities')
+    const body = { ...c.example, times, outputs }
     const { result, accuracy } = answerOf(c, body)
     return [
       c.id,

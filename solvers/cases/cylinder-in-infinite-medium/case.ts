@@ -44,6 +44,7 @@ const fields = {
     max: 1e5,
     typical: [0.1, 300],
     hint: 'to check when its ends are felt; changes no number',
+    changesNoNumber: true,
   }).optional(),
   initialTemperature,
 }

@@ -32,6 +32,7 @@ const fields = {
     max: 1e5,
     typical: [2e-4, 0.2],
     hint: 'to check how well a line stands for the probe; changes no number',
+    changesNoNumber: true,
   }).optional(),
 }
 

@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import { type Check, defineCase, type Resolved } from '../../case.ts'
 import type { Issue } from '../../errors.ts'
-import { initialTemperature, solid } from '../../statement/fields.ts'
+import { checkedThickness, initialTemperature, solid } from '../../statement/fields.ts'
 import type { OutputName } from '../../outputs.ts'
 import { quantity } from '../../statement/quantity.ts'
 import { refuseFluxAtStep } from '../../bodies/singular.ts'
@@ -20,15 +20,7 @@ interface ContactResolved extends ContactInput, Resolved {
 const body = {
   ...solid,
   initialTemperature,
-  thickness: quantity({
-    symbol: 'd',
-    unit: 'm',
-    label: 'Thickness',
-    min: 1e-9,
-    max: 1e5,
-    typical: [0.001, 10],
-    hint: 'of this body, to check how long the answer holds; changes no number',
-  }).optional(),
+  thickness: checkedThickness,
 }
 
 const fields = {

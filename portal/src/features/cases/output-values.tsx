@@ -5,6 +5,8 @@ import { type Answer, type CompactAnswer, isFull } from '../../solving/solve.ts'
 import type { Case } from './described.ts'
 
 type Values = number | number[] | number[][]
+/** The same for each parameter, by its name. */
+type ByParameter = Record<string, number[] | number[][]>
 type Shape = Case['outputs'][number]['shape']
 
 interface Bound {
@@ -28,11 +30,12 @@ export function OutputValues({ description: c, answer }: { description: Case; an
   const axes: Axes = isFull(answer) ? answer.axes : {}
   return (
     <div className="grid gap-5">
-      {Object.entries(answer.result as Record<string, Values>).map(([name, values]) => {
+      {tablesOf(answer.result as Record<string, Values | ByParameter>).map(({ name, parameter, values }) => {
         const output = c.outputs.find((one) => one.name === name)
         const unit = unitText((isFull(answer) && answer.units[name]) || output?.unit || '')
         const limit = `error at most ${limitOf(values, bounds[name]!)}${unit ? ` ${unit === '°C' ? 'K' : unit}` : ''}`
-        const head = `${output?.label ?? name}${unit ? `, ${unit}` : ''}`
+        const label = parameter ? `Sensitivity to ${parameter}` : (output?.label ?? name)
+        const head = `${label}${unit ? `, ${unit}` : ''}`
         if (typeof values === 'number')
           return (
             <dl key={name} className="dl">
@@ -42,10 +45,26 @@ export function OutputValues({ description: c, answer }: { description: Case; an
               </dd>
             </dl>
           )
-        return <Table key={name} {...{ head, limit, values, axes }} shape={output?.shape ?? 'times'} />
+        return (
+          <Table key={`${name} ${parameter}`} {...{ head, limit, values, axes }} shape={output?.shape ?? 'times'} />
+        )
       })}
     </div>
   )
+}
+
+interface TableOf {
+  name: string
+  parameter?: string
+  values: Values
+}
+
+/** One table an output, or one for each of its parameters. */
+function tablesOf(result: Record<string, Values | ByParameter>): TableOf[] {
+  return Object.entries(result).flatMap(([name, values]): TableOf[] => {
+    if (typeof values === 'number' || Array.isArray(values)) return [{ name, values }]
+    return Object.entries(values).map(([parameter, inner]) => ({ name, parameter, values: inner }))
+  })
 }
 
 interface TableProps {
