@@ -7,19 +7,9 @@ import { type Crossing, crossingsOf } from './curve/crossing.ts'
 import { overPlaces } from './curve/curve.ts'
 import { placeGrid } from './curve/grid.ts'
 import { type Scan, scan } from './curve/scan.ts'
-import {
-  accuracyScope,
-  boundSchema,
-  compactOf,
-  detailField,
-  headed,
-  headOf,
-  scopeOf,
-  tail,
-  tailOf,
-  warningsOf,
-} from './envelope.ts'
+import { compactOf, detailField } from './envelope.ts'
 import { between, partsOf } from './example.ts'
+import { foundAnswer, foundSchema } from './found.ts'
 import type { Call, CaseOperation } from './index.ts'
 import { once } from './once.ts'
 import { basePrice, type Question, renamed, resolveTold } from './question.ts'
@@ -100,15 +90,15 @@ function answer(c: Case, q: Question, asked: Asked, points: number, compact: boo
   const found = { ...q.asked, [axis]: places, times: [time], outputs: ['temperature'] }
   const resolved = deepest ? c.resolve(found) : q.resolved
   const echoed = echoedOf(c, q, { time, target })
-  const warnings = warningsOf(c, resolved, echoed)
-  if (compact) return { result, accuracy: { bound }, warnings: warnings.map((w) => w.code) }
-  return {
-    ...headed(c, 'depth-reached', points, echoed),
+  return foundAnswer(c, 'depth-reached', {
+    points,
+    compact,
+    echoed,
+    resolved,
     units: { [all]: 'm', target: 'Cel', gradient: 'K/m', [perTenth]: 'm' },
     result,
-    accuracy: { method: ['root'], bound, ...scopeOf },
-    ...tailOf(c, resolved, warnings),
-  }
+    bound,
+  })
 }
 
 /** The face itself, where it is held at the target and the body is not. */
@@ -136,10 +126,10 @@ function outcomeOf(c: Case, q: Question, asked: Asked, { values }: Scan): 'every
 
 const answerSchema = once((c: Case) => {
   const { all, one, perTenth } = words[axisOf(c)!]
-  return z.strictObject({
-    ...headOf(c, 'depth-reached'),
-    units: z.record(z.string(), z.string()).meta({ description: 'UCUM code of each number.' }),
-    result: z.strictObject({
+  return foundSchema(
+    c,
+    'depth-reached',
+    {
       outcome: z.enum(['reached', 'everywhere', 'nowhere']).meta({
         description:
           'reached; everywhere: the whole body is beyond the target; nowhere: none of it is, seen from its start.',
@@ -151,14 +141,9 @@ const answerSchema = once((c: Case) => {
         .number()
         .optional()
         .meta({ description: '0.1 K over that gradient: what a tenth of a kelvin in the target moves it, m.' }),
-    }),
-    accuracy: z.strictObject({
-      method: z.array(z.string()),
-      bound: z.strictObject({ [all]: boundSchema }),
-      ...accuracyScope,
-    }),
-    ...tail,
-  })
+    },
+    [all],
+  )
 })
 
 /** The case's own example, asked for the temperature half way between its first and last place at the last time. */

@@ -3,20 +3,10 @@ import type { Case } from '../case.ts'
 import { DomainError, type Issue } from '../errors.ts'
 import { type Curve, overTime } from './curve/curve.ts'
 import { timeGrid } from './curve/grid.ts'
-import { type Scan, scan, type Turn, turnAt, turnsIn } from './curve/scan.ts'
-import {
-  accuracyScope,
-  boundSchema,
-  compactOf,
-  detailField,
-  headed,
-  headOf,
-  scopeOf,
-  tail,
-  tailOf,
-  warningsOf,
-} from './envelope.ts'
+import { reserveOf, type Scan, scan, type Turn, turnAt, turnsIn } from './curve/scan.ts'
+import { compactOf, detailField } from './envelope.ts'
 import { partsOf } from './example.ts'
+import { foundAnswer, foundSchema } from './found.ts'
 import type { Call, CaseOperation } from './index.ts'
 import { once } from './once.ts'
 import { basePrice, placeInputs, type Question, quantitiesOf, quantityField, questionOf } from './question.ts'
@@ -68,16 +58,16 @@ function answer(c: Case, q: Question, from: number, until: number, points: numbe
   const bound = { value: larger(maximum.bound, minimum.bound), time: larger(maximum.atBound, minimum.atBound) }
   const resolved = c.resolve({ ...q.asked, times: [maximum.at, minimum.at], outputs: [q.output] })
   const echoed = echoedOf(c, q, { quantity: q.output, from, until })
-  const warnings = warningsOf(c, resolved, echoed)
-  if (compact) return { result, accuracy: { bound }, warnings: warnings.map((w) => w.code) }
   const unit = q.places.length === 2 && q.unit === 'Cel' ? 'K' : q.unit
-  return {
-    ...headed(c, 'extremes', points, echoed),
+  return foundAnswer(c, 'extremes', {
+    points,
+    compact,
+    echoed,
+    resolved,
     units: { value: unit, time: 's' },
     result,
-    accuracy: { method: ['root'], bound, ...scopeOf },
-    ...tailOf(c, resolved, warnings),
-  }
+    bound,
+  })
 }
 
 /** Turns of one curve that are looked at closely. */
@@ -92,7 +82,7 @@ export function extremeOf(curve: Curve, looked: Scan, sign: 1 | -1): Turn {
   const ends = best(end(0), end(last))
   const top = values.reduce((m, v) => Math.max(m, sign * v), -Infinity)
   const turns = turnsIn(looked, sign)
-    .filter((i) => sign * (2 * (2 * values[i]!) - values[i - 1]! - values[i + 1]!) - sign * values[i]! >= top)
+    .filter((i) => sign * values[i]! + reserveOf(looked, i) >= top)
     .slice(0, MOST_TURNS)
     .map((i) => turnAt(curve, looked, i, sign))
   if (turns.length === 0) return ends
@@ -108,19 +98,7 @@ const one = z.strictObject({
   atEnd: z.boolean().meta({ description: 'Whether it stands at an end of the span, where it may not be a turn.' }),
 })
 
-const answerSchema = once((c: Case) =>
-  z.strictObject({
-    ...headOf(c, 'extremes'),
-    units: z.record(z.string(), z.string()).meta({ description: 'UCUM code of each number.' }),
-    result: z.strictObject({ maximum: one, minimum: one }),
-    accuracy: z.strictObject({
-      method: z.array(z.string()),
-      bound: z.strictObject({ value: boundSchema, time: boundSchema }),
-      ...accuracyScope,
-    }),
-    ...tail,
-  }),
-)
+const answerSchema = once((c: Case) => foundSchema(c, 'extremes', { maximum: one, minimum: one }, ['value', 'time']))
 
 export const extremes: CaseOperation = {
   id: 'extremes',

@@ -7,19 +7,9 @@ import { type Curve, overTime } from './curve/curve.ts'
 import { timeGrid } from './curve/grid.ts'
 import { scan } from './curve/scan.ts'
 import { endOf, LONGEST } from './end-state.ts'
-import {
-  accuracyScope,
-  boundSchema,
-  compactOf,
-  detailField,
-  headed,
-  headOf,
-  scopeOf,
-  tail,
-  tailOf,
-  warningsOf,
-} from './envelope.ts'
+import { compactOf, detailField } from './envelope.ts'
 import { exampleOf } from './example.ts'
+import { foundAnswer, foundSchema } from './found.ts'
 import type { Call, CaseOperation } from './index.ts'
 import {
   basePrice,
@@ -146,15 +136,7 @@ function answer(c: Case, q: Question, curve: Curve, asked: Target, points: numbe
   const resolved = times.length > 0 ? c.resolve({ ...q.asked, times, outputs: [q.output] }) : q.resolved
   const own = { quantity: q.output, target, sense, ...(until === undefined ? {} : { until }) }
   const echoed = echoedOf(c, q, own)
-  const warnings = warningsOf(c, resolved, echoed)
-  if (compact) return { result, accuracy: { bound }, warnings: warnings.map((w) => w.code) }
-  return {
-    ...headed(c, 'time-to-reach', points, echoed),
-    units: unitsOf(q),
-    result,
-    accuracy: { method: ['root'], bound, ...scopeOf },
-    ...tailOf(c, resolved, warnings),
-  }
+  return foundAnswer(c, 'time-to-reach', { points, compact, echoed, resolved, units: unitsOf(q), result, bound })
 }
 
 /** The input as the case echoes it, with the fields of the operation in place of times, places and outputs. */
@@ -174,10 +156,10 @@ function unitsOf({ unit, output, places }: Question): Record<string, string> {
 }
 
 const answerSchema = once((c: Case) =>
-  z.strictObject({
-    ...headOf(c, 'time-to-reach'),
-    units: z.record(z.string(), z.string()).meta({ description: 'UCUM code of each number.' }),
-    result: z.strictObject({
+  foundSchema(
+    c,
+    'time-to-reach',
+    {
       outcome: z.enum(['reached', 'already', 'never']).meta({
         description:
           'reached; already: the value is on the far side of the target at time 0; never: it is not reached, or not before until.',
@@ -193,14 +175,9 @@ const answerSchema = once((c: Case) =>
         .number()
         .optional()
         .meta({ description: '0.1 K over that rate: what a tenth of a kelvin in the target moves the time, s.' }),
-    }),
-    accuracy: z.strictObject({
-      method: z.array(z.string()),
-      bound: z.strictObject({ crossings: boundSchema }),
-      ...accuracyScope,
-    }),
-    ...tail,
-  }),
+    },
+    ['crossings'],
+  ),
 )
 
 export const timeToReach: CaseOperation = {

@@ -1,6 +1,6 @@
 import { EPS } from '../../math/rounding.ts'
 import type { Curve } from './curve.ts'
-import { merged, originOf, type Scan, slopeAt, turnAt, turnsIn } from './scan.ts'
+import { merged, originOf, reserveOf, type Scan, slopeAt, turnAt, turnsIn } from './scan.ts'
 
 export interface Crossing {
   at: number
@@ -51,7 +51,7 @@ function withTurns(curve: Curve, looked: Scan, target: number): Scan {
     turnsIn(looked, sign)
       .filter((i) => {
         const missing = sign * (target - values[i]!)
-        return missing > 0 && missing <= sign * (2 * values[i]! - values[i - 1]! - values[i + 1]!)
+        return missing > 0 && missing <= reserveOf(looked, i)
       })
       .map((i) => turnAt(curve, looked, i, sign)),
   )

@@ -34,22 +34,24 @@ function stretchOf(breaks: readonly number[], point: number): [number, number] {
 }
 
 /**
- * Gaps in which the curve changes by a larger share of its range are cut, and so are their neighbours: first to so
- * many points a decade, then once more where it changes by a good deal.
+ * Gaps in which the curve changes are cut, and so are their neighbours: first to so many points a decade wherever the
+ * change can be told from the bounds, however small beside the rest, then once more where it is a good share of the range.
  */
-const passes = [
-  { calm: 1e-6, parts: (ratio: number) => (ratio > 0 ? Math.ceil(PER_DECADE * Math.log10(ratio)) : 1) },
-  { calm: 1e-2, parts: () => 3 },
-]
-
 export function scan(curve: Curve, grid: Grid): Scan {
-  return passes.reduce(
-    (looked, { calm, parts }) => {
-      const cut = cutsOf(looked, calm, parts)
-      return cut.length ? merged(looked, { points: cut, ...curve.sample(cut) }) : looked
-    },
-    firstLook(curve, grid),
+  const coarse = firstLook(curve, grid)
+  const looked = cut(curve, coarse, changes(coarse), (ratio) =>
+    ratio > 0 ? Math.ceil(PER_DECADE * Math.log10(ratio)) : 1,
   )
+  return cut(curve, looked, changes(looked, 0.01 * spread(looked.values)), () => 3)
+}
+
+/** Whether the curve changes on the way to each point: by more than its bounds, and than the least that counts. */
+function changes({ values, bounds }: Scan, least = 0): boolean[] {
+  return values.map((v, i) => {
+    if (i === 0) return false
+    const change = Math.abs(v - values[i - 1]!)
+    return change > bounds[i]! + bounds[i - 1]! && change > least
+  })
 }
 
 /** Points that are asked for together, and those that are looked at from the last to the first. */
@@ -79,14 +81,14 @@ function firstLook(curve: Curve, { points, breaks }: Grid): Scan {
   return looked
 }
 
-function cutsOf({ points, values, breaks }: Scan, calm: number, parts: (ratio: number) => number): number[] {
-  const range = spread(values)
-  const lively = values.map((v, i) => i > 0 && Math.abs(v - values[i - 1]!) > calm * range)
-  return points.flatMap((_, i) =>
+function cut(curve: Curve, looked: Scan, lively: readonly boolean[], parts: (ratio: number) => number): Scan {
+  const { points, breaks } = looked
+  const more = points.flatMap((_, i) =>
     i > 0 && (lively[i] || lively[i - 1] || lively[i + 1])
       ? between(points[i - 1]!, points[i]!, originOf(breaks, points[i - 1]!), parts)
       : [],
   )
+  return more.length ? merged(looked, { points: more, ...curve.sample(more) }) : looked
 }
 
 function spread(values: readonly number[]): number {
@@ -124,21 +126,30 @@ export interface Turn {
   atBound: number
 }
 
-/** Places in a scan where it is higher (sign 1) or lower (-1) than at both neighbours. */
+/** Points of a scan that are higher (sign 1) or lower (-1) than their neighbours; an end has one only. */
 export function turnsIn({ values }: Scan, sign: 1 | -1): number[] {
   return values.flatMap((v, i) => {
-    const before = values[i - 1]
-    const after = values[i + 1]
-    if (before === undefined || after === undefined) return []
-    const [rise, fall] = [sign * (v - before), sign * (v - after)]
-    return rise >= 0 && fall >= 0 && rise + fall > 0 ? [i] : []
+    const drops = [i - 1, i + 1].flatMap((k) => (values[k] === undefined ? [] : [sign * (v - values[k])]))
+    return drops.every((drop) => drop >= 0) && drops.some((drop) => drop > 0) ? [i] : []
   })
 }
 
-/** The turn itself, by the sign of the derivative; a kink may be one. */
+/**
+ * How much higher (sign 1) or lower the curve may be near a turn than at the point that was looked at: as much as it
+ * changes around it. Past the last point but one of an end it changes as it did before.
+ */
+export function reserveOf({ values }: Scan, i: number): number {
+  const last = values.length - 1
+  const [from, to] = [Math.max(0, i === last ? last - 2 : i - 1), Math.min(last, i === 0 ? 2 : i + 1)]
+  let reserve = 0
+  for (let k = from; k < to; k++) reserve += Math.abs(values[k + 1]! - values[k]!)
+  return reserve
+}
+
+/** The turn itself, by the sign of the derivative; a kink or an end may be one. */
 export function turnAt(curve: Curve, { points, values, bounds, breaks }: Scan, i: number, sign: 1 | -1): Turn {
-  const [before, here, after] = [points[i - 1]!, points[i]!, points[i + 1]!]
-  const kink = originOf(breaks, here) === here
+  const [before, here, after] = [points[i - 1] ?? points[i]!, points[i]!, points[i + 1] ?? points[i]!]
+  const kink = before === here || here === after || originOf(breaks, here) === here
   const windows: [number, number][] = kink
     ? [
         [before, here],
@@ -147,7 +158,7 @@ export function turnAt(curve: Curve, { points, values, bounds, breaks }: Scan, i
     : [[before, after]]
   const known: Turn = { at: here, value: values[i]!, bound: bounds[i]!, atBound: kink ? 0 : after - before }
   return windows
-    .flatMap(([from, to]) => turnWithin(curve, from, to, sign) ?? [])
+    .flatMap(([from, to]) => (from < to ? (turnWithin(curve, from, to, sign) ?? []) : []))
     .reduce((best, turn) => (sign * (turn.value - best.value) >= (kink ? 0 : -2 * turn.bound) ? turn : best), known)
 }
 

@@ -81,6 +81,15 @@ test('turns at a kink and between are found, ends are ends', () => {
   expect(turn.value).toBeCloseTo(1, 14)
 })
 
+test.each([1e-2, 1e-4, 1e-6])('a turn that is a share of %s before the end of the span is seen', (share) => {
+  const curve = curveOf((t) => Math.cos(t))
+  const turn = extremeOf(curve, scan(curve, timeGrid(plain, 0, Math.PI * (1 + share))), -1)
+  expect(turn.value + 1).toBeLessThan(1e-15)
+  const looked = scan(curve, timeGrid(plain, 0, Math.PI * (1 + share)))
+  const late = crossingsOf(curve, looked, Math.cos(Math.PI * (1 + share / 2)))
+  expect(late.map(({ direction }) => direction)).toEqual(['falling', 'rising'])
+})
+
 test('the course of a case is read from its fields, nested ones too', () => {
   const history = { kind: 'temperature', times: [0, 60, 120], values: [1, 2, 3], interpolation: 'linear' }
   const asked = { pulseDuration: 30, boundary: history, layers: [{ thickness: 1, period: 'none' }] }

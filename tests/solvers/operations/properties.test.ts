@@ -5,14 +5,12 @@ import type { Case } from '../../../solvers/case.ts'
 import { DomainError } from '../../../solvers/errors.ts'
 import { operationsOf } from '../../../solvers/operations/index.ts'
 import { quantitiesOf } from '../../../solvers/operations/question.ts'
-import { proof, seed as given } from '../counts.ts'
+import { proof, seed } from '../counts.ts'
 import { askOperation, type Depths, type Extremes, partsOf, type Reached, valueAt } from './ask-operation.ts'
 import { uniform } from '../draw.ts'
 import { nearby } from './nearby.ts'
 
 const numRuns = proof ? 300 : 8
-/* About one draw in three thousand still finds a turn or a crossing that the first look misses; a proof run looks for them. */
-const seed = proof ? given : 1
 const having = (operation: string) =>
   cases.filter((c) => operationsOf(c).some(({ id }) => id === operation)).map((c) => [c.id, c] as const)
 

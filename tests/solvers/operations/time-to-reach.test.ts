@@ -271,6 +271,15 @@ test('a ramp is followed from its start, and a cycle for as long as is said', ()
   expect(cycled.crossings[20]! - cycled.crossings[18]!).toBeCloseTo(7200, 6)
 })
 
+test('a target that is passed long before a ramp is at its end is not lost beside it', () => {
+  const body = { heatCapacity: 4500, area: 1, filmCoefficient: 10, initialTemperature: 20, target: 208 }
+  const ambient = { kind: 'ramp', start: 400, rampRate: -0.034 }
+  const { result } = reach('lumped-varying-ambient', { ...body, ambient })
+  expect(result).toMatchObject({ outcome: 'reached', directions: ['rising', 'falling'], asymptote: null })
+  // T = 400 - r (t - tau) - (380 + r tau) exp(-t/tau), tau 450 s.
+  for (const t of result.crossings) expect(415.3 - 0.034 * t - 395.3 * Math.exp(-t / 450)).toBeCloseTo(208, 9)
+})
+
 test('a long look is worth a thread, and one that any case may take is short', () => {
   const cycle = { kind: 'cycle', cycleMean: 8, amplitude: 8, period: 7200, timeOfMaximum: 0 }
   const body = { heatCapacity: 1e4, area: 1, filmCoefficient: 10, initialTemperature: 0, target: 8, ambient: cycle }
