@@ -42,10 +42,6 @@ export function momentsOf({ diffusivity, times }: BodyStepInput, size: number): 
   }))
 }
 
-export function shortestOf(moments: readonly Moment[]): number {
-  return moments.reduce((least, m) => Math.min(least, m.fourier), Infinity)
-}
-
 export function solveBody(
   input: BodyStepInput,
   body: RealBody,
@@ -73,13 +69,7 @@ function responseOf(
     // At time 0 the limit from above: the drive's whole flux at the face, none inside.
     started(i) ? unit.flux(j, moments[i]!) : exactly(faces[j] ? drive.fluxAtStart : 0)
   return {
-    share(i, j) {
-      if (!started(i)) return { ...exactly(0), of: 'completed' }
-      const m = moments[i]!
-      return m.fourier < 0.03
-        ? { ...unit.completed(j, m), of: 'completed' }
-        : { ...unit.remaining(j, m), of: 'remaining' }
-    },
+    share: (i, j) => (started(i) ? unit.share(j, moments[i]!) : { ...exactly(0), of: 'completed' }),
     remaining: (i, j) => (started(i) ? unit.remaining(j, moments[i]!) : exactly(1)),
     completed: (i, j) => (started(i) ? unit.completed(j, moments[i]!) : exactly(0)),
     flux: (i, j) => scaled(directions[j]! * drive.fluxUnit, fluxThere(i, j)),

@@ -1,13 +1,13 @@
-import { type BodyStepInput, momentsOf, shortestOf } from './body-step.ts'
+import { type BodyStepInput, momentsOf } from './body-step.ts'
 import type { Point, PointAxis } from '../case.ts'
 import { UnitCylinder } from '../math/cylinder.ts'
-import { cylinderEigenvalues } from '../math/cylinder-eigenvalues.ts'
+import { cylinderEigenvalue } from '../math/cylinder-eigenvalues.ts'
 import { bodyFactor, type Factor, halfSpaceFactor, idleFactor, product, union } from '../math/product.ts'
 import type { Estimate } from '../math/rounding.ts'
-import { slabEigenvalues } from '../math/slab-eigenvalues.ts'
+import { slabEigenvalue } from '../math/slab-eigenvalues.ts'
 import { SlabFilm } from '../math/slab-film.ts'
 import { SlabFixed } from '../math/slab-fixed.ts'
-import type { FilmedBody, UnitBody } from '../math/unit-body.ts'
+import type { FilmedBody, Share, UnitBody } from '../math/unit-body.ts'
 import { driveTemperature, type ProductDrive } from './product-films.ts'
 import type { Solution } from '../solution.ts'
 import { exactly, scaled, type StepResponse, stepOutputs } from './step-response.ts'
@@ -29,14 +29,13 @@ export const reachOf = ({ size, faces }: Span): number => size / faces
 /** A slab across `span`, the points measured along `axis` from its mid-plane or insulated face. */
 export function slabFactor(input: ProductInput, span: Span, axis: PointAxis, film: number): Factor {
   const length = reachOf(span)
-  const unit = (body: FilmedBody, shortest: number) =>
-    film === Infinity ? new SlabFixed(body) : new SlabFilm(body, shortest)
+  const unit = (body: FilmedBody) => (film === Infinity ? new SlabFixed(body) : new SlabFilm(body))
   return factorOf(input, length, axis, film, unit)
 }
 
 /** A cylinder, the points measured by their radius. */
 export function cylinderFactor(input: ProductInput, radius: number, film: number): Factor {
-  return factorOf(input, radius, 'r', film, (body, shortest) => new UnitCylinder(body, shortest))
+  return factorOf(input, radius, 'r', film, (body) => new UnitCylinder(body))
 }
 
 function factorOf(
@@ -44,11 +43,11 @@ function factorOf(
   size: number,
   axis: PointAxis,
   film: number,
-  unitOf: (body: FilmedBody, shortest: number) => UnitBody,
+  unitOf: (body: FilmedBody) => UnitBody,
 ): Factor {
   if (film === 0) return idleFactor
   const moments = momentsOf(input, size)
-  const distances = input.points.map((point) => Math.abs(point[axis]!))
+  const { distances, places } = differentOf(input.points.map((point) => Math.abs(point[axis]!)))
   const body = {
     biot: (film * size) / input.conductivity,
     deltas: Float64Array.from(distances, (x) => Math.min(1, Math.max(0, (size - x) / size))),
@@ -56,16 +55,28 @@ function factorOf(
     // The depth is a difference, which keeps the rounding of the whole size.
     shifts: Float64Array.from(distances, () => 6),
   }
-  return bodyFactor(unitOf(body, shortestOf(moments)), moments)
+  return bodyFactor(unitOf(body), places, moments)
+}
+
+/** Points of a grid have few different coordinates: each once, and which of them every point has. */
+function differentOf(coordinates: readonly number[]): { distances: number[]; places: number[] } {
+  const known = new Map<number, number>()
+  const places = coordinates.map((x) => {
+    const place = known.get(x) ?? known.size
+    known.set(x, place)
+    return place
+  })
+  return { distances: [...known.keys()], places }
 }
 
 /** A direction without end, the points measured along `axis` from its face. */
 export function endlessFactor(input: ProductInput, axis: PointAxis, film: number): Factor {
   if (film === 0) return idleFactor
   const reached = input.times.map((time) => Math.sqrt(input.diffusivity) * Math.sqrt(time))
-  const distances = input.points.map((point) => point[axis]!)
+  const { distances, places } = differentOf(input.points.map((point) => point[axis]!))
   return halfSpaceFactor(
     distances,
+    places,
     reached,
     reached.map((length) => (film * length) / input.conductivity),
   )
@@ -94,7 +105,10 @@ function responseOf(times: readonly number[], factors: readonly Factor[], capaci
   const heatFraction = (i: number): Estimate =>
     started(i) ? union(factors.map((f) => ({ done: f.heatFraction!(i), left: f.meanRemaining!(i) }))) : exactly(0)
   const placed = {
-    share: (i: number, j: number) => ({ ...remaining(i, j), of: 'remaining' as const }),
+    share(i: number, j: number): Share {
+      const { value, error, method } = started(i) ? product(factors.map((f) => f.left(j, i))) : exactly(1)
+      return { value, error, method, of: 'remaining' }
+    },
     remaining,
     completed,
   }
@@ -110,13 +124,13 @@ function responseOf(times: readonly number[], factors: readonly Factor[], capaci
 /** Decay rate of the slowest mode of a slab, 1/s. */
 export function slabRate({ conductivity, diffusivity }: BodyStepInput, span: Span, film: number): number {
   const length = reachOf(span)
-  const root = film === Infinity ? Math.PI / 2 : slabEigenvalues((film * length) / conductivity, 1)[0]!
+  const root = film === Infinity ? Math.PI / 2 : slabEigenvalue((film * length) / conductivity, 0)
   return film === 0 ? 0 : diffusivity * (root / length) * (root / length)
 }
 
 /** Decay rate of the slowest mode of a cylinder, 1/s. */
 export function cylinderRate({ conductivity, diffusivity }: BodyStepInput, radius: number, film: number): number {
   if (film === 0) return 0
-  const root = cylinderEigenvalues((film * radius) / conductivity, 1).roots[0]!
+  const { root } = cylinderEigenvalue((film * radius) / conductivity, 0)
   return diffusivity * (root / radius) * (root / radius)
 }

@@ -1,4 +1,4 @@
-import { type BodyStepInput, momentsOf, shortestOf, solveBody } from './body-step.ts'
+import { type BodyStepInput, momentsOf, solveBody } from './body-step.ts'
 import type { Numbers } from '../case.ts'
 import { UnitCylinder } from '../math/cylinder.ts'
 import { UnitSphere } from '../math/sphere.ts'
@@ -23,18 +23,18 @@ export interface HeldDrive {
 }
 
 interface Form {
-  unit(body: FilmedBody, shortest: number): UnitCylinder | UnitSphere
+  unit(body: FilmedBody): UnitCylinder | UnitSphere
   /** m³ of the body, per m of a cylinder. */
   volume(radius: number): number
 }
 
 export const cylinder: Form = {
-  unit: (body, shortest) => new UnitCylinder(body, shortest),
+  unit: (body) => new UnitCylinder(body),
   volume: (R) => Math.PI * R * R,
 }
 
 export const sphere: Form = {
-  unit: (body, shortest) => new UnitSphere(body, shortest),
+  unit: (body) => new UnitSphere(body),
   volume: (R) => ((4 * Math.PI) / 3) * R * R * R,
 }
 
@@ -80,7 +80,7 @@ function solveForm(
   drive: { temperature: number; fluxUnit: number; fluxAtStart: number },
 ): Solution {
   const moments = momentsOf(input, input.radius)
-  const unit = form.unit({ biot, ...radialPlaces(input) }, shortestOf(moments))
+  const unit = form.unit({ biot, ...radialPlaces(input) })
   const faces = facesOf(input)
   const body = {
     capacity: input.volumetricHeatCapacity * form.volume(input.radius),
@@ -105,7 +105,7 @@ export function slowestMode(form: Form, input: RadialStepInput, biot: number): N
     inner: Float64Array.of(...places.inner, 0),
     shifts: Float64Array.of(...places.shifts, 0),
   }
-  const { root, parts } = form.unit(withCentre, 1).series.modes[0]!
+  const { root, parts } = form.unit(withCentre).series.mode(0)
   const slowestTimeConstant = ((input.radius / root) * (input.radius / root)) / input.diffusivity
   return {
     slowestTimeConstant,

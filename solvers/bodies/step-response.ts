@@ -1,12 +1,11 @@
 import { type Estimate, EPS, lastPlaces, TINY } from '../math/rounding.ts'
+import type { Share } from '../math/unit-body.ts'
 import type { OutputName } from '../outputs.ts'
 import type { Bound, Method, Output, Solution } from '../solution.ts'
 
-export type Share = Estimate & { of: 'remaining' | 'completed' }
-
 /** Answer of a body to a unit step of its one drive, at time i and place j. Cases without places ignore j. */
 export interface StepResponse {
-  /** Share of the change, whichever of the two is had at least cost: temperatures need only one. */
+  /** Whichever of the two is had at least cost: temperatures need only one. */
   share(i: number, j: number): Share
   remaining(i: number, j: number): Estimate
   completed(i: number, j: number): Estimate

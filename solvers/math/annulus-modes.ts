@@ -106,6 +106,8 @@ function remainder(annulus: Annulus, w: number) {
 /** The eigenvalue number i, counted from 0. */
 function eigenvalue(annulus: Annulus, i: number, previous: number): number {
   if (i === 0) return smallest(annulus)
+  const near = nearby(annulus, (Math.sqrt(previous) + Math.PI) ** 2, i)
+  if (near !== undefined) return near
   let low = previous
   // Both faces held have the largest eigenvalues, and those of an annulus are below those of a slab.
   let high = ((i + 1) * Math.PI) ** 2 * (1 + 1e-9)
@@ -119,6 +121,23 @@ function eigenvalue(annulus: Annulus, i: number, previous: number): number {
     else [low, belowLow] = [middle, below]
   }
   return polished(annulus, low, high, i)
+}
+
+/**
+ * Newton's steps from where the next eigenvalue is expected: they lie about π apart in z. Undefined where they do not come to rest at it: the
+ * count at the last of them, next to the root on either side, says which root it is.
+ */
+function nearby(annulus: Annulus, start: number, i: number): number | undefined {
+  let w = start
+  for (let step = 0; step < 12; step++) {
+    const { value, slope, below } = remainder(annulus, w)
+    const change = value / slope
+    const next = w - change
+    if (!(next > 0)) return undefined
+    if (Math.abs(change) <= 4 * EPS * w) return below === i || below === i + 1 ? next : undefined
+    w = next
+  }
+  return undefined
 }
 
 /** From 0 upward Newton's steps rise to the smallest root and never beyond: all roots are real and positive. */

@@ -20,6 +20,20 @@ interface Share {
 /** At a face no place can be moved. */
 const still = () => 0
 
+/** An output at one place, and where the late times start from. */
+interface Local {
+  anchor: Estimate
+  share: Share
+}
+
+/** What the drives have put into each mode by one time, and what its roundings are. */
+interface Grown {
+  fourier: number
+  /** By mode, for the drive at either face. */
+  units: readonly (readonly [number, number])[]
+  relative: readonly number[]
+}
+
 type Drives = readonly [FaceDrive, FaceDrive]
 const IDLE: FaceDrive = { value: 0, slack: 0 }
 
@@ -50,8 +64,12 @@ export class AnnulusResponse {
   /** What the rounding of a radius moves a place by. */
   private readonly shift: number
   private start: { root: number; body: AnnulusStart } | undefined
-  private readonly first: AnnulusStart
+  private firstLate: AnnulusStart | undefined
   private readonly anchors = new Map<string, Estimate>()
+  private readonly temperatures: Local[] = []
+  private readonly fluxes: Local[] = []
+  /** Kept for one time while its places are asked for. */
+  private readonly kept: { risen?: Grown; faded?: Grown } = {}
 
   /** `latest` is the longest Fourier number asked for: without late times no eigenfunction is looked for. */
   constructor(annulus: Annulus, drives: Drives, places: readonly WallPlace[], latest: number) {
@@ -60,7 +78,6 @@ export class AnnulusResponse {
     this.places = places
     const distances = [...places.map(({ fromInner }) => fromInner), 0, 1]
     this.modes = latest < SERIES_FROM ? [] : annulusModes(annulus, distances, SERIES_FROM)
-    this.first = new AnnulusStart(annulus, drives, ROOT_FROM)
     // Beside the roundings of a mode, both radii are rounded, and their difference is the unit of length.
     this.rounding = EPS * (200 + 2 * (2 * annulus.innerRadius + 1))
     this.shift = 4 * EPS * (annulus.innerRadius + 1)
@@ -71,26 +88,38 @@ export class AnnulusResponse {
   }
 
   temperature(moment: AnnulusMoment, j: number): Estimate {
-    const place = this.places[j]!
-    if (moment.fourier < SERIES_FROM) return this.early(moment).temperature(place)
-    const anchor = this.anchored(`T${j}`, () => this.first.temperature(place))
-    return this.risen(anchor, moment, this.drives, { of: (mode) => mode.values[j]!, moved: (mode) => mode.slopes[j]! })
+    if (moment.fourier < SERIES_FROM) return this.early(moment).temperature(this.places[j]!)
+    const { anchor, share } = this.temperatureAt(j)
+    return this.risen(anchor, moment, this.drives, share)
+  }
+
+  private temperatureAt(j: number): Local {
+    return (this.temperatures[j] ??= {
+      anchor: this.first.temperature(this.places[j]!),
+      share: { of: (mode) => mode.values[j]!, moved: (mode) => mode.slopes[j]! },
+    })
+  }
+
+  private fluxAt(j: number): Local {
+    return (this.fluxes[j] ??= {
+      anchor: this.first.flux(this.places[j]!),
+      share: { of: (mode) => mode.slopes[j]!, moved: (mode) => mode.w * mode.values[j]! },
+    })
   }
 
   /** Outward, in kelvins a thickness. */
   flux(moment: AnnulusMoment, j: number): Estimate {
     const place = this.places[j]!
     if (moment.fourier < SERIES_FROM) return this.early(moment).flux(place)
-    const anchor = this.anchored(`q${j}`, () => this.first.flux(place))
-    const slope = { of: (mode: Mode) => mode.slopes[j]!, moved: (mode: Mode) => mode.w * mode.values[j]! }
+    const { anchor, share } = this.fluxAt(j)
     const end = this.endFlux(place)
     return better(
-      this.risen(anchor, moment, this.drives, slope),
+      this.risen(anchor, moment, this.drives, share),
       this.faded(
         { value: end[0].value + end[1].value, error: end[0].error + end[1].error, method: 'eigen-series' },
         moment,
         this.drives,
-        slope,
+        share,
       ),
     )
   }
@@ -131,6 +160,10 @@ export class AnnulusResponse {
     return this.start.body
   }
 
+  private get first(): AnnulusStart {
+    return (this.firstLate ??= new AnnulusStart(this.annulus, this.drives, ROOT_FROM))
+  }
+
   private anchored(key: string, find: () => Estimate): Estimate {
     const known = this.anchors.get(key)
     if (known) return known
@@ -141,35 +174,47 @@ export class AnnulusResponse {
 
   /** From the anchor on, each mode having grown since. */
   private risen(anchor: Estimate, { fourier }: AnnulusMoment, drives: Drives, share: Share): Estimate {
-    const later = fourier - SERIES_FROM
-    const grown = ({ w }: Mode) => (w === 0 ? later : (Math.exp(-w * SERIES_FROM) * -Math.expm1(-w * later)) / w)
-    return this.summed(anchor, SERIES_FROM, drives, share, grown)
+    if (this.kept.risen?.fourier !== fourier) {
+      const later = fourier - SERIES_FROM
+      const grown = ({ w }: Mode) => (w === 0 ? later : (Math.exp(-w * SERIES_FROM) * -Math.expm1(-w * later)) / w)
+      this.kept.risen = { ...this.grownBy(SERIES_FROM, grown), fourier }
+    }
+    return this.summed(anchor, this.kept.risen, drives, share)
   }
 
   /** From the end back, each mode having faded so far. */
   private faded(end: Estimate, { fourier }: AnnulusMoment, drives: Drives, share: Share): Estimate {
-    const left = ({ w }: Mode) => (w === 0 ? 0 : -Math.exp(-w * fourier) / w)
-    return this.summed(end, fourier, drives, share, left)
+    if (this.kept.faded?.fourier !== fourier) {
+      const left = ({ w }: Mode) => (w === 0 ? 0 : -Math.exp(-w * fourier) / w)
+      this.kept.faded = this.grownBy(fourier, left)
+    }
+    return this.summed(end, this.kept.faded, drives, share)
   }
 
-  private summed(
-    from: Estimate,
-    fourier: number,
-    drives: Drives,
-    { of, moved }: Share,
-    weight: (mode: Mode) => number,
-  ): Estimate {
+  private grownBy(fourier: number, weight: (mode: Mode) => number): Grown {
+    return {
+      fourier,
+      units: this.modes.map((mode) => {
+        const factor = weight(mode) / mode.norm
+        return [mode.gains[0] * factor, mode.gains[1] * factor] as const
+      }),
+      relative: this.modes.map((mode) => this.rounding * (1 + mode.w * fourier)),
+    }
+  }
+
+  private summed(from: Estimate, grown: Grown, drives: Drives, { of, moved }: Share): Estimate {
     let { value, error } = from
-    for (const mode of this.modes) {
-      const factor = weight(mode) / mode.norm
-      const relative = this.rounding * (1 + mode.w * fourier)
-      const shift = this.shift * Math.abs(moved(mode))
-      drives.forEach((drive, d) => {
-        const unit = mode.gains[d]! * factor
-        const size = Math.abs(of(mode))
-        value += drive.value * unit * of(mode)
-        error += (Math.abs(drive.value) * (relative * size + shift) + drive.slack * size) * Math.abs(unit)
-      })
+    for (let n = 0; n < this.modes.length; n++) {
+      const mode = this.modes[n]!
+      const held = of(mode)
+      const size = Math.abs(held)
+      const rounded = grown.relative[n]! * size + this.shift * Math.abs(moved(mode))
+      for (let d = 0; d < 2; d++) {
+        const drive = drives[d]!
+        const unit = grown.units[n]![d]!
+        value += drive.value * unit * held
+        error += (Math.abs(drive.value) * rounded + drive.slack * size) * Math.abs(unit)
+      }
     }
     return { value, error: error + TINY, method: 'eigen-series' }
   }
@@ -203,10 +248,9 @@ export class AnnulusResponse {
     const { fromInner: x, fromOuter: y } = this.places[j]!
     const { innerRadius: a, inner, outer } = this.annulus
     if (this.modes[0]?.w === 0) {
-      const anchor = this.anchored(`T${j}`, () => this.first.temperature(this.places[j]!))
+      const { anchor, share } = this.temperatureAt(j)
       const grown = ({ w }: Mode) => (w === 0 ? 0 : Math.exp(-w * SERIES_FROM) / w)
-      const share = { of: (mode: Mode) => mode.values[j]!, moved: (mode: Mode) => mode.slopes[j]! }
-      return this.summed(anchor, SERIES_FROM, this.drives, share, grown)
+      return this.summed(anchor, this.grownBy(SERIES_FROM, grown), this.drives, share)
     }
     const [s0, l0] = partsOf(inner)
     const [s1, l1] = partsOf(outer)

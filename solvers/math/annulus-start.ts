@@ -1,5 +1,5 @@
 import type { Annulus } from './annulus-modes.ts'
-import { besselI01, besselIK01, besselK01 } from './complex-bessel.ts'
+import { besselI, besselIK, besselIK01, besselK } from './complex-bessel.ts'
 import { type Complex, exponential, modulus, over, plus, scale, times } from './complex.ts'
 import { type Contour, contourAt } from './contour.ts'
 import { type Estimate, EPS, TINY } from './rounding.ts'
@@ -126,31 +126,36 @@ export class AnnulusStart {
 
   /** Kelvins. */
   temperature(place: WallPlace): Estimate {
-    return this.at(place, 'k0', 'i0', 1, 1)
+    return this.at(place, 0)
   }
 
   /** Outward, in kelvins a thickness. */
   flux(place: WallPlace): Estimate {
-    const { value, error, method } = this.at(place, 'k1', 'i1', 1, -1)
+    const { value, error, method } = this.at(place, 1)
     return { value: value / this.root, error: error / this.root, method }
   }
 
-  private at(place: WallPlace, k: 'k0' | 'k1', i: 'i0' | 'i1', signK: number, signI: number): Estimate {
+  /** Order 0 the temperature, order 1 its slope turned: K falls as K₁, I rises as I₁. */
+  private at(place: WallPlace, order: 0 | 1): Estimate {
     const x = place.fromInner / this.root
     const y = place.fromOuter / this.root
     const radius = this.body.a + x
     const sums = [new Sum(), new Sum()] as const
     for (const { root: q, front, length, fromInner, fromOuter } of this.nodes) {
-      const factor = k === 'k0' ? front : times(front, q)
-      if (q.re * x < NOTHING) {
-        const bessel = besselK01(scale(radius, q))[k]
-        const inward = scale(signK, times(factor, times(exponential(scale(-x, q)), bessel)))
+      const factor = order === 0 ? front : times(front, q)
+      const falls = q.re * x < NOTHING
+      const rises = q.re * y < NOTHING
+      const z = scale(radius, q)
+      const both = falls && rises ? besselIK(z, order) : undefined
+      if (falls) {
+        const bessel = both?.k ?? besselK(z, order)
+        const inward = times(factor, times(exponential(scale(-x, q)), bessel))
         sums[0].add(times(fromInner[0], inward), x === 0 ? 0 : length)
         sums[1].add(times(fromInner[1], inward), x === 0 ? 0 : length)
       }
-      if (q.re * y < NOTHING) {
-        const bessel = besselI01(scale(radius, q))[i]
-        const outward = scale(signI, times(factor, times(exponential(scale(-y, q)), bessel)))
+      if (rises) {
+        const bessel = both?.i ?? besselI(z, order)
+        const outward = scale(order === 0 ? 1 : -1, times(factor, times(exponential(scale(-y, q)), bessel)))
         sums[0].add(times(fromOuter[0], outward), y === 0 ? 0 : length)
         sums[1].add(times(fromOuter[1], outward), y === 0 ? 0 : length)
       }

@@ -1,4 +1,4 @@
-import { besselI01 } from './complex-bessel.ts'
+import { besselI, besselI01 } from './complex-bessel.ts'
 import { type Complex, complex, exponential, minus, modulus, over, plus, scale, times } from './complex.ts'
 import { type Contour, contourAt, invert } from './contour.ts'
 import { fluxFraction } from './convective-half-space.ts'
@@ -30,7 +30,7 @@ export class CylinderContour {
   }
 
   completed(j: number, m: Moment): Estimate {
-    const found = this.at(j, m, ({ i0 }) => i0)
+    const found = this.at(j, m, 0)
     const value = Math.min(1, Math.max(0, found.value))
     return { ...found, value, error: Math.min(1, found.error + this.rule(j, m) + this.moved(j, m)) }
   }
@@ -38,7 +38,7 @@ export class CylinderContour {
   /** In units of Bi, or of 1 where the face is held. */
   flux(j: number, m: Moment): Estimate {
     const { inner, deltas, shifts } = this.body
-    const found = this.at(j, m, ({ i1 }, p) => times(p, i1))
+    const found = this.at(j, m, 1)
     // The flux falls by its own size over the depth reached.
     const bend = (2 * (deltas[j]! / (2 * m.root) + 1)) / m.root
     const moved = shifts[j] === 0 ? 0 : this.steepest(j, m) * Math.min(1, EPS * shifts[j]! * bend)
@@ -70,16 +70,18 @@ export class CylinderContour {
     return { ...found, value: Math.min(1, found.value), error: widened(found, contour) }
   }
 
-  /** What a place makes of I₀ and I₁ there, driven from the face. */
-  private at(j: number, m: Moment, of: (there: Pair, p: Complex) => Complex): Estimate {
+  /** I₀ or p·I₁ at a place, driven from the face. */
+  private at(j: number, m: Moment, order: 0 | 1): Estimate {
     const delta = this.body.deltas[j]!
     const depth = delta / (2 * m.root)
     if (depth * depth > VANISHED) return { value: 0, error: TINY, method: 'contour' }
     const contour = contourAt(m.fourier, delta)
     const drives = this.drivesAt(contour, m)
-    const found = invert(contour, ({ root: p }, k) =>
-      times(drives[k]!, of(besselI01(scale(this.body.inner[j]!, p)), p)),
-    )
+    const inner = this.body.inner[j]!
+    const found = invert(contour, ({ root: p }, k) => {
+      const there = besselI(scale(inner, p), order)
+      return times(drives[k]!, order === 0 ? there : times(p, there))
+    })
     return { ...found, error: widened(found, contour) }
   }
 
@@ -139,7 +141,7 @@ function widened(found: Estimate, contour: Contour): number {
 function dropTo({ i0, i1 }: Pair, p: Complex, delta: number, inner: number): Complex {
   if (delta === 0) return complex(0)
   if (delta > 0.3 || modulus(p) * delta > 0.5) {
-    const there = times(exponential(scale(-delta, p)), besselI01(scale(inner, p)).i0)
+    const there = times(exponential(scale(-delta, p)), besselI(scale(inner, p), 0))
     return minus(i0, there)
   }
   const square = scale(delta * delta, times(p, p))

@@ -10,16 +10,16 @@ const FIRST_ZERO_SQUARED = 5.783185962946785
  *
  * solved by Newton. The slope 1 − J₀J₁/(z(J₀² + J₁²)) + Bi/(Bi² + z²) never vanishes, so no bracket is needed.
  *
- * Shapes    returns `count` increasing numbers, with as many amplitudes √(J₀² + J₁²) at them.
+ * Shapes    the root number m, counted from 0, with the amplitude √(J₀² + J₁²) there.
  * Units     none.
- * Domain    Bi > 0, from 1e-25 to Infinity; count from 0 to 200.
+ * Domain    Bi > 0, from 1e-25 to Infinity; m from 0 to 200.
  * Accuracy  relative error ≤ 4ε.
  * Errors    none. The loop ends after at most 12 steps; from the starts below seven suffice.
  * Source    H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, §7.7 and appendix IV, tables III and IV.
  */
-export function cylinderEigenvalues(biot: number, count: number): { roots: Float64Array; amplitudes: Float64Array } {
-  const roots = Float64Array.from({ length: count }, (_, m) => eigenvalue(biot, m))
-  return { roots, amplitudes: roots.map((z) => phaseAt(z).amplitude) }
+export function cylinderEigenvalue(biot: number, m: number): { root: number; amplitude: number } {
+  const root = eigenvalue(biot, m)
+  return { root, amplitude: phaseAt(root).amplitude }
 }
 
 function eigenvalue(biot: number, m: number): number {

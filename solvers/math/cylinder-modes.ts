@@ -1,6 +1,6 @@
 import { besselJ01 } from './bessel-j.ts'
-import { cylinderEigenvalues } from './cylinder-eigenvalues.ts'
-import { type Mode, type Part, roundTermsAt } from './round-series.ts'
+import { cylinderEigenvalue } from './cylinder-eigenvalues.ts'
+import type { Mode, Part } from './round-series.ts'
 import type { UnitPlaces } from './unit-body.ts'
 
 /*
@@ -26,25 +26,23 @@ interface Coefficients {
   mean: number
 }
 
-/** Modes for Fourier numbers from `shortest` on. Fluxes are in units of Bi, or of 1 where the face is held. */
-export function cylinderModes(places: UnitPlaces, biot: number, shortest: number): Mode[] {
+/** The mode number m, counted from 0. Fluxes are in units of Bi, or of 1 where the face is held. */
+export function cylinderMode(places: UnitPlaces, biot: number, m: number): Mode {
   const unit = biot === Infinity ? 1 : biot
-  const { roots, amplitudes } = cylinderEigenvalues(biot, roundTermsAt(shortest) + 1)
-  const indices = Array.from(places.deltas, (_, j) => j)
-  return Array.from(roots, (z, m) => {
-    const c = coefficients(z, amplitudes[m]!, biot, m)
-    const pairs = indices.map((j) => (places.deltas[j]! < SKIN ? byTaylor(c, places, j) : asItStands(c, places, j)))
-    return {
-      root: z,
-      parts: pairs.map(({ part }) => part),
-      fluxes: pairs.map(({ slope }) => ({
-        value: (z / unit) * slope.value,
-        slack: (z / unit) * slope.slack,
-        most: (z / unit) * slope.most,
-      })),
-      mean: c.mean,
-    }
-  })
+  const { root: z, amplitude } = cylinderEigenvalue(biot, m)
+  const c = coefficients(z, amplitude, biot, m)
+  const parts: Part[] = []
+  const fluxes: Part[] = []
+  for (let j = 0; j < places.deltas.length; j++) {
+    const { part, slope } = places.deltas[j]! < SKIN ? byTaylor(c, places, j) : asItStands(c, places, j)
+    parts.push(part)
+    fluxes.push({
+      value: (z / unit) * slope.value,
+      slack: (z / unit) * slope.slack,
+      most: (z / unit) * slope.most,
+    })
+  }
+  return { root: z, parts, fluxes, mean: c.mean }
 }
 
 function coefficients(z: number, amplitude: number, biot: number, m: number): Coefficients {

@@ -1,13 +1,15 @@
 import { completed, energyFraction, fluxFraction, remaining } from './convective-half-space.ts'
 import { CylinderContour } from './cylinder-contour.ts'
-import { cylinderModes } from './cylinder-modes.ts'
+import { cylinderMode } from './cylinder-modes.ts'
 import { cylinderDeficit } from './round-deficits.ts'
 import { RoundSeries, roundTermsAt } from './round-series.ts'
 import { type Estimate, EPS, TINY } from './rounding.ts'
-import type { FilmedBody, Moment, UnitBody } from './unit-body.ts'
+import type { FilmedBody, Moment, Share, UnitBody } from './unit-body.ts'
 
 /** Only the contour below. */
 const SERIES_FROM = 0.02
+/** For a temperature the series does from here on, with 104 terms: it errs by 1e-13 of the step, too much only for small fractions. */
+const SHARE_BY_SERIES_FROM = 0.0005
 /** Up to here also where the series errs by more than this share of its value. */
 const CONTOUR_TO = 0.2
 const LOOSE = 1e-12
@@ -20,12 +22,19 @@ export class UnitCylinder implements UnitBody {
   readonly contour: CylinderContour
   private readonly body: FilmedBody
 
-  /** `shortest` is the smallest Fourier number that will be asked for. */
-  constructor(body: FilmedBody, shortest: number) {
-    const modes = cylinderModes(body, body.biot, Math.max(shortest, SERIES_FROM))
+  constructor(body: FilmedBody) {
     this.body = body
-    this.series = new RoundSeries(modes, cylinderDeficit(body, modes))
+    this.series = new RoundSeries(
+      (n) => cylinderMode(body, body.biot, n),
+      (first) => cylinderDeficit(body, first),
+    )
     this.contour = new CylinderContour(body)
+  }
+
+  share(j: number, m: Moment): Share {
+    return m.fourier < SHARE_BY_SERIES_FROM
+      ? { ...this.completed(j, m), of: 'completed' }
+      : { ...this.series.remaining(j, m), of: 'remaining' }
   }
 
   remaining(j: number, m: Moment): Estimate {
@@ -68,7 +77,7 @@ export class UnitCylinder implements UnitBody {
   }
 
   terms(m: Moment): number {
-    return m.fourier < SERIES_FROM ? 0 : roundTermsAt(m.fourier)
+    return m.fourier < SHARE_BY_SERIES_FROM ? 0 : roundTermsAt(m.fourier)
   }
 
   private arguments(j: number, m: Moment): [number, number] {

@@ -1,4 +1,4 @@
-import { besselK01 } from './complex-bessel.ts'
+import { besselK, besselK01 } from './complex-bessel.ts'
 import { type Complex, complex, exponential, minus, modulus, over, plus, scale, times } from './complex.ts'
 import { type Contour, contourAt, type ContourNode } from './contour.ts'
 import { type Estimate, EPS, TINY } from './rounding.ts'
@@ -90,7 +90,7 @@ export class MediumResponse {
   }
 
   private placed(q: Complex, distance: number, name: 'k0' | 'k1', atFace: Complex): Complex {
-    return distance === 0 ? atFace : besselK01(scale(this.radius + distance, q))[name]
+    return distance === 0 ? atFace : besselK(scale(this.radius + distance, q), name === 'k0' ? 0 : 1)
   }
 
   private at(distance: number, name: 'k0' | 'k1'): Estimate {

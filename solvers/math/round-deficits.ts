@@ -16,16 +16,16 @@ interface Powers {
   bend(x: number): number
 }
 
-export function sphereDeficit(places: UnitPlaces, modes: readonly Mode[]): FirstDeficit {
-  return deficit(places, modes, spherePowers)
+export function sphereDeficit(places: UnitPlaces, first: Mode): FirstDeficit {
+  return deficit(places, first, spherePowers)
 }
 
-export function cylinderDeficit(places: UnitPlaces, modes: readonly Mode[]): FirstDeficit {
-  return deficit(places, modes, cylinderPowers)
+export function cylinderDeficit(places: UnitPlaces, first: Mode): FirstDeficit {
+  return deficit(places, first, cylinderPowers)
 }
 
-function deficit(places: UnitPlaces, modes: readonly Mode[], powersOf: (z: number) => Powers): FirstDeficit {
-  const { root: z, parts, mean } = modes[0]!
+function deficit(places: UnitPlaces, first: Mode, powersOf: (z: number) => Powers): FirstDeficit {
+  const { root: z, parts, mean } = first
   if (z > SMALL)
     return {
       at: (j) => ({ value: 1 - parts[j]!.value, error: EPS * (1 + parts[j]!.slack) }),

@@ -1,3 +1,4 @@
+import { Decays } from './decays.ts'
 import { type Estimate, EPS, TINY } from './rounding.ts'
 import type { Moment } from './unit-body.ts'
 
@@ -35,12 +36,20 @@ export interface FirstDeficit {
  * neglected tail.
  */
 export class RoundSeries {
-  readonly modes: readonly Mode[]
+  private readonly modeOf: (n: number) => Mode
   private readonly deficit: FirstDeficit
+  private readonly modes: Mode[] = []
+  private readonly decays = new Decays((n) => this.mode(n).root)
 
-  constructor(modes: readonly Mode[], deficit: FirstDeficit) {
-    this.modes = modes
-    this.deficit = deficit
+  /** Modes are asked for only as far as the times need them. */
+  constructor(modeOf: (n: number) => Mode, deficitOf: (first: Mode) => FirstDeficit) {
+    this.modeOf = modeOf
+    this.deficit = deficitOf(this.mode(0))
+  }
+
+  mode(n: number): Mode {
+    for (let k = this.modes.length; k <= n; k++) this.modes.push(this.modeOf(k))
+    return this.modes[n]!
   }
 
   remaining(j: number, m: Moment): Estimate {
@@ -49,7 +58,7 @@ export class RoundSeries {
 
   /** The first term by expm1, so that nothing cancels as Bi → 0. */
   completed(j: number, m: Moment): Estimate {
-    const { value, slack } = this.modes[0]!.parts[j]!
+    const { value, slack } = this.mode(0).parts[j]!
     const rest = this.sum(m, 1, (mode) => mode.parts[j]!)
     return within(this.complement(m, value, slack, this.deficit.at(j), rest))
   }
@@ -63,12 +72,12 @@ export class RoundSeries {
   }
 
   heatFraction(m: Moment): Estimate {
-    const { value, slack } = meanOf(this.modes[0]!)
+    const { value, slack } = meanOf(this.mode(0))
     return within(this.complement(m, value, slack, this.deficit.mean, this.sum(m, 1, meanOf)))
   }
 
   private complement(m: Moment, first: number, slack: number, deficit: Sum, rest: Sum): Sum {
-    const z = this.modes[0]!.root
+    const z = this.mode(0).root
     const done = -Math.expm1(-z * z * m.fourier)
     const error = deficit.error + EPS * (20 * Math.abs(first) + slack) * done + rest.error
     return { value: deficit.value + first * done - rest.value, error }
@@ -76,20 +85,18 @@ export class RoundSeries {
 
   /** Σ from mode `first` on. */
   private sum(m: Moment, first: number, partOf: (mode: Mode) => Part): Sum {
+    const count = roundTermsAt(m.fourier)
+    const { exponents, factors } = this.decays.at(m.fourier, count)
     const { modes } = this
-    const count = Math.min(roundTermsAt(m.fourier), modes.length - 1)
     let value = 0
     let error = 0
     for (let n = first; n < count; n++) {
-      const { root } = modes[n]!
       const part = partOf(modes[n]!)
-      const decay = root * root * m.fourier
-      const weight = Math.exp(-decay)
-      value += weight * part.value
-      error += weight * (part.slack + 18 * decay * Math.abs(part.value))
+      const factor = factors[n]!
+      value += factor * part.value
+      error += factor * (part.slack + 18 * exponents[n]! * Math.abs(part.value))
     }
-    const { root } = modes[count]!
-    const tail = (partOf(modes[count]!).most * Math.exp(-root * root * m.fourier)) / -Math.expm1(-3 * root * m.fourier)
+    const tail = (partOf(modes[count]!).most * factors[count]!) / -Math.expm1(-3 * modes[count]!.root * m.fourier)
     return { value, error: EPS * error + tail + TINY }
   }
 }
@@ -100,9 +107,12 @@ interface Sum {
 }
 
 const meanOf = ({ mean }: Mode): Part => ({ value: mean, slack: 30 * mean, most: mean })
-const estimate = (sum: Sum): Estimate => ({ ...sum, method: 'eigen-series' })
-const within = ({ value, error }: Sum): Estimate =>
-  estimate({ value: Math.min(1, Math.max(0, value)), error: Math.min(1, error) })
+const estimate = ({ value, error }: Sum): Estimate => ({ value, error, method: 'eigen-series' })
+const within = ({ value, error }: Sum): Estimate => ({
+  value: Math.min(1, Math.max(0, value)),
+  error: Math.min(1, error),
+  method: 'eigen-series',
+})
 
 /** Terms whose exponent is within DECAY of the first's, for roots about π apart. */
 export function roundTermsAt(fourier: number): number {

@@ -3,20 +3,14 @@
  *
  *   z − mπ − atan2(Bi, z) = 0,   m = 0, 1, 2, …   solved by Newton; the slope 1 + Bi/(Bi² + z²) never vanishes
  *
- * Shapes    returns `count` increasing numbers, z_m in (mπ, mπ + π/2).
+ * Shapes    the root number m, in (mπ, mπ + π/2).
  * Units     none.
- * Domain    Bi > 0, from 1e-25 to 1e20; count ≥ 0.
+ * Domain    Bi > 0, from 1e-25 to 1e20; m ≥ 0.
  * Accuracy  relative error ≤ 3ε.
  * Errors    none. The loop ends after at most 12 steps; from the start below six suffice.
  * Source    H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, §3.11 and appendix IV, table I.
  */
-export function slabEigenvalues(biot: number, count: number): Float64Array {
-  const roots = new Float64Array(count)
-  for (let m = 0; m < count; m++) roots[m] = eigenvalue(biot, m)
-  return roots
-}
-
-function eigenvalue(biot: number, m: number): number {
+export function slabEigenvalue(biot: number, m: number): number {
   const base = m * Math.PI
   let z = m === 0 ? firstGuess(biot) : base + Math.atan2(biot, base + 0.5)
   for (let step = 0; step < 12; step++) {

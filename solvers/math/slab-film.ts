@@ -1,21 +1,30 @@
 import { type Estimate, EPS } from './rounding.ts'
-import type { FilmedBody, Moment, UnitBody } from './unit-body.ts'
+import type { FilmedBody, Moment, Share, UnitBody } from './unit-body.ts'
 import { completedByImages, fluxByImages, heatByImages, remainingByImages, steepestFlux } from './slab-images.ts'
 import { SlabSeries, termsAt } from './slab-series.ts'
 
 /* Below SERIES_FROM only the images, above IMAGES_TO only the series; between, whichever errs less. */
 const SERIES_FROM = 0.004
 const IMAGES_TO = 0.06
+/** For a temperature either will do between; the images up to here, where they still err by less than e^(−33). */
+const SHARE_BY_IMAGES_TO = 0.03
 
 /** A slab after a unit step of the fluid at its exposed face, over the whole domain of Bi, Fo and depth. */
 export class SlabFilm implements UnitBody {
   readonly series: SlabSeries
   private readonly body: FilmedBody
 
-  /** `shortest` is the smallest Fourier number that will be asked for. */
-  constructor(body: FilmedBody, shortest: number) {
+  constructor(body: FilmedBody) {
     this.body = body
-    this.series = new SlabSeries(body, Math.max(shortest, SERIES_FROM))
+    this.series = new SlabSeries(body)
+  }
+
+  share(j: number, m: Moment): Share {
+    const early = m.fourier < SHARE_BY_IMAGES_TO
+    const { value, error, method } = early ? completedByImages(this.body, j, m) : this.series.remaining(j, m)
+    const shift = EPS * this.body.shifts[j]!
+    const moved = shift === 0 ? 0 : shift * this.steepest(j, m)
+    return { value, error: Math.min(1, error + moved), method, of: early ? 'completed' : 'remaining' }
   }
 
   /** θ at place j, 1 at the start. */
@@ -69,6 +78,12 @@ export class SlabFilm implements UnitBody {
     if (shift === 0) return found
     const flux = m.fourier < SERIES_FROM ? steepestFlux(this.body, j, m) : Math.abs(this.flux(j, m).value) * 1.01
     return { ...found, error: Math.min(1, found.error + shift * this.body.biot * flux) }
+  }
+
+  /** No less than |∂θ/∂δ|: a half space is at least as steep, nowhere more than at its face, and there less than behind a held one. */
+  private steepest(j: number, m: Moment): number {
+    const { biot } = this.body
+    return m.fourier < SERIES_FROM ? biot * steepestFlux(this.body, j, m) : Math.min(biot, 0.6 / m.root)
   }
 
   /** Terms of the series at this time; 0 where only the images are asked. */

@@ -3,7 +3,7 @@ import erfcx from '@stdlib/math-base-special-erfcx'
 import { gauss } from './gauss.ts'
 import { ierfcx } from './ierfcx.ts'
 import { type Estimate, EPS, TINY } from './rounding.ts'
-import type { Moment, UnitBody, UnitPlaces } from './unit-body.ts'
+import type { Moment, Share, UnitBody, UnitPlaces } from './unit-body.ts'
 
 /*
  * A slab of length 1 whose exposed face is stepped in temperature, the far plane passing no heat.
@@ -26,6 +26,12 @@ export class SlabFixed implements UnitBody {
   private readonly body: UnitPlaces
   constructor(body: UnitPlaces) {
     this.body = body
+  }
+
+  share(j: number, m: Moment): Share {
+    return m.fourier < 0.03
+      ? { ...this.completed(j, m), of: 'completed' }
+      : { ...this.remaining(j, m), of: 'remaining' }
   }
 
   remaining(j: number, m: Moment): Estimate {

@@ -1,6 +1,7 @@
+import { Decays, type Faded } from './decays.ts'
 import { type Estimate, EPS, TINY } from './rounding.ts'
 import type { FilmedBody, Moment } from './unit-body.ts'
-import { slabEigenvalues } from './slab-eigenvalues.ts'
+import { slabEigenvalue } from './slab-eigenvalues.ts'
 import { oneMinusFirst, oneMinusFirstMean } from './slab-first-term.ts'
 
 /** Terms are kept until e^(−50) of the first. */
@@ -18,20 +19,43 @@ const DECAY = 50
  * Source   H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, §3.11.
  */
 export class SlabSeries {
-  readonly weights: Float64Array
+  readonly weights: number[] = []
   private readonly body: FilmedBody
-  private readonly roots: Float64Array
-  private readonly cosines: Float64Array[]
-  private readonly sines: Float64Array[]
+  private readonly roots: number[] = []
+  /** By place, as far as asked for. */
+  private readonly cosines: number[][]
+  private readonly sines: number[][]
+  private readonly decays = new Decays((n) => this.roots[n]!)
 
-  /** `shortest` is the smallest Fourier number to be asked for; it decides how many roots are found. */
-  constructor(body: FilmedBody, shortest: number) {
-    const { biot: B, deltas } = body
+  constructor(body: FilmedBody) {
     this.body = body
-    this.roots = slabEigenvalues(B, termsAt(shortest) + 1)
-    this.weights = this.roots.map((z) => (2 * B) / (z * (z * z + B * B + B)))
-    this.cosines = Array.from(deltas, (d) => this.roots.map((z) => Math.cos(z * d)))
-    this.sines = Array.from(deltas, (d) => this.roots.map((z) => Math.sin(z * d)))
+    this.cosines = Array.from(body.deltas, () => [])
+    this.sines = Array.from(body.deltas, () => [])
+  }
+
+  /** How many terms count at a time; the one after them, which bounds the rest, is found as well. */
+  private countAt({ fourier }: Moment): { count: number } & Faded {
+    const count = termsAt(fourier)
+    const B = this.body.biot
+    for (let n = this.roots.length; n <= count; n++) {
+      const z = slabEigenvalue(B, n)
+      this.roots.push(z)
+      this.weights.push((2 * B) / (z * (z * z + B * B + B)))
+    }
+    const { exponents, factors } = this.decays.at(fourier, count)
+    return { count, exponents, factors }
+  }
+
+  /** cos zδ and sin zδ of one place for as many terms. */
+  private wavesAt(j: number, count: number): { cosines: readonly number[]; sines: readonly number[] } {
+    const cosines = this.cosines[j]!
+    const sines = this.sines[j]!
+    const delta = this.body.deltas[j]!
+    for (let n = cosines.length; n < count; n++) {
+      cosines.push(Math.cos(this.roots[n]! * delta))
+      sines.push(Math.sin(this.roots[n]! * delta))
+    }
+    return { cosines, sines }
   }
 
   remaining(j: number, m: Moment): Estimate {
@@ -40,23 +64,23 @@ export class SlabSeries {
   }
 
   completed(j: number, m: Moment): Estimate {
+    const rest = this.sum(j, m, 1)
     const z = this.roots[0]!
     const B = this.body.biot
     const first = this.weights[0]! * (z * this.cosines[j]![0]! + B * this.sines[j]![0]!)
     const done = -Math.expm1(-z * z * m.fourier)
     const start = oneMinusFirst(z, this.body.inner[j]!, first)
-    const rest = this.sum(j, m, 1)
     const value = start.value + first * done - rest.value
     const error = start.error + 36 * EPS * first * done + rest.error
     return { value: Math.min(1, Math.max(0, value)), error, method: 'eigen-series' }
   }
 
   heatFraction(m: Moment): Estimate {
+    const rest = this.meanSum(m, 1)
     const z = this.roots[0]!
     const first = (this.weights[0]! * this.body.biot) / z
     const done = -Math.expm1(-z * z * m.fourier)
     const start = oneMinusFirstMean(z, first)
-    const rest = this.meanSum(m, 1)
     const value = start.value + first * done - rest.value
     const error = start.error + 36 * EPS * first * done + rest.error
     return { value: Math.min(1, Math.max(0, value)), error, method: 'eigen-series' }
@@ -71,25 +95,25 @@ export class SlabSeries {
     const B = this.body.biot
     const delta = this.body.deltas[j]!
     const shift = this.body.shifts[j]!
+    const { count, exponents, factors } = this.countAt(m)
+    const { cosines, sines } = this.wavesAt(j, count)
     const { roots, weights } = this
-    const count = Math.min(termsAt(m.fourier), roots.length - 1)
     let value = 0
     let error = 0
     for (let n = 0; n < count; n++) {
       const z = roots[n]!
-      const decay = z * z * m.fourier
-      const w = weights[n]! * z * Math.exp(-decay)
-      const c = this.cosines[j]![n]!
-      const s = (z / B) * this.sines[j]![n]!
+      const w = weights[n]! * z * factors[n]!
+      const c = cosines[n]!
+      const s = (z / B) * sines[n]!
       value += w * (c - s)
       error +=
         w *
-        ((14 + 16 * decay) * (Math.abs(c) + Math.abs(s)) +
-          z * (6 * delta + shift) * (Math.abs(this.sines[j]![n]!) + (z / B) * Math.abs(c)))
+        ((14 + 16 * exponents[n]!) * (Math.abs(c) + Math.abs(s)) +
+          z * (6 * delta + shift) * (Math.abs(sines[n]!) + (z / B) * Math.abs(c)))
     }
     const z = roots[count]!
     const size = weights[count]! * z * (1 + (z / B) * Math.min(1, z * delta))
-    const tail = (size * Math.exp(-z * z * m.fourier)) / -Math.expm1(-Math.PI * z * m.fourier)
+    const tail = (size * factors[count]!) / -Math.expm1(-Math.PI * z * m.fourier)
     return { value: this.body.inner[j] === 0 ? 0 : value, error: EPS * error + tail + TINY, method: 'eigen-series' }
   }
 
@@ -97,48 +121,42 @@ export class SlabSeries {
   private sum(j: number, m: Moment, first: number): { value: number; error: number } {
     const B = this.body.biot
     const delta = this.body.deltas[j]!
+    const { count, exponents, factors } = this.countAt(m)
+    const { cosines, sines } = this.wavesAt(j, count)
     const { roots, weights } = this
-    const cosines = this.cosines[j]!
-    const sines = this.sines[j]!
-    const count = Math.min(termsAt(m.fourier), roots.length - 1)
     let value = 0
     let error = 0
     for (let n = first; n < count; n++) {
       const z = roots[n]!
-      const decay = z * z * m.fourier
-      const w = weights[n]! * Math.exp(-decay)
+      const w = weights[n]! * factors[n]!
       const c = z * cosines[n]!
       const s = B * sines[n]!
       value += w * (c + s)
       error +=
         w *
-        ((12 + 16 * decay) * (Math.abs(c) + Math.abs(s)) +
+        ((12 + 16 * exponents[n]!) * (Math.abs(c) + Math.abs(s)) +
           6 * z * delta * (z * Math.abs(sines[n]!) + B * Math.abs(cosines[n]!)))
     }
-    return { value, error: EPS * error + this.tail(j, m, count) + TINY }
-  }
-
-  /** Bound on what the terms from `count` on add, by the geometric series of the first two. */
-  private tail(j: number, m: Moment, count: number): number {
-    const z = this.roots[count]!
-    const size = this.weights[count]! * (z + this.body.biot * Math.min(1, z * this.body.deltas[j]!))
-    return (size * Math.exp(-z * z * m.fourier)) / -Math.expm1(-Math.PI * z * m.fourier)
+    // What the terms from `count` on add, by the geometric series of the first two.
+    const z = roots[count]!
+    const size = weights[count]! * (z + B * Math.min(1, z * delta))
+    const tail = (size * factors[count]!) / -Math.expm1(-Math.PI * z * m.fourier)
+    return { value, error: EPS * error + tail + TINY }
   }
 
   /** Weights of the mean: 2Bi²/(z²(z² + Bi² + Bi)) = wₙ·Bi/zₙ. */
   private meanSum(m: Moment, first: number): { value: number; error: number } {
     const B = this.body.biot
-    const count = Math.min(termsAt(m.fourier), this.roots.length - 1)
+    const { count, exponents, factors } = this.countAt(m)
     let value = 0
     let error = 0
     for (let n = first; n <= count; n++) {
       const z = this.roots[n]!
-      const decay = z * z * m.fourier
-      const term = ((this.weights[n]! * B) / z) * Math.exp(-decay)
+      const term = ((this.weights[n]! * B) / z) * factors[n]!
       if (n === count) error += (term / EPS) * 2
       else {
         value += term
-        error += (14 + 16 * decay) * term
+        error += (14 + 16 * exponents[n]!) * term
       }
     }
     return { value, error: EPS * error + TINY }

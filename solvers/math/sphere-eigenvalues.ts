@@ -4,15 +4,15 @@
  *   z − mπ − atan2(z, 1 − Bi) = 0,   m = 0, 1, 2, …   by Newton
  *   below Bi = 1 the first by z²/(3 − z²/(5 − z²/(7 − …))) = Bi, where the difference above would cancel
  *
- * Shapes    returns `count` increasing numbers, z_m in (mπ, mπ + π).
+ * Shapes    the root number m, in (mπ, mπ + π).
  * Units     none.
- * Domain    Bi > 0, from 1e-25 to 1e20; count ≥ 0.
+ * Domain    Bi > 0, from 1e-25 to 1e20; m ≥ 0.
  * Accuracy  relative error ≤ 4ε.
  * Errors    none. The loops end after at most 20 steps; from the starts below seven suffice.
  * Source    H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, §9.4; the fraction is Lambert's for tan z.
  */
-export function sphereEigenvalues(biot: number, count: number): Float64Array {
-  return Float64Array.from({ length: count }, (_, m) => (m === 0 && biot < 1 ? smallRoot(biot) : eigenvalue(biot, m)))
+export function sphereEigenvalue(biot: number, m: number): number {
+  return m === 0 && biot < 1 ? smallRoot(biot) : eigenvalue(biot, m)
 }
 
 function eigenvalue(biot: number, m: number): number {

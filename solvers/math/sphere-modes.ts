@@ -1,5 +1,5 @@
-import { type Mode, type Part, roundTermsAt } from './round-series.ts'
-import { sphereEigenvalues } from './sphere-eigenvalues.ts'
+import type { Mode, Part } from './round-series.ts'
+import { sphereEigenvalue } from './sphere-eigenvalues.ts'
 import type { UnitPlaces } from './unit-body.ts'
 
 /*
@@ -24,36 +24,31 @@ interface Coefficients {
   mean: number
 }
 
-/** Modes for Fourier numbers from `shortest` on. */
-export function sphereModes(places: UnitPlaces, biot: number, shortest: number): Mode[] {
-  const count = roundTermsAt(shortest) + 1
-  const all = biot === Infinity ? heldCoefficients(count) : filmCoefficients(biot, count)
-  const indices = Array.from(places.deltas, (_, j) => j)
-  return all.map((c) => ({
-    root: c.z,
-    parts: indices.map((j) => (places.inner[j]! < 0.5 ? inside(c, places, j) : outside(c, places, j, biot))),
-    fluxes: indices.map((j) =>
-      places.inner[j]! < 0.5 || c.z < 1 ? fluxInside(c, places, j, biot) : fluxOutside(c, places, j, biot),
-    ),
-    mean: c.mean,
-  }))
+/** The mode number m, counted from 0. */
+export function sphereMode(places: UnitPlaces, biot: number, m: number): Mode {
+  const c = biot === Infinity ? heldCoefficients(m) : filmCoefficients(biot, m)
+  const parts: Part[] = []
+  const fluxes: Part[] = []
+  for (let j = 0; j < places.deltas.length; j++) {
+    const inmost = places.inner[j]! < 0.5
+    parts.push(inmost ? inside(c, places, j) : outside(c, places, j, biot))
+    fluxes.push(inmost || c.z < 1 ? fluxInside(c, places, j, biot) : fluxOutside(c, places, j, biot))
+  }
+  return { root: c.z, parts, fluxes, mean: c.mean }
 }
 
-function heldCoefficients(count: number): Coefficients[] {
-  return Array.from({ length: count }, (_, m) => {
-    const z = (m + 1) * Math.PI
-    return { z, alpha: 0, beta: 2 / z, centre: m % 2 === 0 ? 2 : -2, mean: 6 / (z * z) }
-  })
+function heldCoefficients(m: number): Coefficients {
+  const z = (m + 1) * Math.PI
+  return { z, alpha: 0, beta: 2 / z, centre: m % 2 === 0 ? 2 : -2, mean: 6 / (z * z) }
 }
 
-function filmCoefficients(biot: number, count: number): Coefficients[] {
+function filmCoefficients(biot: number, m: number): Coefficients {
   const H = biot - 1
-  return Array.from(sphereEigenvalues(biot, count), (z, m) => {
-    const N = z * z + biot * H
-    const alpha = (2 * biot) / N
-    const centre = (m % 2 === 0 ? alpha : -alpha) * Math.hypot(z, H)
-    return { z, alpha, beta: (alpha * H) / z, centre, mean: (3 * biot * alpha) / (z * z) }
-  })
+  const z = sphereEigenvalue(biot, m)
+  const N = z * z + biot * H
+  const alpha = (2 * biot) / N
+  const centre = (m % 2 === 0 ? alpha : -alpha) * Math.hypot(z, H)
+  return { z, alpha, beta: (alpha * H) / z, centre, mean: (3 * biot * alpha) / (z * z) }
 }
 
 /** Cφ as it stands: sin(x)/x of x = zρ. */

@@ -3,8 +3,8 @@ import { RoundSeries, roundTermsAt } from './round-series.ts'
 import { type Estimate, EPS } from './rounding.ts'
 import { filmFace, heldFace } from './sphere-faces.ts'
 import { SphereImages } from './sphere-images.ts'
-import { sphereModes } from './sphere-modes.ts'
-import type { FilmedBody, Moment, UnitBody } from './unit-body.ts'
+import { sphereMode } from './sphere-modes.ts'
+import type { FilmedBody, Moment, Share, UnitBody } from './unit-body.ts'
 
 /* Below SERIES_FROM only the images, above IMAGES_TO only the series; between, whichever errs less. */
 const SERIES_FROM = 0.004
@@ -15,11 +15,18 @@ export class UnitSphere implements UnitBody {
   readonly series: RoundSeries
   private readonly images: SphereImages
 
-  /** `shortest` is the smallest Fourier number that will be asked for. */
-  constructor(body: FilmedBody, shortest: number) {
-    const modes = sphereModes(body, body.biot, Math.max(shortest, SERIES_FROM))
-    this.series = new RoundSeries(modes, sphereDeficit(body, modes))
+  constructor(body: FilmedBody) {
+    this.series = new RoundSeries(
+      (n) => sphereMode(body, body.biot, n),
+      (first) => sphereDeficit(body, first),
+    )
     this.images = new SphereImages(body.biot === Infinity ? heldFace : filmFace(body.biot), body)
+  }
+
+  share(j: number, m: Moment): Share {
+    return m.fourier < 0.03
+      ? { ...this.completed(j, m), of: 'completed' }
+      : { ...this.remaining(j, m), of: 'remaining' }
   }
 
   remaining(j: number, m: Moment): Estimate {

@@ -1,5 +1,10 @@
 import type { Estimate } from './rounding.ts'
 
+/** An estimate of θ, or of 1 − θ. */
+export interface Share extends Estimate {
+  of: 'remaining' | 'completed'
+}
+
 /** Places of a body of size 1, from its exposed face to where no heat flows: mid-plane, insulated face, axis or centre. */
 export interface UnitPlaces {
   /** Depth over size, 0..1, of each place. */
@@ -26,6 +31,8 @@ export interface Moment {
 
 /** A body of size 1 after a unit step of its one drive. */
 export interface UnitBody {
+  /** θ or 1 − θ at place j, whichever is had at least cost, to an absolute error: a temperature needs no more. */
+  share(j: number, m: Moment): Share
   /** θ at place j, 1 at the start. */
   remaining(j: number, m: Moment): Estimate
   /** 1 − θ at place j, without cancellation. */

@@ -61,7 +61,10 @@ function placesOf(c: Case): Pick<Resolved, 'depths' | 'radii' | 'points'> {
   if (depths) return { depths: along(depths) }
   if (radii) return { radii: along(radii) }
   if (!points) return {}
-  const axes = (c.pointAxes ?? []).map((axis) => [axis, along(points.map((point) => point[axis] ?? 0))] as const)
+  // Only the axes that the body of the example has: a rod has no y, a bar no r.
+  const axes = (c.pointAxes ?? [])
+    .filter((axis) => points.every((point) => point[axis] !== undefined))
+    .map((axis) => [axis, along(points.map((point) => point[axis]!))] as const)
   return {
     points: Array.from({ length: PLACES }, (_, j): Point =>
       Object.fromEntries(axes.map(([axis, at]) => [axis, at[j]!])),

@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { besselI01, besselIK01, besselK01 } from '../../solvers/math/complex-bessel.ts'
+import { besselI, besselI01, besselIK, besselIK01, besselK, besselK01 } from '../../solvers/math/complex-bessel.ts'
 import { type Complex, modulus, plus, times } from '../../solvers/math/complex.ts'
 import { EPS } from '../../solvers/math/rounding.ts'
 import { proof, seed } from './counts.ts'
@@ -96,6 +96,17 @@ describe('scaled modified Bessel functions', () => {
 
   it('are the same when both kinds are asked for at once', () => {
     for (const z of points(1e-6, 1e6)) expect(besselIK01(z)).toEqual({ ...besselI01(z), ...besselK01(z) })
+  })
+
+  it('are the same when one order or one kind is asked for', () => {
+    for (const z of points(1e-6, 1e6)) {
+      const { i0, i1, k0, k1 } = besselIK01(z)
+      expect([besselIK(z, 0), besselIK(z, 1)]).toEqual([
+        { i: i0, k: k0 },
+        { i: i1, k: k1 },
+      ])
+      expect([besselI(z, 0), besselI(z, 1), besselK(z, 0), besselK(z, 1)]).toEqual([i0, i1, k0, k1])
+    }
   })
 
   it('are conjugate below the real axis', () => {

@@ -44,7 +44,7 @@ describe('a planted error', () => {
     const slab = { biot: 2, deltas: Float64Array.of(0.4), inner: Float64Array.of(0.6), shifts: Float64Array.of(0) }
     const moment = { fourier: 0.25, root: 0.5 }
     const exact = exactSlab(new D(2), new D('0.25'), new D('0.4'))
-    const solver = new SlabFilm(slab, moment.fourier)
+    const solver = new SlabFilm(slab)
     const off = () => {
       const remaining = solver.remaining(0, moment)
       const completed = solver.completed(0, moment)

@@ -1,4 +1,4 @@
-import { momentsOf, shortestOf } from '../../bodies/body-step.ts'
+import { momentsOf } from '../../bodies/body-step.ts'
 import { SlabFilm } from '../../math/slab-film.ts'
 import { characteristicLength, slabPlaces, type SlabStepInput, solveSlab } from '../../bodies/slab-step.ts'
 import type { Solution } from '../../solution.ts'
@@ -30,6 +30,6 @@ export function solve(input: SlabInput): Solution {
     return { ...stepOutputs(step, untouched), terms: 0, scale: Math.abs(ambientTemperature - initialTemperature) }
   const length = characteristicLength(input)
   const moments = momentsOf(input, length)
-  const unit = new SlabFilm({ biot: (h * length) / input.conductivity, ...slabPlaces(input) }, shortestOf(moments))
+  const unit = new SlabFilm({ biot: (h * length) / input.conductivity, ...slabPlaces(input) })
   return solveSlab(input, unit, moments, { temperature: ambientTemperature, fluxUnit: h, fluxAtStart: 1 })
 }
