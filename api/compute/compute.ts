@@ -2,6 +2,7 @@ import { Piscina } from 'piscina'
 import type { Call } from '../../solvers/operations/index.ts'
 import { type Rendered, render } from '../http/render.ts'
 import type { OwnMaterials } from '../operation.ts'
+import type { AnsweredLines, Counts, LineTask } from '../batches/lines.ts'
 import { Problem } from '../problems.ts'
 import type { Prepared } from './solve-worker.ts'
 
@@ -28,6 +29,9 @@ export interface Compute {
   /** Reads, validates and prices a long body. Throws the refusal. */
   prepare(task: { case: string; operation: string; bytes: Uint8Array; own: OwnMaterials }): Promise<Priced>
   solve(task: SolveTask): Promise<Rendered>
+  /** Reads and prices lines of a batch, and answers them. */
+  priceLines(task: LineTask): Promise<Counts>
+  answerLines(task: LineTask): Promise<AnsweredLines>
   hashPassword(password: string): Promise<string>
   /** Takes as long for an absent hash as for a wrong password. */
   checkPassword(password: string, hash: string | undefined): Promise<boolean>
@@ -64,9 +68,16 @@ export function createCompute(threads: number, { limit, waiting } = usual): Comp
     return prepared.call
   }
 
+  const inThread =
+    <R>(name: string) =>
+    (task: LineTask): Promise<R> =>
+      solves.run(task, { name, signal: AbortSignal.timeout(limit) }).catch(rethrow)
+
   return {
     prepare,
     solve,
+    priceLines: inThread<Counts>('priceLines'),
+    answerLines: inThread<AnsweredLines>('answerLines'),
     hashPassword: (password) => passwords.run({ password }).catch(rethrow),
     checkPassword: (password, hash) => passwords.run({ password, hash: hash ?? null }).catch(rethrow),
     async close() {

@@ -1,0 +1,88 @@
+import type { Compute } from '../compute/compute.ts'
+import { readable } from '../http/readable.ts'
+import { Problem, problemDetails } from '../problems.ts'
+import type { AnsweredLines, Counts, LineTask } from './lines.ts'
+
+/** Lines that a thread reads at a time: some ten milliseconds. */
+const CHUNK = 200
+/** Chunks of one batch that are computed at once, so that others find a thread as well. */
+const AT_ONCE = 3
+
+/** A batch as it was read: its lines, and what they need. */
+export type Batch = Omit<LineTask, 'first'>
+
+function chunksOf(batch: Batch): LineTask[] {
+  const count = Math.ceil(batch.lines.length / CHUNK)
+  return Array.from({ length: count }, (_, n) => ({
+    ...batch,
+    lines: batch.lines.slice(n * CHUNK, (n + 1) * CHUNK),
+    first: n * CHUNK + 1,
+  }))
+}
+
+/** Does work for a list, a few at once, and gives what comes of it in the order of the list. */
+async function* inOrder<T, R>(list: readonly T[], work: (one: T) => Promise<R>): AsyncGenerator<R> {
+  const begun: Promise<R>[] = []
+  const begin = (one: T) => {
+    const result = work(one)
+    // It is waited for later, maybe never where an earlier one failed.
+    result.catch(() => undefined)
+    begun.push(result)
+  }
+  for (const one of list) {
+    begin(one)
+    if (begun.length === AT_ONCE) yield await (begun.shift() as Promise<R>)
+  }
+  for (const result of begun) yield await result
+}
+
+/** Reads all lines and sums their price. */
+export async function priceBatch(batch: Batch, compute: Compute): Promise<Counts> {
+  const sum: Counts = { ok: 0, failed: 0, points: 0 }
+  for await (const counts of inOrder(chunksOf(batch), compute.priceLines)) add(sum, counts)
+  return sum
+}
+
+/** Answers all lines in their order, piece by piece. */
+export function answerBatch(batch: Batch, compute: Compute): AsyncGenerator<AnsweredLines> {
+  return inOrder(chunksOf(batch), (task) => answerLines(task, compute))
+}
+
+export function add(sum: Counts, { ok, failed, points }: Counts): void {
+  sum.ok += ok
+  sum.failed += failed
+  sum.points += points
+}
+
+/* Where a chunk takes too long its halves are asked for, so that a line fails for itself alone. */
+async function answerLines(task: LineTask, compute: Compute): Promise<AnsweredLines> {
+  try {
+    return await compute.answerLines(task)
+  } catch (error) {
+    if (!(error instanceof Problem)) throw error
+    if (error.code !== 'solve-too-slow' || task.lines.length === 1) return failedLines(task, error)
+    const middle = Math.ceil(task.lines.length / 2)
+    const [first, second] = [
+      await answerLines({ ...task, lines: task.lines.slice(0, middle) }, compute),
+      await answerLines({ ...task, lines: task.lines.slice(middle), first: task.first + middle }, compute),
+    ]
+    const both = { ...first, text: first.text + second.text, faults: [...first.faults, ...second.faults] }
+    add(both, second)
+    return both
+  }
+}
+
+function failedLines({ lines, publicUrl }: LineTask, problem: Problem): AnsweredLines {
+  const details = readable(problemDetails(problem, publicUrl))
+  const texts = lines.map((line) => `${JSON.stringify({ id: idIn(line), status: problem.status, problem: details })}\n`)
+  return { ok: 0, failed: lines.length, points: 0, faults: [], text: texts.join('') }
+}
+
+/* The line was read before, or its own problem would stand here. */
+function idIn(line: string): unknown {
+  try {
+    return (JSON.parse(line) as { id?: unknown }).id ?? null
+  } catch {
+    return null
+  }
+}
