@@ -1,6 +1,7 @@
 import { fileURLToPath } from 'node:url'
 import express, { type Express } from 'express'
 import type { Deps } from './deps.ts'
+import { allowPages } from './http/cors.ts'
 import { errorHandler } from './http/errors.ts'
 import { mount } from './http/mount.ts'
 import { portalFiles } from './http/portal-files.ts'
@@ -29,7 +30,7 @@ export function createApp(deps: Deps, portalFolder = builtPortal): App {
   app.set('x-powered-by', false)
   app.set('etag', false)
   app.set('query parser', false)
-  app.use(recordCalls(deps), secureAnswers(deps.config), refuseOdd)
+  app.use(recordCalls(deps), secureAnswers(deps.config), allowPages, refuseOdd)
   for (const document of ['openapi', 'portal', 'support'] as const)
     app.use(
       mount(

@@ -4,6 +4,7 @@ import type { Compute } from './compute/compute.ts'
 import type { Config } from './config.ts'
 import type { Database } from './database.ts'
 import type { Limits } from './http/limits.ts'
+import type { Crowd } from './http/crowd.ts'
 import type { FindKey } from './keys/authenticate.ts'
 import type { Meter } from './metering/meter.ts'
 import type { RequestLog } from './requests/log.ts'
@@ -15,6 +16,7 @@ export interface Deps {
   pool: pg.Pool
   db: Database
   findKey: FindKey
+  crowd: Crowd
   compute: Compute
   meter: Meter
   requestLog: RequestLog

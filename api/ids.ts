@@ -3,7 +3,7 @@ import { v7 as uuidv7 } from 'uuid'
 import { z } from 'zod'
 import { OWN_PREFIX } from '../solvers/materials/own-material.ts'
 
-type Kind = 'req' | 'acct' | 'prsn' | 'stff' | 'key' | 'aud'
+type Kind = 'req' | 'acct' | 'prsn' | 'stff' | 'key' | 'sec' | 'aud'
 
 /** Where ids come from: now and chance, unless a seed says otherwise. */
 export interface IdSource {

@@ -3,14 +3,16 @@ import type { Material } from '../solvers/materials/material.ts'
 import { readBody } from '../solvers/operations/read-body.ts'
 import { parse } from '../solvers/statement/validate.ts'
 import type { Deps } from './deps.ts'
-import type { Permission, Reach, Role, StaffPermission, StaffRole } from './permissions.ts'
+import type { Environment } from './keys/key.ts'
+import type { Permission, Reach, Role, Scope, StaffPermission, StaffRole } from './permissions.ts'
 import type { ProblemCode } from './problems.ts'
 
 export interface KeyCaller {
   kind: 'key'
   keyId: string
+  secretId: string
   accountId: string
-  environment: 'trial'
+  environment: Environment
 }
 export interface MemberCaller {
   kind: 'session'
@@ -39,11 +41,14 @@ export interface CallRecord {
   requestId: string
   accountId?: string
   keyId?: string
+  secretId?: string
   caseId?: string
   operation?: string
   points?: number
   bytesIn?: number
   problem?: object
+  /** Headers of the limits that the call counted against, on its answer whatever that is. */
+  limits?: Record<string, string>
 }
 
 /** A session as sign-in and sign-out see it. */
@@ -96,7 +101,7 @@ export interface Upload {
 }
 
 export type Method = 'get' | 'post' | 'put' | 'delete'
-export type LimiterName = 'sign-up' | 'sign-in' | 'staff-sign-in' | 'try'
+export type LimiterName = 'sign-up' | 'sign-in' | 'staff-sign-in' | 'try' | 'leak-report'
 
 export type Tag = 'Catalogue' | 'Cases' | 'Usage' | 'Requests' | 'Health' | 'Session' | 'Keys' | 'Materials' | 'Try'
 
@@ -110,6 +115,8 @@ interface Description<P, Q, B, A extends Access> {
   summary: string
   description?: string
   access: A
+  /** What a key must be allowed. */
+  scope?: A extends 'key' ? Scope : never
   permission?: A extends 'session' ? Permission : A extends 'staff' ? StaffPermission : never
   /** Starts or ends a session although it needs none. */
   session?: boolean
@@ -132,15 +139,17 @@ interface Description<P, Q, B, A extends Access> {
   handle(context: Context<P, Q, B, A>): Promise<Reply> | Reply
 }
 
-export type Operation = Omit<Description<unknown, unknown, unknown, Access>, 'handle' | 'permission'> & {
+export type Operation = Omit<Description<unknown, unknown, unknown, Access>, 'handle' | 'permission' | 'scope'> & {
   permission?: Permission | StaffPermission
+  scope?: Scope
   handle(context: Context<unknown, unknown, unknown, Access>): Promise<Reply> | Reply
 }
 
 /** An endpoint, described once: routes, documents and common tests are made from it. */
 export function operation<P, Q, B, A extends Access>(description: Description<P, Q, B, A>): Operation {
-  const { id, access, permission } = description
+  const { id, access, permission, scope } = description
   if ((access === 'session' || access === 'staff') && !permission) throw new Error(`${id} names no permission`)
+  if (access === 'key' && !scope) throw new Error(`${id} names no scope`)
   return description as unknown as Operation
 }
 
@@ -162,11 +171,23 @@ export function usesSession(o: Operation): boolean {
   return o.session === true || o.access === 'session' || o.access === 'staff'
 }
 
+/** What a key can be refused for, whatever it asks. */
+const ofKeys: readonly ProblemCode[] = [
+  'key-missing',
+  'key-unknown',
+  'key-expired',
+  'address-refused',
+  'origin-refused',
+  'scope-missing',
+  'rate-limited',
+  'too-many-at-once',
+]
+
 /** Every problem an operation can answer: its own, and those of its access, body, query and limits. */
 export function problemsOf(o: Operation): ProblemCode[] {
   const codes: ProblemCode[] = ['method-not-allowed', 'not-acceptable', 'internal', 'unavailable', 'malformed-request']
   codes.push('invalid-parameter', 'header-too-large', 'request-timeout', 'expectation-failed')
-  if (o.access === 'key') codes.push('key-missing', 'key-unknown')
+  if (o.access === 'key') codes.push(...ofKeys)
   if (o.access === 'session' || o.access === 'staff') codes.push('sign-in-needed', 'forbidden')
   if (usesSession(o) && o.method !== 'get') codes.push('cross-site')
   if (o.params) codes.push('not-found')

@@ -2,6 +2,7 @@ import { accountOperations } from './accounts/operations.ts'
 import { caseOperationList, tryOperations } from './cases/operations.ts'
 import { catalogueOperations } from './catalogue/operations.ts'
 import { healthOperations } from './health/operations.ts'
+import { leakOperations } from './keys/leak-operations.ts'
 import { keyOperations } from './keys/operations.ts'
 import { materialOperations, memberMaterialOperations } from './materials/operations.ts'
 import type { Operation } from './operation.ts'
@@ -16,6 +17,7 @@ export const operations: readonly Operation[] = [
   ...materialOperations,
   keyUsage,
   keyRequest,
+  ...leakOperations,
   ...healthOperations,
   ...accountOperations,
   ...keyOperations,

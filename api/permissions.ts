@@ -1,6 +1,21 @@
 export const roles = ['owner', 'integrator', 'reader'] as const
 export type Role = (typeof roles)[number]
 
+/** What a key may be allowed, one or more. */
+export const scopes = {
+  solve: 'Ask questions of cases.',
+  jobs: 'Start, follow and cancel jobs.',
+  files: 'Keep files for jobs.',
+  'materials:read': 'Read the catalogue of materials and those of the account.',
+  'materials:write': 'Keep, change and delete materials of the account.',
+  'usage:read': 'Read what the account has used.',
+  'requests:read': 'Read calls that the account has made.',
+  webhooks: 'Keep, change and delete webhooks.',
+} as const
+
+export type Scope = keyof typeof scopes
+export const allScopes = Object.keys(scopes) as Scope[]
+
 export const staffRoles = ['support', 'supervisor'] as const
 export type StaffRole = (typeof staffRoles)[number]
 
@@ -12,6 +27,7 @@ export const permissions = {
   'session:read': { owner: 'all', integrator: 'all', reader: 'all' },
   'keys:read': { owner: 'all', integrator: 'own' },
   'keys:create': { owner: 'all', integrator: 'own' },
+  'keys:change': { owner: 'all', integrator: 'own' },
   'keys:revoke': { owner: 'all', integrator: 'own' },
   'materials:read': { owner: 'all', integrator: 'all', reader: 'all' },
   'materials:write': { owner: 'all', integrator: 'own' },

@@ -58,6 +58,12 @@ export const problems = {
     text: 'The key is misspelt, revoked or was never given out. A key that was lost cannot be shown again: make a new one.',
     retryable: false,
   },
+  'key-expired': {
+    status: 401,
+    title: 'The key has expired',
+    text: 'The time that was set for the key, or for its secret when it was rotated, is over. Use the new secret, or set a later end in the portal.',
+    retryable: false,
+  },
   'sign-in-needed': {
     status: 401,
     title: 'Sign in first',
@@ -68,6 +74,30 @@ export const problems = {
     status: 401,
     title: 'The mail address and password do not fit',
     text: 'No account has this mail address together with this password.',
+    retryable: false,
+  },
+  'plan-needed': {
+    status: 402,
+    title: 'A plan is needed',
+    text: 'Metered keys belong to a plan, and the account has none. Trial keys work without one.',
+    retryable: false,
+  },
+  'address-refused': {
+    status: 403,
+    title: 'The key may not be used from this address',
+    text: 'The key has a list of networks, and the call came from outside of them. The list is set in the portal.',
+    retryable: false,
+  },
+  'origin-refused': {
+    status: 403,
+    title: 'The key may not be used by this page',
+    text: 'A browser sent the call for a page whose origin is not among those of the key. A key has none unless they are set in the portal.',
+    retryable: false,
+  },
+  'scope-missing': {
+    status: 403,
+    title: 'The key does not include this',
+    text: 'The operation needs a scope that the key was not given. Scopes are set in the portal.',
     retryable: false,
   },
   forbidden: {
@@ -110,6 +140,12 @@ export const problems = {
     status: 409,
     title: 'The mail address is in use',
     text: 'Somebody signed up with this mail address before. Sign in instead.',
+    retryable: false,
+  },
+  'key-revoked': {
+    status: 409,
+    title: 'The key is revoked',
+    text: 'A revoked key is not changed any more. Make a new one.',
     retryable: false,
   },
   'too-many-keys': {
@@ -182,6 +218,12 @@ export const problems = {
     status: 429,
     title: 'Too many calls in a short time',
     text: 'Wait for the time that Retry-After states.',
+    retryable: true,
+  },
+  'too-many-at-once': {
+    status: 429,
+    title: 'Too many calls at once',
+    text: 'A key may have 256 calls under way in a process of the service. Wait until some have been answered.',
     retryable: true,
   },
   'quota-exceeded': {

@@ -7,6 +7,7 @@ import { createCompute } from './compute/compute.ts'
 import type { Config } from './config.ts'
 import { createDatabase, createPool } from './database.ts'
 import type { Deps } from './deps.ts'
+import { createCrowd } from './http/crowd.ts'
 import { type Limits, defaultLimits } from './http/limits.ts'
 import { refuseRaw } from './http/refuse-raw.ts'
 import { createFindKey } from './keys/authenticate.ts'
@@ -14,6 +15,8 @@ import { createMeter } from './metering/meter.ts'
 import { createRequestLog } from './requests/log.ts'
 import { keepHouse } from './housekeeping.ts'
 
+/** Calls of one key that may be under way in a process. */
+const AT_ONCE = 256
 /** Calls under way at the end of the service have so long. */
 const LAST_CALLS = 20_000
 /** Clients with an open connection have so long to be told that it will close. */
@@ -34,6 +37,7 @@ export function createDeps(config: Config, log: Logger, limits: Limits = default
     pool,
     db: createDatabase(pool),
     findKey: createFindKey(pool),
+    crowd: createCrowd(AT_ONCE),
     compute: createCompute(config.solveThreads),
     meter: createMeter(pool, log),
     requestLog: createRequestLog(pool, log),

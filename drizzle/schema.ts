@@ -25,11 +25,19 @@ const createdAt = () => instant().notNull().defaultNow()
 const oneOf = (name: string, column: AnyPgColumn, values: readonly string[]) =>
   check(name, sql`${column} in (${sql.raw(values.map((v) => `'${v}'`).join(', '))})`)
 
+/** A trial is counted by the day and never invoiced; what is metered is counted by the month. */
+export const environments = ['trial', 'metered'] as const
+const environment = () => text({ enum: environments }).notNull()
+
 export const accounts = pgTable('accounts', {
   id: text().primaryKey(),
   name: text().notNull(),
   /** Points of a new trial period; a period that has begun keeps the limit in its own row. */
   trialLimit: points().notNull().default(100_000),
+  /** The same of a metered one; 0 without a plan. */
+  meteredLimit: points().notNull().default(0),
+  /** Calls a minute, of all keys together. */
+  rate: integer().notNull().default(6000),
   createdAt: createdAt(),
 })
 
@@ -91,25 +99,56 @@ export const keys = pgTable(
     accountId: text()
       .notNull()
       .references(() => accounts.id),
-    environment: text({ enum: ['trial'] }).notNull(),
+    environment: environment(),
     name: text().notNull(),
-    /** SHA-256 of the key; the key itself is kept nowhere. */
-    hash: bytes().notNull(),
+    /** Of its newest secret. */
     prefix: text().notNull(),
     quota: points(),
+    /** Calls a minute of this key alone. */
+    rate: integer(),
+    scopes: text().array().notNull(),
+    /** Networks from which it may be used; from anywhere where there is none. */
+    addresses: text().array().notNull().default([]),
+    /** Origins of pages that may use it; no page may where there is none. */
+    origins: text().array().notNull().default([]),
     createdBy: text()
       .notNull()
       .references(() => people.id),
     createdAt: createdAt(),
     lastUsedAt: instant(),
+    expiresAt: instant(),
     revokedAt: instant(),
+    revokedFor: text({ enum: ['asked', 'leaked'] }),
   },
   (t) => [
-    uniqueIndex('keys_hash').on(t.hash),
     index('keys_account').on(t.accountId, t.id),
-    index('keys_prefix').on(t.prefix),
-    oneOf('keys_environment', t.environment, ['trial']),
+    oneOf('keys_environment', t.environment, environments),
+    oneOf('keys_revoked_for', t.revokedFor, ['asked', 'leaked']),
     check('keys_quota', sql`${t.quota} >= 0`),
+    check('keys_rate', sql`${t.rate} > 0`),
+  ],
+)
+
+/** What is sent as a key: one at a time, and the one before it while a rotation overlaps. */
+export const secrets = pgTable(
+  'secrets',
+  {
+    id: text().primaryKey(),
+    keyId: text()
+      .notNull()
+      .references(() => keys.id),
+    /** SHA-256 of the secret; itself it is kept nowhere. */
+    hash: bytes().notNull(),
+    prefix: text().notNull(),
+    createdAt: createdAt(),
+    lastUsedAt: instant(),
+    /** When it ends although its key goes on. */
+    endsAt: instant(),
+  },
+  (t) => [
+    uniqueIndex('secrets_hash').on(t.hash),
+    index('secrets_key').on(t.keyId),
+    index('secrets_prefix').on(t.prefix),
   ],
 )
 
@@ -120,7 +159,8 @@ export const periods = pgTable(
     accountId: text()
       .notNull()
       .references(() => accounts.id),
-    environment: text({ enum: ['trial'] }).notNull(),
+    environment: environment(),
+    /** Its first day. */
     period: date({ mode: 'string' }).notNull(),
     limit: points().notNull(),
     used: points().notNull().default(0),
@@ -142,23 +182,32 @@ export const keyPeriods = pgTable(
   (t) => [primaryKey({ columns: [t.keyId, t.period] }), check('key_periods_used', sql`${t.used} >= 0`)],
 )
 
-/** Insert-only, partitioned by month of the period; a refund is a negative entry in its charge's period. */
+/** Calls in the minute that an account or a key is in; unlogged, for they may be lost with a crash. */
+export const rates = pgTable('rates', {
+  /** Id of the account or key. */
+  subject: text().primaryKey(),
+  minute: instant().notNull(),
+  calls: integer().notNull().default(0),
+})
+
+/** Insert-only, partitioned by month; a refund is a negative entry on its charge's day. */
 export const ledger = pgTable(
   'ledger',
   {
-    period: date({ mode: 'string' }).notNull(),
+    /** The UTC day of the call, which its period holds. */
+    day: date({ mode: 'string' }).notNull(),
     requestId: text().notNull(),
     kind: text({ enum: ['charge', 'refund'] }).notNull(),
     accountId: text().notNull(),
     keyId: text().notNull(),
-    environment: text({ enum: ['trial'] }).notNull(),
+    environment: environment(),
     caseId: text(),
     points: points().notNull(),
     at: createdAt(),
   },
   (t) => [
-    primaryKey({ columns: [t.period, t.requestId, t.kind] }),
-    index('ledger_account').on(t.accountId, t.period),
+    primaryKey({ columns: [t.day, t.requestId, t.kind] }),
+    index('ledger_account').on(t.accountId, t.day),
     oneOf('ledger_kind', t.kind, ['charge', 'refund']),
   ],
 )
@@ -204,14 +253,15 @@ export const audit = pgTable(
   {
     id: text().primaryKey(),
     at: createdAt(),
-    actorKind: text({ enum: ['person', 'staff'] }).notNull(),
+    /** A call that needs no sign-in acts under its request id. */
+    actorKind: text({ enum: ['person', 'staff', 'call'] }).notNull(),
     actorId: text().notNull(),
     accountId: text(),
     action: text().notNull(),
     subject: text(),
     reason: text(),
   },
-  (t) => [index('audit_account').on(t.accountId, t.at), oneOf('audit_actor', t.actorKind, ['person', 'staff'])],
+  (t) => [index('audit_account').on(t.accountId, t.at), oneOf('audit_actor', t.actorKind, ['person', 'staff', 'call'])],
 )
 
 /** Materials that accounts keep for themselves; SI. */

@@ -59,7 +59,11 @@ const security: Record<Operation['access'], Record<string, string[]>[]> = {
   staff: [{ staffSession: [] }],
 }
 const schemes: Record<string, SecurityScheme> = {
-  key: { type: 'http', scheme: 'bearer', description: 'A key, made in the portal: soak_trial_ and 38 characters.' },
+  key: {
+    type: 'http',
+    scheme: 'bearer',
+    description: 'A key, made in the portal: soak_trial_ or soak_metered_ and 38 characters.',
+  },
   session: cookieScheme('member'),
   staffSession: cookieScheme('staff'),
 }
@@ -163,6 +167,8 @@ const headers = {
   'Request-Id': header('Names the call, for its record and for support.'),
   ETag: header('Names the body by its bytes: equal answers have equal tags.'),
   Location: header('Path of what was made.'),
+  RateLimit: header('What is left of each limit of calls: r calls within t seconds.'),
+  'RateLimit-Policy': header('Each limit of calls: q calls in w seconds.'),
   'Points-Charged': header('Points that the call cost.', 'integer'),
   'Points-Remaining': header('Points that are left to the key in this period.', 'integer'),
   'Retry-After': header('Seconds to wait.', 'integer'),
@@ -181,7 +187,7 @@ function routeOf(o: Operation): RouteConfig {
     tags: [o.caseId ?? o.tag],
     summary: o.summary,
     ...(o.description ? { description: o.description } : {}),
-    security: security[o.access],
+    security: o.scope ? [{ key: [o.scope] }] : security[o.access],
     request: requestOf(o),
     responses: { [o.status]: success(o), ...unchanged(o), ...failures(codes) },
     'x-problem-codes': codes,
@@ -229,7 +235,8 @@ function success(o: Operation): RouteConfig['responses'][string] {
     'Request-Id',
     ...(o.answer ? ['ETag'] : []),
     ...(o.status === 201 && o.document === 'openapi' ? ['Location'] : []),
-    ...(o.metered ? ['Points-Charged', 'Points-Remaining'] : []),
+    ...(o.metered ? ['Points-Charged'] : []),
+    ...(o.access === 'key' ? ['Points-Remaining', 'RateLimit', 'RateLimit-Policy'] : []),
   ]
   return {
     description: o.status === 204 ? 'Done.' : o.status === 201 ? 'Made.' : 'The answer.',
@@ -247,8 +254,11 @@ function unchanged(o: Operation): RouteConfig['responses'] {
 const headersOf: Partial<Record<ProblemCode, keyof typeof headers>> = {
   'key-missing': 'WWW-Authenticate',
   'key-unknown': 'WWW-Authenticate',
+  'key-expired': 'WWW-Authenticate',
+  'scope-missing': 'WWW-Authenticate',
   'method-not-allowed': 'Allow',
   'rate-limited': 'Retry-After',
+  'too-many-at-once': 'Retry-After',
   'quota-exceeded': 'Points-Remaining',
   'solve-too-slow': 'Retry-After',
   unavailable: 'Retry-After',

@@ -4506,6 +4506,46 @@ export interface paths {
         patch?: never;
         trace?: never;
     };
+    "/v1/key-format": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /**
+         * Read what keys look like
+         * @description For scanners of code and messages: how to tell a key from other text without asking anybody.
+         */
+        get: operations["readKeyFormat"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/v1/leaked-keys": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Report a key that was found in public
+         * @description A key that works is revoked at once, and its account sees why. The answer is the same whether there is such a key or not.
+         */
+        post: operations["reportLeakedKey"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
     "/healthz": {
         parameters: {
             query?: never;
@@ -4561,7 +4601,7 @@ export interface components {
              * @description What clients match.
              * @enum {string}
              */
-            code: "malformed-request" | "malformed-json" | "malformed-csv" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "too-many-materials" | "precondition-failed" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "invalid-parameter" | "precondition-required" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
+            code: "malformed-request" | "malformed-json" | "malformed-csv" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "key-expired" | "sign-in-needed" | "sign-in-refused" | "plan-needed" | "address-refused" | "origin-refused" | "scope-missing" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "key-revoked" | "too-many-keys" | "too-many-materials" | "precondition-failed" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "invalid-parameter" | "precondition-required" | "rate-limited" | "too-many-at-once" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
             title: string;
             status: number;
             detail: string;
@@ -22935,7 +22975,7 @@ export interface components {
              * @description An instant in UTC, RFC 3339.
              */
             asOf: string;
-            groupBy: ("day" | "key" | "case")[];
+            groupBy: ("day" | "key" | "case" | "environment")[];
             account: components["schemas"]["AccountStatus"];
             rows: {
                 /**
@@ -22946,6 +22986,8 @@ export interface components {
                 keyId?: string | null;
                 keyName?: string | null;
                 case?: string | null;
+                /** @enum {string|null} */
+                environment?: "trial" | "metered" | null;
                 calls: number;
                 points: number;
                 /** @description Calls that were refused or failed; they cost nothing. */
@@ -22968,6 +23010,18 @@ export interface components {
              * @description An instant in UTC, RFC 3339.
              */
             resetsAt: string;
+            /** @description The same of metered keys, where there is a plan. */
+            metered: {
+                /** @description Points of the period. */
+                limit: number;
+                /** @description Points used in the period. */
+                used: number;
+                /**
+                 * Format: date-time
+                 * @description An instant in UTC, RFC 3339.
+                 */
+                resetsAt: string;
+            } | null;
         };
         Request: {
             id: string;
@@ -23006,6 +23060,16 @@ export interface components {
                 at: string;
             }[];
             solver: string;
+        };
+        KeyFormat: {
+            regularExpression: string;
+            checksum: string;
+            example: string;
+            report: string;
+        };
+        LeakedKey: {
+            /** @description The whole key. */
+            key: string;
         };
         Alive: {
             /** @enum {string} */
@@ -24093,8 +24157,8 @@ export interface components {
                 };
             };
         };
-        /** @description A key is needed (key-missing). The key is not valid (key-unknown). */
-        "key-missing.key-unknown": {
+        /** @description The key has expired (key-expired). A key is needed (key-missing). The key is not valid (key-unknown). */
+        "key-expired.key-missing.key-unknown": {
             headers: {
                 "Request-Id": components["headers"]["Request-Id"];
                 "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
@@ -24103,7 +24167,21 @@ export interface components {
             content: {
                 "application/problem+json": components["schemas"]["Problem"] & {
                     /** @enum {unknown} */
-                    code?: "key-missing" | "key-unknown";
+                    code?: "key-expired" | "key-missing" | "key-unknown";
+                };
+            };
+        };
+        /** @description The key may not be used from this address (address-refused). The key may not be used by this page (origin-refused). The key does not include this (scope-missing). */
+        "address-refused.origin-refused.scope-missing": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                "WWW-Authenticate": components["headers"]["WWW-Authenticate"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "address-refused" | "origin-refused" | "scope-missing";
                 };
             };
         };
@@ -24146,17 +24224,18 @@ export interface components {
                 };
             };
         };
-        /** @description The points of this period are used up (quota-exceeded). */
-        "quota-exceeded": {
+        /** @description The points of this period are used up (quota-exceeded). Too many calls in a short time (rate-limited). Too many calls at once (too-many-at-once). */
+        "quota-exceeded.rate-limited.too-many-at-once": {
             headers: {
                 "Request-Id": components["headers"]["Request-Id"];
                 "Points-Remaining": components["headers"]["Points-Remaining"];
+                "Retry-After": components["headers"]["Retry-After"];
                 [name: string]: unknown;
             };
             content: {
                 "application/problem+json": components["schemas"]["Problem"] & {
                     /** @enum {unknown} */
-                    code?: "quota-exceeded";
+                    code?: "quota-exceeded" | "rate-limited" | "too-many-at-once";
                 };
             };
         };
@@ -24184,6 +24263,20 @@ export interface components {
                 "application/problem+json": components["schemas"]["Problem"] & {
                     /** @enum {unknown} */
                     code?: "body-too-large";
+                };
+            };
+        };
+        /** @description Too many calls in a short time (rate-limited). Too many calls at once (too-many-at-once). */
+        "rate-limited.too-many-at-once": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                "Retry-After": components["headers"]["Retry-After"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "rate-limited" | "too-many-at-once";
                 };
             };
         };
@@ -24239,6 +24332,20 @@ export interface components {
                 };
             };
         };
+        /** @description Too many calls in a short time (rate-limited). */
+        "rate-limited": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                "Retry-After": components["headers"]["Retry-After"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "rate-limited";
+                };
+            };
+        };
     };
     parameters: never;
     requestBodies: never;
@@ -24249,6 +24356,10 @@ export interface components {
         ETag: string;
         /** @description Path of what was made. */
         Location: string;
+        /** @description What is left of each limit of calls: r calls within t seconds. */
+        RateLimit: string;
+        /** @description Each limit of calls: q calls in w seconds. */
+        "RateLimit-Policy": string;
         /** @description Points that the call cost. */
         "Points-Charged": number;
         /** @description Points that are left to the key in this period. */
@@ -24425,6 +24536,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -24432,7 +24545,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -24440,7 +24554,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -24477,6 +24591,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -24484,7 +24600,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -24492,7 +24609,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -24529,6 +24646,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -24536,7 +24655,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -24544,7 +24664,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -24584,6 +24704,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -24638,7 +24760,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -24646,7 +24769,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -24687,6 +24810,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -24705,7 +24831,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -24713,6 +24840,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -24756,6 +24884,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -24763,7 +24893,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -24771,7 +24902,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -24812,6 +24943,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -24819,7 +24952,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -24827,7 +24961,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -24868,6 +25002,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -24875,7 +25011,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -24883,7 +25020,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -24927,6 +25064,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -24981,7 +25120,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -24989,7 +25129,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -25034,6 +25174,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -25052,7 +25195,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -25060,6 +25204,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -25103,6 +25248,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -25110,7 +25257,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -25118,7 +25266,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -25155,6 +25303,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -25162,7 +25312,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -25170,7 +25321,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -25207,6 +25358,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -25214,7 +25367,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -25222,7 +25376,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -25259,6 +25413,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -25266,7 +25422,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -25274,7 +25431,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -25318,6 +25475,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -25372,7 +25531,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -25380,7 +25540,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -25425,6 +25585,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -25443,7 +25606,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -25451,6 +25615,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -25495,6 +25660,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -25502,7 +25669,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -25510,7 +25678,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -25548,6 +25716,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -25555,7 +25725,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -25563,7 +25734,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -25601,6 +25772,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -25608,7 +25781,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -25616,7 +25790,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -25654,6 +25828,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -25661,7 +25837,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -25669,7 +25846,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -25714,6 +25891,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -25768,7 +25947,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -25776,7 +25956,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -25822,6 +26002,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -25840,7 +26023,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -25848,6 +26032,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -25892,6 +26077,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -25899,7 +26086,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -25907,7 +26095,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -25945,6 +26133,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -25952,7 +26142,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -25960,7 +26151,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -25998,6 +26189,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -26005,7 +26198,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -26013,7 +26207,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -26051,6 +26245,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -26058,7 +26254,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -26066,7 +26263,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -26111,6 +26308,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -26165,7 +26364,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -26173,7 +26373,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -26219,6 +26419,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -26237,7 +26440,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -26245,6 +26449,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -26290,6 +26495,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -26297,7 +26504,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -26305,7 +26513,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -26344,6 +26552,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -26351,7 +26561,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -26359,7 +26570,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -26398,6 +26609,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -26405,7 +26618,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -26413,7 +26627,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -26452,6 +26666,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -26459,7 +26675,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -26467,7 +26684,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -26513,6 +26730,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -26567,7 +26786,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -26575,7 +26795,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -26622,6 +26842,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -26640,7 +26863,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -26648,6 +26872,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -26693,6 +26918,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -26700,7 +26927,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -26708,7 +26936,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -26748,6 +26976,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -26755,7 +26985,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -26763,7 +26994,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -26802,6 +27033,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -26809,7 +27042,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -26817,7 +27051,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -26856,6 +27090,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -26863,7 +27099,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -26871,7 +27108,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -26917,6 +27154,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -26971,7 +27210,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -26979,7 +27219,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -27026,6 +27266,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -27044,7 +27287,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -27052,6 +27296,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -27098,6 +27343,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -27105,7 +27352,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -27113,7 +27361,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -27154,6 +27402,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -27161,7 +27411,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -27169,7 +27420,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -27209,6 +27460,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -27216,7 +27469,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -27224,7 +27478,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -27264,6 +27518,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -27271,7 +27527,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -27279,7 +27536,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -27326,6 +27583,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -27380,7 +27639,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -27388,7 +27648,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -27436,6 +27696,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -27454,7 +27717,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -27462,6 +27726,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -27511,6 +27776,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -27518,7 +27785,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -27526,7 +27794,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -27569,6 +27837,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -27576,7 +27846,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -27584,7 +27855,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -27627,6 +27898,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -27634,7 +27907,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -27642,7 +27916,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -27685,6 +27959,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -27692,7 +27968,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -27700,7 +27977,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -27750,6 +28027,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -27804,7 +28083,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -27812,7 +28092,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -27863,6 +28143,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -27881,7 +28164,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -27889,6 +28173,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -27935,6 +28220,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -27942,7 +28229,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -27950,7 +28238,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -27991,6 +28279,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -27998,7 +28288,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -28006,7 +28297,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -28047,6 +28338,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -28054,7 +28347,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -28062,7 +28356,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -28103,6 +28397,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -28110,7 +28406,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -28118,7 +28415,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -28165,6 +28462,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -28219,7 +28518,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -28227,7 +28527,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -28275,6 +28575,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -28293,7 +28596,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -28301,6 +28605,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -28346,6 +28651,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -28353,7 +28660,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -28361,7 +28669,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -28401,6 +28709,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -28408,7 +28718,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -28416,7 +28727,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -28456,6 +28767,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -28463,7 +28776,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -28471,7 +28785,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -28511,6 +28825,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -28518,7 +28834,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -28526,7 +28843,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -28572,6 +28889,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -28626,7 +28945,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -28634,7 +28954,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -28681,6 +29001,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -28699,7 +29022,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -28707,6 +29031,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -28761,6 +29086,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -28768,7 +29095,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -28776,7 +29104,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -28824,6 +29152,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -28831,7 +29161,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -28839,7 +29170,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -28887,6 +29218,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -28894,7 +29227,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -28902,7 +29236,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -28950,6 +29284,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -28957,7 +29293,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -28965,7 +29302,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -29020,6 +29357,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -29074,7 +29413,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -29082,7 +29422,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -29138,6 +29478,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -29156,7 +29499,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -29164,6 +29508,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -29212,6 +29557,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -29219,7 +29566,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -29227,7 +29575,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -29270,6 +29618,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -29277,7 +29627,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -29285,7 +29636,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -29328,6 +29679,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -29335,7 +29688,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -29343,7 +29697,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -29386,6 +29740,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -29393,7 +29749,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -29401,7 +29758,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -29450,6 +29807,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -29504,7 +29863,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -29512,7 +29872,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -29562,6 +29922,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -29580,7 +29943,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -29588,6 +29952,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -29640,6 +30005,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -29647,7 +30014,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -29655,7 +30023,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -29701,6 +30069,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -29708,7 +30078,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -29716,7 +30087,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -29762,6 +30133,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -29769,7 +30142,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -29777,7 +30151,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -29823,6 +30197,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -29830,7 +30206,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -29838,7 +30215,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -29891,6 +30268,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -29945,7 +30324,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -29953,7 +30333,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -30007,6 +30387,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -30025,7 +30408,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -30033,6 +30417,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -30081,6 +30466,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -30088,7 +30475,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -30096,7 +30484,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -30140,6 +30528,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -30147,7 +30537,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -30155,7 +30546,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -30198,6 +30589,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -30205,7 +30598,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -30213,7 +30607,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -30256,6 +30650,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -30263,7 +30659,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -30271,7 +30668,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -30320,6 +30717,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -30374,7 +30773,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -30382,7 +30782,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -30432,6 +30832,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -30450,7 +30853,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -30458,6 +30862,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -30526,6 +30931,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -30533,7 +30940,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -30541,7 +30949,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -30603,6 +31011,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -30610,7 +31020,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -30618,7 +31029,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -30680,6 +31091,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -30687,7 +31100,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -30695,7 +31109,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -30757,6 +31171,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -30764,7 +31180,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -30772,7 +31189,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -30841,6 +31258,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -30895,7 +31314,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -30903,7 +31323,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -30973,6 +31393,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -30991,7 +31414,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -30999,6 +31423,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -31046,6 +31471,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -31053,7 +31480,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -31061,7 +31489,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -31103,6 +31531,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -31110,7 +31540,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -31118,7 +31549,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -31160,6 +31591,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -31167,7 +31600,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -31175,7 +31609,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -31217,6 +31651,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -31224,7 +31660,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -31232,7 +31669,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -31280,6 +31717,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -31334,7 +31773,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -31342,7 +31782,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -31391,6 +31831,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -31409,7 +31852,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -31417,6 +31861,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -31462,6 +31907,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -31469,7 +31916,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -31477,7 +31925,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -31519,6 +31967,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -31526,7 +31976,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -31534,7 +31985,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -31574,6 +32025,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -31581,7 +32034,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -31589,7 +32043,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -31631,6 +32085,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -31638,7 +32094,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -31646,7 +32103,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -31692,6 +32149,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -31746,7 +32205,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -31754,7 +32214,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -31801,6 +32261,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -31819,7 +32282,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -31827,6 +32291,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -31871,6 +32336,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -31878,7 +32345,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -31886,7 +32354,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -31927,6 +32395,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -31934,7 +32404,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -31942,7 +32413,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -31981,6 +32452,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -31988,7 +32461,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -31996,7 +32470,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -32037,6 +32511,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -32044,7 +32520,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -32052,7 +32529,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -32097,6 +32574,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -32151,7 +32630,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -32159,7 +32639,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -32205,6 +32685,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -32223,7 +32706,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -32231,6 +32715,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -32276,6 +32761,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -32283,7 +32770,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -32291,7 +32779,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -32333,6 +32821,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -32340,7 +32830,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -32348,7 +32839,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -32388,6 +32879,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -32395,7 +32888,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -32403,7 +32897,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -32445,6 +32939,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -32452,7 +32948,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -32460,7 +32957,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -32506,6 +33003,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -32560,7 +33059,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -32568,7 +33068,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -32615,6 +33115,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -32633,7 +33136,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -32641,6 +33145,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -32685,6 +33190,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -32692,7 +33199,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -32700,7 +33208,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -32741,6 +33249,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -32748,7 +33258,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -32756,7 +33267,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -32795,6 +33306,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -32802,7 +33315,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -32810,7 +33324,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -32851,6 +33365,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -32858,7 +33374,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -32866,7 +33383,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -32911,6 +33428,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -32965,7 +33484,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -32973,7 +33493,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -33019,6 +33539,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -33037,7 +33560,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -33045,6 +33569,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -33099,6 +33624,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -33106,7 +33633,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -33114,7 +33642,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -33162,6 +33690,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -33169,7 +33699,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -33177,7 +33708,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -33225,6 +33756,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -33232,7 +33765,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -33240,7 +33774,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -33288,6 +33822,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -33295,7 +33831,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -33303,7 +33840,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -33358,6 +33895,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -33412,7 +33951,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -33420,7 +33960,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -33476,6 +34016,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -33494,7 +34037,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -33502,6 +34046,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -33551,6 +34096,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -33558,7 +34105,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -33566,7 +34114,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -33610,6 +34158,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -33617,7 +34167,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -33625,7 +34176,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -33667,6 +34218,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -33674,7 +34227,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -33682,7 +34236,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -33726,6 +34280,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -33733,7 +34289,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -33741,7 +34298,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -33790,6 +34347,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -33844,7 +34403,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -33852,7 +34412,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -33903,6 +34463,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -33921,7 +34484,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -33929,6 +34493,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -33983,6 +34548,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -33990,7 +34557,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -33998,7 +34566,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -34044,6 +34612,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -34051,7 +34621,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -34059,7 +34630,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -34105,6 +34676,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -34112,7 +34685,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -34120,7 +34694,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -34175,6 +34749,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -34229,7 +34805,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -34237,7 +34814,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -34293,6 +34870,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -34311,7 +34891,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -34319,6 +34900,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -34377,6 +34959,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -34384,7 +34968,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -34392,7 +34977,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -34441,6 +35026,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -34448,7 +35035,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -34456,7 +35044,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -34505,6 +35093,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -34512,7 +35102,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -34520,7 +35111,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -34579,6 +35170,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -34633,7 +35226,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -34641,7 +35235,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -34701,6 +35295,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -34719,7 +35316,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -34727,6 +35325,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -34780,6 +35379,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -34787,7 +35388,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -34795,7 +35397,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -34840,6 +35442,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -34847,7 +35451,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -34855,7 +35460,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -34900,6 +35505,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -34907,7 +35514,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -34915,7 +35523,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -34969,6 +35577,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -35023,7 +35633,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -35031,7 +35642,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -35086,6 +35697,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -35104,7 +35718,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -35112,6 +35727,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -35163,6 +35779,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -35170,7 +35788,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -35178,7 +35797,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -35221,6 +35840,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -35228,7 +35849,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -35236,7 +35858,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -35279,6 +35901,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -35286,7 +35910,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -35294,7 +35919,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -35346,6 +35971,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -35400,7 +36027,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -35408,7 +36036,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -35461,6 +36089,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -35479,7 +36110,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -35487,6 +36119,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -35537,6 +36170,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -35544,7 +36179,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -35552,7 +36188,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -35594,6 +36230,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -35601,7 +36239,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -35609,7 +36248,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -35651,6 +36290,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -35658,7 +36299,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -35666,7 +36308,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -35717,6 +36359,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -35771,7 +36415,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -35779,7 +36424,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -35831,6 +36476,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -35849,7 +36497,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -35857,6 +36506,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -35909,6 +36559,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -35916,7 +36568,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -35924,7 +36577,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -35967,6 +36620,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -35974,7 +36629,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -35982,7 +36638,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -36025,6 +36681,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -36032,7 +36690,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -36040,7 +36699,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -36093,6 +36752,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -36147,7 +36808,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -36155,7 +36817,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -36209,6 +36871,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -36227,7 +36892,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -36235,6 +36901,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -36278,6 +36945,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -36285,7 +36954,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -36293,7 +36963,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -36330,6 +37000,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -36337,7 +37009,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -36345,7 +37018,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -36382,6 +37055,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -36389,7 +37064,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -36397,7 +37073,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -36434,6 +37110,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -36441,7 +37119,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -36449,7 +37128,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -36493,6 +37172,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -36547,7 +37228,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -36555,7 +37237,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -36600,6 +37282,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -36618,7 +37303,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -36626,6 +37312,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -36669,6 +37356,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -36676,7 +37365,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -36684,7 +37374,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -36721,6 +37411,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -36728,7 +37420,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -36736,7 +37429,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -36773,6 +37466,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -36780,7 +37475,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -36788,7 +37484,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -36825,6 +37521,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -36832,7 +37530,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -36840,7 +37539,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -36884,6 +37583,8 @@ export interface operations {
                     ETag: components["headers"]["ETag"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -36938,7 +37639,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -36946,7 +37648,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
-            429: components["responses"]["quota-exceeded"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["solve-too-slow.unavailable"];
@@ -36991,6 +37693,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -37009,7 +37714,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -37017,6 +37723,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -37047,6 +37754,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -37063,12 +37773,14 @@ export interface operations {
                 content?: never;
             };
             400: components["responses"]["malformed-request"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -37106,6 +37818,9 @@ export interface operations {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
                     Location: components["headers"]["Location"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -37113,7 +37828,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -37122,6 +37838,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -37153,6 +37870,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -37160,7 +37880,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["malformed-csv.malformed-request"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
@@ -37169,6 +37890,7 @@ export interface operations {
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -37194,6 +37916,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -37210,13 +37935,15 @@ export interface operations {
                 content?: never;
             };
             400: components["responses"]["malformed-request"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             404: components["responses"]["not-found"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -37262,6 +37989,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -37269,7 +37999,8 @@ export interface operations {
                 };
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             404: components["responses"]["not-found"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
@@ -37280,6 +38011,7 @@ export interface operations {
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-input.invalid-parameter"];
             428: components["responses"]["precondition-required"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -37304,18 +38036,23 @@ export interface operations {
             204: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content?: never;
             };
             400: components["responses"]["malformed-request"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             404: components["responses"]["not-found"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -37328,7 +38065,7 @@ export interface operations {
                 from?: string;
                 /** @description Last UTC day, included; today unless given. */
                 to?: string;
-                /** @description One or more of day, key and case, with commas between. */
+                /** @description One or more of day, key, case and environment, with commas between. */
                 groupBy?: string;
             };
             header?: never;
@@ -37342,6 +38079,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -37358,12 +38098,14 @@ export interface operations {
                 content?: never;
             };
             400: components["responses"]["malformed-request"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
@@ -37389,6 +38131,9 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
                     [name: string]: unknown;
                 };
                 content: {
@@ -37405,13 +38150,96 @@ export interface operations {
                 content?: never;
             };
             400: components["responses"]["malformed-request"];
-            401: components["responses"]["key-missing.key-unknown"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
             404: components["responses"]["not-found"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
             417: components["responses"]["expectation-failed"];
             422: components["responses"]["invalid-parameter"];
+            429: components["responses"]["rate-limited.too-many-at-once"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
+        };
+    };
+    readKeyFormat: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The answer. */
+            200: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["KeyFormat"];
+                };
+            };
+            /** @description The answer has not changed: its tag is among those of If-None-Match. */
+            304: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            400: components["responses"]["malformed-request"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
+        };
+    };
+    reportLeakedKey: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /** @description At most 16 kB, counted after decompression. */
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "key": "soak_trial_0123456789ABCDEFGHIJKLMNOPQRSTUV1ggZdL"
+                 *     }
+                 */
+                "application/json": components["schemas"]["LeakedKey"];
+            };
+        };
+        responses: {
+            /** @description Done. */
+            204: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            413: components["responses"]["body-too-large"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["rate-limited"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];

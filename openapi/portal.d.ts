@@ -94,10 +94,50 @@ export interface paths {
         get: operations["listKeys"];
         put?: never;
         /**
-         * Make a trial key
+         * Make a key
          * @description The secret is in this answer alone and is kept nowhere.
          */
         post: operations["createKey"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/portal/v1/keys/{keyId}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        /**
+         * Change the settings of a key
+         * @description All settings at once; what is left out is as in a new key. They count from the next call of the key.
+         */
+        put: operations["changeKey"];
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/portal/v1/keys/{keyId}/rotate": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Give a key another secret
+         * @description The new secret is in this answer alone. The old one goes on for the hours stated, or ends at once; one that still overlapped from a rotation before ends in any case. Settings, quota and usage stay those of the key.
+         */
+        post: operations["rotateKey"];
         delete?: never;
         options?: never;
         head?: never;
@@ -3851,7 +3891,7 @@ export interface components {
              * @description What clients match.
              * @enum {string}
              */
-            code: "malformed-request" | "malformed-json" | "malformed-csv" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "too-many-materials" | "precondition-failed" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "invalid-parameter" | "precondition-required" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
+            code: "malformed-request" | "malformed-json" | "malformed-csv" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "key-expired" | "sign-in-needed" | "sign-in-refused" | "plan-needed" | "address-refused" | "origin-refused" | "scope-missing" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "key-revoked" | "too-many-keys" | "too-many-materials" | "precondition-failed" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "invalid-parameter" | "precondition-required" | "rate-limited" | "too-many-at-once" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
             title: string;
             status: number;
             detail: string;
@@ -3922,11 +3962,16 @@ export interface components {
             /** @description Environment and the first six characters; more of a key is never shown again. */
             prefix: string;
             /** @enum {string} */
-            environment: "trial";
+            environment: "trial" | "metered";
             /** @description Points a period of this key alone, or null. */
             quota: number | null;
+            /** @description Calls a minute of this key alone, or null. */
+            rate: number | null;
             /** @description Points used in this period. */
             used: number;
+            scopes: ("solve" | "jobs" | "files" | "materials:read" | "materials:write" | "usage:read" | "requests:read" | "webhooks")[];
+            addresses: string[];
+            origins: string[];
             /**
              * Format: date-time
              * @description An instant in UTC, RFC 3339.
@@ -3942,7 +3987,31 @@ export interface components {
              * Format: date-time
              * @description An instant in UTC, RFC 3339.
              */
+            expiresAt: string | null;
+            /**
+             * Format: date-time
+             * @description An instant in UTC, RFC 3339.
+             */
             revokedAt: string | null;
+            /**
+             * @description asked: by a member; leaked: it was reported as found in public.
+             * @enum {string|null}
+             */
+            revokedFor: "asked" | "leaked" | null;
+            /** @description The secret before the last rotation, while it still works. */
+            oldSecret: {
+                prefix: string;
+                /**
+                 * Format: date-time
+                 * @description An instant in UTC, RFC 3339.
+                 */
+                endsAt: string;
+                /**
+                 * Format: date-time
+                 * @description An instant in UTC, RFC 3339.
+                 */
+                lastUsedAt: string | null;
+            } | null;
         };
         AccountStatus: {
             /** @description Points of the period. */
@@ -3954,6 +4023,18 @@ export interface components {
              * @description An instant in UTC, RFC 3339.
              */
             resetsAt: string;
+            /** @description The same of metered keys, where there is a plan. */
+            metered: {
+                /** @description Points of the period. */
+                limit: number;
+                /** @description Points used in the period. */
+                used: number;
+                /**
+                 * Format: date-time
+                 * @description An instant in UTC, RFC 3339.
+                 */
+                resetsAt: string;
+            } | null;
         };
         CreatedKey: {
             key: components["schemas"]["Key"];
@@ -3962,8 +4043,53 @@ export interface components {
         NewKey: {
             /** @description Name: 1 to 80 characters. */
             name: string;
-            /** @description Points a period for this key alone. */
-            quota?: number;
+            /** @description Points a period for this key alone, within those of the account. */
+            quota?: number | null;
+            /** @description Calls a minute for this key alone, within those of the account. */
+            rate?: number | null;
+            /** @description What the key may do; all unless given. solve: Ask questions of cases. jobs: Start, follow and cancel jobs. files: Keep files for jobs. materials:read: Read the catalogue of materials and those of the account. materials:write: Keep, change and delete materials of the account. usage:read: Read what the account has used. requests:read: Read calls that the account has made. webhooks: Keep, change and delete webhooks. */
+            scopes?: ("solve" | "jobs" | "files" | "materials:read" | "materials:write" | "usage:read" | "requests:read" | "webhooks")[];
+            /**
+             * Format: date-time
+             * @description From when the key is refused; never unless given.
+             */
+            expiresAt?: string | null;
+            /** @description Addresses and networks (IPv4, IPv6) from which the key may be used; from anywhere where there is none. */
+            addresses?: string[];
+            /** @description Origins of pages whose browsers may send the key; no page where there is none. Whoever opens such a page can read the key. */
+            origins?: string[];
+            /**
+             * @description trial: points of the day, never invoiced. metered: points of the month, of the plan.
+             * @default trial
+             * @enum {string}
+             */
+            environment: "trial" | "metered";
+        };
+        ChangedKey: {
+            key: components["schemas"]["Key"];
+        };
+        KeySettings: {
+            /** @description Name: 1 to 80 characters. */
+            name: string;
+            /** @description Points a period for this key alone, within those of the account. */
+            quota?: number | null;
+            /** @description Calls a minute for this key alone, within those of the account. */
+            rate?: number | null;
+            /** @description What the key may do; all unless given. solve: Ask questions of cases. jobs: Start, follow and cancel jobs. files: Keep files for jobs. materials:read: Read the catalogue of materials and those of the account. materials:write: Keep, change and delete materials of the account. usage:read: Read what the account has used. requests:read: Read calls that the account has made. webhooks: Keep, change and delete webhooks. */
+            scopes?: ("solve" | "jobs" | "files" | "materials:read" | "materials:write" | "usage:read" | "requests:read" | "webhooks")[];
+            /**
+             * Format: date-time
+             * @description From when the key is refused; never unless given.
+             */
+            expiresAt?: string | null;
+            /** @description Addresses and networks (IPv4, IPv6) from which the key may be used; from anywhere where there is none. */
+            addresses?: string[];
+            /** @description Origins of pages whose browsers may send the key; no page where there is none. Whoever opens such a page can read the key. */
+            origins?: string[];
+        };
+        KeyRotation: {
+            /** @description Hours for which the old secret goes on beside the new one; 0 ends it at once. */
+            overlapHours: number;
         };
         RevokedKey: {
             key: components["schemas"]["Key"];
@@ -4077,7 +4203,7 @@ export interface components {
              * @description An instant in UTC, RFC 3339.
              */
             asOf: string;
-            groupBy: ("day" | "key" | "case")[];
+            groupBy: ("day" | "key" | "case" | "environment")[];
             account: components["schemas"]["AccountStatus"];
             rows: {
                 /**
@@ -4088,6 +4214,8 @@ export interface components {
                 keyId?: string | null;
                 keyName?: string | null;
                 case?: string | null;
+                /** @enum {string|null} */
+                environment?: "trial" | "metered" | null;
                 calls: number;
                 points: number;
                 /** @description Calls that were refused or failed; they cost nothing. */
@@ -4129,7 +4257,7 @@ export interface components {
              * @description Code of the problem answered.
              * @enum {string|null}
              */
-            problem: "malformed-request" | "malformed-json" | "malformed-csv" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "sign-in-needed" | "sign-in-refused" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "too-many-keys" | "too-many-materials" | "precondition-failed" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "invalid-parameter" | "precondition-required" | "rate-limited" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable" | null;
+            problem: "malformed-request" | "malformed-json" | "malformed-csv" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "key-expired" | "sign-in-needed" | "sign-in-refused" | "plan-needed" | "address-refused" | "origin-refused" | "scope-missing" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "key-revoked" | "too-many-keys" | "too-many-materials" | "precondition-failed" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "invalid-parameter" | "precondition-required" | "rate-limited" | "too-many-at-once" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable" | null;
         };
         Request: {
             id: string;
@@ -23406,6 +23534,19 @@ export interface components {
                 };
             };
         };
+        /** @description A plan is needed (plan-needed). */
+        "plan-needed": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "plan-needed";
+                };
+            };
+        };
         /** @description The call comes from another site (cross-site). Not allowed in this role (forbidden). */
         "cross-site.forbidden": {
             headers: {
@@ -23442,6 +23583,19 @@ export interface components {
                 "application/problem+json": components["schemas"]["Problem"] & {
                     /** @enum {unknown} */
                     code?: "not-found";
+                };
+            };
+        };
+        /** @description The key is revoked (key-revoked). */
+        "key-revoked": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "key-revoked";
                 };
             };
         };
@@ -23534,6 +23688,10 @@ export interface components {
         ETag: string;
         /** @description Path of what was made. */
         Location: string;
+        /** @description What is left of each limit of calls: r calls within t seconds. */
+        RateLimit: string;
+        /** @description Each limit of calls: q calls in w seconds. */
+        "RateLimit-Policy": string;
         /** @description Points that the call cost. */
         "Points-Charged": number;
         /** @description Points that are left to the key in this period. */
@@ -23771,7 +23929,19 @@ export interface operations {
                 /**
                  * @example {
                  *       "name": "Nightly run",
-                 *       "quota": 20000
+                 *       "quota": 20000,
+                 *       "rate": 600,
+                 *       "scopes": [
+                 *         "solve",
+                 *         "usage:read"
+                 *       ],
+                 *       "expiresAt": "2099-12-31T23:00:00Z",
+                 *       "addresses": [
+                 *         "203.0.113.0/24",
+                 *         "2001:db8::/32"
+                 *       ],
+                 *       "origins": [],
+                 *       "environment": "trial"
                  *     }
                  */
                 "application/json": components["schemas"]["NewKey"];
@@ -23791,11 +23961,124 @@ export interface operations {
             };
             400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
             401: components["responses"]["sign-in-needed"];
+            402: components["responses"]["plan-needed"];
             403: components["responses"]["cross-site.forbidden"];
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
             409: components["responses"]["too-many-keys"];
+            413: components["responses"]["body-too-large"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
+        };
+    };
+    changeKey: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                /** @example key_019283746570700080000123456789ab */
+                keyId: string;
+            };
+            cookie?: never;
+        };
+        /** @description At most 16 kB, counted after decompression. */
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "name": "Nightly run",
+                 *       "quota": 20000,
+                 *       "rate": 600,
+                 *       "scopes": [
+                 *         "solve",
+                 *         "usage:read"
+                 *       ],
+                 *       "expiresAt": "2099-12-31T23:00:00Z",
+                 *       "addresses": [
+                 *         "203.0.113.0/24",
+                 *         "2001:db8::/32"
+                 *       ],
+                 *       "origins": []
+                 *     }
+                 */
+                "application/json": components["schemas"]["KeySettings"];
+            };
+        };
+        responses: {
+            /** @description The answer. */
+            200: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["ChangedKey"];
+                };
+            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            401: components["responses"]["sign-in-needed"];
+            403: components["responses"]["cross-site.forbidden"];
+            404: components["responses"]["not-found"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            409: components["responses"]["key-revoked"];
+            413: components["responses"]["body-too-large"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["unavailable"];
+        };
+    };
+    rotateKey: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                /** @example key_019283746570700080000123456789ab */
+                keyId: string;
+            };
+            cookie?: never;
+        };
+        /** @description At most 16 kB, counted after decompression. */
+        requestBody: {
+            content: {
+                /**
+                 * @example {
+                 *       "overlapHours": 48
+                 *     }
+                 */
+                "application/json": components["schemas"]["KeyRotation"];
+            };
+        };
+        responses: {
+            /** @description The answer. */
+            200: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    ETag: components["headers"]["ETag"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": components["schemas"]["CreatedKey"];
+                };
+            };
+            400: components["responses"]["duplicate-name.malformed-json.malformed-request.too-deep.too-many-parts"];
+            401: components["responses"]["sign-in-needed"];
+            403: components["responses"]["cross-site.forbidden"];
+            404: components["responses"]["not-found"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            409: components["responses"]["key-revoked"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
@@ -24193,7 +24476,7 @@ export interface operations {
                 from?: string;
                 /** @description Last UTC day, included; today unless given. */
                 to?: string;
-                /** @description One or more of day, key and case, with commas between. */
+                /** @description One or more of day, key, case and environment, with commas between. */
                 groupBy?: string;
             };
             header?: never;

@@ -41,6 +41,7 @@ function withKey(c: Case, o: CaseOperation) {
     summary: `${c.title}: ${o.title.toLowerCase()}`,
     description: `${o.summary}\n\n${c.summary}${notesOf(c, o)}\n\nPrice: ${o.price(c)}.`,
     access: 'key',
+    scope: 'solve',
     metered: !free,
     body: bodyOf(c, o, BODY_LIMIT),
     status: 200,

@@ -16,10 +16,9 @@ export async function solveMetered(task: SolveTask, caller: KeyCaller, call: Rec
   const { accountId, keyId } = caller
   const charge = { requestId, accountId, keyId, caseId: task.case, points }
   const pay = isSmall(task.call) ? solveThenPay : payThenSolve
-  const { answer, remaining } = await pay(task, charge, call, deps)
+  const answer = await pay(task, charge, call, deps)
   call.points = points
-  const headers = { 'Points-Charged': String(points), 'Points-Remaining': String(remaining) }
-  return { ...answer, headers }
+  return { ...answer, headers: { 'Points-Charged': String(points) } }
 }
 
 const isSmall = ({ size, points }: Call) => Math.max(size, points) <= SMALL
@@ -30,17 +29,18 @@ type Charge = Parameters<Deps['meter']['spend']>[0]
 async function solveThenPay(task: SolveTask, charge: Charge, call: RecordedCall, { compute, meter }: Deps) {
   const answer = await compute.solve(task)
   refuseGone(call)
-  return { answer, ...(await meter.spend(charge)) }
+  call.limits = (await meter.spend(charge)).headers
+  return answer
 }
 
 /* A long solve is paid before; its charge stays open until the answer is there, and an open one is not lost. */
 async function payThenSolve(task: SolveTask, charge: Charge, call: RecordedCall, { compute, meter }: Deps) {
   refuseGone(call)
-  const spent = await meter.spend({ ...charge, open: true })
+  call.limits = (await meter.spend({ ...charge, open: true })).headers
   try {
     const answer = await compute.solve(task)
     await meter.close(charge.requestId)
-    return { answer, ...spent }
+    return answer
   } catch (error) {
     await meter.refund(charge.requestId)
     throw error

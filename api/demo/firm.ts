@@ -5,7 +5,7 @@ import { newId } from '../ids.ts'
 const fixed = (kind: Parameters<typeof newId>[0], number: number) =>
   newId(kind, { msecs: Date.UTC(2026, 0, 1), random: new Uint8Array(16).fill(number) })
 
-export const account = { id: fixed('acct', 1), name: 'Ninefold Envelope Workshop' }
+export const account = { id: fixed('acct', 1), name: 'Ninefold Envelope Workshop', meteredLimit: 2_000_000 }
 
 export const members: readonly { id: string; role: Role; name: string; mail: string }[] = [
   { id: fixed('prsn', 1), role: 'owner', name: 'Oda Fennimar', mail: 'owner@ninefold.example' },

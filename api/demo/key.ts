@@ -1,5 +1,6 @@
 import { createDatabase } from '../database.ts'
-import { createKey, listKeys, revokeKey } from '../keys/queries.ts'
+import { revokeKey } from '../keys/change-key.ts'
+import { createKey, selectKeys } from '../keys/queries.ts'
 import { withDemo } from './from-environment.ts'
 import { demoOwner } from './seed-demo.ts'
 
@@ -9,7 +10,7 @@ const KEPT = 5
 
 const secret = await withDemo(async (_, pool) => {
   const db = createDatabase(pool)
-  const made = (await listKeys(db, demoOwner())).filter((key) => key.name === NAME && key.revokedAt === null)
+  const made = (await selectKeys(db, demoOwner())).filter((key) => key.name === NAME && key.revokedAt === null)
   for (const old of made.slice(KEPT - 1)) await revokeKey(db, demoOwner(), old.id)
   return (await createKey(db, demoOwner(), { name: NAME })).secret
 })

@@ -1,8 +1,10 @@
 import { eq, sql } from 'drizzle-orm'
 import type pg from 'pg'
-import { accounts, keys as keyTable, memberships, people, staff } from '../../drizzle/schema.ts'
+import { accounts, keys as keyTable, memberships, people, secrets as secretTable, staff } from '../../drizzle/schema.ts'
 import type { Database } from '../database.ts'
-import { hashKey, newKey, prefixOf } from '../keys/key.ts'
+import { hashKey, newKey } from '../keys/key.ts'
+import { secretRow } from '../keys/queries.ts'
+import { allScopes } from '../permissions.ts'
 import { chargeAll } from '../metering/charge.ts'
 import { durably } from '../metering/transaction.ts'
 import { insertLog } from '../requests/log.ts'
@@ -38,11 +40,23 @@ export async function layOutFirm(db: Database, secrets: DemoSecrets): Promise<vo
     const secret = id === givenKey.id ? secrets.key : newKey('trial')
     const createdAt = sql`now() - interval '${sql.raw(String(DAYS + 1))} days'`
     const maker = members[by]?.id ?? ''
-    const shown = { id, name, quota, accountId: account.id, environment: 'trial' as const, createdBy: maker, createdAt }
-    await db
+    const shown = {
+      id,
+      name,
+      quota,
+      accountId: account.id,
+      environment: 'trial' as const,
+      createdBy: maker,
+      createdAt,
+      scopes: allScopes,
+    }
+    const row = secretRow(id, secret)
+    const laid = await db
       .insert(keyTable)
-      .values({ ...shown, hash: hashKey(secret), prefix: prefixOf(secret) })
+      .values({ ...shown, prefix: row.prefix })
       .onConflictDoNothing()
+      .returning({ id: keyTable.id })
+    if (laid.length > 0) await db.insert(secretTable).values(row)
   }
 }
 
@@ -51,7 +65,8 @@ export async function keyWorks(db: Database, key: string): Promise<boolean> {
   const rows = await db
     .select({ revokedAt: keyTable.revokedAt, accountId: keyTable.accountId })
     .from(keyTable)
-    .where(eq(keyTable.hash, hashKey(key)))
+    .innerJoin(secretTable, eq(secretTable.keyId, keyTable.id))
+    .where(eq(secretTable.hash, hashKey(key)))
   return rows.some((row) => row.revokedAt === null && row.accountId === account.id)
 }
 

@@ -8,7 +8,7 @@ import { render } from './render.ts'
 export function sendReply(o: Operation, res: Response, reply: Reply): void {
   res.status(o.status)
   if (o.access !== 'public' || o.session) res.set('Cache-Control', 'no-store')
-  if (reply.headers) res.set(reply.headers)
+  res.set({ ...res.locals.call.limits, ...reply.headers })
   if (!o.answer) {
     res.end()
     return
@@ -22,7 +22,7 @@ export function sendReply(o: Operation, res: Response, reply: Reply): void {
 export function sendProblem(req: Request, res: Response, problem: Problem, publicUrl: string): object {
   const details = readable(problemDetails(problem, publicUrl, res.locals.call.requestId))
   res.set('Cache-Control', 'no-store')
-  if (problem.extras.headers) res.set(problem.extras.headers)
+  res.set({ ...res.locals.call.limits, ...problem.extras.headers })
   if (problem.status === 503 && !res.get('Retry-After')) res.set('Retry-After', '2')
   if (req.headers['content-length'] !== undefined && !req.complete) res.set('Connection', 'close')
   res.status(problem.status).type('application/problem+json; charset=utf-8').send(JSON.stringify(details))

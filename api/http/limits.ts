@@ -13,6 +13,7 @@ export const defaultLimits: Limits = {
   'sign-up': { windowSeconds: 3600, limit: 20 },
   'sign-in': { windowSeconds: 900, limit: 30 },
   'staff-sign-in': { windowSeconds: 900, limit: 20 },
+  'leak-report': { windowSeconds: 900, limit: 100 },
   try: { windowSeconds: 60, limit: 300 },
   mail: { windowSeconds: 900, limit: 50 },
 }

@@ -2,6 +2,7 @@ import express, { type RequestHandler, type Router } from 'express'
 import type { Deps } from '../deps.ts'
 import { type Operation, usesSession } from '../operation.ts'
 import { Problem } from '../problems.ts'
+import { answerPreflight } from './cors.ts'
 import { createLimiter } from './limits.ts'
 import { refuseCrossSite } from './origin.ts'
 import { run } from './run.ts'
@@ -44,6 +45,7 @@ function otherMethods(own: readonly Operation[]): RequestHandler {
       throw new Problem('method-not-allowed', `${req.method.slice(0, 20)} is not among: ${Allow}.`, {
         headers: { Allow },
       })
+    answerPreflight(req, res, Allow)
     res.set('Allow', Allow).status(204).end()
   }
 }

@@ -7,7 +7,9 @@ import { INLINE_BYTES } from '../compute/compute.ts'
 import type { Body, Caller, CallRecord, Context, Operation, OwnMaterials, Upload } from '../operation.ts'
 import { Problem, invalidInput, invalidParameter } from '../problems.ts'
 import { sendReply } from './answer.ts'
-import { authenticate } from './authenticate.ts'
+import { authenticateKey } from '../keys/authenticate.ts'
+import { authenticate, authorizeKey } from './authenticate.ts'
+import { problemOf } from './errors.ts'
 import { ownMaterialsIn } from '../materials/own-materials.ts'
 import { readBody } from './body.ts'
 import { decode, parseJson } from './json.ts'
@@ -15,24 +17,61 @@ import { handleOf } from './session.ts'
 
 /** One operation as a handler: authenticate, authorise, validate, do, answer. Whatever is refused is thrown. */
 export function run(o: Operation, deps: Deps): RequestHandler {
+  const answer = o.access === 'key' ? answerKey : answerOther
   return async (req, res) => {
     const call: CallRecord = res.locals.call
     if (o.caseId) call.caseId = o.caseId
     call.operation = o.caseOperation ?? o.id
     if (!req.accepts('application/json')) throw new Problem('not-acceptable')
-    const caller = await authenticate(o, req, deps)
-    note(call, caller)
-    const ifMatch = ifMatchOf(o, req)
-    const input = await inputOf(o, req, res, deps, caller)
-    const session = handleOf(req)
-    sendReply(o, res, await o.handle({ ...input, ...ifMatch, caller, call, session, deps }))
+    await answer(o, req, res, deps)
   }
 }
 
-function note(call: CallRecord, caller: Caller): void {
-  if (caller.kind !== 'key') return
-  call.accountId = caller.accountId
-  call.keyId = caller.keyId
+async function answerOther(o: Operation, req: Request, res: Response, deps: Deps): Promise<void> {
+  const caller = await authenticate(o as Parameters<typeof authenticate>[0], req, deps)
+  await answerCaller(o, caller, req, res, deps)
+}
+
+/** Every call of a key counts against its limits, once: with its charge, or alone where it costs or gets nothing. */
+async function answerKey(o: Operation, req: Request, res: Response, deps: Deps): Promise<void> {
+  const call: CallRecord = res.locals.call
+  const found = await authenticateKey(deps.findKey, req)
+  const { accountId, keyId, secretId } = found
+  Object.assign(call, { accountId, keyId, secretId })
+  const leave = deps.crowd.enter(keyId)
+  const count = async () => {
+    call.limits = (await deps.meter.spend({ requestId: call.requestId, accountId, keyId, points: 0 })).headers
+  }
+  try {
+    const caller = authorizeKey(o, found, req, res, deps)
+    await answerCaller(o, caller, req, res, deps, o.metered ? undefined : count)
+  } catch (error) {
+    if (!call.limits && isRefusal(error)) await count()
+    throw error
+  } finally {
+    leave()
+  }
+}
+
+/* What the meter refused consumes nothing. */
+function isRefusal(error: unknown): boolean {
+  const { status, code } = problemOf(error)
+  return status < 500 && code !== 'rate-limited' && code !== 'quota-exceeded'
+}
+
+async function answerCaller(
+  o: Operation,
+  caller: Caller,
+  req: Request,
+  res: Response,
+  deps: Deps,
+  count?: () => Promise<void>,
+): Promise<void> {
+  const ifMatch = ifMatchOf(o, req)
+  const input = await inputOf(o, req, res, deps, caller)
+  await count?.()
+  const { call } = res.locals
+  sendReply(o, res, await o.handle({ ...input, ...ifMatch, caller, call, session: handleOf(req), deps }))
 }
 
 type Input = Pick<Context<unknown, unknown, unknown, 'public'>, 'params' | 'query' | 'body'>

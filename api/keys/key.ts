@@ -1,11 +1,14 @@
 import { createHash } from 'node:crypto'
 import { crc32 } from 'node:zlib'
 import { customAlphabet } from 'nanoid'
+import { environments } from '../../drizzle/schema.ts'
 
 const digits = '0123456789ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz'
 const LENGTH = 32
-const form = /^soak_(trial|metered)_([0-9A-Za-z]{32})([0-9A-Za-z]{6})$/
-export type Environment = 'trial'
+/** What a key looks like, for scanners; the last six characters are the checksum of the 32 before them. */
+export const KEY_PATTERN = 'soak_(trial|metered)_([0-9A-Za-z]{32})([0-9A-Za-z]{6})'
+const form = new RegExp(`^${KEY_PATTERN}$`)
+export type Environment = (typeof environments)[number]
 
 /** Base62 of the CRC-32, so that scanners and the gate can tell a misspelt key without looking it up. */
 export function checksum(random: string): string {

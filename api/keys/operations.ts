@@ -2,90 +2,109 @@ import { z } from 'zod'
 import { idField } from '../ids.ts'
 import { jsonBody, operation } from '../operation.ts'
 import { Problem } from '../problems.ts'
-import { instantSchema, storedText } from '../texts.ts'
 import { accountStatus } from '../usage/account-status.ts'
 import { statusSchema } from '../usage/schemas.ts'
-import { createKey, listKeys, revokeKey } from './queries.ts'
+import { changeKey, revokeKey, rotateKey } from './change-key.ts'
+import { createKey, selectKeys } from './queries.ts'
+import { keySchema, keySettingsSchema, newKeySchema, rotationSchema, shownSecretSchema } from './schemas.ts'
 
-const count = z.number().int()
-const keySchema = z
-  .strictObject({
-    id: z.string(),
-    name: z.string(),
-    prefix: z
-      .string()
-      .meta({ description: 'Environment and the first six characters; more of a key is never shown again.' }),
-    environment: z.literal('trial'),
-    quota: count.nullable().meta({ description: 'Points a period of this key alone, or null.' }),
-    used: count.meta({ description: 'Points used in this period.' }),
-    createdAt: instantSchema,
-    createdBy: z.string(),
-    lastUsedAt: instantSchema.nullable(),
-    revokedAt: instantSchema.nullable(),
-  })
-  .meta({ id: 'Key' })
+const about = { document: 'portal', tag: 'Keys', access: 'session' } as const
+const params = z.strictObject({ keyId: idField('key') })
+const exampleId = { params: { keyId: 'key_019283746570700080000123456789ab' } }
+const example = {
+  name: 'Nightly run',
+  quota: 20_000,
+  rate: 600,
+  scopes: ['solve', 'usage:read'],
+  expiresAt: '2099-12-31T23:00:00Z',
+  addresses: ['203.0.113.0/24', '2001:db8::/32'],
+  origins: [],
+}
 
 const list = operation({
+  ...about,
   id: 'listKeys',
-  document: 'portal',
   method: 'get',
   path: '/portal/v1/keys',
-  tag: 'Keys',
   summary: 'List keys',
   description: 'All keys of the account for its owner, own keys for an integrator.',
-  access: 'session',
   permission: 'keys:read',
   status: 200,
   answer: z.strictObject({ keys: z.array(keySchema), account: statusSchema }).meta({ id: 'KeyList' }),
   async handle({ caller, deps }) {
-    const [keys, account] = await Promise.all([listKeys(deps.db, caller), accountStatus(deps.pool, caller.accountId)])
+    const [keys, account] = await Promise.all([selectKeys(deps.db, caller), accountStatus(deps.pool, caller.accountId)])
     return { body: { keys, account } }
   },
 })
 
 const create = operation({
+  ...about,
   id: 'createKey',
-  document: 'portal',
   method: 'post',
   path: '/portal/v1/keys',
-  tag: 'Keys',
-  summary: 'Make a trial key',
+  summary: 'Make a key',
   description: 'The secret is in this answer alone and is kept nowhere.',
-  access: 'session',
   permission: 'keys:create',
-  body: jsonBody(
-    z
-      .strictObject({
-        name: storedText('Name', 80),
-        quota: count.min(0).max(1_000_000_000).optional().meta({
-          title: 'Own quota',
-          description: 'Points a period for this key alone.',
-          'x-accepted': 'a whole number from 0 to 1000000000',
-        }),
-      })
-      .meta({ id: 'NewKey' }),
-  ),
+  body: jsonBody(newKeySchema),
   status: 201,
-  answer: z.strictObject({ key: keySchema, secret: z.string() }).meta({ id: 'CreatedKey' }),
-  problems: ['too-many-keys'],
-  example: { body: { name: 'Nightly run', quota: 20_000 } },
+  answer: shownSecretSchema,
+  problems: ['plan-needed', 'too-many-keys'],
+  example: { body: { ...example, environment: 'trial' } },
   handle: async ({ body, caller, deps }) => ({ body: await createKey(deps.db, caller, body) }),
 })
 
+const change = operation({
+  ...about,
+  id: 'changeKey',
+  method: 'put',
+  path: '/portal/v1/keys/{keyId}',
+  summary: 'Change the settings of a key',
+  description: 'All settings at once; what is left out is as in a new key. They count from the next call of the key.',
+  permission: 'keys:change',
+  params,
+  body: jsonBody(keySettingsSchema),
+  status: 200,
+  answer: z.strictObject({ key: keySchema }).meta({ id: 'ChangedKey' }),
+  problems: ['key-revoked'],
+  example: { ...exampleId, body: example },
+  handle: async ({ params, body, caller, deps }) => ({
+    body: { key: await changeKey(deps.db, caller, params.keyId, body) },
+  }),
+})
+
+const rotate = operation({
+  ...about,
+  id: 'rotateKey',
+  method: 'post',
+  path: '/portal/v1/keys/{keyId}/rotate',
+  summary: 'Give a key another secret',
+  description:
+    'The new secret is in this answer alone. The old one goes on for the hours stated, or ends at once; one that still overlapped from a ' +
+    'rotation before ends in any case. Settings, quota and usage stay those of the key.',
+  permission: 'keys:change',
+  params,
+  body: jsonBody(rotationSchema),
+  status: 200,
+  answer: shownSecretSchema,
+  problems: ['key-revoked'],
+  example: { ...exampleId, body: { overlapHours: 48 } },
+  handle: async ({ params, body, caller, deps }) => ({
+    body: await rotateKey(deps.db, caller, params.keyId, body.overlapHours),
+  }),
+})
+
 const revoke = operation({
+  ...about,
   id: 'revokeKey',
-  document: 'portal',
   method: 'post',
   path: '/portal/v1/keys/{keyId}/revoke',
-  tag: 'Keys',
   summary: 'Revoke a key',
   description: 'Takes effect with the next call of the key, in every process. It cannot be undone.',
-  access: 'session',
   permission: 'keys:revoke',
-  params: z.strictObject({ keyId: idField('key') }),
+  params,
   status: 200,
   answer: z.strictObject({ key: keySchema }).meta({ id: 'RevokedKey' }),
-  example: { params: { keyId: 'key_019283746570700080000123456789ab' } },
+  example: exampleId,
   async handle({ params, caller, deps }) {
     const key = await revokeKey(deps.db, caller, params.keyId)
     if (!key) throw new Problem('not-found', 'There is no such key among those you may revoke.')
@@ -93,4 +112,4 @@ const revoke = operation({
   },
 })
 
-export const keyOperations = [list, create, revoke]
+export const keyOperations = [list, create, change, rotate, revoke]

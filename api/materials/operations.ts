@@ -21,6 +21,8 @@ import {
 
 const about = { tag: 'Materials' } as const
 const byKey = { document: 'openapi', access: 'key' } as const
+const keyReads = { ...byKey, scope: 'materials:read' } as const
+const keyWrites = { ...byKey, scope: 'materials:write' } as const
 const byMember = { document: 'portal', access: 'session' } as const
 const nothing = () =>
   new Problem('not-found', 'There is no such material among those of the catalogue and the account.')
@@ -177,12 +179,12 @@ const writes = { ...byMember, permission: 'materials:write' } as const
 
 /* The import comes first of the paths below the list, since "import" is no id. */
 export const materialOperations = [
-  operation({ ...list, ...byKey, id: 'listMaterials', path: keyPath, handle: handleList }),
-  operation({ ...create, ...byKey, id: 'createMaterial', path: keyPath, handle: handleCreate }),
-  operation({ ...importAll, ...byKey, id: 'importMaterials', path: `${keyPath}/import`, handle: handleImport }),
-  operation({ ...read, ...byKey, id: 'readMaterial', path: oneAt(keyPath), handle: handleRead }),
-  operation({ ...replace, ...byKey, id: 'replaceMaterial', path: oneAt(keyPath), handle: handleReplace }),
-  operation({ ...remove, ...byKey, id: 'deleteMaterial', path: oneAt(keyPath), handle: handleRemove }),
+  operation({ ...list, ...keyReads, id: 'listMaterials', path: keyPath, handle: handleList }),
+  operation({ ...create, ...keyWrites, id: 'createMaterial', path: keyPath, handle: handleCreate }),
+  operation({ ...importAll, ...keyWrites, id: 'importMaterials', path: `${keyPath}/import`, handle: handleImport }),
+  operation({ ...read, ...keyReads, id: 'readMaterial', path: oneAt(keyPath), handle: handleRead }),
+  operation({ ...replace, ...keyWrites, id: 'replaceMaterial', path: oneAt(keyPath), handle: handleReplace }),
+  operation({ ...remove, ...keyWrites, id: 'deleteMaterial', path: oneAt(keyPath), handle: handleRemove }),
 ]
 
 const catalogue = operation({

@@ -1,8 +1,11 @@
+import type { Environment } from '../keys/key.ts'
+
 export interface Charge {
   requestId: string
   accountId: string
   keyId: string
-  caseId: string
+  caseId?: string
+  /** 0 for a call that only counts as one. */
   points: number
   /** Charged before the work: refunded unless it is closed when the answer is there. */
   open?: boolean
@@ -10,38 +13,78 @@ export interface Charge {
   at?: Date
 }
 
-/** A locked pair of counters: the account's and one of its keys'. */
+/** What is used of a limit; an absent limit has no end. */
+export interface Tally {
+  limit: number
+  used: number
+}
+
+/** The locked counters of a key and its account: points of the period, and calls of the minute. */
 export interface Counters {
   accountId: string
   keyId: string
-  limit: number
-  used: number
-  keyLimit: number | null
-  keyUsed: number
+  environment: Environment
+  points: { account: Tally; key: Tally }
+  calls: { account: Tally; key: Tally }
 }
 
-export type Decision =
-  { granted: true; remaining: number } | { granted: false; level: 'account' | 'key'; limit: number; remaining: number }
+export type Level = 'account' | 'key'
 
-/** Grants charges in the order they came, each only if account and key both allow; a refusal consumes nothing. */
+/** Where a call leaves its key and account. */
+export interface Standing {
+  /** Points that are left to the key. */
+  points: number
+  /** Calls of the minute: the limit, and what is left. The key's only where it has a limit of its own. */
+  calls: Partial<Record<Level, { limit: number; left: number }>>
+}
+
+export type Decision = { standing: Standing } & (
+  { granted: true } | { granted: false; of: 'points' | 'calls'; level: Level; limit: number; left: number }
+)
+
+const levels = ['account', 'key'] as const
+const left = ({ limit, used }: Tally) => Math.max(0, limit - used)
+
+/** Grants charges in the order they came, each only if every limit allows; a refusal consumes nothing. */
 export function grant(charges: readonly Charge[], counters: readonly Counters[]): Decision[] {
-  const accounts = new Map(counters.map((c) => [c.accountId, { limit: c.limit, used: c.used }]))
-  const keys = new Map(counters.map((c) => [c.keyId, { limit: c.keyLimit ?? Infinity, used: c.keyUsed }]))
-  return charges.map(({ accountId, keyId, points }) => {
-    const account = accounts.get(accountId)
-    const key = keys.get(keyId)
-    if (!account || !key) throw new Error(`no counters for ${keyId}`)
-    if (account.used + points > account.limit)
-      return {
-        granted: false,
-        level: 'account',
-        limit: account.limit,
-        remaining: Math.max(0, account.limit - account.used),
+  const byKey = new Map(shared(counters).map((c) => [c.keyId, c]))
+  return charges.map(({ keyId, points }) => {
+    const c = byKey.get(keyId)
+    if (!c) throw new Error(`no counters for ${keyId}`)
+    const wanted = { calls: 1, points }
+    for (const of of ['calls', 'points'] as const)
+      for (const level of levels) {
+        const tally = c[of][level]
+        if (wanted[of] === 0 || tally.used + wanted[of] <= tally.limit) continue
+        return { granted: false, of, level, limit: tally.limit, left: left(tally), standing: standingOf(c) }
       }
-    if (key.used + points > key.limit)
-      return { granted: false, level: 'key', limit: key.limit, remaining: Math.max(0, key.limit - key.used) }
-    account.used += points
-    key.used += points
-    return { granted: true, remaining: Math.min(account.limit - account.used, key.limit - key.used) }
+    for (const level of levels) {
+      c.calls[level].used += 1
+      c.points[level].used += points
+    }
+    return { granted: true, standing: standingOf(c) }
   })
+}
+
+/* The keys of an account share its counters: its calls all of them, its points those of one environment. */
+function shared(counters: readonly Counters[]): Counters[] {
+  const tallies = new Map<string, Tally>()
+  const one = (name: string, tally: Tally) => {
+    const known = tallies.get(name) ?? { ...tally }
+    tallies.set(name, known)
+    return known
+  }
+  return counters.map((c) => ({
+    ...c,
+    points: { account: one(`${c.accountId} ${c.environment}`, c.points.account), key: { ...c.points.key } },
+    calls: { account: one(c.accountId, c.calls.account), key: { ...c.calls.key } },
+  }))
+}
+
+function standingOf({ points, calls }: Counters): Standing {
+  const limited = levels.filter((level) => calls[level].limit !== Infinity)
+  return {
+    points: Math.min(left(points.account), left(points.key)),
+    calls: Object.fromEntries(limited.map((level) => [level, { limit: calls[level].limit, left: left(calls[level]) }])),
+  }
 }

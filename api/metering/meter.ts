@@ -5,6 +5,7 @@ import { Problem } from '../problems.ts'
 import { type Charged, chargeAll } from './charge.ts'
 import { gather } from '../gather.ts'
 import type { Charge } from './grant.ts'
+import { limitHeaders, secondsUntil } from './limit-headers.ts'
 import { closeCharges, refundCharge } from './refund.ts'
 import { durably, UnknownOutcome } from './transaction.ts'
 
@@ -13,8 +14,8 @@ const AT_ONCE = 2
 const MOST = 500
 
 export interface Meter {
-  /** Spends before the answer leaves; throws the problem of a refusal. */
-  spend(charge: Charge): Promise<{ remaining: number }>
+  /** Spends and counts the call before its answer leaves, and gives the headers of its limits; throws a refusal. */
+  spend(charge: Charge): Promise<{ headers: Record<string, string> }>
   /** Lets an open charge stand, now that its answer is there; throws where it was refunded meanwhile. */
   close(requestId: string): Promise<void>
   /** Counters the charge of a call that failed after it. */
@@ -27,21 +28,16 @@ export function createMeter(pool: pg.Pool, log: Logger): Meter {
   const charge = gather((charges: Charge[]) => chargeGathered(pool, charges), { atOnce: AT_ONCE, most: MOST })
   const closeOne = gather((ids: string[]) => closeGathered(pool, ids), { atOnce: 1, most: MOST })
 
-  async function spend(one: Charge): Promise<{ remaining: number }> {
+  async function spend(one: Charge): Promise<{ headers: Record<string, string> }> {
     const outcome = await charge(one)
     if ('error' in outcome) {
       if (outcome.error instanceof UnknownOutcome)
         log.warn({ requestId: one.requestId }, 'a charge has an unknown outcome')
       throw outcome.error
     }
-    const { decision, resetsAt } = outcome.charged
-    if (decision.granted) return { remaining: decision.remaining }
-    const whose = decision.level === 'key' ? 'the key' : 'the account'
-    throw new Problem(
-      'quota-exceeded',
-      `The call needs ${one.points} points; ${whose} has ${decision.remaining} of ${decision.limit} left in this period.`,
-      { resetsAt: resetsAt.toISOString(), headers: { 'Points-Remaining': String(decision.remaining) } },
-    )
+    const { charged } = outcome
+    if (!charged.decision.granted) throw refusalOf(one.points, charged)
+    return { headers: limitHeaders(charged) }
   }
 
   async function close(requestId: string): Promise<void> {
@@ -54,6 +50,27 @@ export function createMeter(pool: pg.Pool, log: Logger): Meter {
   }
 
   return { spend, close, refund }
+}
+
+/** Clients that were refused together should not come back together. */
+const SPREAD = 3
+
+function refusalOf(points: number, charged: Charged): Problem {
+  const { decision, resetsAt, minuteEnds, now } = charged
+  if (decision.granted) throw new Error('what was granted is no refusal')
+  const { of, level, limit, left } = decision
+  const headers = limitHeaders(charged)
+  if (of === 'calls') {
+    const wait = secondsUntil(minuteEnds, now) + Math.floor(Math.random() * SPREAD)
+    return new Problem('rate-limited', `The ${level} may make ${limit} calls a minute.`, {
+      headers: { ...headers, 'Retry-After': String(wait) },
+    })
+  }
+  return new Problem(
+    'quota-exceeded',
+    `The call needs ${points} points; the ${level} has ${left} of ${limit} left in this period.`,
+    { resetsAt: resetsAt.toISOString(), headers },
+  )
 }
 
 /* One transaction for all. Where it fails for one call's sake the others must not fail with it: call by call then. */

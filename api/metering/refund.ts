@@ -7,10 +7,10 @@ const DAY = 86_400_000
 const lockForRefund = {
   name: 'lock-for-refund',
   text: `
-    SELECT l.period::text AS period FROM ledger l
-    JOIN key_periods kp ON kp.key_id = l.key_id AND kp.period = l.period
-    JOIN periods p ON p.account_id = l.account_id AND p.environment = l.environment AND p.period = l.period
-    WHERE l.request_id = $1 AND l.kind = 'charge' AND l.period = ANY($2::date[])
+    SELECT l.day::text AS day FROM ledger l
+    JOIN key_periods kp ON kp.key_id = l.key_id AND kp.period = period_of(l.environment, l.day)
+    JOIN periods p ON p.account_id = l.account_id AND p.environment = l.environment AND p.period = kp.period
+    WHERE l.request_id = $1 AND l.kind = 'charge' AND l.day = ANY($2::date[])
     FOR UPDATE OF p, kp`,
 }
 
@@ -18,28 +18,29 @@ const giveBack = {
   name: 'give-back',
   text: `
     WITH refund AS (
-      INSERT INTO ledger (period, request_id, kind, account_id, key_id, environment, case_id, points)
-      SELECT period, request_id, 'refund', account_id, key_id, environment, case_id, -points
-      FROM ledger WHERE period = $2 AND request_id = $1 AND kind = 'charge'
+      INSERT INTO ledger (day, request_id, kind, account_id, key_id, environment, case_id, points)
+      SELECT day, request_id, 'refund', account_id, key_id, environment, case_id, -points
+      FROM ledger WHERE day = $2 AND request_id = $1 AND kind = 'charge'
       ON CONFLICT DO NOTHING
       RETURNING *),
     by_key AS (UPDATE key_periods kp SET used = kp.used + r.points
-               FROM refund r WHERE kp.key_id = r.key_id AND kp.period = r.period)
+               FROM refund r WHERE kp.key_id = r.key_id AND kp.period = period_of(r.environment, r.day))
     UPDATE periods p SET used = p.used + r.points
-    FROM refund r WHERE p.account_id = r.account_id AND p.environment = r.environment AND p.period = r.period`,
+    FROM refund r WHERE p.account_id = r.account_id AND p.environment = r.environment
+      AND p.period = period_of(r.environment, r.day)`,
 }
 
 /** Counters a charge in its own period, once however often asked. True where it did something. */
 export async function refundCharge(client: pg.ClientBase, requestId: string): Promise<boolean> {
   await closeCharges(client, [requestId])
-  const { rows } = await client.query({ ...lockForRefund, values: [requestId, periodsOf(requestId)] })
+  const { rows } = await client.query({ ...lockForRefund, values: [requestId, daysOf(requestId)] })
   if (rows.length === 0) return false
-  const result = await client.query({ ...giveBack, values: [requestId, rows[0].period] })
+  const result = await client.query({ ...giveBack, values: [requestId, rows[0].day] })
   return result.rowCount === 1
 }
 
 /* A charge's day is the database's, which the clock of a process may miss by a little. */
-function periodsOf(requestId: string): string[] {
+function daysOf(requestId: string): string[] {
   const at = instantOf(requestId)
   if (!at) throw new Error(`${requestId} is no request id`)
   return [-DAY, 0, DAY].map((shift) => new Date(at.getTime() + shift).toISOString().slice(0, 10))

@@ -14,9 +14,9 @@ const leftOpen = `SELECT request_id AS id FROM open_charges WHERE at < now() - i
  */
 const loggedWithoutPoints = `
   SELECT g.id FROM log g CROSS JOIN generate_series(-1, 1) AS near(days)
-  JOIN ledger l ON l.period = (g.at AT TIME ZONE 'UTC')::date + near.days AND l.request_id = g.id AND l.kind = 'charge'
+  JOIN ledger l ON l.day = (g.at AT TIME ZONE 'UTC')::date + near.days AND l.request_id = g.id AND l.kind = 'charge'
   WHERE g.status >= 499 AND g.points = 0 AND g.at > now() - interval '3 days'
-    AND NOT EXISTS (SELECT FROM ledger r WHERE r.period = l.period AND r.request_id = l.request_id AND r.kind = 'refund')
+    AND NOT EXISTS (SELECT FROM ledger r WHERE r.day = l.day AND r.request_id = l.request_id AND r.kind = 'refund')
   LIMIT 500`
 
 /** Refunds the charges of calls that were not answered; gives their number. Any process may run it at any time. */

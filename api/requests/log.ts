@@ -10,6 +10,7 @@ export interface LogEntry {
   id: string
   accountId?: string
   keyId?: string
+  secretId?: string
   method: string
   path: string
   caseId?: string
@@ -49,19 +50,26 @@ const insert = {
 const touchKeys = {
   name: 'touch-keys',
   text: `
-    UPDATE keys k SET last_used_at = e.at
-    FROM (SELECT key_id, max(at) AS at FROM unnest($1::text[], $2::timestamptz[]) u(key_id, at) GROUP BY key_id) e
+    WITH used AS MATERIALIZED (SELECT * FROM unnest($1::text[], $2::text[], $3::timestamptz[]) u(key_id, secret_id, at)),
+    of_secrets AS (
+      UPDATE secrets s SET last_used_at = e.at FROM (SELECT secret_id, max(at) AS at FROM used GROUP BY secret_id) e
+      WHERE s.id = e.secret_id AND (s.last_used_at IS NULL OR s.last_used_at < e.at - interval '5 seconds'))
+    UPDATE keys k SET last_used_at = e.at FROM (SELECT key_id, max(at) AS at FROM used GROUP BY key_id) e
     WHERE k.id = e.key_id AND (k.last_used_at IS NULL OR k.last_used_at < e.at - interval '5 seconds')`,
 }
 
-/** Writes log rows, and when each key was last used. */
+/** Writes log rows, and when each key and secret was last used. */
 export async function insertLog(db: pg.Pool | pg.ClientBase, entries: readonly LogEntry[]): Promise<void> {
   const columns = [...names, ...more].map((name) =>
     entries.map((e) => (name === 'problem' ? (e.problem ? JSON.stringify(e.problem) : null) : (e[name] ?? null))),
   )
   await db.query({ ...insert, values: [...columns, SOLVER_VERSION] })
   const used = entries.filter((e) => e.keyId)
-  if (used.length > 0) await db.query({ ...touchKeys, values: [used.map((e) => e.keyId), used.map((e) => e.at)] })
+  if (used.length > 0)
+    await db.query({
+      ...touchKeys,
+      values: [used.map((e) => e.keyId), used.map((e) => e.secretId ?? null), used.map((e) => e.at)],
+    })
 }
 
 /** Rows that wait for the database; more than these are counted and dropped rather than kept in memory. */

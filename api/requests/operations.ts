@@ -27,6 +27,7 @@ export const keyRequest = operation({
   document: 'openapi',
   path: '/v1/requests/{requestId}',
   access: 'key',
+  scope: 'requests:read',
   handle,
 })
 

@@ -105,7 +105,7 @@ export async function readRequest(pool: pg.Pool, id: string, accountId?: string)
 async function entriesOf(pool: pg.Pool, id: string, at: Date) {
   const { rows } = await pool.query<{ kind: 'charge' | 'refund'; points: string; at: Date }>(
     `SELECT kind, points, at FROM ledger
-     WHERE request_id = $1 AND period BETWEEN ($2 AT TIME ZONE 'UTC')::date - 1 AND ($2 AT TIME ZONE 'UTC')::date + 1
+     WHERE request_id = $1 AND day BETWEEN ($2 AT TIME ZONE 'UTC')::date - 1 AND ($2 AT TIME ZONE 'UTC')::date + 1
      ORDER BY kind`,
     [id, at],
   )
@@ -115,7 +115,7 @@ async function entriesOf(pool: pg.Pool, id: string, at: Date) {
 /** The newest calls of keys with this prefix, for staff. */
 export async function requestsOfPrefix(pool: pg.Pool, prefix: string) {
   const { rows } = await pool.query<LogRow>(
-    `SELECT ${entry} FROM ${joined} WHERE g.key_id IN (SELECT id FROM keys WHERE prefix = $1)
+    `SELECT ${entry} FROM ${joined} WHERE g.key_id IN (SELECT key_id FROM secrets WHERE prefix = $1)
      ORDER BY g.at DESC, g.id DESC LIMIT ${PAGE}`,
     [prefix],
   )

@@ -3,19 +3,26 @@ import type pg from 'pg'
 const query = {
   name: 'account-status',
   text: `
-    SELECT coalesce(p."limit", a.trial_limit) AS "limit", coalesce(p.used, 0) AS used,
-      ((d.day + 1)::timestamp AT TIME ZONE 'UTC') AS resets_at
+    SELECT e.environment, coalesce(p."limit", e."limit") AS "limit", coalesce(p.used, 0) AS used,
+      period_end(e.environment, d.day) AS resets_at
     FROM accounts a CROSS JOIN (SELECT (now() AT TIME ZONE 'UTC')::date AS day) d
-    LEFT JOIN periods p ON p.account_id = a.id AND p.environment = 'trial' AND p.period = d.day
+    CROSS JOIN LATERAL (VALUES ('trial', a.trial_limit), ('metered', a.metered_limit)) AS e(environment, "limit")
+    LEFT JOIN periods p ON p.account_id = a.id AND p.environment = e.environment
+      AND p.period = period_of(e.environment, d.day)
     WHERE a.id = $1`,
 }
 
-/** Where the account stands in this period. */
+/** Where the account stands in this period of its trial, and in that of its plan where it has one. */
 export async function accountStatus(pool: pg.Pool, accountId: string) {
   const { rows } = await pool.query({ ...query, values: [accountId] })
-  return {
-    limit: Number(rows[0].limit),
-    used: Number(rows[0].used),
-    resetsAt: (rows[0].resets_at as Date).toISOString(),
+  const of = (environment: string) => {
+    const row = rows.find((one) => one.environment === environment)
+    return {
+      limit: Number(row.limit),
+      used: Number(row.used),
+      resetsAt: (row.resets_at as Date).toISOString(),
+    }
   }
+  const metered = of('metered')
+  return { ...of('trial'), metered: metered.limit > 0 || metered.used > 0 ? metered : null }
 }

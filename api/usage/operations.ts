@@ -27,6 +27,7 @@ export const keyUsage = operation({
   document: 'openapi',
   path: '/v1/usage',
   access: 'key',
+  scope: 'usage:read',
   handle,
 })
 

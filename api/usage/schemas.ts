@@ -1,17 +1,26 @@
 import { z } from 'zod'
+import { environments } from '../../drizzle/schema.ts'
 import { dayField, instantSchema } from '../texts.ts'
 
 const count = z.number().int()
 
+const standing = {
+  limit: count.meta({ description: 'Points of the period.' }),
+  used: count.meta({ description: 'Points used in the period.' }),
+  resetsAt: instantSchema,
+}
+
 export const statusSchema = z
   .strictObject({
-    limit: count.meta({ description: 'Points of the period.' }),
-    used: count.meta({ description: 'Points used in the period.' }),
-    resetsAt: instantSchema,
+    ...standing,
+    metered: z
+      .strictObject(standing)
+      .nullable()
+      .meta({ description: 'The same of metered keys, where there is a plan.' }),
   })
   .meta({ id: 'AccountStatus' })
 
-const groups = ['day', 'key', 'case'] as const
+const groups = ['day', 'key', 'case', 'environment'] as const
 export type Group = (typeof groups)[number]
 
 export const usageQuery = z.strictObject({
@@ -24,11 +33,11 @@ export const usageQuery = z.strictObject({
     .meta({ description: 'Last UTC day, included; today unless given.', 'x-accepted': 'a day such as 2026-03-31' }),
   groupBy: z
     .string()
-    .regex(/^(day|key|case)(,(day|key|case)){0,2}$/)
+    .regex(/^(day|key|case|environment)(,(day|key|case|environment)){0,3}$/)
     .default('day')
     .meta({
-      description: 'One or more of day, key and case, with commas between.',
-      'x-accepted': 'day, key, case, or several with commas between',
+      description: 'One or more of day, key, case and environment, with commas between.',
+      'x-accepted': 'day, key, case, environment, or several with commas between',
     }),
 })
 
@@ -51,6 +60,7 @@ export const usageSchema = z
         keyId: z.string().nullable().optional(),
         keyName: z.string().nullable().optional(),
         case: z.string().nullable().optional(),
+        environment: z.enum(environments).nullable().optional(),
         ...figures,
       }),
     ),

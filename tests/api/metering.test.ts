@@ -145,7 +145,7 @@ test('what fails after the charge costs nothing', async () => {
   expect(answer.json).toMatchObject({ status: 500, code: 'internal' })
   expect(answer.text).not.toContain('planted')
   const entries = await sql(
-    'SELECT kind, points::int, period = (SELECT min(period) FROM ledger WHERE key_id = $1) AS same FROM ledger WHERE key_id = $1 ORDER BY kind',
+    'SELECT kind, points::int, day = (SELECT min(day) FROM ledger WHERE key_id = $1) AS same FROM ledger WHERE key_id = $1 ORDER BY kind',
     [key.id],
   )
   expect(entries).toEqual([

@@ -12,7 +12,7 @@ afterAll(() => database.drop())
 const sql = <R extends object>(text: string, values: unknown[] = []) =>
   query<R & Record<string, unknown>>(database.url, text, values)
 
-const entry = `INSERT INTO ledger (period, request_id, kind, account_id, key_id, environment, points) VALUES ($1, $2, 'charge', 'a', 'k', 'trial', 10)`
+const entry = `INSERT INTO ledger (day, request_id, kind, account_id, key_id, environment, points) VALUES ($1, $2, 'charge', 'a', 'k', 'trial', 10)`
 const line = `INSERT INTO log (at, id, method, path, status, milliseconds, bytes_in, bytes_out, points, solver)
   VALUES ($1, $2, 'GET', '/', 200, 1, 0, 0, 0, '1')`
 const placeOf = async (table: string, id: string, column: string) =>

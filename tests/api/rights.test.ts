@@ -12,6 +12,7 @@ const promised: Record<Permission | StaffPermission, string> = {
   'session:read': 'owner integrator reader',
   'keys:read': 'owner integrator',
   'keys:create': 'owner integrator',
+  'keys:change': 'owner integrator',
   'keys:revoke': 'owner integrator',
   'materials:read': 'owner integrator reader',
   'materials:write': 'owner integrator',

@@ -10,13 +10,14 @@ const calls = `
   WHERE g.points IS DISTINCT FROM coalesce(l.points, 0)`
 
 const counters = `
-  WITH sums AS (SELECT account_id, key_id, period, sum(points) AS points FROM ledger WHERE account_id = $1
-                GROUP BY account_id, key_id, period),
+  WITH sums AS (SELECT account_id, environment, key_id, period_of(environment, day) AS period, sum(points) AS points
+                FROM ledger WHERE account_id = $1 GROUP BY account_id, environment, key_id, 4),
   keys_used AS (SELECT kp.key_id, kp.period, kp.used FROM key_periods kp JOIN keys k ON k.id = kp.key_id
                 WHERE k.account_id = $1)
   SELECT 'account' AS counter, period::text, u.used::int, s.points::int AS ledger
-  FROM (SELECT period, used FROM periods WHERE account_id = $1) u
-  FULL JOIN (SELECT period, sum(points) AS points FROM sums GROUP BY period) s USING (period)
+  FROM (SELECT environment, period, used FROM periods WHERE account_id = $1) u
+  FULL JOIN (SELECT environment, period, sum(points) AS points FROM sums GROUP BY environment, period) s
+    USING (environment, period)
   WHERE u.used IS DISTINCT FROM coalesce(s.points, 0)
   UNION ALL
   SELECT key_id, period::text, u.used::int, s.points::int FROM keys_used u FULL JOIN sums s USING (key_id, period)

@@ -22,7 +22,7 @@ export async function signUp(url: string): Promise<{ client: Client; mail: strin
 
 export async function makeKey(
   client: Client,
-  wish: { name?: string; quota?: number } = {},
+  wish: Record<string, unknown> = {},
 ): Promise<{ id: string; secret: string }> {
   const answer = await client.post('/portal/v1/keys', { name: 'Test key', ...wish })
   if (answer.status !== 201) throw new Error(`making a key answered ${answer.status}: ${answer.text}`)
