@@ -47,6 +47,10 @@ export interface CallRecord {
   points?: number
   bytesIn?: number
   problem?: object
+  /** Bytes of an answer whose length is not known before. */
+  bytesOut?: number
+  /** Done when an answer of many lines is written, or is not to be. */
+  streaming?: Promise<void>
   /** Headers of the limits that the call counted against, on its answer whatever that is. */
   limits?: Record<string, string>
 }
@@ -74,6 +78,8 @@ export interface Reply {
   /** The body as JSON text, where it was written elsewhere. */
   text?: string
   etag?: string
+  /** Lines of an answer that is written while it is made. */
+  lines?: AsyncIterable<string>
   headers?: Record<string, string>
 }
 
@@ -94,7 +100,7 @@ export interface Body<B> {
 
 /** A body that is a text of its own kind. */
 export interface Upload {
-  kind: 'text/csv'
+  kind: 'text/csv' | 'application/x-ndjson'
   limit: number
   description: string
   example: string
@@ -103,7 +109,8 @@ export interface Upload {
 export type Method = 'get' | 'post' | 'put' | 'delete'
 export type LimiterName = 'sign-up' | 'sign-in' | 'staff-sign-in' | 'try' | 'leak-report'
 
-export type Tag = 'Catalogue' | 'Cases' | 'Usage' | 'Requests' | 'Health' | 'Session' | 'Keys' | 'Materials' | 'Try'
+export type Tag =
+  'Catalogue' | 'Cases' | 'Usage' | 'Requests' | 'Health' | 'Session' | 'Keys' | 'Materials' | 'Batches' | 'Try'
 
 interface Description<P, Q, B, A extends Access> {
   id: string
@@ -131,6 +138,8 @@ interface Description<P, Q, B, A extends Access> {
   conditional?: true
   status: 200 | 201 | 204
   answer?: z.ZodType
+  /** In place of a JSON answer: what its lines are. */
+  answersLines?: string
   /** Problems of its own, beside those that follow from access, body and query. */
   problems?: readonly ProblemCode[]
   example?: { params?: Record<string, string>; body?: Record<string, unknown> }
@@ -183,6 +192,13 @@ const ofKeys: readonly ProblemCode[] = [
   'too-many-at-once',
 ]
 
+/** What a body is that cannot be read, by its kind. */
+export const malformed = {
+  'application/json': 'malformed-json',
+  'application/x-ndjson': 'malformed-json',
+  'text/csv': 'malformed-csv',
+} as const satisfies Record<string, ProblemCode>
+
 /** Every problem an operation can answer: its own, and those of its access, body, query and limits. */
 export function problemsOf(o: Operation): ProblemCode[] {
   const codes: ProblemCode[] = ['method-not-allowed', 'not-acceptable', 'internal', 'unavailable', 'malformed-request']
@@ -201,7 +217,7 @@ export function problemsOf(o: Operation): ProblemCode[] {
       'unsupported-media-type',
       'invalid-input',
     )
-  if (o.upload) codes.push('malformed-csv', 'body-too-large', 'unsupported-media-type', 'invalid-input')
+  if (o.upload) codes.push(malformed[o.upload.kind], 'body-too-large', 'unsupported-media-type', 'invalid-input')
   if (o.conditional) codes.push('precondition-required', 'precondition-failed')
   if (o.metered) codes.push('quota-exceeded', 'too-many-points', 'solve-too-slow')
   if (o.limiter) codes.push('rate-limited')

@@ -1,4 +1,5 @@
 import { accountOperations } from './accounts/operations.ts'
+import { runBatch } from './batches/operations.ts'
 import { caseOperationList, tryOperations } from './cases/operations.ts'
 import { catalogueOperations } from './catalogue/operations.ts'
 import { healthOperations } from './health/operations.ts'
@@ -14,6 +15,7 @@ import { keyUsage, memberUsage } from './usage/operations.ts'
 export const operations: readonly Operation[] = [
   ...catalogueOperations,
   ...caseOperationList,
+  runBatch,
   ...materialOperations,
   keyUsage,
   keyRequest,

@@ -7,6 +7,7 @@ import {
 import { z } from 'zod'
 import { cautions, warningCodes } from '../api/catalogue/codes.ts'
 import { caseList } from '../api/catalogue/describe.ts'
+import { LINES } from '../api/http/answer.ts'
 import { sizeText } from '../api/http/size-text.ts'
 import { type Operation, type Tag, problemsOf } from '../api/operation.ts'
 import { rolesWith } from '../api/permissions.ts'
@@ -49,6 +50,7 @@ const tags: Record<Tag, string> = {
   Session: 'Opening an account, signing in and out.',
   Keys: 'Keys of the account.',
   Materials: 'The catalogue of materials, and those that the account keeps for itself.',
+  Batches: 'Many calls in one.',
   Try: 'Questions asked of a case without a key, for the pages of the portal.',
 }
 
@@ -242,6 +244,7 @@ function success(o: Operation): RouteConfig['responses'][string] {
     description: o.status === 204 ? 'Done.' : o.status === 201 ? 'Made.' : 'The answer.',
     headers: referHeaders(...names),
     ...(o.answer ? { content: { 'application/json': { schema: o.answer } } } : {}),
+    ...(o.answersLines ? { content: { [LINES]: { schema: z.string().meta({ description: o.answersLines }) } } } : {}),
   }
 }
 

@@ -4394,6 +4394,30 @@ export interface paths {
         patch?: never;
         trace?: never;
     };
+    "/v1/batches": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /**
+         * Many calls in one
+         * @description Up to 10000 calls, one JSON object a line: {"id", "case", "operation", "input"}. operation is solve unless it is named; input is the body of that call, its detail compact unless it says full.
+         *
+         *     The answer has a line for each, in the same order: {"id", "status": 200, "points", "answer"}, or {"id", "status", "problem"} where the line was refused; the others are answered all the same. Its last line is {"summary": {"ok", "failed", "points"}}: an answer without it was cut.
+         *
+         *     All lines are read and priced before anything is charged. They may need 200000 points together and are charged once, at least 10 points; a line that is refused costs nothing, and what fails in a solver is refunded.
+         */
+        post: operations["runBatch"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
     "/v1/materials": {
         parameters: {
             query?: never;
@@ -24280,6 +24304,19 @@ export interface components {
                 };
             };
         };
+        /** @description The body is not JSON (malformed-json). The request cannot be read (malformed-request). */
+        "malformed-json.malformed-request": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "malformed-json" | "malformed-request";
+                };
+            };
+        };
         /** @description The account has too many materials (too-many-materials). */
         "too-many-materials": {
             headers: {
@@ -37727,6 +37764,54 @@ export interface operations {
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
             503: components["responses"]["unavailable"];
+        };
+    };
+    runBatch: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /** @description Calls as JSON objects, one a line. At most 4 MB, counted after decompression. */
+        requestBody: {
+            content: {
+                /**
+                 * @example {"id":"r1","case":"lumped-convection","operation":"solve","input":{"heatCapacity":627000,"area":1.8,"filmCoefficient":8,"initialTemperature":60,"ambientTemperature":20,"times":[3600,36000]}}
+                 *     {"id":"r2","case":"lumped-convection","input":{"heatCapacity":627000,"area":1.8,"filmCoefficient":8,"initialTemperature":60,"ambientTemperature":20,"times":[3600,36000],"outputs":["temperature"]}}
+                 */
+                "application/x-ndjson": string;
+            };
+        };
+        responses: {
+            /** @description The answer. */
+            200: {
+                headers: {
+                    "Request-Id": components["headers"]["Request-Id"];
+                    "Points-Charged": components["headers"]["Points-Charged"];
+                    "Points-Remaining": components["headers"]["Points-Remaining"];
+                    RateLimit: components["headers"]["RateLimit"];
+                    "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/x-ndjson": string;
+                };
+            };
+            400: components["responses"]["malformed-json.malformed-request"];
+            401: components["responses"]["key-expired.key-missing.key-unknown"];
+            403: components["responses"]["address-refused.origin-refused.scope-missing"];
+            405: components["responses"]["method-not-allowed"];
+            406: components["responses"]["not-acceptable"];
+            408: components["responses"]["request-timeout"];
+            413: components["responses"]["body-too-large.too-many-points"];
+            415: components["responses"]["unsupported-media-type"];
+            417: components["responses"]["expectation-failed"];
+            422: components["responses"]["invalid-input.invalid-parameter"];
+            429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
+            431: components["responses"]["header-too-large"];
+            500: components["responses"]["internal"];
+            503: components["responses"]["solve-too-slow.unavailable"];
         };
     };
     listMaterials: {

@@ -43,9 +43,15 @@ export async function priceBatch(batch: Batch, compute: Compute): Promise<Counts
   return sum
 }
 
+/** Milliseconds that the lines of a batch may take together; those that are not answered by then fail. */
+const LIMIT = 60_000
+
 /** Answers all lines in their order, piece by piece. */
-export function answerBatch(batch: Batch, compute: Compute): AsyncGenerator<AnsweredLines> {
-  return inOrder(chunksOf(batch), (task) => answerLines(task, compute))
+export function answerBatch(batch: Batch, compute: Compute, limit = LIMIT): AsyncGenerator<AnsweredLines> {
+  const end = performance.now() + limit
+  return inOrder(chunksOf(batch), async (task) =>
+    performance.now() < end ? answerLines(task, compute) : failedLines(task, new Problem('solve-too-slow')),
+  )
 }
 
 export function add(sum: Counts, { ok, failed, points }: Counts): void {

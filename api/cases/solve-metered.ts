@@ -47,6 +47,6 @@ async function payThenSolve(task: SolveTask, charge: Charge, call: RecordedCall,
   }
 }
 
-function refuseGone({ gone }: RecordedCall): void {
+export function refuseGone({ gone }: RecordedCall): void {
   if (gone) throw new Problem('malformed-request', 'The client hung up before the call was charged.')
 }

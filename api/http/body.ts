@@ -1,4 +1,5 @@
 import express, { type Request, type RequestHandler, type Response } from 'express'
+import { malformed } from '../operation.ts'
 import { Problem } from '../problems.ts'
 import { sizeText } from './size-text.ts'
 
@@ -11,14 +12,18 @@ function readerOf(limit: number): RequestHandler {
 }
 
 /** The bytes of a body; their number is limited after decompression. */
-export async function readBody(req: Request, res: Response, limit: number, kind = 'application/json'): Promise<Buffer> {
+export async function readBody(
+  req: Request,
+  res: Response,
+  limit: number,
+  kind: keyof typeof malformed = 'application/json',
+): Promise<Buffer> {
   refuseOtherKinds(req, kind)
   await new Promise<void>((resolve, reject) =>
     readerOf(limit)(req, res, (error?: unknown) => (error ? reject(translated(error, limit)) : resolve())),
   )
   const bytes: unknown = req.body
-  if (!Buffer.isBuffer(bytes) || bytes.length === 0)
-    throw new Problem(kind === 'application/json' ? 'malformed-json' : 'malformed-csv', 'The body is empty.')
+  if (!Buffer.isBuffer(bytes) || bytes.length === 0) throw new Problem(malformed[kind], 'The body is empty.')
   return bytes
 }
 

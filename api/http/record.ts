@@ -40,12 +40,13 @@ export function recordCalls({ log, requestLog }: Deps): RequestHandler {
         at,
         points,
         bytesIn: bytesOf(req.headers['content-length']),
-        bytesOut: sentBytes(res),
+        bytesOut: call.bytesOut ?? sentBytes(res),
       })
     }
     res.once('close', () => {
       call.gone = !res.writableFinished
-      if (res.headersSent || !call.operation) write()
+      if (call.streaming) requestLog.hold(call.streaming.then(write, write))
+      else if (res.headersSent || !call.operation) write()
       else requestLog.hold(endOf(res).then(write))
     })
     next()

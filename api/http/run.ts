@@ -4,9 +4,18 @@ import { DomainError } from '../../solvers/errors.ts'
 import { parse } from '../../solvers/statement/validate.ts'
 import type { Deps } from '../deps.ts'
 import { INLINE_BYTES } from '../compute/compute.ts'
-import type { Body, Caller, CallRecord, Context, Operation, OwnMaterials, Upload } from '../operation.ts'
+import {
+  type Body,
+  type Caller,
+  type CallRecord,
+  type Context,
+  malformed,
+  type Operation,
+  type OwnMaterials,
+  type Upload,
+} from '../operation.ts'
 import { Problem, invalidInput, invalidParameter } from '../problems.ts'
-import { sendReply } from './answer.ts'
+import { LINES, sendLines, sendReply } from './answer.ts'
 import { authenticateKey } from '../keys/authenticate.ts'
 import { authenticate, authorizeKey } from './authenticate.ts'
 import { problemOf } from './errors.ts'
@@ -22,7 +31,7 @@ export function run(o: Operation, deps: Deps): RequestHandler {
     const call: CallRecord = res.locals.call
     if (o.caseId) call.caseId = o.caseId
     call.operation = o.caseOperation ?? o.id
-    if (!req.accepts('application/json')) throw new Problem('not-acceptable')
+    if (!req.accepts(o.answersLines ? LINES : 'application/json')) throw new Problem('not-acceptable')
     await answer(o, req, res, deps)
   }
 }
@@ -71,7 +80,10 @@ async function answerCaller(
   const input = await inputOf(o, req, res, deps, caller)
   await count?.()
   const { call } = res.locals
-  sendReply(o, res, await o.handle({ ...input, ...ifMatch, caller, call, session: handleOf(req), deps }))
+  const reply = await o.handle({ ...input, ...ifMatch, caller, call, session: handleOf(req), deps })
+  if (!reply.lines) return sendReply(o, res, reply)
+  call.streaming = sendLines(o, res, reply, reply.lines)
+  await call.streaming
 }
 
 type Input = Pick<Context<unknown, unknown, unknown, 'public'>, 'params' | 'query' | 'body'>
@@ -98,7 +110,7 @@ const none: OwnMaterials = new Map()
 
 async function readText({ kind, limit }: Upload, req: Request, res: Response): Promise<string> {
   const text = decode(await readBody(req, res, limit, kind))
-  if (text === undefined) throw new Problem('malformed-csv', 'The body is not UTF-8.')
+  if (text === undefined) throw new Problem(malformed[kind], 'The body is not UTF-8.')
   return text
 }
 

@@ -18,8 +18,8 @@ export interface Meter {
   spend(charge: Charge): Promise<{ headers: Record<string, string> }>
   /** Lets an open charge stand, now that its answer is there; throws where it was refunded meanwhile. */
   close(requestId: string): Promise<void>
-  /** Counters the charge of a call that failed after it. */
-  refund(requestId: string): Promise<void>
+  /** Counters the charge of a call that failed after it; some of its points where only a part did. */
+  refund(requestId: string, points?: number): Promise<void>
 }
 
 type Outcome = { charged: Charged } | { error: unknown }
@@ -45,8 +45,8 @@ export function createMeter(pool: pg.Pool, log: Logger): Meter {
       throw new Problem('unavailable', 'The answer took so long that its charge was taken for lost and refunded.')
   }
 
-  async function refund(requestId: string): Promise<void> {
-    await durably(pool, (client) => refundCharge(client, requestId))
+  async function refund(requestId: string, points?: number): Promise<void> {
+    await durably(pool, (client) => refundCharge(client, requestId, points))
   }
 
   return { spend, close, refund }

@@ -19,7 +19,7 @@ const giveBack = {
   text: `
     WITH refund AS (
       INSERT INTO ledger (day, request_id, kind, account_id, key_id, environment, case_id, points)
-      SELECT day, request_id, 'refund', account_id, key_id, environment, case_id, -points
+      SELECT day, request_id, 'refund', account_id, key_id, environment, case_id, -coalesce($3::bigint, points)
       FROM ledger WHERE day = $2 AND request_id = $1 AND kind = 'charge'
       ON CONFLICT DO NOTHING
       RETURNING *),
@@ -30,12 +30,14 @@ const giveBack = {
       AND p.period = period_of(r.environment, r.day)`,
 }
 
-/** Counters a charge in its own period, once however often asked. True where it did something. */
-export async function refundCharge(client: pg.ClientBase, requestId: string): Promise<boolean> {
+/**
+ * Counters a charge in its own period, whole or in part, once however often asked. True where it did something.
+ */
+export async function refundCharge(client: pg.ClientBase, requestId: string, points?: number): Promise<boolean> {
   await closeCharges(client, [requestId])
   const { rows } = await client.query({ ...lockForRefund, values: [requestId, daysOf(requestId)] })
   if (rows.length === 0) return false
-  const result = await client.query({ ...giveBack, values: [requestId, rows[0].day] })
+  const result = await client.query({ ...giveBack, values: [requestId, rows[0].day, points ?? null] })
   return result.rowCount === 1
 }
 

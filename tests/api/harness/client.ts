@@ -41,7 +41,7 @@ export class Client {
       this.cookies.set(name, value)
     }
     const answered = await response.text()
-    const isJson = response.headers.get('content-type')?.includes('json')
+    const isJson = /[/+]json/.test(response.headers.get('content-type') ?? '')
     return {
       status: response.status,
       headers: response.headers,

@@ -53,5 +53,5 @@ export function answerFaults(o: Operation, answer: Answer): string[] {
       ? []
       : [`the kind is ${answer.headers.get('content-type')}`]
   if (!answer.headers.get('request-id')) faults.push('there is no Request-Id')
-  return [...faults, ...faultsAt(o.document, [...at, 'content', kind, 'schema'], answer.json)]
+  return [...faults, ...faultsAt(o.document, [...at, 'content', kind, 'schema'], answer.json ?? answer.text)]
 }
