@@ -10,7 +10,7 @@ export default defineConfig({
     globalSetup: ['tests/global-setup.ts'],
     pool: 'forks',
     maxWorkers: 2,
-    testTimeout: 60_000,
+    testTimeout: process.env['SOAKSTONE_PROOF'] === '1' ? 30 * 60_000 : 60_000,
     hookTimeout: 120_000,
     teardownTimeout: 30_000,
     sequence: { seed },
