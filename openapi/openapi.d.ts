@@ -4911,6 +4911,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         Bound: {
             absolute: number;
@@ -4923,19 +4930,21 @@ export interface components {
             fourier?: number[];
             /** @description The length L that the Biot and Fourier numbers were made with. Unit m. */
             length?: number;
-            /** @description Depth that 1 % of a surface step has reached at the last time. Unit m. */
+            /** @description Depth that 1 % of a surface step has reached at the last time; in a settled cycle, where 1 % of the amplitude of the surface is left. Unit m. */
             penetrationDepth?: number;
             /** @description Time in which the slowest part of the change falls to 1/e: L²/(z₁²a). Unit s. */
             slowestTimeConstant?: number;
-            /** @description Time after which the centre follows the slowest part alone: where its straight line crosses the start. Unit s. */
+            /** @description Where the straight line of the slowest part crosses the start, at the centre, the mid-plane or the insulated face. Unit s. */
             lagTime?: number;
             /** @description Time in which the remaining difference falls to a tenth: ln(10)·L²/(z₁²a). Unit s. */
             fValue?: number;
-            /** @description Lag factor of each place: C₁ times the first eigenfunction there. Unit 1. */
+            /** @description Lag factor of each place: what the slowest part would be there at the start, as a share of the change of that place; C₁ times the first eigenfunction. Unit 1. */
             jValue?: number[];
-            /** @description Time until which a body of the given thickness follows this case to 1 %. Unit s. */
+            /** @description Film coefficient from which a face that is held stands for one in a fluid. With a weaker film times come out early, by about 2/(Bi + 2) of them; that is 1 % here, in a half space 1 % of the step at the face at the first time. Unit W/(m2.K). */
+            filmForHeldFace?: number;
+            /** @description Time until which a body of the given thickness or length follows this case to 1 %. Unit s. */
             validUntil?: number;
-            /** @description Time from which one term of the series is right to 1 %. Unit s. */
+            /** @description Time from which the first term alone is right to 1 % of the change: of a series, or the straight line over ln t of a source. Unit s. */
             validFrom?: number;
             /** @description Rate at which the mean goes on changing where there is no steady state. Unit K/s. */
             driftRate?: number;
@@ -5095,6 +5104,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LumpedConvectionTimeToReachCompactAnswer: {
             result: {
@@ -5212,6 +5228,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LumpedConvectionExtremesCompactAnswer: {
             result: {
@@ -5420,6 +5443,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LumpedVaryingAmbientSolveCompactAnswer: {
             result: {
@@ -5545,6 +5575,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LumpedVaryingAmbientTimeToReachCompactAnswer: {
             result: {
@@ -5669,6 +5706,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LumpedVaryingAmbientExtremesCompactAnswer: {
             result: {
@@ -5904,6 +5948,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceTemperatureSolveCompactAnswer: {
             result: {
@@ -5964,6 +6015,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             surfaceTemperature: components["schemas"]["SurfaceTemperatureField"];
             depths?: components["schemas"]["DepthsField"];
@@ -6027,6 +6079,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceTemperatureTimeToReachCompactAnswer: {
             result: {
@@ -6069,6 +6128,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             surfaceTemperature: components["schemas"]["SurfaceTemperatureField"];
             depth?: components["schemas"]["DepthField"];
@@ -6134,6 +6194,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceTemperatureDepthReachedCompactAnswer: {
             result: {
@@ -6175,6 +6242,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             surfaceTemperature: components["schemas"]["SurfaceTemperatureField"];
             time: components["schemas"]["TimeField"];
@@ -6238,6 +6306,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceTemperatureExtremesCompactAnswer: {
             result: {
@@ -6281,6 +6356,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             surfaceTemperature: components["schemas"]["SurfaceTemperatureField"];
             depth?: components["schemas"]["DepthField"];
@@ -6325,6 +6401,7 @@ export interface components {
                 specificHeat?: components["schemas"]["SpecificHeatField"];
                 volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
                 diffusivity?: components["schemas"]["DiffusivityField"];
+                thickness?: components["schemas"]["ThicknessField2"];
                 initialTemperature: components["schemas"]["InitialTemperatureField"];
                 surfaceTemperature: components["schemas"]["SurfaceTemperatureField"];
                 depths?: components["schemas"]["DepthsField"];
@@ -6444,6 +6521,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceRampSolveCompactAnswer: {
             result: {
@@ -6499,6 +6583,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             rampRate: components["schemas"]["RampRateField"];
             rampDuration?: components["schemas"]["RampDurationField"];
@@ -6563,6 +6648,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceRampTimeToReachCompactAnswer: {
             result: {
@@ -6606,6 +6698,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             rampRate: components["schemas"]["RampRateField"];
             rampDuration?: components["schemas"]["RampDurationField"];
@@ -6676,6 +6769,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceRampDepthReachedCompactAnswer: {
             result: {
@@ -6718,6 +6818,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             rampRate: components["schemas"]["RampRateField"];
             rampDuration?: components["schemas"]["RampDurationField"];
@@ -6782,6 +6883,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceRampExtremesCompactAnswer: {
             result: {
@@ -6826,6 +6934,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             rampRate: components["schemas"]["RampRateField"];
             rampDuration?: components["schemas"]["RampDurationField"];
@@ -6876,6 +6985,7 @@ export interface components {
                 specificHeat?: components["schemas"]["SpecificHeatField"];
                 volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
                 diffusivity?: components["schemas"]["DiffusivityField"];
+                thickness?: components["schemas"]["ThicknessField2"];
                 initialTemperature: components["schemas"]["InitialTemperatureField"];
                 rampRate: components["schemas"]["RampRateField"];
                 rampDuration?: components["schemas"]["RampDurationField"];
@@ -6997,6 +7107,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceFluxSolveCompactAnswer: {
             result: {
@@ -7052,6 +7169,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             imposedHeatFlux: components["schemas"]["ImposedHeatFluxField"];
             pulseDuration?: components["schemas"]["PulseDurationField"];
@@ -7116,6 +7234,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceFluxTimeToReachCompactAnswer: {
             result: {
@@ -7159,6 +7284,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             imposedHeatFlux: components["schemas"]["ImposedHeatFluxField"];
             pulseDuration?: components["schemas"]["PulseDurationField"];
@@ -7229,6 +7355,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceFluxDepthReachedCompactAnswer: {
             result: {
@@ -7271,6 +7404,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             imposedHeatFlux: components["schemas"]["ImposedHeatFluxField"];
             pulseDuration?: components["schemas"]["PulseDurationField"];
@@ -7335,6 +7469,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceFluxExtremesCompactAnswer: {
             result: {
@@ -7379,6 +7520,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             imposedHeatFlux: components["schemas"]["ImposedHeatFluxField"];
             pulseDuration?: components["schemas"]["PulseDurationField"];
@@ -7429,6 +7571,7 @@ export interface components {
                 specificHeat?: components["schemas"]["SpecificHeatField"];
                 volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
                 diffusivity?: components["schemas"]["DiffusivityField"];
+                thickness?: components["schemas"]["ThicknessField2"];
                 initialTemperature: components["schemas"]["InitialTemperatureField"];
                 imposedHeatFlux: components["schemas"]["ImposedHeatFluxField"];
                 pulseDuration?: components["schemas"]["PulseDurationField"];
@@ -7556,6 +7699,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteConvectionSolveCompactAnswer: {
             result: {
@@ -7618,6 +7768,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             ambientTemperature: components["schemas"]["AmbientTemperatureField"];
             filmCoefficient: components["schemas"]["FilmCoefficientField"];
@@ -7683,6 +7834,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteConvectionTimeToReachCompactAnswer: {
             result: {
@@ -7727,6 +7885,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             ambientTemperature: components["schemas"]["AmbientTemperatureField"];
             filmCoefficient: components["schemas"]["FilmCoefficientField"];
@@ -7794,6 +7953,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteConvectionDepthReachedCompactAnswer: {
             result: {
@@ -7837,6 +8003,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             ambientTemperature: components["schemas"]["AmbientTemperatureField"];
             filmCoefficient: components["schemas"]["FilmCoefficientField"];
@@ -7902,6 +8069,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteConvectionExtremesCompactAnswer: {
             result: {
@@ -7947,6 +8121,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             ambientTemperature: components["schemas"]["AmbientTemperatureField"];
             filmCoefficient: components["schemas"]["FilmCoefficientField"];
@@ -7995,6 +8170,7 @@ export interface components {
                 specificHeat?: components["schemas"]["SpecificHeatField"];
                 volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
                 diffusivity?: components["schemas"]["DiffusivityField"];
+                thickness?: components["schemas"]["ThicknessField2"];
                 initialTemperature: components["schemas"]["InitialTemperatureField"];
                 ambientTemperature: components["schemas"]["AmbientTemperatureField"];
                 filmCoefficient: components["schemas"]["FilmCoefficientField"];
@@ -8127,6 +8303,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfinitePeriodicSurfaceSolveCompactAnswer: {
             result: {
@@ -8258,6 +8441,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfinitePeriodicSurfaceTimeToReachCompactAnswer: {
             result: {
@@ -8375,6 +8565,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfinitePeriodicSurfaceDepthReachedCompactAnswer: {
             result: {
@@ -8484,6 +8681,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfinitePeriodicSurfaceExtremesCompactAnswer: {
             result: {
@@ -8715,6 +8919,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfinitePeriodicAmbientSolveCompactAnswer: {
             result: {
@@ -8848,6 +9059,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfinitePeriodicAmbientTimeToReachCompactAnswer: {
             result: {
@@ -8967,6 +9185,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfinitePeriodicAmbientDepthReachedCompactAnswer: {
             result: {
@@ -9078,6 +9303,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfinitePeriodicAmbientExtremesCompactAnswer: {
             result: {
@@ -9323,6 +9555,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteContactSolveCompactAnswer: {
             result: {
@@ -9472,6 +9711,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteContactTimeToReachCompactAnswer: {
             result: {
@@ -9587,6 +9833,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteContactDepthReachedCompactAnswer: {
             result: {
@@ -9699,6 +9952,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteContactExtremesCompactAnswer: {
             result: {
@@ -9939,6 +10199,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabConvectionSolveCompactAnswer: {
             result: {
@@ -10034,6 +10301,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         /**
          * @example {
@@ -10139,6 +10413,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabConvectionTimeToReachCompactAnswer: {
             result: {
@@ -10253,6 +10534,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabConvectionDepthReachedCompactAnswer: {
             result: {
@@ -10364,6 +10652,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabConvectionExtremesCompactAnswer: {
             result: {
@@ -10594,6 +10889,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabSurfaceTemperatureSolveCompactAnswer: {
             result: {
@@ -10689,6 +10991,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         /**
          * @example {
@@ -10791,6 +11100,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabSurfaceTemperatureTimeToReachCompactAnswer: {
             result: {
@@ -10903,6 +11219,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabSurfaceTemperatureDepthReachedCompactAnswer: {
             result: {
@@ -11012,6 +11335,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabSurfaceTemperatureExtremesCompactAnswer: {
             result: {
@@ -11238,6 +11568,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabTwoSidesSolveCompactAnswer: {
             result: {
@@ -11378,6 +11715,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabTwoSidesTimeToReachCompactAnswer: {
             result: {
@@ -11499,6 +11843,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabTwoSidesDepthReachedCompactAnswer: {
             result: {
@@ -11617,6 +11968,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabTwoSidesExtremesCompactAnswer: {
             result: {
@@ -11871,6 +12229,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabSurfaceFluxSolveCompactAnswer: {
             result: {
@@ -12011,6 +12376,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabSurfaceFluxTimeToReachCompactAnswer: {
             result: {
@@ -12127,6 +12499,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabSurfaceFluxDepthReachedCompactAnswer: {
             result: {
@@ -12240,6 +12619,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabSurfaceFluxExtremesCompactAnswer: {
             result: {
@@ -12477,6 +12863,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabInternalHeatSolveCompactAnswer: {
             result: {
@@ -12623,6 +13016,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabInternalHeatTimeToReachCompactAnswer: {
             result: {
@@ -12744,6 +13144,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabInternalHeatDepthReachedCompactAnswer: {
             result: {
@@ -12862,6 +13269,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabInternalHeatExtremesCompactAnswer: {
             result: {
@@ -13117,6 +13531,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabPeriodicSolveCompactAnswer: {
             result: {
@@ -13263,6 +13684,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabPeriodicTimeToReachCompactAnswer: {
             result: {
@@ -13387,6 +13815,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabPeriodicDepthReachedCompactAnswer: {
             result: {
@@ -13503,6 +13938,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabPeriodicExtremesCompactAnswer: {
             result: {
@@ -13750,6 +14192,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabInitialProfileSolveCompactAnswer: {
             result: {
@@ -13903,6 +14352,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabInitialProfileTimeToReachCompactAnswer: {
             result: {
@@ -14037,6 +14493,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabInitialProfileDepthReachedCompactAnswer: {
             result: {
@@ -14168,6 +14631,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabInitialProfileExtremesCompactAnswer: {
             result: {
@@ -14465,6 +14935,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabFiniteBathSolveCompactAnswer: {
             result: {
@@ -14608,6 +15085,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabFiniteBathTimeToReachCompactAnswer: {
             result: {
@@ -14724,6 +15208,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabFiniteBathDepthReachedCompactAnswer: {
             result: {
@@ -14837,6 +15328,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabFiniteBathExtremesCompactAnswer: {
             result: {
@@ -15077,6 +15575,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderConvectionSolveCompactAnswer: {
             result: {
@@ -15172,6 +15677,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         /**
          * @example {
@@ -15276,6 +15788,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderConvectionTimeToReachCompactAnswer: {
             result: {
@@ -15391,6 +15910,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderConvectionDepthReachedCompactAnswer: {
             result: {
@@ -15500,6 +16026,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderConvectionExtremesCompactAnswer: {
             result: {
@@ -15715,6 +16248,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderSurfaceTemperatureSolveCompactAnswer: {
             result: {
@@ -15810,6 +16350,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         /**
          * @example {
@@ -15911,6 +16458,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderSurfaceTemperatureTimeToReachCompactAnswer: {
             result: {
@@ -16024,6 +16578,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderSurfaceTemperatureDepthReachedCompactAnswer: {
             result: {
@@ -16131,6 +16692,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderSurfaceTemperatureExtremesCompactAnswer: {
             result: {
@@ -16346,6 +16914,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SphereConvectionSolveCompactAnswer: {
             result: {
@@ -16441,6 +17016,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         /**
          * @example {
@@ -16545,6 +17127,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SphereConvectionTimeToReachCompactAnswer: {
             result: {
@@ -16660,6 +17249,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SphereConvectionDepthReachedCompactAnswer: {
             result: {
@@ -16769,6 +17365,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SphereConvectionExtremesCompactAnswer: {
             result: {
@@ -16984,6 +17587,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SphereSurfaceTemperatureSolveCompactAnswer: {
             result: {
@@ -17079,6 +17689,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         /**
          * @example {
@@ -17180,6 +17797,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SphereSurfaceTemperatureTimeToReachCompactAnswer: {
             result: {
@@ -17293,6 +17917,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SphereSurfaceTemperatureDepthReachedCompactAnswer: {
             result: {
@@ -17400,6 +18031,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SphereSurfaceTemperatureExtremesCompactAnswer: {
             result: {
@@ -17611,6 +18249,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         HollowCylinderConvectionSolveCompactAnswer: {
             result: {
@@ -17757,6 +18402,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         HollowCylinderConvectionTimeToReachCompactAnswer: {
             result: {
@@ -17878,6 +18530,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         HollowCylinderConvectionDepthReachedCompactAnswer: {
             result: {
@@ -17996,6 +18655,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         HollowCylinderConvectionExtremesCompactAnswer: {
             result: {
@@ -18247,6 +18913,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderInInfiniteMediumSolveCompactAnswer: {
             result: {
@@ -18378,6 +19051,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderInInfiniteMediumTimeToReachCompactAnswer: {
             result: {
@@ -18493,6 +19173,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderInInfiniteMediumDepthReachedCompactAnswer: {
             result: {
@@ -18604,6 +19291,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderInInfiniteMediumExtremesCompactAnswer: {
             result: {
@@ -18840,6 +19534,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         BarRectangularSolveCompactAnswer: {
             result: {
@@ -18981,6 +19682,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         BarRectangularTimeToReachCompactAnswer: {
             result: {
@@ -19106,6 +19814,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         BarRectangularExtremesCompactAnswer: {
             result: {
@@ -19367,6 +20082,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         BrickRectangularSolveCompactAnswer: {
             result: {
@@ -19514,6 +20236,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         BrickRectangularTimeToReachCompactAnswer: {
             result: {
@@ -19644,6 +20373,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         BrickRectangularExtremesCompactAnswer: {
             result: {
@@ -19919,6 +20655,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         ShortCylinderConvectionSolveCompactAnswer: {
             result: {
@@ -20058,6 +20801,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         ShortCylinderConvectionTimeToReachCompactAnswer: {
             result: {
@@ -20181,6 +20931,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         ShortCylinderConvectionExtremesCompactAnswer: {
             result: {
@@ -20429,6 +21186,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteBarEndSolveCompactAnswer: {
             result: {
@@ -20561,6 +21325,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteBarEndTimeToReachCompactAnswer: {
             result: {
@@ -20686,6 +21457,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteBarEndExtremesCompactAnswer: {
             result: {
@@ -20934,6 +21712,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         EdgeQuarterSpaceSolveCompactAnswer: {
             result: {
@@ -21058,6 +21843,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         EdgeQuarterSpaceTimeToReachCompactAnswer: {
             result: {
@@ -21175,6 +21967,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         EdgeQuarterSpaceExtremesCompactAnswer: {
             result: {
@@ -21407,6 +22206,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CornerOctantSolveCompactAnswer: {
             result: {
@@ -21533,6 +22339,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CornerOctantTimeToReachCompactAnswer: {
             result: {
@@ -21651,6 +22464,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CornerOctantExtremesCompactAnswer: {
             result: {
@@ -21881,6 +22701,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LineSourceSolveCompactAnswer: {
             result: {
@@ -21993,6 +22820,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LineSourceTimeToReachCompactAnswer: {
             result: {
@@ -22105,6 +22939,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LineSourceDepthReachedCompactAnswer: {
             result: {
@@ -22210,6 +23051,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LineSourceExtremesCompactAnswer: {
             result: {
@@ -22416,6 +23264,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         PointSourceSolveCompactAnswer: {
             result: {
@@ -22528,6 +23383,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         PointSourceTimeToReachCompactAnswer: {
             result: {
@@ -22640,6 +23502,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         PointSourceDepthReachedCompactAnswer: {
             result: {
@@ -22745,6 +23614,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         PointSourceExtremesCompactAnswer: {
             result: {
@@ -23199,6 +24075,8 @@ export interface components {
             /** @description Time of minimum: or timeOfMaximum. Unit s; a number from -1e17 to 1e17 s. */
             timeOfMinimum?: number | components["schemas"]["TimeWithUnit"];
         };
+        /** @description Thickness: of the body, to check how long the answer holds; changes no number. Unit m; a number from 1e-9 to 100000 m. */
+        ThicknessField2: number | components["schemas"]["LengthWithUnit"];
         /** @description Surface temperature: of the face itself, from time 0 on. Unit Cel; a number from -273.15 to 10000 Cel. */
         SurfaceTemperatureField: number | components["schemas"]["TemperatureWithUnit"];
         /** @description Depths: inward from the exposed face. Unit m; 1 to 2000 values, each a number from 0 to 100000 m. */
@@ -23269,8 +24147,6 @@ export interface components {
         FromField3: number | components["schemas"]["TimeWithUnit"];
         /** @description Until: the last time looked at. Unit s; a number from -1e17 to 1e17 s. */
         UntilField4: number | components["schemas"]["TimeWithUnit"];
-        /** @description Thickness: of the body, to check how long the answer holds; changes no number. Unit m; a number from 1e-9 to 100000 m. */
-        ThicknessField2: number | components["schemas"]["LengthWithUnit"];
         /** @description Other body: the solid that is touched, with its initial temperature; it lies at depths below 0. */
         OtherField: {
             /** @description Material: the id of one of the catalogue, or of one of the account, in place of all properties. The answer says what was used. */

@@ -4369,6 +4369,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         Bound: {
             absolute: number;
@@ -4381,19 +4388,21 @@ export interface components {
             fourier?: number[];
             /** @description The length L that the Biot and Fourier numbers were made with. Unit m. */
             length?: number;
-            /** @description Depth that 1 % of a surface step has reached at the last time. Unit m. */
+            /** @description Depth that 1 % of a surface step has reached at the last time; in a settled cycle, where 1 % of the amplitude of the surface is left. Unit m. */
             penetrationDepth?: number;
             /** @description Time in which the slowest part of the change falls to 1/e: L²/(z₁²a). Unit s. */
             slowestTimeConstant?: number;
-            /** @description Time after which the centre follows the slowest part alone: where its straight line crosses the start. Unit s. */
+            /** @description Where the straight line of the slowest part crosses the start, at the centre, the mid-plane or the insulated face. Unit s. */
             lagTime?: number;
             /** @description Time in which the remaining difference falls to a tenth: ln(10)·L²/(z₁²a). Unit s. */
             fValue?: number;
-            /** @description Lag factor of each place: C₁ times the first eigenfunction there. Unit 1. */
+            /** @description Lag factor of each place: what the slowest part would be there at the start, as a share of the change of that place; C₁ times the first eigenfunction. Unit 1. */
             jValue?: number[];
-            /** @description Time until which a body of the given thickness follows this case to 1 %. Unit s. */
+            /** @description Film coefficient from which a face that is held stands for one in a fluid. With a weaker film times come out early, by about 2/(Bi + 2) of them; that is 1 % here, in a half space 1 % of the step at the face at the first time. Unit W/(m2.K). */
+            filmForHeldFace?: number;
+            /** @description Time until which a body of the given thickness or length follows this case to 1 %. Unit s. */
             validUntil?: number;
-            /** @description Time from which one term of the series is right to 1 %. Unit s. */
+            /** @description Time from which the first term alone is right to 1 % of the change: of a series, or the straight line over ln t of a source. Unit s. */
             validFrom?: number;
             /** @description Rate at which the mean goes on changing where there is no steady state. Unit K/s. */
             driftRate?: number;
@@ -4553,6 +4562,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LumpedConvectionTimeToReachCompactAnswer: {
             result: {
@@ -4670,6 +4686,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LumpedConvectionExtremesCompactAnswer: {
             result: {
@@ -4878,6 +4901,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LumpedVaryingAmbientSolveCompactAnswer: {
             result: {
@@ -5003,6 +5033,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LumpedVaryingAmbientTimeToReachCompactAnswer: {
             result: {
@@ -5127,6 +5164,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LumpedVaryingAmbientExtremesCompactAnswer: {
             result: {
@@ -5362,6 +5406,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceTemperatureSolveCompactAnswer: {
             result: {
@@ -5422,6 +5473,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             surfaceTemperature: components["schemas"]["SurfaceTemperatureField"];
             depths?: components["schemas"]["DepthsField"];
@@ -5485,6 +5537,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceTemperatureTimeToReachCompactAnswer: {
             result: {
@@ -5527,6 +5586,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             surfaceTemperature: components["schemas"]["SurfaceTemperatureField"];
             depth?: components["schemas"]["DepthField"];
@@ -5592,6 +5652,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceTemperatureDepthReachedCompactAnswer: {
             result: {
@@ -5633,6 +5700,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             surfaceTemperature: components["schemas"]["SurfaceTemperatureField"];
             time: components["schemas"]["TimeField"];
@@ -5696,6 +5764,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceTemperatureExtremesCompactAnswer: {
             result: {
@@ -5739,6 +5814,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             surfaceTemperature: components["schemas"]["SurfaceTemperatureField"];
             depth?: components["schemas"]["DepthField"];
@@ -5783,6 +5859,7 @@ export interface components {
                 specificHeat?: components["schemas"]["SpecificHeatField"];
                 volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
                 diffusivity?: components["schemas"]["DiffusivityField"];
+                thickness?: components["schemas"]["ThicknessField2"];
                 initialTemperature: components["schemas"]["InitialTemperatureField"];
                 surfaceTemperature: components["schemas"]["SurfaceTemperatureField"];
                 depths?: components["schemas"]["DepthsField"];
@@ -5902,6 +5979,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceRampSolveCompactAnswer: {
             result: {
@@ -5957,6 +6041,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             rampRate: components["schemas"]["RampRateField"];
             rampDuration?: components["schemas"]["RampDurationField"];
@@ -6021,6 +6106,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceRampTimeToReachCompactAnswer: {
             result: {
@@ -6064,6 +6156,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             rampRate: components["schemas"]["RampRateField"];
             rampDuration?: components["schemas"]["RampDurationField"];
@@ -6134,6 +6227,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceRampDepthReachedCompactAnswer: {
             result: {
@@ -6176,6 +6276,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             rampRate: components["schemas"]["RampRateField"];
             rampDuration?: components["schemas"]["RampDurationField"];
@@ -6240,6 +6341,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceRampExtremesCompactAnswer: {
             result: {
@@ -6284,6 +6392,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             rampRate: components["schemas"]["RampRateField"];
             rampDuration?: components["schemas"]["RampDurationField"];
@@ -6334,6 +6443,7 @@ export interface components {
                 specificHeat?: components["schemas"]["SpecificHeatField"];
                 volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
                 diffusivity?: components["schemas"]["DiffusivityField"];
+                thickness?: components["schemas"]["ThicknessField2"];
                 initialTemperature: components["schemas"]["InitialTemperatureField"];
                 rampRate: components["schemas"]["RampRateField"];
                 rampDuration?: components["schemas"]["RampDurationField"];
@@ -6455,6 +6565,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceFluxSolveCompactAnswer: {
             result: {
@@ -6510,6 +6627,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             imposedHeatFlux: components["schemas"]["ImposedHeatFluxField"];
             pulseDuration?: components["schemas"]["PulseDurationField"];
@@ -6574,6 +6692,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceFluxTimeToReachCompactAnswer: {
             result: {
@@ -6617,6 +6742,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             imposedHeatFlux: components["schemas"]["ImposedHeatFluxField"];
             pulseDuration?: components["schemas"]["PulseDurationField"];
@@ -6687,6 +6813,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceFluxDepthReachedCompactAnswer: {
             result: {
@@ -6729,6 +6862,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             imposedHeatFlux: components["schemas"]["ImposedHeatFluxField"];
             pulseDuration?: components["schemas"]["PulseDurationField"];
@@ -6793,6 +6927,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteSurfaceFluxExtremesCompactAnswer: {
             result: {
@@ -6837,6 +6978,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             imposedHeatFlux: components["schemas"]["ImposedHeatFluxField"];
             pulseDuration?: components["schemas"]["PulseDurationField"];
@@ -6887,6 +7029,7 @@ export interface components {
                 specificHeat?: components["schemas"]["SpecificHeatField"];
                 volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
                 diffusivity?: components["schemas"]["DiffusivityField"];
+                thickness?: components["schemas"]["ThicknessField2"];
                 initialTemperature: components["schemas"]["InitialTemperatureField"];
                 imposedHeatFlux: components["schemas"]["ImposedHeatFluxField"];
                 pulseDuration?: components["schemas"]["PulseDurationField"];
@@ -7014,6 +7157,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteConvectionSolveCompactAnswer: {
             result: {
@@ -7076,6 +7226,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             ambientTemperature: components["schemas"]["AmbientTemperatureField"];
             filmCoefficient: components["schemas"]["FilmCoefficientField"];
@@ -7141,6 +7292,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteConvectionTimeToReachCompactAnswer: {
             result: {
@@ -7185,6 +7343,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             ambientTemperature: components["schemas"]["AmbientTemperatureField"];
             filmCoefficient: components["schemas"]["FilmCoefficientField"];
@@ -7252,6 +7411,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteConvectionDepthReachedCompactAnswer: {
             result: {
@@ -7295,6 +7461,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             ambientTemperature: components["schemas"]["AmbientTemperatureField"];
             filmCoefficient: components["schemas"]["FilmCoefficientField"];
@@ -7360,6 +7527,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteConvectionExtremesCompactAnswer: {
             result: {
@@ -7405,6 +7579,7 @@ export interface components {
             specificHeat?: components["schemas"]["SpecificHeatField"];
             volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
             diffusivity?: components["schemas"]["DiffusivityField"];
+            thickness?: components["schemas"]["ThicknessField2"];
             initialTemperature: components["schemas"]["InitialTemperatureField"];
             ambientTemperature: components["schemas"]["AmbientTemperatureField"];
             filmCoefficient: components["schemas"]["FilmCoefficientField"];
@@ -7453,6 +7628,7 @@ export interface components {
                 specificHeat?: components["schemas"]["SpecificHeatField"];
                 volumetricHeatCapacity?: components["schemas"]["VolumetricHeatCapacityField"];
                 diffusivity?: components["schemas"]["DiffusivityField"];
+                thickness?: components["schemas"]["ThicknessField2"];
                 initialTemperature: components["schemas"]["InitialTemperatureField"];
                 ambientTemperature: components["schemas"]["AmbientTemperatureField"];
                 filmCoefficient: components["schemas"]["FilmCoefficientField"];
@@ -7585,6 +7761,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfinitePeriodicSurfaceSolveCompactAnswer: {
             result: {
@@ -7716,6 +7899,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfinitePeriodicSurfaceTimeToReachCompactAnswer: {
             result: {
@@ -7833,6 +8023,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfinitePeriodicSurfaceDepthReachedCompactAnswer: {
             result: {
@@ -7942,6 +8139,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfinitePeriodicSurfaceExtremesCompactAnswer: {
             result: {
@@ -8173,6 +8377,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfinitePeriodicAmbientSolveCompactAnswer: {
             result: {
@@ -8306,6 +8517,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfinitePeriodicAmbientTimeToReachCompactAnswer: {
             result: {
@@ -8425,6 +8643,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfinitePeriodicAmbientDepthReachedCompactAnswer: {
             result: {
@@ -8536,6 +8761,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfinitePeriodicAmbientExtremesCompactAnswer: {
             result: {
@@ -8781,6 +9013,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteContactSolveCompactAnswer: {
             result: {
@@ -8930,6 +9169,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteContactTimeToReachCompactAnswer: {
             result: {
@@ -9045,6 +9291,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteContactDepthReachedCompactAnswer: {
             result: {
@@ -9157,6 +9410,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteContactExtremesCompactAnswer: {
             result: {
@@ -9397,6 +9657,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabConvectionSolveCompactAnswer: {
             result: {
@@ -9492,6 +9759,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         /**
          * @example {
@@ -9597,6 +9871,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabConvectionTimeToReachCompactAnswer: {
             result: {
@@ -9711,6 +9992,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabConvectionDepthReachedCompactAnswer: {
             result: {
@@ -9822,6 +10110,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabConvectionExtremesCompactAnswer: {
             result: {
@@ -10052,6 +10347,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabSurfaceTemperatureSolveCompactAnswer: {
             result: {
@@ -10147,6 +10449,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         /**
          * @example {
@@ -10249,6 +10558,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabSurfaceTemperatureTimeToReachCompactAnswer: {
             result: {
@@ -10361,6 +10677,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabSurfaceTemperatureDepthReachedCompactAnswer: {
             result: {
@@ -10470,6 +10793,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabSurfaceTemperatureExtremesCompactAnswer: {
             result: {
@@ -10696,6 +11026,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabTwoSidesSolveCompactAnswer: {
             result: {
@@ -10836,6 +11173,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabTwoSidesTimeToReachCompactAnswer: {
             result: {
@@ -10957,6 +11301,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabTwoSidesDepthReachedCompactAnswer: {
             result: {
@@ -11075,6 +11426,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabTwoSidesExtremesCompactAnswer: {
             result: {
@@ -11329,6 +11687,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabSurfaceFluxSolveCompactAnswer: {
             result: {
@@ -11469,6 +11834,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabSurfaceFluxTimeToReachCompactAnswer: {
             result: {
@@ -11585,6 +11957,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabSurfaceFluxDepthReachedCompactAnswer: {
             result: {
@@ -11698,6 +12077,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabSurfaceFluxExtremesCompactAnswer: {
             result: {
@@ -11935,6 +12321,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabInternalHeatSolveCompactAnswer: {
             result: {
@@ -12081,6 +12474,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabInternalHeatTimeToReachCompactAnswer: {
             result: {
@@ -12202,6 +12602,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabInternalHeatDepthReachedCompactAnswer: {
             result: {
@@ -12320,6 +12727,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabInternalHeatExtremesCompactAnswer: {
             result: {
@@ -12575,6 +12989,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabPeriodicSolveCompactAnswer: {
             result: {
@@ -12721,6 +13142,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabPeriodicTimeToReachCompactAnswer: {
             result: {
@@ -12845,6 +13273,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabPeriodicDepthReachedCompactAnswer: {
             result: {
@@ -12961,6 +13396,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabPeriodicExtremesCompactAnswer: {
             result: {
@@ -13208,6 +13650,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabInitialProfileSolveCompactAnswer: {
             result: {
@@ -13361,6 +13810,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabInitialProfileTimeToReachCompactAnswer: {
             result: {
@@ -13495,6 +13951,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabInitialProfileDepthReachedCompactAnswer: {
             result: {
@@ -13626,6 +14089,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabInitialProfileExtremesCompactAnswer: {
             result: {
@@ -13923,6 +14393,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabFiniteBathSolveCompactAnswer: {
             result: {
@@ -14066,6 +14543,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabFiniteBathTimeToReachCompactAnswer: {
             result: {
@@ -14182,6 +14666,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabFiniteBathDepthReachedCompactAnswer: {
             result: {
@@ -14295,6 +14786,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SlabFiniteBathExtremesCompactAnswer: {
             result: {
@@ -14535,6 +15033,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderConvectionSolveCompactAnswer: {
             result: {
@@ -14630,6 +15135,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         /**
          * @example {
@@ -14734,6 +15246,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderConvectionTimeToReachCompactAnswer: {
             result: {
@@ -14849,6 +15368,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderConvectionDepthReachedCompactAnswer: {
             result: {
@@ -14958,6 +15484,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderConvectionExtremesCompactAnswer: {
             result: {
@@ -15173,6 +15706,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderSurfaceTemperatureSolveCompactAnswer: {
             result: {
@@ -15268,6 +15808,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         /**
          * @example {
@@ -15369,6 +15916,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderSurfaceTemperatureTimeToReachCompactAnswer: {
             result: {
@@ -15482,6 +16036,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderSurfaceTemperatureDepthReachedCompactAnswer: {
             result: {
@@ -15589,6 +16150,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderSurfaceTemperatureExtremesCompactAnswer: {
             result: {
@@ -15804,6 +16372,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SphereConvectionSolveCompactAnswer: {
             result: {
@@ -15899,6 +16474,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         /**
          * @example {
@@ -16003,6 +16585,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SphereConvectionTimeToReachCompactAnswer: {
             result: {
@@ -16118,6 +16707,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SphereConvectionDepthReachedCompactAnswer: {
             result: {
@@ -16227,6 +16823,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SphereConvectionExtremesCompactAnswer: {
             result: {
@@ -16442,6 +17045,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SphereSurfaceTemperatureSolveCompactAnswer: {
             result: {
@@ -16537,6 +17147,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         /**
          * @example {
@@ -16638,6 +17255,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SphereSurfaceTemperatureTimeToReachCompactAnswer: {
             result: {
@@ -16751,6 +17375,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SphereSurfaceTemperatureDepthReachedCompactAnswer: {
             result: {
@@ -16858,6 +17489,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SphereSurfaceTemperatureExtremesCompactAnswer: {
             result: {
@@ -17069,6 +17707,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         HollowCylinderConvectionSolveCompactAnswer: {
             result: {
@@ -17215,6 +17860,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         HollowCylinderConvectionTimeToReachCompactAnswer: {
             result: {
@@ -17336,6 +17988,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         HollowCylinderConvectionDepthReachedCompactAnswer: {
             result: {
@@ -17454,6 +18113,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         HollowCylinderConvectionExtremesCompactAnswer: {
             result: {
@@ -17705,6 +18371,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderInInfiniteMediumSolveCompactAnswer: {
             result: {
@@ -17836,6 +18509,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderInInfiniteMediumTimeToReachCompactAnswer: {
             result: {
@@ -17951,6 +18631,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderInInfiniteMediumDepthReachedCompactAnswer: {
             result: {
@@ -18062,6 +18749,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CylinderInInfiniteMediumExtremesCompactAnswer: {
             result: {
@@ -18298,6 +18992,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         BarRectangularSolveCompactAnswer: {
             result: {
@@ -18439,6 +19140,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         BarRectangularTimeToReachCompactAnswer: {
             result: {
@@ -18564,6 +19272,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         BarRectangularExtremesCompactAnswer: {
             result: {
@@ -18825,6 +19540,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         BrickRectangularSolveCompactAnswer: {
             result: {
@@ -18972,6 +19694,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         BrickRectangularTimeToReachCompactAnswer: {
             result: {
@@ -19102,6 +19831,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         BrickRectangularExtremesCompactAnswer: {
             result: {
@@ -19377,6 +20113,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         ShortCylinderConvectionSolveCompactAnswer: {
             result: {
@@ -19516,6 +20259,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         ShortCylinderConvectionTimeToReachCompactAnswer: {
             result: {
@@ -19639,6 +20389,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         ShortCylinderConvectionExtremesCompactAnswer: {
             result: {
@@ -19887,6 +20644,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteBarEndSolveCompactAnswer: {
             result: {
@@ -20019,6 +20783,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteBarEndTimeToReachCompactAnswer: {
             result: {
@@ -20144,6 +20915,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         SemiInfiniteBarEndExtremesCompactAnswer: {
             result: {
@@ -20392,6 +21170,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         EdgeQuarterSpaceSolveCompactAnswer: {
             result: {
@@ -20516,6 +21301,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         EdgeQuarterSpaceTimeToReachCompactAnswer: {
             result: {
@@ -20633,6 +21425,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         EdgeQuarterSpaceExtremesCompactAnswer: {
             result: {
@@ -20865,6 +21664,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CornerOctantSolveCompactAnswer: {
             result: {
@@ -20991,6 +21797,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CornerOctantTimeToReachCompactAnswer: {
             result: {
@@ -21109,6 +21922,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         CornerOctantExtremesCompactAnswer: {
             result: {
@@ -21339,6 +22159,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LineSourceSolveCompactAnswer: {
             result: {
@@ -21451,6 +22278,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LineSourceTimeToReachCompactAnswer: {
             result: {
@@ -21563,6 +22397,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LineSourceDepthReachedCompactAnswer: {
             result: {
@@ -21668,6 +22509,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         LineSourceExtremesCompactAnswer: {
             result: {
@@ -21874,6 +22722,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         PointSourceSolveCompactAnswer: {
             result: {
@@ -21986,6 +22841,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         PointSourceTimeToReachCompactAnswer: {
             result: {
@@ -22098,6 +22960,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         PointSourceDepthReachedCompactAnswer: {
             result: {
@@ -22203,6 +23072,13 @@ export interface components {
             warnings: components["schemas"]["AnswerWarning"][];
             cautions: components["schemas"]["AnswerCaution"][];
             sources: string[];
+            /**
+             * @description Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.
+             * @enum {string}
+             */
+            errs?: "early" | "late";
+            /** @description Of a question: which side of its answer is the conservative one, by what it is asked for. */
+            conservativeSide?: string;
         };
         PointSourceExtremesCompactAnswer: {
             result: {
@@ -22447,6 +23323,8 @@ export interface components {
             /** @description Time of minimum: or timeOfMaximum. Unit s; a number from -1e17 to 1e17 s. */
             timeOfMinimum?: number | components["schemas"]["TimeWithUnit"];
         };
+        /** @description Thickness: of the body, to check how long the answer holds; changes no number. Unit m; a number from 1e-9 to 100000 m. */
+        ThicknessField2: number | components["schemas"]["LengthWithUnit"];
         /** @description Surface temperature: of the face itself, from time 0 on. Unit Cel; a number from -273.15 to 10000 Cel. */
         SurfaceTemperatureField: number | components["schemas"]["TemperatureWithUnit"];
         /** @description Depths: inward from the exposed face. Unit m; 1 to 2000 values, each a number from 0 to 100000 m. */
@@ -22517,8 +23395,6 @@ export interface components {
         FromField3: number | components["schemas"]["TimeWithUnit"];
         /** @description Until: the last time looked at. Unit s; a number from -1e17 to 1e17 s. */
         UntilField4: number | components["schemas"]["TimeWithUnit"];
-        /** @description Thickness: of the body, to check how long the answer holds; changes no number. Unit m; a number from 1e-9 to 100000 m. */
-        ThicknessField2: number | components["schemas"]["LengthWithUnit"];
         /** @description Other body: the solid that is touched, with its initial temperature; it lies at depths below 0. */
         OtherField: {
             /** @description Material: the id of one of the catalogue, or of one of the account, in place of all properties. The answer says what was used. */

@@ -120,6 +120,11 @@ export interface CaseDescription<Shape_ extends z.ZodRawShape, R extends Resolve
   numbers(input: R): Numbers
   checks(input: R): Check[]
   warnings(input: R): Warning[]
+  /**
+   * Whether a body that the case simplifies comes to a temperature later than answered (the answer errs early) or sooner (late);
+   * undefined where the case says of the body all that was stated of it.
+   */
+  errs?(input: R): 'early' | 'late' | undefined
   /** Unit of an output where it depends on the input. */
   unitOf?(output: OutputName, input: R): string | undefined
 }

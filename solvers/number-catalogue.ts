@@ -6,7 +6,7 @@ export const numberCatalogue = {
   penetrationDepth: {
     unit: 'm',
     series: false,
-    text: 'Depth that 1 % of a surface step has reached at the last time.',
+    text: 'Depth that 1 % of a surface step has reached at the last time; in a settled cycle, where 1 % of the amplitude of the surface is left.',
   },
   slowestTimeConstant: {
     unit: 's',
@@ -16,20 +16,33 @@ export const numberCatalogue = {
   lagTime: {
     unit: 's',
     series: false,
-    text: 'Time after which the centre follows the slowest part alone: where its straight line crosses the start.',
+    text: 'Where the straight line of the slowest part crosses the start, at the centre, the mid-plane or the insulated face.',
   },
   fValue: {
     unit: 's',
     series: false,
     text: 'Time in which the remaining difference falls to a tenth: ln(10)·L²/(z₁²a).',
   },
-  jValue: { unit: '1', series: true, text: 'Lag factor of each place: C₁ times the first eigenfunction there.' },
+  jValue: {
+    unit: '1',
+    series: true,
+    text: 'Lag factor of each place: what the slowest part would be there at the start, as a share of the change of that place; C₁ times the first eigenfunction.',
+  },
+  filmForHeldFace: {
+    unit: 'W/(m2.K)',
+    series: false,
+    text: 'Film coefficient from which a face that is held stands for one in a fluid. With a weaker film times come out early, by about 2/(Bi + 2) of them; that is 1 % here, in a half space 1 % of the step at the face at the first time.',
+  },
   validUntil: {
     unit: 's',
     series: false,
-    text: 'Time until which a body of the given thickness follows this case to 1 %.',
+    text: 'Time until which a body of the given thickness or length follows this case to 1 %.',
   },
-  validFrom: { unit: 's', series: false, text: 'Time from which one term of the series is right to 1 %.' },
+  validFrom: {
+    unit: 's',
+    series: false,
+    text: 'Time from which the first term alone is right to 1 % of the change: of a series, or the straight line over ln t of a source.',
+  },
   driftRate: {
     unit: 'K/s',
     series: false,

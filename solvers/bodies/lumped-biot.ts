@@ -1,14 +1,27 @@
 import type { Check, Numbers } from '../case.ts'
+import { lateNumbers, lumpedCourse } from './late-course.ts'
 import type { LumpedBody } from './lumped-body.ts'
 import type { Warning } from '../warnings.ts'
 
 /* What the Biot number says of a body with one temperature; it is known where the body was stated by shape and solid. */
 
-export function lumpedNumbers(body: LumpedBody, biot: number | undefined, times: readonly number[]): Numbers {
-  if (!body.solid) return {}
-  const rate = body.solid.diffusivity / (body.length! * body.length!)
-  return { biot: biot!, fourier: times.map((time) => rate * time), length: body.length! }
+interface Lumped {
+  body: LumpedBody
+  capacity: number
+  conductance: number
+  biot?: number
+  times: readonly number[]
 }
+
+export function lumpedNumbers({ body, capacity, conductance, biot, times }: Lumped): Numbers {
+  const late = conductance === 0 ? {} : lateNumbers(lumpedCourse(capacity, conductance))
+  if (!body.solid) return late
+  const rate = body.solid.diffusivity / (body.length! * body.length!)
+  return { biot: biot!, fourier: times.map((time) => rate * time), length: body.length!, ...late }
+}
+
+/** A body with one temperature has no inside that lags. */
+export const lumpedErrs = ({ conductance }: Pick<Lumped, 'conductance'>) => (conductance === 0 ? undefined : 'early')
 
 export function oneTemperatureWillDo(biot: number | undefined): Check[] {
   if (biot === undefined) return []

@@ -1,4 +1,4 @@
-import type { Check } from '../case.ts'
+import type { Check, Numbers } from '../case.ts'
 import { type Field, constant, fieldOutputs, grid, history, profile } from './field-outputs.ts'
 import { type Cycle, phaseAt, waveAt } from '../math/cycle-phase.ts'
 import { EPS, type Estimate, TINY } from '../math/rounding.ts'
@@ -69,9 +69,22 @@ export function solvePeriodic(input: PeriodicInput, { gain, lag, fluxGain }: Sur
   return { ...fieldOutputs({ times, places: depths.length, outputs }, fields), terms: 0, scale: amplitude }
 }
 
+/** ln 100: over so many damping depths the amplitude falls to 1 %. */
+const TO_A_HUNDREDTH = 4.605170185988092
+/**
+ * Whole cycles until a start at the mean is forgotten to 1 % of the amplitude of the drive, wherever one looks: what is left after a
+ * time t is at most (t·∂u/∂t)/(ωt) of it, u the answer to a step, and t·∂u/∂t is at most 1/√(2πe) = 0.242 at any depth behind any film.
+ */
+const CYCLES_TO_SETTLE = 4
+
+export const periodicNumbers = (input: Pick<PeriodicInput, 'diffusivity' | 'cycle'>): Numbers => ({
+  penetrationDepth: TO_A_HUNDREDTH * dampingDepthOf(input),
+  cyclesToSettle: CYCLES_TO_SETTLE,
+})
+
 /** Whether the deepest place feels the cycle at all: 1 % of the surface's amplitude is left at 4.6 damping depths. */
 export function cycleIsFelt(input: PeriodicInput): Check {
-  const limit = 4.605170186 * dampingDepthOf(input)
+  const limit = TO_A_HUNDREDTH * dampingDepthOf(input)
   const value = input.depths.reduce((most, depth) => Math.max(most, depth), 0)
   const text = 'The deepest position lies where at least 1 % of the amplitude of the surface is left.'
   return { id: 'cycle-is-felt', holds: value <= limit, value, limit, text }

@@ -2,6 +2,7 @@ import { z } from 'zod'
 import type { Check, Numbers, Point, PointAxis, Resolved } from '../case.ts'
 import type { Issue } from '../errors.ts'
 import { exposedFaces, initialTemperature, solid } from '../statement/fields.ts'
+import { type LateCourse, lateNumbers, productCourse, productValidFrom } from './late-course.ts'
 import type { ProductInput } from './product-step.ts'
 import { quantity } from '../statement/quantity.ts'
 import { figure } from '../statement/validate.ts'
@@ -97,10 +98,9 @@ function refuseCoordinate(
     })
 }
 
-/** Of the slowest mode, from the decay rates of all directions. */
-export function slowestOf(rates: readonly number[]): Numbers {
-  const rate = rates.reduce((sum, one) => sum + one, 0)
-  return rate === 0 ? {} : { slowestTimeConstant: 1 / rate, fValue: Math.LN10 / rate }
+/** What the slowest modes of all directions say of their product. */
+export function productLateNumbers(directions: readonly LateCourse[]): Numbers {
+  return { ...lateNumbers(productCourse(directions)), ...productValidFrom(directions) }
 }
 
 export function pointsCheck({ points }: ProductInput, limit: number): Check {

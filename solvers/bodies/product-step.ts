@@ -1,14 +1,14 @@
 import { type BodyStepInput, momentsOf } from './body-step.ts'
 import type { Point, PointAxis } from '../case.ts'
 import { UnitCylinder } from '../math/cylinder.ts'
-import { cylinderEigenvalue } from '../math/cylinder-eigenvalues.ts'
 import { bodyFactor, type Factor, halfSpaceFactor, idleFactor, product, union } from '../math/product.ts'
 import type { Estimate } from '../math/rounding.ts'
-import { slabEigenvalue } from '../math/slab-eigenvalues.ts'
 import { SlabFilm } from '../math/slab-film.ts'
 import { SlabFixed } from '../math/slab-fixed.ts'
 import type { FilmedBody, Share, UnitBody } from '../math/unit-body.ts'
 import { driveTemperature, type ProductDrive } from './product-films.ts'
+import { type LateCourse, slabCourse } from './late-course.ts'
+import { cylinder, radialCourse } from './radial-step.ts'
 import type { Solution } from '../solution.ts'
 import { exactly, scaled, type StepResponse, stepOutputs } from './step-response.ts'
 
@@ -121,16 +121,23 @@ function responseOf(times: readonly number[], factors: readonly Factor[], capaci
   }
 }
 
-/** Decay rate of the slowest mode of a slab, 1/s. */
-export function slabRate({ conductivity, diffusivity }: BodyStepInput, span: Span, film: number): number {
+/** A direction that passes no heat, for ever as it was. */
+const still: LateCourse = { rate: 0 }
+
+/** The late course of a slab across `span`, at the points. */
+export function slabDirection(input: ProductInput, span: Span, axis: PointAxis, film: number): LateCourse {
+  if (film === 0) return still
   const length = reachOf(span)
-  const root = film === Infinity ? Math.PI / 2 : slabEigenvalue((film * length) / conductivity, 0)
-  return film === 0 ? 0 : diffusivity * (root / length) * (root / length)
+  const body = { diffusivity: input.diffusivity, length, biot: (film * length) / input.conductivity }
+  return slabCourse(
+    body,
+    input.points.map((point) => Math.abs(point[axis]!)),
+  )
 }
 
-/** Decay rate of the slowest mode of a cylinder, 1/s. */
-export function cylinderRate({ conductivity, diffusivity }: BodyStepInput, radius: number, film: number): number {
-  if (film === 0) return 0
-  const { root } = cylinderEigenvalue((film * radius) / conductivity, 0)
-  return diffusivity * (root / radius) * (root / radius)
+/** The late course of a cylinder, at the points. */
+export function cylinderDirection(input: ProductInput, radius: number, film: number): LateCourse {
+  if (film === 0) return still
+  const radii = input.points.map((point) => point.r!)
+  return radialCourse(cylinder, { radius, radii, diffusivity: input.diffusivity }, (film * radius) / input.conductivity)
 }

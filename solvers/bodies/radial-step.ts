@@ -4,6 +4,7 @@ import { UnitCylinder } from '../math/cylinder.ts'
 import { UnitSphere } from '../math/sphere.ts'
 import type { FilmedBody, UnitPlaces } from '../math/unit-body.ts'
 import type { Solution } from '../solution.ts'
+import { type LateCourse, lateNumbers } from './late-course.ts'
 import { stepOutputs, untouched } from './step-response.ts'
 
 /** What cylinders and spheres share: a uniform body, one drive, and places by their depths or their radii. */
@@ -96,8 +97,14 @@ function facesOf({ radius, depths, radii }: RadialStepInput): boolean[] {
 }
 
 /** What the slowest mode says: how fast the late change is, and how far each place is behind it. */
-export function slowestMode(form: Form, input: RadialStepInput, biot: number): Numbers {
-  if (biot === 0) return {}
+export const radialLateNumbers = (form: Form, input: RadialStepInput, biot: number): Numbers =>
+  biot === 0 ? {} : lateNumbers(radialCourse(form, input, biot))
+
+export function radialCourse(
+  form: Form,
+  input: Pick<RadialStepInput, 'radius' | 'depths' | 'radii' | 'diffusivity'>,
+  biot: number,
+): LateCourse {
   const places = radialPlaces(input)
   const withCentre = {
     biot,
@@ -105,12 +112,14 @@ export function slowestMode(form: Form, input: RadialStepInput, biot: number): N
     inner: Float64Array.of(...places.inner, 0),
     shifts: Float64Array.of(...places.shifts, 0),
   }
-  const { root, parts } = form.unit(withCentre).series.mode(0)
-  const slowestTimeConstant = ((input.radius / root) * (input.radius / root)) / input.diffusivity
+  const { series } = form.unit(withCentre)
+  const [first, second] = [series.mode(0), series.mode(1)]
+  const rateOf = (root: number) => input.diffusivity / ((input.radius / root) * (input.radius / root))
+  const centre = first.parts.at(-1)!.value
   return {
-    slowestTimeConstant,
-    lagTime: slowestTimeConstant * Math.log(parts.at(-1)!.value),
-    fValue: slowestTimeConstant * Math.LN10,
-    jValue: parts.slice(0, -2).map(({ value }) => value),
+    rate: rateOf(first.root),
+    shares: first.parts.slice(0, -2).map(({ value }) => value),
+    centre,
+    second: { rate: rateOf(second.root), most: Math.abs(second.parts.at(-1)!.value) },
   }
 }

@@ -1,5 +1,7 @@
 import { type BodyStepInput, type Drive, solveBody } from './body-step.ts'
+import type { Numbers } from '../case.ts'
 import type { Moment, UnitBody, UnitPlaces } from '../math/unit-body.ts'
+import { lateNumbers, slabCourse } from './late-course.ts'
 import type { Solution } from '../solution.ts'
 
 /** What the slab cases share: a uniform body, one drive, one exposed face or two alike. */
@@ -26,9 +28,26 @@ export function slabPlaces(input: SlabStepInput): UnitPlaces {
 }
 
 /** Behind the mid-plane a body with two exposed faces mirrors its front. */
-function placeOf({ thickness, exposedFaces }: SlabStepInput, depth: number): { near: number; mirrored: boolean } {
+function placeOf(
+  { thickness, exposedFaces }: Pick<SlabStepInput, 'thickness' | 'exposedFaces'>,
+  depth: number,
+): { near: number; mirrored: boolean } {
   const mirrored = exposedFaces === 2 && depth > thickness / 2
   return { near: mirrored ? thickness - depth : depth, mirrored }
+}
+
+/** Distance of each place asked for from the mid-plane or insulated face. */
+export function fromFarFace(input: Pick<SlabStepInput, 'thickness' | 'exposedFaces' | 'depths'>): number[] {
+  const length = characteristicLength(input)
+  return input.depths.map((depth) => length - placeOf(input, depth).near)
+}
+
+/** What the slowest mode says of a slab with its film, or held. */
+export function slabLateNumbers(input: SlabStepInput, biot: number): Numbers {
+  if (biot === 0) return {}
+  return lateNumbers(
+    slabCourse({ diffusivity: input.diffusivity, length: characteristicLength(input), biot }, fromFarFace(input)),
+  )
 }
 
 export function solveSlab(input: SlabStepInput, unit: UnitBody, moments: readonly Moment[], drive: Drive): Solution {

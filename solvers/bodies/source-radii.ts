@@ -1,4 +1,4 @@
-import type { Check } from '../case.ts'
+import type { Check, Numbers } from '../case.ts'
 import type { Issue } from '../errors.ts'
 
 /** A source has no size: at it the temperature is infinite, so radii begin at less than an atom. */
@@ -18,6 +18,13 @@ export function fourierAtNearest(input: { diffusivity: number; radii: readonly n
   // √a·√t/r first: a·t can vanish, and its square over r² need not.
   const fourier = input.times.map((t) => ((Math.sqrt(input.diffusivity) * Math.sqrt(t)) / length) ** 2)
   return { fourier, length }
+}
+
+/** Time from which a straight line over ln t has the right slope to 1 % at the largest radius: 4at/r² = 100. */
+export function logarithmFrom({ diffusivity, radii }: { diffusivity: number; radii: readonly number[] }): Numbers {
+  const farthest = radii.reduce((most, r) => Math.max(most, r), 0)
+  const validFrom = ((25 * farthest) / diffusivity) * farthest
+  return farthest > 0 ? { validFrom } : {}
 }
 
 /** 4at/r² of the earliest time after 0 at the largest radius, which tells how good the logarithm is. */

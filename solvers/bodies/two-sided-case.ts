@@ -1,14 +1,13 @@
 import type { Check, Numbers } from '../case.ts'
 import type { Issue } from '../errors.ts'
 import { filmWarnings } from '../statement/film.ts'
+import { lateNumbers } from './late-course.ts'
 import { jumpsAt, startAtFaces } from './profile-along.ts'
 import { profileOf } from '../statement/initial-profile.ts'
-import { EPS } from '../math/rounding.ts'
-import { faceOf } from '../math/two-sided-body.ts'
-import { twoSidedModes } from '../math/two-sided-modes.ts'
 import type { OutputName } from '../outputs.ts'
-import { fluxOf, passesNoHeat, type Side, sideBiot } from '../statement/side.ts'
+import { fluxOf, passesNoHeat, type Side } from '../statement/side.ts'
 import { TwoSided, type TwoSidedProblem } from './two-sided.ts'
+import { twoSidedCourse } from './two-sided-late-course.ts'
 import type { Warning } from '../warnings.ts'
 
 /* What the descriptions of the cases with two sides share. */
@@ -66,49 +65,15 @@ export function refuseSteady(outputs: readonly OutputName[], reason: string, ref
 }
 
 export function twoSidedNumbers(problem: TwoSidedProblem): Numbers {
-  const { left, right, length, conductivity, diffusivity, times } = problem
-  const body = {
-    left: faceOf(sideBiot(left, length, conductivity)),
-    right: faceOf(sideBiot(right, length, conductivity)),
-  }
-  const slowest = twoSidedModes(body, 1).roots[0]!
+  const { length, diffusivity, times } = problem
   const scale = diffusivity / (length * length)
-  return {
-    fourier: times.map((time) => scale * time),
-    length,
-    ...(slowest > 0 ? { slowestTimeConstant: 1 / (slowest * slowest * scale) } : {}),
-  }
+  return { fourier: times.map((time) => scale * time), length, ...lateNumbers(twoSidedCourse(new TwoSided(problem))) }
 }
 
 export function insideCheck(depths: readonly number[], thickness: number): Check {
   const value = depths.reduce((most, depth) => Math.max(most, depth), 0)
   const text = 'Every depth lies inside the body.'
   return { id: 'depth-inside-body', holds: true, value, limit: thickness, text }
-}
-
-/**
- * The mean must rise as fast as what enters and is released says: at the last time, by a central difference over a thousandth of it, as a
- * share of all that passes.
- */
-export function balanceCheck(problem: TwoSidedProblem, released: (time: number) => number = () => 0): Check[] {
-  const last = problem.times.reduce((most, t) => Math.max(most, t), 0)
-  const step = last * 1e-3
-  const pulse = problem.pulse ?? Infinity
-  const turns = last - step <= pulse && last + step > pulse
-  if (!(step > 1e-290) || turns) return []
-  const slab = new TwoSided({ ...problem, depths: [], times: [last - step, last, last + step] })
-  const [before, after] = [slab.at(0).heat(), slab.at(2).heat()]
-  const [left, right] = [slab.at(1).leftFlux().value, slab.at(1).rightFlux().value]
-  const source = (released(last + step) - released(last - step)) / (2 * step)
-  const stored = (after.value - before.value) / (2 * step)
-  const size = Math.abs(left) + Math.abs(right) + Math.abs(source)
-  if (!(size > 1e-280)) return []
-  const rounding =
-    (before.error + after.error + 8 * EPS * (Math.abs(before.value) + Math.abs(after.value))) / (2 * step)
-  const value = Math.abs(stored - left - right - source) / size
-  const limit = 1e-4 + rounding / size
-  const text = 'Heat is stored as fast as it enters and is released, at the last time, as a share of all that passes.'
-  return [{ id: 'heat-balance', holds: value <= limit, value, limit, text }]
 }
 
 export function sideWarnings(...sides: readonly Side[]): Warning[] {

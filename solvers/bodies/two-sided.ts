@@ -37,11 +37,11 @@ export interface TwoSidedMoment {
 }
 
 export class TwoSided {
-  private readonly problem: TwoSidedProblem
-  private readonly profile: InitialProfile
-  private readonly reference: number
-  private readonly places: Place[]
-  private readonly lasting: TwoSidedSlab
+  readonly problem: TwoSidedProblem
+  readonly profile: InitialProfile
+  readonly reference: number
+  readonly places: Place[]
+  readonly lasting: TwoSidedSlab
   private readonly pulsed: TwoSidedSlab | undefined
   /** What the rounding of the temperatures given may move any temperature by. */
   private readonly rounding: number

@@ -37,7 +37,8 @@ export class LateSlab {
   readonly load: Load
   /** The mode whose z² is nearest to the rate of the source. */
   private readonly resonant: number
-  private readonly amounts: Float64Array
+  /** Factor of each φₙ at time 0, the drives' steady profile taken off; the slowest of two faces without film aside. */
+  readonly amounts: Float64Array
   private readonly sizes: Float64Array
   private readonly slacks: Float64Array
 

@@ -3,6 +3,7 @@ import type { Load, Moment, Place, TwoSidedBody } from './two-sided-body.ts'
 import { crossingFlux } from './two-sided-crossing.ts'
 import { EarlyValues } from './two-sided-early.ts'
 import { LateSlab, termsAt } from './two-sided-late.ts'
+import { modeAt } from './two-sided-modes.ts'
 import { LateValues } from './two-sided-late-values.ts'
 
 /** What a slab between two faces is asked at one time. */
@@ -58,13 +59,24 @@ export class TwoSidedSlab {
   }
 
   /** The end state, where there is one: with faces that pass no heat, what the start and balanced fluxes leave. */
-  steady({ near }: Place): Estimate {
+  steady({ near }: Pick<Place, 'near'>): Estimate {
     const { steady, apart, modes, start } = this.late
     if (steady) return { value: steady.at(near), error: steady.error, method: 'closed-form' }
     const { size, rate } = this.load.source
     const released = rate > 0 ? size / rate : 0
     const value = start / modes.norms[0]! + apart.at(near) + released
     return { value, error: apart.error + 24 * EPS * (Math.abs(start) + Math.abs(released)), method: 'closed-form' }
+  }
+
+  /** The n-th mode: z², what it is at a place at time 0, and the most it is anywhere. */
+  mode(n: number) {
+    const { modes, amounts } = this.late
+    const [z, amount] = [modes.roots[n]!, amounts[n]!]
+    return {
+      square: z * z,
+      at: ({ near }: Pick<Place, 'near'>) => amount * modeAt(this.body.left, z, near),
+      most: Math.abs(amount) * modes.sizes[n]!,
+    }
   }
 
   terms(m: Moment): number {

@@ -61,6 +61,10 @@ function prepare(c: Case, body: unknown, defaultDetail: 'full' | 'compact'): Cal
   return { values: 1, size: work(c, course), points, run: () => answer(c, q, found, points, detail === 'compact') }
 }
 
+/** Which side is to be taken depends on what hangs on it. */
+const CONSERVATIVE =
+  'The greater depth where a place must lie beyond the change, the lesser where the change must come as far.'
+
 function answer(c: Case, q: Question, asked: Asked, points: number, compact: boolean) {
   const { axis, time, target, extent } = asked
   const { all, one, perTenth } = words[axis]
@@ -98,6 +102,7 @@ function answer(c: Case, q: Question, asked: Asked, points: number, compact: boo
     units: { [all]: 'm', target: 'Cel', gradient: 'K/m', [perTenth]: 'm' },
     result,
     bound,
+    conservativeSide: CONSERVATIVE,
   })
 }
 

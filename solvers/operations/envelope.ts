@@ -65,6 +65,14 @@ export const tail = {
   warnings: z.array(warningSchema),
   cautions: z.array(cautionSchema),
   sources: z.array(z.string()),
+  errs: z.enum(['early', 'late']).optional().meta({
+    description:
+      'Where the case simplifies the body that was stated: whether its answers reach a temperature early or late.',
+  }),
+  conservativeSide: z
+    .string()
+    .optional()
+    .meta({ description: 'Of a question: which side of its answer is the conservative one, by what it is asked for.' }),
 }
 
 /** The compact form of an answer whose full form is known. */
@@ -97,7 +105,7 @@ export function echoOf(input: Record<string, unknown>): Record<string, unknown> 
 export const scopeOf = {
   kind: 'estimated',
   scope: 'numerical',
-  note: 'Inputs and model decide the real error; this bound is of the arithmetic alone.',
+  note: 'Inputs and model decide the real error; see uncertainty. This bound is of the arithmetic alone.',
 } as const
 
 export function warningsOf(c: Case, input: Resolved, echoed: Record<string, unknown>): Warning[] {
@@ -105,13 +113,16 @@ export function warningsOf(c: Case, input: Resolved, echoed: Record<string, unkn
 }
 
 /** Everything that follows the accuracy of an answer. */
-export function tailOf(c: Case, input: Resolved, warnings: readonly Warning[]) {
+export function tailOf(c: Case, input: Resolved, warnings: readonly Warning[], conservativeSide?: string) {
+  const errs = c.errs?.(input)
   return {
     numbers: c.numbers(input),
     checks: c.checks(input),
     warnings,
     cautions: c.cautions.map((id) => ({ id, ...cautions[id] })),
     sources: [...c.sources],
+    ...(errs === undefined ? {} : { errs }),
+    ...(conservativeSide === undefined ? {} : { conservativeSide }),
   }
 }
 

@@ -48,6 +48,10 @@ function prepare(c: Case, body: unknown, defaultDetail: 'full' | 'compact'): Cal
   }
 }
 
+/** Which side is to be taken depends on what hangs on it. */
+const CONSERVATIVE =
+  'The larger maximum against a limit from above, the smaller minimum against one from below; with a bound, the bound added.'
+
 function answer(c: Case, q: Question, from: number, until: number, points: number, compact: boolean) {
   const curve = overTime(c, q.asked, q.output)
   const looked = scan(curve, timeGrid(q.course, from, until))
@@ -67,6 +71,7 @@ function answer(c: Case, q: Question, from: number, until: number, points: numbe
     units: { value: unit, time: 's' },
     result,
     bound,
+    conservativeSide: CONSERVATIVE,
   })
 }
 

@@ -13,6 +13,7 @@ interface Found {
   units: Record<string, string>
   result: Record<string, unknown>
   bound: Record<string, { absolute: number; relative: number }>
+  conservativeSide: string
 }
 
 export function foundAnswer(c: Case, operation: string, found: Found) {
@@ -24,7 +25,7 @@ export function foundAnswer(c: Case, operation: string, found: Found) {
     units,
     result,
     accuracy: { method: ['root'], bound, ...scopeOf },
-    ...tailOf(c, resolved, warnings),
+    ...tailOf(c, resolved, warnings, found.conservativeSide),
   }
 }
 

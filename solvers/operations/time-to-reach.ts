@@ -111,6 +111,10 @@ interface Target {
   end: number | null
 }
 
+/** Which side is to be taken depends on what hangs on it. */
+const CONSERVATIVE =
+  'The later time where the target must have been reached by then, the earlier where it must not have been.'
+
 function answer(c: Case, q: Question, curve: Curve, asked: Target, points: number, compact: boolean) {
   const { target, until, end } = asked
   const looked = scan(curve, timeGrid(q.course, 0, until ?? LONGEST))
@@ -136,7 +140,8 @@ function answer(c: Case, q: Question, curve: Curve, asked: Target, points: numbe
   const resolved = times.length > 0 ? c.resolve({ ...q.asked, times, outputs: [q.output] }) : q.resolved
   const own = { quantity: q.output, target, sense, ...(until === undefined ? {} : { until }) }
   const echoed = echoedOf(c, q, own)
-  return foundAnswer(c, 'time-to-reach', { points, compact, echoed, resolved, units: unitsOf(q), result, bound })
+  const found = { points, compact, echoed, resolved, units: unitsOf(q), result, bound, conservativeSide: CONSERVATIVE }
+  return foundAnswer(c, 'time-to-reach', found)
 }
 
 /** The input as the case echoes it, with the fields of the operation in place of times, places and outputs. */

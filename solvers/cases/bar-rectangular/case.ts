@@ -1,3 +1,5 @@
+import { productBalance } from '../../bodies/product-balance.ts'
+import { heldNumbers } from '../../bodies/held-face.ts'
 import { defineCase } from '../../case.ts'
 import {
   absentFluxes,
@@ -10,12 +12,12 @@ import {
   type ProductResolved,
   rangeAcross,
   refusePoints,
-  slowestOf,
+  productLateNumbers,
   width,
 } from '../../bodies/product-case.ts'
 import { driveFields, productWarnings, resolveDrive } from '../../bodies/product-drive.ts'
-import { productEnd, filmIn } from '../../bodies/product-films.ts'
-import { slabRate } from '../../bodies/product-step.ts'
+import { filmIn, productEnd } from '../../bodies/product-films.ts'
+import { slabDirection, reachOf } from '../../bodies/product-step.ts'
 import { resolveSolid } from '../../statement/solid.ts'
 import { solve, type BarInput } from './solve.ts'
 
@@ -128,11 +130,29 @@ export default defineCase<typeof fields, Body>({
   },
   solve,
   end: productEnd,
-  numbers: (input) =>
-    slowestOf([
-      slabRate(input, { size: input.width, faces: input.widthFaces }, filmIn(input, 'width')),
-      slabRate(input, { size: input.height, faces: input.heightFaces }, filmIn(input, 'height')),
+  numbers: (input) => ({
+    ...productLateNumbers([
+      slabDirection(input, { size: input.width, faces: input.widthFaces }, 'x', filmIn(input, 'width')),
+      slabDirection(input, { size: input.height, faces: input.heightFaces }, 'y', filmIn(input, 'height')),
     ]),
-  checks: (input) => [pointsCheck(input, Math.max(input.width, input.height))],
+    ...heldNumbers(
+      input,
+      Math.min(
+        reachOf({ size: input.width, faces: input.widthFaces }),
+        reachOf({ size: input.height, faces: input.heightFaces }),
+      ),
+    ),
+  }),
+  checks: (input) => [
+    pointsCheck(input, Math.max(input.width, input.height)),
+    ...productBalance(solve, input, input.width * input.height, [
+      { shape: 'slab', reach: reachOf({ size: input.width, faces: input.widthFaces }), film: filmIn(input, 'width') },
+      {
+        shape: 'slab',
+        reach: reachOf({ size: input.height, faces: input.heightFaces }),
+        film: filmIn(input, 'height'),
+      },
+    ]),
+  ],
   warnings: productWarnings,
 })

@@ -1,3 +1,5 @@
+import { productBalance } from '../../bodies/product-balance.ts'
+import { heldNumbers } from '../../bodies/held-face.ts'
 import { defineCase } from '../../case.ts'
 import {
   absentFluxes,
@@ -11,12 +13,12 @@ import {
   type ProductResolved,
   rangeAcross,
   refusePoints,
-  slowestOf,
+  productLateNumbers,
   width,
 } from '../../bodies/product-case.ts'
 import { driveFields, productWarnings, resolveDrive } from '../../bodies/product-drive.ts'
-import { productEnd, filmIn } from '../../bodies/product-films.ts'
-import { slabRate } from '../../bodies/product-step.ts'
+import { filmIn, productEnd } from '../../bodies/product-films.ts'
+import { slabDirection, reachOf } from '../../bodies/product-step.ts'
 import { resolveSolid } from '../../statement/solid.ts'
 import { solve, type BrickInput } from './solve.ts'
 
@@ -143,12 +145,36 @@ export default defineCase<typeof fields, Body>({
   },
   solve,
   end: productEnd,
-  numbers: (input) =>
-    slowestOf([
-      slabRate(input, { size: input.width, faces: input.widthFaces }, filmIn(input, 'width')),
-      slabRate(input, { size: input.height, faces: input.heightFaces }, filmIn(input, 'height')),
-      slabRate(input, { size: input.length, faces: input.lengthFaces }, filmIn(input, 'length')),
+  numbers: (input) => ({
+    ...productLateNumbers([
+      slabDirection(input, { size: input.width, faces: input.widthFaces }, 'x', filmIn(input, 'width')),
+      slabDirection(input, { size: input.height, faces: input.heightFaces }, 'y', filmIn(input, 'height')),
+      slabDirection(input, { size: input.length, faces: input.lengthFaces }, 'z', filmIn(input, 'length')),
     ]),
-  checks: (input) => [pointsCheck(input, Math.max(input.width, input.height, input.length))],
+    ...heldNumbers(
+      input,
+      Math.min(
+        reachOf({ size: input.width, faces: input.widthFaces }),
+        reachOf({ size: input.height, faces: input.heightFaces }),
+        reachOf({ size: input.length, faces: input.lengthFaces }),
+      ),
+    ),
+  }),
+  checks: (input) => [
+    pointsCheck(input, Math.max(input.width, input.height, input.length)),
+    ...productBalance(solve, input, input.width * input.height * input.length, [
+      { shape: 'slab', reach: reachOf({ size: input.width, faces: input.widthFaces }), film: filmIn(input, 'width') },
+      {
+        shape: 'slab',
+        reach: reachOf({ size: input.height, faces: input.heightFaces }),
+        film: filmIn(input, 'height'),
+      },
+      {
+        shape: 'slab',
+        reach: reachOf({ size: input.length, faces: input.lengthFaces }),
+        film: filmIn(input, 'length'),
+      },
+    ]),
+  ],
   warnings: productWarnings,
 })

@@ -1,7 +1,8 @@
+import { heatBalance } from '../../bodies/heat-balance.ts'
 import { defineCase } from '../../case.ts'
 import { film } from '../../statement/fields.ts'
 import { filmWarnings } from '../../statement/film.ts'
-import { cylinder, slowestMode } from '../../bodies/radial-step.ts'
+import { cylinder, radialLateNumbers } from '../../bodies/radial-step.ts'
 import {
   allRoundOutputs,
   fourierOf,
@@ -93,9 +94,13 @@ export default defineCase<typeof fields, Resolved>({
   },
   solve,
   numbers(input) {
-    const late = slowestMode(cylinder, input, biotOf(input))
+    const late = radialLateNumbers(cylinder, input, biotOf(input))
     return { biot: biotOf(input), fourier: fourierOf(input), length: input.radius, ...late }
   },
-  checks: (input) => [insideCheck(input), lumpedCheck(biotOf(input))],
+  checks: (input) => [
+    insideCheck(input),
+    lumpedCheck(biotOf(input)),
+    ...heatBalance(solve, input, { surfaceHeatFlux: 2 * Math.PI * input.radius }),
+  ],
   warnings: (input) => filmWarnings(input.filmCoefficient),
 })

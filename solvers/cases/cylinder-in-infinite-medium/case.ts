@@ -1,3 +1,4 @@
+import { contentBalance, heatBalance } from '../../bodies/heat-balance.ts'
 import { z } from 'zod'
 import { type Check, defineCase, type Resolved } from '../../case.ts'
 import type { Issue } from '../../errors.ts'
@@ -194,9 +195,12 @@ export default defineCase<typeof fields, MediumResolved>({
     const { radius, conductivity, diffusivity, times, boundary } = input
     const fourier = times.map((time) => ((Math.sqrt(diffusivity) * Math.sqrt(time)) / radius) ** 2)
     const film = boundary.kind === 'convection' ? { biot: (boundary.filmCoefficient * radius) / conductivity } : {}
-    return { ...film, fourier, length: radius }
+    const until = input.length === undefined ? {} : { validUntil: endsFeltAfter(input) }
+    return { ...film, fourier, length: radius, ...until }
   },
-  checks: (input) => endsNotFelt(input),
+  checks: (input) => [...endsNotFelt(input), ...balance(input)],
+  // Heat that passes beyond the ends is missing at the middle.
+  errs: ({ length }) => (length === undefined ? undefined : 'early'),
   warnings: (input) => [
     ...endWarnings(input),
     ...(input.boundary.kind === 'convection' ? filmWarnings(input.boundary.filmCoefficient) : []),
@@ -250,4 +254,16 @@ function endWarnings(input: MediumResolved): Warning[] {
   if (latestOf(input) <= value) return []
   const text = `After ${value.toPrecision(3)} s the ends of the cylinder are felt at its middle: heat leaves beyond them too, and the change is overstated.`
   return [{ code: 'end-effects', text, value }]
+}
+
+/** Where the flux is given, its heat says nothing of the temperatures: what they hold is summed around the cylinder. */
+function balance(input: MediumResolved): Check[] {
+  const { boundary, radius, diffusivity, volumetricHeatCapacity } = input
+  const brought = boundary.kind === 'temperature' || (boundary.kind === 'convection' && boundary.filmCoefficient > 0)
+  if (brought) return heatBalance(solve, input, { surfaceHeatFlux: 2 * Math.PI * radius })
+  return contentBalance(solve, input, {
+    diffusivity,
+    capacityAt: (depth) => 2 * Math.PI * (radius + depth) * volumetricHeatCapacity,
+    places: (depths) => ({ radii: depths.map((depth) => radius + depth) }),
+  })
 }

@@ -1,6 +1,8 @@
+import { heldNumbers } from '../../bodies/held-face.ts'
+import { heatBalance } from '../../bodies/heat-balance.ts'
 import { defineCase } from '../../case.ts'
 import { surfaceTemperature } from '../../statement/fields.ts'
-import { cylinder, slowestMode } from '../../bodies/radial-step.ts'
+import { cylinder, radialLateNumbers } from '../../bodies/radial-step.ts'
 import {
   allRoundOutputs,
   fourierOf,
@@ -76,9 +78,12 @@ export default defineCase<typeof fields, Resolved>({
   },
   solve,
   numbers(input) {
-    const late = slowestMode(cylinder, input, Infinity)
-    return { fourier: fourierOf(input), length: input.radius, ...late }
+    const late = radialLateNumbers(cylinder, input, Infinity)
+    return { fourier: fourierOf(input), length: input.radius, ...late, ...heldNumbers(input, input.radius) }
   },
-  checks: (input) => [insideCheck(input)],
+  checks: (input) => [
+    insideCheck(input),
+    ...heatBalance(solve, input, { surfaceHeatFlux: 2 * Math.PI * input.radius }),
+  ],
   warnings: () => [],
 })

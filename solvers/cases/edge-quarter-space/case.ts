@@ -1,3 +1,4 @@
+import { heldHalfSpaceNumbers } from '../../bodies/held-face.ts'
 import { defineCase } from '../../case.ts'
 import {
   absentHeat,
@@ -96,7 +97,7 @@ export default defineCase<typeof fields, Body>({
   },
   solve,
   end: productEnd,
-  numbers: () => ({}),
+  numbers: (input) => (input.surfaceTemperature === undefined ? {} : heldHalfSpaceNumbers(input)),
   checks: (input) => [pointsCheck(input, 1e5)],
   warnings: productWarnings,
 })

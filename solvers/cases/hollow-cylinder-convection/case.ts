@@ -1,4 +1,5 @@
-import { type Check, defineCase, type Numbers, type Resolved } from '../../case.ts'
+import { heatBalance } from '../../bodies/heat-balance.ts'
+import { defineCase, type Numbers, type Resolved } from '../../case.ts'
 import type { Issue } from '../../errors.ts'
 import { initialTemperature, solid } from '../../statement/fields.ts'
 import { EPS } from '../../math/rounding.ts'
@@ -6,9 +7,11 @@ import type { OutputName } from '../../outputs.ts'
 import { quantity } from '../../statement/quantity.ts'
 import { fluxOf, passesNoHeat, type Side } from '../../statement/side.ts'
 import { sideField } from '../../statement/side-field.ts'
+import { lateNumbers } from '../../bodies/late-course.ts'
 import { resolveSolid } from '../../statement/solid.ts'
 import { refuseSteady, sideWarnings } from '../../bodies/two-sided-case.ts'
-import { type HollowInput, momentOf, slowestOf, solve, wallOf } from './solve.ts'
+import { lateOf } from './late.ts'
+import { type HollowInput, momentOf, solve, wallOf } from './solve.ts'
 
 type HollowResolved = HollowInput & Resolved
 
@@ -153,7 +156,11 @@ export default defineCase<typeof fields, HollowResolved>({
   },
   solve,
   numbers,
-  checks: (input) => balance(input),
+  checks: (input) =>
+    heatBalance(solve, input, {
+      innerHeatFlux: 2 * Math.PI * input.innerRadius,
+      outerHeatFlux: 2 * Math.PI * input.outerRadius,
+    }),
   warnings: ({ inner, outer }) => sideWarnings(inner, outer),
 })
 
@@ -198,36 +205,11 @@ function refuseSingular(input: HollowResolved, refuse: (issue: Issue) => void): 
 
 function numbers(input: HollowResolved): Numbers {
   const length = wallOf(input)
-  const slowest = slowestOf(input)
   const drift = driftOf(input)
   return {
     fourier: input.times.map((time) => momentOf(input, time).fourier),
     length,
-    slowestTimeConstant: (length / slowest / input.diffusivity) * length,
+    ...lateNumbers(lateOf(input)),
     ...(drift === 0 ? {} : { driftRate: drift }),
   }
-}
-
-/** Heat must be stored as fast as it enters: at the last time, by a central difference over a thousandth of it, as a share of all that passes. */
-function balance(input: HollowResolved): Check[] {
-  const last = input.times.reduce((most, t) => Math.max(most, t), 0)
-  const step = last * 1e-3
-  if (!(step > 1e-290)) return []
-  const times = [last - step, last, last + step]
-  const outputs: OutputName[] = ['innerHeatFlux', 'outerHeatFlux', 'heatGained']
-  const { innerHeatFlux, outerHeatFlux, heatGained } = solve({ ...input, radii: [], times, outputs }).outputs
-  const at = (values: unknown, i: number) => (values as number[])[i]!
-  const around = 2 * Math.PI
-  const entering = around * input.innerRadius * at(innerHeatFlux!.values, 1)
-  const leaving = around * input.outerRadius * at(outerHeatFlux!.values, 1)
-  const { values, bound } = heatGained!
-  const stored = (at(values, 2) - at(values, 0)) / (2 * step)
-  const passed = Math.abs(entering) + Math.abs(leaving)
-  if (!(passed > 1e-280)) return []
-  const value = Math.abs(stored - entering - leaving) / passed
-  // The two heats are told to their bounds, and what is left between them over a short step no better.
-  const told = (bound.absolute + bound.relative * Math.abs(at(values, 2))) / step
-  const limit = 1e-4 + told / passed
-  const text = 'Heat is stored as fast as it enters, at the last time, as a share of all that passes.'
-  return [{ id: 'heat-balance', holds: value <= limit, value, limit, text }]
 }

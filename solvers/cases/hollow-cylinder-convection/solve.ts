@@ -1,5 +1,5 @@
 import { fieldOutputs, grid, history, profile } from '../../bodies/field-outputs.ts'
-import { type Annulus, annulusModes, type Face } from '../../math/annulus-modes.ts'
+import type { Annulus, Face } from '../../math/annulus-modes.ts'
 import { type AnnulusMoment, AnnulusResponse } from '../../math/annulus-response.ts'
 import type { FaceDrive } from '../../math/annulus-start.ts'
 import { EPS, type Estimate } from '../../math/rounding.ts'
@@ -119,17 +119,12 @@ function heldAt({ inner, outer, innerRadius, outerRadius }: HollowInput, r: numb
   return side?.kind === 'temperature' ? side.surfaceTemperature : undefined
 }
 
-function annulusOf(input: HollowInput): Annulus {
+export function annulusOf(input: HollowInput): Annulus {
   return {
     innerRadius: input.innerRadius / wallOf(input),
     inner: faceOf(input.inner, input),
     outer: faceOf(input.outer, input),
   }
-}
-
-/** The smallest eigenvalue above zero. */
-export function slowestOf(input: HollowInput): number {
-  return annulusModes(annulusOf(input), [], Infinity).at(-1)!.w
 }
 
 function responseOf(input: HollowInput): AnnulusResponse {
@@ -148,7 +143,7 @@ function faceOf(side: Side, input: HollowInput): Face {
     : { held: false, film: (filmOf(side) * wallOf(input)) / input.conductivity }
 }
 
-function driveOf(side: Side, input: HollowInput): FaceDrive {
+export function driveOf(side: Side, input: HollowInput): FaceDrive {
   const { initialTemperature: initial, conductivity } = input
   if (side.kind === 'temperature') {
     const given = Math.abs(side.surfaceTemperature) + Math.abs(initial)

@@ -2,7 +2,7 @@ import { type Check, defineCase, type Resolved } from '../../case.ts'
 import { initialTemperature, solid } from '../../statement/fields.ts'
 import { quantity } from '../../statement/quantity.ts'
 import { resolveSolid } from '../../statement/solid.ts'
-import { fourierAtNearest, lateForLogarithm, refuseAtSource } from '../../bodies/source-radii.ts'
+import { fourierAtNearest, lateForLogarithm, logarithmFrom, refuseAtSource } from '../../bodies/source-radii.ts'
 import { solve, type LineSourceInput } from './solve.ts'
 
 interface LineSourceResolved extends LineSourceInput, Resolved {
@@ -97,9 +97,11 @@ export default defineCase<typeof fields, LineSourceResolved>({
   },
   solve,
   end: ({ linePower, initialTemperature }) => (linePower === 0 ? initialTemperature : null),
-  numbers: fourierAtNearest,
+  numbers: (input) => ({ ...fourierAtNearest(input), ...logarithmFrom(input) }),
   checks: (input) => [...lateForLogarithm(input), ...probeChecks(input)],
   warnings: () => [],
+  // A probe gives off its whole power at its face at once, a line only once the heat has come as far.
+  errs: ({ probeRadius }) => (probeRadius === undefined ? undefined : 'late'),
 })
 
 function probeChecks({ probeRadius, diffusivity, radii, times }: LineSourceResolved): Check[] {

@@ -1,8 +1,9 @@
-import { defineCase, type Resolved } from '../../case.ts'
+import { lumpedBalance } from '../../bodies/lumped-balance.ts'
+import { type Check, defineCase, type Resolved } from '../../case.ts'
 import type { Issue } from '../../errors.ts'
 import { film, initialTemperature } from '../../statement/fields.ts'
 import { filmWarnings } from '../../statement/film.ts'
-import { biotWarnings, lumpedNumbers, oneTemperatureWillDo } from '../../bodies/lumped-biot.ts'
+import { biotWarnings, lumpedErrs, lumpedNumbers, oneTemperatureWillDo } from '../../bodies/lumped-biot.ts'
 import { type LumpedBody, noBody, resolveBody } from '../../bodies/lumped-body.ts'
 import { lumpedBody } from '../../statement/lumped-fields.ts'
 import type { OutputName } from '../../outputs.ts'
@@ -149,8 +150,9 @@ export default defineCase<typeof fields, LumpedResolved>({
   echo({ body, filmCoefficient, initialTemperature, ambientTemperature, times, outputs }) {
     return { ...body.echo, filmCoefficient, initialTemperature, ambientTemperature, times, outputs }
   },
-  numbers: ({ biot, body, times }) => lumpedNumbers(body, biot, times),
-  checks: ({ biot }) => oneTemperatureWillDo(biot),
+  numbers: lumpedNumbers,
+  checks: (input) => [...oneTemperatureWillDo(input.biot), ...balance(input)],
+  errs: lumpedErrs,
   warnings: ({ filmCoefficient, biot }) => [...filmWarnings(filmCoefficient), ...biotWarnings(biot)],
   unitOf: (output, { body }) => (output === 'heatGained' ? body.heatUnit : undefined),
 })
@@ -170,4 +172,10 @@ function refuseEndless(
     const detail = `"${name}": with a film coefficient of 0 ${power === 0 ? 'the body never changes' : 'and a source the body never settles'}.`
     refuse({ pointer: `#/outputs/${i}`, code: 'output-not-defined', detail, accepted: 'temperature, heatGained' })
   })
+}
+
+/** What the film brings by the temperature of the body, and the source. */
+function balance(input: LumpedResolved): Check[] {
+  const { conductance, ambientTemperature, power } = input
+  return lumpedBalance(solve, input, (_, T) => [conductance * (ambientTemperature - T), power])
 }

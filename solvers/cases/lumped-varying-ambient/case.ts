@@ -1,9 +1,11 @@
+import { lumpedBalance } from '../../bodies/lumped-balance.ts'
+import { phaseAt, waveAt } from '../../math/cycle-phase.ts'
 import { ambientField, resolveAmbient } from '../../statement/ambient.ts'
-import { defineCase, type Resolved } from '../../case.ts'
+import { type Check, defineCase, type Numbers, type Resolved } from '../../case.ts'
 import { cycleEcho } from '../../statement/cycle.ts'
 import { film, initialTemperature } from '../../statement/fields.ts'
 import { filmWarnings } from '../../statement/film.ts'
-import { biotWarnings, lumpedNumbers, oneTemperatureWillDo } from '../../bodies/lumped-biot.ts'
+import { biotWarnings, lumpedErrs, lumpedNumbers, oneTemperatureWillDo } from '../../bodies/lumped-biot.ts'
 import { type LumpedBody, noBody, resolveBody } from '../../bodies/lumped-body.ts'
 import { lumpedBody } from '../../statement/lumped-fields.ts'
 import type { Ambient } from '../../math/lumped-response.ts'
@@ -132,12 +134,33 @@ export default defineCase<typeof fields, VaryingResolved>({
     return { ...body.echo, filmCoefficient, initialTemperature, ambient: ambientEcho(ambient), times, outputs }
   },
   end: ({ conductance, initialTemperature }) => (conductance === 0 ? initialTemperature : null),
-  numbers: ({ biot, body, times }) => lumpedNumbers(body, biot, times),
-  checks: ({ biot }) => oneTemperatureWillDo(biot),
+  numbers: (input) => ({ ...lumpedNumbers(input), ...settling(input) }),
+  checks: (input) => [...oneTemperatureWillDo(input.biot), ...balance(input)],
+  errs: lumpedErrs,
   warnings: ({ filmCoefficient, biot }) => [...filmWarnings(filmCoefficient), ...biotWarnings(biot)],
   unitOf: (output, { body }) => (output === 'heatGained' ? body.heatUnit : undefined),
 })
 
 function ambientEcho(ambient: Ambient): Record<string, unknown> {
   return ambient.kind === 'ramp' ? { ...ambient } : { kind: 'cycle', ...cycleEcho(ambient.cycle) }
+}
+
+/** What the film brings by the temperatures of fluid and body, over no more than a part of a cycle. */
+function balance(input: VaryingResolved): Check[] {
+  const { conductance, ambient } = input
+  const flows = (time: number, T: number) => [conductance * (ambientAt(ambient, time) - T)]
+  return lumpedBalance(solve, input, flows, ambient.kind === 'cycle' ? ambient.cycle.period / 4 : Infinity)
+}
+
+function ambientAt(ambient: Ambient, time: number): number {
+  if (ambient.kind === 'ramp') return ambient.start + ambient.rampRate * time
+  const { cycle } = ambient
+  return cycle.cycleMean + cycle.sign * cycle.amplitude * waveAt(phaseAt(time, cycle), 0, 0).value
+}
+
+/** Cycles after which the start is forgotten to 1 % of the amplitude: it fades as one exponential. */
+function settling({ capacity, conductance, ambient }: VaryingResolved): Numbers {
+  if (ambient.kind !== 'cycle' || conductance === 0) return {}
+  const cyclesToSettle = Math.ceil((Math.log(100) * (capacity / conductance)) / ambient.cycle.period)
+  return Number.isFinite(cyclesToSettle) ? { cyclesToSettle } : {}
 }

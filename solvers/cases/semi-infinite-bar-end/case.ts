@@ -1,3 +1,4 @@
+import { heldHalfSpaceNumbers } from '../../bodies/held-face.ts'
 import { defineCase } from '../../case.ts'
 import type { Issue } from '../../errors.ts'
 import { radius, thickness } from '../../statement/fields.ts'
@@ -180,7 +181,7 @@ export default defineCase<typeof fields, Body>({
   // The section is echoed by the fields that it was given in.
   echo: (input) => ({ ...input, section: undefined }),
   end: productEnd,
-  numbers: () => ({}),
+  numbers: (input) => (input.surfaceTemperature === undefined ? {} : heldHalfSpaceNumbers(input)),
   checks: (input) => [pointsCheck(input, ENDLESS[1])],
   warnings: productWarnings,
 })

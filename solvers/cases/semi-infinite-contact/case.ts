@@ -1,12 +1,13 @@
+import { deepCheck, type Thin, thinWarnings } from '../../bodies/deep-enough.ts'
+import { heatBalance } from '../../bodies/heat-balance.ts'
 import { z } from 'zod'
-import { type Check, defineCase, type Resolved } from '../../case.ts'
+import { defineCase, type Resolved } from '../../case.ts'
 import type { Issue } from '../../errors.ts'
 import { checkedThickness, initialTemperature, solid } from '../../statement/fields.ts'
 import type { OutputName } from '../../outputs.ts'
 import { quantity } from '../../statement/quantity.ts'
 import { refuseFluxAtStep } from '../../bodies/singular.ts'
 import { resolveSolid, type Solid } from '../../statement/solid.ts'
-import type { Warning } from '../../warnings.ts'
 import { solve, type ContactInput } from './solve.ts'
 
 interface ContactResolved extends ContactInput, Resolved {
@@ -149,8 +150,12 @@ export default defineCase<typeof fields, ContactResolved>({
     const until = thinBodies(input).map(({ until }) => until)
     return until.length === 0 ? {} : { validUntil: Math.min(...until) }
   },
-  checks: (input) => thinBodies(input).map((thin) => echoCheck(input, thin)),
-  warnings: (input) => thinBodies(input).flatMap((thin) => thinWarnings(input, thin)),
+  checks: (input) => [
+    ...thinBodies(input).map((thin) => deepCheck(input.times, thin)),
+    ...heatBalance(solve, input, { surfaceHeatFlux: 1 }),
+  ],
+  warnings: (input) => thinBodies(input).flatMap((thin) => thinWarnings(input.times, thin)),
+  errs: errsOf,
 })
 
 const given = <K extends string>(name: K, value: number | undefined) =>
@@ -168,37 +173,24 @@ function withIdeal(outputs: readonly OutputName[]): OutputName[] {
   return [...new Set([...ideal, ...outputs])]
 }
 
-interface Thin {
-  id: 'own-body-deep-enough' | 'other-body-deep-enough'
-  name: string
-  /** Time at which the echo of the far face is 1 %. */
-  until: number
-}
-
 function thinBodies({ thickness, diffusivity, other }: ContactResolved): Thin[] {
-  const untilOf = (length: number, a: number) => (0.3 * length * length) / a
-  const found: Thin[] = []
-  if (thickness !== undefined)
-    found.push({ id: 'own-body-deep-enough', name: 'own', until: untilOf(thickness, diffusivity) })
-  if (other.thickness !== undefined)
-    found.push({
-      id: 'other-body-deep-enough',
-      name: 'other',
-      until: untilOf(other.thickness, other.diffusivity),
-    })
-  return found
+  // 1 % of the echo of the far face has come back to the contact.
+  const thin = (whose: 'own' | 'other', length: number | undefined, a: number): Thin[] =>
+    length === undefined
+      ? []
+      : [
+          {
+            id: `${whose}-body-deep-enough`,
+            name: `The ${whose} body`,
+            until: (0.3 * length * length) / a,
+            thickness: length,
+          },
+        ]
+  return [...thin('own', thickness, diffusivity), ...thin('other', other.thickness, other.diffusivity)]
 }
 
-const lastOf = (times: readonly number[]) => times.reduce((most, t) => Math.max(most, t), 0)
-
-function echoCheck({ times }: ContactResolved, { id, name, until }: Thin): Check {
-  const value = lastOf(times)
-  const text = `At the last time the ${name} body feels less than 1 % of an echo from its far face.`
-  return { id, holds: value <= until, value, limit: until, text }
-}
-
-function thinWarnings({ times }: ContactResolved, { name, until }: Thin): Warning[] {
-  if (lastOf(times) <= until) return []
-  const text = `The ${name} body feels its far face after ${until} s; later answers are those of a deeper one. A heated or backed surface keeps rising.`
-  return [{ code: 'body-too-thin', text, value: until }]
+/** A thin own body warms through and is ahead of the answer; a thin other one is spent and lags it. */
+function errsOf({ thickness, other }: ContactResolved) {
+  if (thickness !== undefined) return other.thickness === undefined ? 'late' : undefined
+  return other.thickness === undefined ? undefined : 'early'
 }

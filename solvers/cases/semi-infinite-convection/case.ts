@@ -1,15 +1,23 @@
-import { defineCase, type Resolved } from '../../case.ts'
+import { deepEnough, depthWarnings, errsIfThin, halfSpaceNumbers } from '../../bodies/deep-enough.ts'
+import { contentBalance, heatBalance } from '../../bodies/heat-balance.ts'
+import { type Check, defineCase, type Resolved } from '../../case.ts'
 import type { Issue } from '../../errors.ts'
-import { film, imposedHeatFlux, initialTemperature, solid } from '../../statement/fields.ts'
+import { checkedThickness, film, imposedHeatFlux, initialTemperature, solid } from '../../statement/fields.ts'
 import { filmWarnings } from '../../statement/film.ts'
-import { changeHasArrived, penetrationDepth } from '../../bodies/half-space-reach.ts'
+import { changeHasArrived } from '../../bodies/half-space-reach.ts'
 import type { OutputName } from '../../outputs.ts'
 import { resolveSolid } from '../../statement/solid.ts'
 import { solve, type HalfSpaceInput } from './solve.ts'
 
-type HalfSpaceResolved = HalfSpaceInput & Resolved
+type HalfSpaceResolved = HalfSpaceInput & Resolved & { thickness?: number; volumetricHeatCapacity: number }
 
-const fields = { ...solid, initialTemperature, ...film, imposedHeatFlux: imposedHeatFlux.optional() }
+const fields = {
+  ...solid,
+  thickness: checkedThickness,
+  initialTemperature,
+  ...film,
+  imposedHeatFlux: imposedHeatFlux.optional(),
+}
 
 export default defineCase<typeof fields, HalfSpaceResolved>({
   id: 'semi-infinite-convection',
@@ -92,6 +100,7 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
     if (filmCoefficient === 0 && imposedHeatFlux) refuseFractions(outputs, refuse)
     return {
       ...body!,
+      ...(input.thickness === undefined ? {} : { thickness: input.thickness }),
       filmCoefficient,
       ...(imposedHeatFlux === undefined ? {} : { imposedHeatFlux }),
       initialTemperature,
@@ -106,10 +115,21 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
     if (h === 0) return flux === 0 ? initialTemperature : null
     return ambientTemperature + flux / h
   },
-  numbers: (input) => ({ penetrationDepth: penetrationDepth(input.diffusivity, input.times) }),
-  checks: (input) => [changeHasArrived(input)],
-  warnings: (input) => filmWarnings(input.filmCoefficient),
+  numbers: halfSpaceNumbers,
+  checks: (input) => [changeHasArrived(input), ...deepEnough(input), ...balance(input)],
+  warnings: (input) => [...depthWarnings(input), ...filmWarnings(input.filmCoefficient)],
+  errs: errsIfThin,
 })
+
+/** Without a film the flux is given, and its heat says nothing of the temperatures. */
+function balance(input: HalfSpaceResolved): Check[] {
+  if (input.filmCoefficient > 0) return heatBalance(solve, input, { surfaceHeatFlux: 1 })
+  return contentBalance(solve, input, {
+    diffusivity: input.diffusivity,
+    capacityAt: () => input.volumetricHeatCapacity,
+    places: (depths) => ({ depths }),
+  })
+}
 
 /** Without a film a flux heats for ever: there is no end state, and no share of it. */
 function refuseFractions(outputs: readonly OutputName[], refuse: (issue: Issue) => void): void {

@@ -2,7 +2,7 @@ import { defineCase, type Resolved } from '../../case.ts'
 import { cycleEcho, resolveCycle } from '../../statement/cycle.ts'
 import { cycle, film, solid } from '../../statement/fields.ts'
 import { filmWarnings } from '../../statement/film.ts'
-import { cycleIsFelt, periodicAbsent, periodicOutputs } from '../../bodies/periodic-half-space.ts'
+import { cycleIsFelt, periodicAbsent, periodicNumbers, periodicOutputs } from '../../bodies/periodic-half-space.ts'
 import { resolveSolid } from '../../statement/solid.ts'
 import { type AmbientInput, solve } from './solve.ts'
 
@@ -78,7 +78,7 @@ export default defineCase<typeof fields, AmbientResolved>({
   solve,
   end: () => null,
   echo: ({ cycle, ...rest }) => ({ ...rest, ...cycleEcho(cycle) }),
-  numbers: () => ({}),
+  numbers: periodicNumbers,
   checks: (input) => [cycleIsFelt(input)],
   warnings: (input) => filmWarnings(input.filmCoefficient),
 })

@@ -1,7 +1,13 @@
 import { defineCase, type Resolved } from '../../case.ts'
 import { cycleEcho, resolveCycle } from '../../statement/cycle.ts'
 import { cycle, solid } from '../../statement/fields.ts'
-import { cycleIsFelt, type PeriodicInput, periodicAbsent, periodicOutputs } from '../../bodies/periodic-half-space.ts'
+import {
+  cycleIsFelt,
+  type PeriodicInput,
+  periodicAbsent,
+  periodicNumbers,
+  periodicOutputs,
+} from '../../bodies/periodic-half-space.ts'
 import { resolveSolid } from '../../statement/solid.ts'
 import { solve } from './solve.ts'
 
@@ -74,7 +80,7 @@ export default defineCase<typeof fields, PeriodicResolved>({
   solve,
   end: () => null,
   echo: ({ cycle, ...rest }) => ({ ...rest, ...cycleEcho(cycle) }),
-  numbers: () => ({}),
+  numbers: periodicNumbers,
   checks: (input) => [cycleIsFelt(input)],
   warnings: () => [],
 })

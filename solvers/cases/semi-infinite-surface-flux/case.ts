@@ -1,14 +1,17 @@
+import { deepEnough, depthWarnings, errsIfThin, halfSpaceNumbers } from '../../bodies/deep-enough.ts'
+import { contentBalance } from '../../bodies/heat-balance.ts'
 import { defineCase, type Resolved } from '../../case.ts'
-import { imposedHeatFlux, initialTemperature, solid } from '../../statement/fields.ts'
-import { changeHasArrived, penetrationDepth } from '../../bodies/half-space-reach.ts'
+import { checkedThickness, imposedHeatFlux, initialTemperature, solid } from '../../statement/fields.ts'
+import { changeHasArrived } from '../../bodies/half-space-reach.ts'
 import { quantity } from '../../statement/quantity.ts'
 import { resolveSolid } from '../../statement/solid.ts'
 import { solve, type HalfSpaceInput } from './solve.ts'
 
-type HalfSpaceResolved = HalfSpaceInput & Resolved
+type HalfSpaceResolved = HalfSpaceInput & Resolved & { thickness?: number; volumetricHeatCapacity: number }
 
 const fields = {
   ...solid,
+  thickness: checkedThickness,
   initialTemperature,
   imposedHeatFlux,
   pulseDuration: quantity({
@@ -90,6 +93,7 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
     const { initialTemperature, imposedHeatFlux, pulseDuration, times, outputs } = input
     return {
       ...body!,
+      ...(input.thickness === undefined ? {} : { thickness: input.thickness }),
       initialTemperature,
       imposedHeatFlux,
       ...(pulseDuration === undefined ? {} : { pulseDuration }),
@@ -101,7 +105,16 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
   solve,
   end: ({ imposedHeatFlux, pulseDuration, initialTemperature }) =>
     imposedHeatFlux === 0 || pulseDuration !== undefined ? initialTemperature : null,
-  numbers: (input) => ({ penetrationDepth: penetrationDepth(input.diffusivity, input.times) }),
-  checks: (input) => [changeHasArrived(input)],
-  warnings: () => [],
+  numbers: halfSpaceNumbers,
+  checks: (input) => [
+    changeHasArrived(input),
+    ...deepEnough(input),
+    ...contentBalance(solve, input, {
+      diffusivity: input.diffusivity,
+      capacityAt: () => input.volumetricHeatCapacity,
+      places: (depths) => ({ depths }),
+    }),
+  ],
+  warnings: depthWarnings,
+  errs: errsIfThin,
 })

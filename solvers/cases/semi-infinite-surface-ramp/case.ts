@@ -1,15 +1,19 @@
-import { defineCase, type Resolved } from '../../case.ts'
-import { initialTemperature, solid } from '../../statement/fields.ts'
-import { changeHasArrived, penetrationDepth } from '../../bodies/half-space-reach.ts'
+import erfc from '@stdlib/math-base-special-erfc'
+import { deepEnough, depthWarnings, errsIfThin, halfSpaceNumbers } from '../../bodies/deep-enough.ts'
+import { heatBalance } from '../../bodies/heat-balance.ts'
+import { type Check, defineCase, type Resolved } from '../../case.ts'
+import { checkedThickness, initialTemperature, solid } from '../../statement/fields.ts'
+import { changeHasArrived } from '../../bodies/half-space-reach.ts'
 import { quantity } from '../../statement/quantity.ts'
 import { resolveSolid } from '../../statement/solid.ts'
 import { rampRate } from '../../statement/ramp.ts'
 import { solve, type HalfSpaceInput } from './solve.ts'
 
-type HalfSpaceResolved = HalfSpaceInput & Resolved
+type HalfSpaceResolved = HalfSpaceInput & Resolved & { thickness?: number; volumetricHeatCapacity: number }
 
 const fields = {
   ...solid,
+  thickness: checkedThickness,
   initialTemperature,
   rampRate,
   rampDuration: quantity({
@@ -80,6 +84,7 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
     const { initialTemperature, rampRate, rampDuration, times, outputs } = input
     return {
       ...body!,
+      ...(input.thickness === undefined ? {} : { thickness: input.thickness }),
       initialTemperature,
       rampRate,
       ...(rampDuration === undefined ? {} : { rampDuration }),
@@ -93,7 +98,34 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
     if (rampRate !== 0 && rampDuration === undefined) return null
     return initialTemperature + rampRate * (rampDuration ?? 0)
   },
-  numbers: (input) => ({ penetrationDepth: penetrationDepth(input.diffusivity, input.times) }),
-  checks: (input) => [changeHasArrived(input)],
-  warnings: () => [],
+  numbers: halfSpaceNumbers,
+  checks: (input) => [
+    changeHasArrived(input),
+    ...deepEnough(input),
+    ...stepAtHalfRamp(input),
+    ...heatBalance(
+      solve,
+      input,
+      { surfaceHeatFlux: 1 },
+      { instants: input.rampDuration === undefined ? [] : [input.rampDuration] },
+    ),
+  ],
+  warnings: depthWarnings,
+  errs: errsIfThin,
 })
+
+/** A ramp of a length is nearly a step in its middle: by how much they differ at the last time, as a share of the whole rise. */
+function stepAtHalfRamp(input: HalfSpaceResolved): Check[] {
+  const { diffusivity, depths, times, rampDuration: length, rampRate, initialTemperature } = input
+  const last = times.reduce((most, t) => Math.max(most, t), 0)
+  const since = length === undefined ? 0 : last - length / 2
+  if (length === undefined || since <= 0 || rampRate === 0 || depths.length === 0) return []
+  const { values } = solve({ ...input, times: [last], outputs: ['temperature'] }).outputs.temperature!
+  const reach = 2 * Math.sqrt(diffusivity) * Math.sqrt(since)
+  const value = depths.reduce((most, depth, j) => {
+    const ramp = ((values as number[][])[0]![j]! - initialTemperature) / (rampRate * length)
+    return Math.max(most, Math.abs(ramp - erfc(depth / reach)))
+  }, 0)
+  const text = 'A step in the middle of the ramp would give the last answers to 1 % of the whole rise.'
+  return [{ id: 'step-at-half-ramp', holds: value <= 0.01, value, limit: 0.01, text }]
+}

@@ -1,13 +1,16 @@
+import { heldHalfSpaceNumbers } from '../../bodies/held-face.ts'
+import { deepEnough, depthWarnings, errsIfThin, halfSpaceNumbers } from '../../bodies/deep-enough.ts'
+import { heatBalance } from '../../bodies/heat-balance.ts'
 import { defineCase, type Resolved } from '../../case.ts'
-import { initialTemperature, solid, surfaceTemperature } from '../../statement/fields.ts'
-import { changeHasArrived, penetrationDepth } from '../../bodies/half-space-reach.ts'
+import { checkedThickness, initialTemperature, solid, surfaceTemperature } from '../../statement/fields.ts'
+import { changeHasArrived } from '../../bodies/half-space-reach.ts'
 import { refuseFluxAtStep } from '../../bodies/singular.ts'
 import { resolveSolid } from '../../statement/solid.ts'
 import { solve, type HalfSpaceInput } from './solve.ts'
 
-type HalfSpaceResolved = HalfSpaceInput & Resolved
+type HalfSpaceResolved = HalfSpaceInput & Resolved & { thickness?: number; volumetricHeatCapacity: number }
 
-const fields = { ...solid, initialTemperature, surfaceTemperature }
+const fields = { ...solid, thickness: checkedThickness, initialTemperature, surfaceTemperature }
 
 export default defineCase<typeof fields, HalfSpaceResolved>({
   id: 'semi-infinite-surface-temperature',
@@ -70,10 +73,16 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
     const body = resolveSolid(input, refuse)
     refuseFluxAtStep(input, (depth) => depth === 0, refuse)
     const { initialTemperature, surfaceTemperature, times, outputs } = input
-    return { ...body!, initialTemperature, surfaceTemperature, depths: input.depths ?? [], times, outputs }
+    const checked = input.thickness === undefined ? {} : { thickness: input.thickness }
+    return { ...body!, ...checked, initialTemperature, surfaceTemperature, depths: input.depths ?? [], times, outputs }
   },
   solve,
-  numbers: (input) => ({ penetrationDepth: penetrationDepth(input.diffusivity, input.times) }),
-  checks: (input) => [changeHasArrived(input)],
-  warnings: () => [],
+  numbers: (input) => ({ ...halfSpaceNumbers(input), ...heldHalfSpaceNumbers(input) }),
+  checks: (input) => [
+    changeHasArrived(input),
+    ...deepEnough(input),
+    ...heatBalance(solve, input, { surfaceHeatFlux: 1 }),
+  ],
+  warnings: depthWarnings,
+  errs: errsIfThin,
 })

@@ -1,3 +1,5 @@
+import { productBalance } from '../../bodies/product-balance.ts'
+import { heldNumbers } from '../../bodies/held-face.ts'
 import { defineCase } from '../../case.ts'
 import { radius } from '../../statement/fields.ts'
 import {
@@ -11,11 +13,11 @@ import {
   type ProductResolved,
   rangeAcross,
   refusePoints,
-  slowestOf,
+  productLateNumbers,
 } from '../../bodies/product-case.ts'
 import { driveFields, productWarnings, resolveDrive } from '../../bodies/product-drive.ts'
-import { productEnd, filmIn } from '../../bodies/product-films.ts'
-import { cylinderRate, slabRate } from '../../bodies/product-step.ts'
+import { filmIn, productEnd } from '../../bodies/product-films.ts'
+import { cylinderDirection, slabDirection, reachOf } from '../../bodies/product-step.ts'
 import { resolveSolid } from '../../statement/solid.ts'
 import { solve, type ShortCylinderInput } from './solve.ts'
 
@@ -124,11 +126,19 @@ export default defineCase<typeof fields, Body>({
   },
   solve,
   end: productEnd,
-  numbers: (input) =>
-    slowestOf([
-      cylinderRate(input, input.radius, filmIn(input, 'side')),
-      slabRate(input, { size: input.height, faces: input.heightFaces }, filmIn(input, 'ends')),
+  numbers: (input) => ({
+    ...productLateNumbers([
+      cylinderDirection(input, input.radius, filmIn(input, 'side')),
+      slabDirection(input, { size: input.height, faces: input.heightFaces }, 'z', filmIn(input, 'ends')),
     ]),
-  checks: (input) => [pointsCheck(input, Math.max(input.radius, input.height))],
+    ...heldNumbers(input, Math.min(input.radius, reachOf({ size: input.height, faces: input.heightFaces }))),
+  }),
+  checks: (input) => [
+    pointsCheck(input, Math.max(input.radius, input.height)),
+    ...productBalance(solve, input, Math.PI * input.radius * input.radius * input.height, [
+      { shape: 'cylinder', reach: input.radius, film: filmIn(input, 'side') },
+      { shape: 'slab', reach: reachOf({ size: input.height, faces: input.heightFaces }), film: filmIn(input, 'ends') },
+    ]),
+  ],
   warnings: productWarnings,
 })

@@ -1,8 +1,9 @@
+import { heatBalance } from '../../bodies/heat-balance.ts'
 import { defineCase, type Resolved } from '../../case.ts'
 import { exposedFaces, film, initialTemperature, solid, thickness } from '../../statement/fields.ts'
 import { filmWarnings } from '../../statement/film.ts'
 import { resolveSolid } from '../../statement/solid.ts'
-import { characteristicLength } from '../../bodies/slab-step.ts'
+import { characteristicLength, slabLateNumbers } from '../../bodies/slab-step.ts'
 import { solve, type SlabInput } from './solve.ts'
 
 type SlabResolved = SlabInput & Resolved
@@ -109,7 +110,8 @@ export default defineCase<typeof fields, SlabResolved>({
   numbers(input) {
     const length = characteristicLength(input)
     const fourier = input.times.map((time) => (input.diffusivity / (length * length)) * time)
-    return { biot: biotOf(input), fourier, length }
+    const biot = biotOf(input)
+    return { biot, fourier, length, ...slabLateNumbers(input, biot) }
   },
   checks(input) {
     const deepest = input.depths.reduce((most, depth) => Math.max(most, depth), 0)
@@ -132,6 +134,7 @@ export default defineCase<typeof fields, SlabResolved>({
             ? 'The temperature differs across the body (Biot number above 0.1), so this case is needed.'
             : 'The Biot number is at most 0.1: one temperature would do here, and lumped-convection gives it.',
       },
+      ...heatBalance(solve, input, { surfaceHeatFlux: 1 }),
     ]
   },
   warnings: (input) => filmWarnings(input.filmCoefficient),

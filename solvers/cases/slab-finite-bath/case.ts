@@ -1,7 +1,9 @@
+import { heatBalance } from '../../bodies/heat-balance.ts'
 import { defineCase, type Resolved } from '../../case.ts'
 import { exposedFaces, film, initialTemperature, solid, thickness } from '../../statement/fields.ts'
 import { filmWarnings } from '../../statement/film.ts'
-import { bathModes } from '../../math/bath-roots.ts'
+import { bathCourse, lateNumbers } from '../../bodies/late-course.ts'
+import { fromFarFace } from '../../bodies/slab-step.ts'
 import { quantity } from '../../statement/quantity.ts'
 import { refuseFluxAtStep } from '../../bodies/singular.ts'
 import { resolveSolid } from '../../statement/solid.ts'
@@ -143,13 +145,8 @@ export default defineCase<typeof fields, BathResolved>({
     const fourier = input.times.map((time) => (input.diffusivity / (length * length)) * time)
     const biot = input.filmCoefficient === undefined ? {} : { biot: biotOf(input) }
     if (input.filmCoefficient === 0) return { ...biot, fourier, length }
-    const slowest = bathModes({ gamma: ratioOf(input), biot: biotOf(input) }, 1).roots[0]!
-    return {
-      ...biot,
-      fourier,
-      length,
-      slowestTimeConstant: (length * length) / input.diffusivity / (slowest * slowest),
-    }
+    const body = { diffusivity: input.diffusivity, length, biot: biotOf(input), gamma: ratioOf(input) }
+    return { ...biot, fourier, length, ...lateNumbers(bathCourse(body, fromFarFace(input))) }
   },
   checks: (input) => [
     insideCheck(input.depths, input.thickness),
@@ -160,6 +157,7 @@ export default defineCase<typeof fields, BathResolved>({
       limit: 100,
       text: 'Below a hundred times the heat capacity of the body, the bath changes by more than 1 % of the difference.',
     },
+    ...heatBalance(solve, input, { surfaceHeatFlux: 1 }),
   ],
   warnings: ({ filmCoefficient }) => (filmCoefficient === undefined ? [] : filmWarnings(filmCoefficient)),
 })

@@ -1,3 +1,4 @@
+import { heatBalance } from '../../bodies/heat-balance.ts'
 import { defineCase, type Resolved } from '../../case.ts'
 import { solid, thickness } from '../../statement/fields.ts'
 import { isSound } from '../../statement/initial-profile.ts'
@@ -5,7 +6,6 @@ import { initialProfile } from '../../statement/initial-profile-field.ts'
 import { sideField } from '../../statement/side-field.ts'
 import { resolveSolid } from '../../statement/solid.ts'
 import {
-  balanceCheck,
   insideCheck,
   netFlux,
   refuseFluxAtJump,
@@ -123,6 +123,9 @@ export default defineCase<typeof fields, ProfileResolved>({
     const drift = net ? { driftRate: net / (input.volumetricHeatCapacity * input.thickness) } : {}
     return { ...twoSidedNumbers(problemOf(input)), ...drift }
   },
-  checks: (input) => [insideCheck(input.depths, input.thickness), ...balanceCheck(problemOf(input))],
+  checks: (input) => [
+    insideCheck(input.depths, input.thickness),
+    ...heatBalance(solve, input, { leftHeatFlux: 1, rightHeatFlux: 1 }),
+  ],
   warnings: ({ left, right }) => sideWarnings(left, right),
 })

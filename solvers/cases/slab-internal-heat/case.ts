@@ -1,3 +1,4 @@
+import { heatBalance } from '../../bodies/heat-balance.ts'
 import { z } from 'zod'
 import { defineCase, type Resolved } from '../../case.ts'
 import { exposedFaces, film, solid, thickness } from '../../statement/fields.ts'
@@ -6,13 +7,7 @@ import { resolveStart } from '../../statement/initial-profile.ts'
 import { start } from '../../statement/initial-profile-field.ts'
 import { quantity } from '../../statement/quantity.ts'
 import { resolveSolid } from '../../statement/solid.ts'
-import {
-  balanceCheck,
-  insideCheck,
-  refuseFluxAtJump,
-  refuseSteady,
-  twoSidedNumbers,
-} from '../../bodies/two-sided-case.ts'
+import { insideCheck, refuseFluxAtJump, refuseSteady, twoSidedNumbers } from '../../bodies/two-sided-case.ts'
 import type { Warning } from '../../warnings.ts'
 import { type InternalHeatInput, lengthOf, problemOf, releasedBy, solve } from './solve.ts'
 
@@ -204,9 +199,14 @@ export default defineCase<typeof fields, InternalHeatResolved>({
     }
   },
   checks(input) {
-    const problem = problemOf(input)
-    const balance = balanceCheck(problem, (time) => releasedBy(input, time) * problem.length)
-    return [insideCheck(input.depths, input.thickness), ...balance]
+    const length = lengthOf(input)
+    // Of a body that is solved whole, heat is told for one of its two faces.
+    const share = length / problemOf(input).length
+    const released = (time: number) => releasedBy(input, time) * length
+    return [
+      insideCheck(input.depths, input.thickness),
+      ...heatBalance(solve, input, { surfaceHeatFlux: share, rightHeatFlux: share }, { released }),
+    ]
   },
   warnings: ({ filmCoefficient }) => [filmStays(filmCoefficient), ...filmWarnings(filmCoefficient)],
 })

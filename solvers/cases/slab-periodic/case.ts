@@ -144,6 +144,7 @@ export default defineCase<typeof fields, SlabCycleResolved>({
     return {
       ...(filmCoefficient === undefined ? {} : { biot: (filmCoefficient * length) / input.conductivity }),
       length,
+      penetrationDepth: 4.605170185988092 * dampingOf(input),
       ...(slowest === undefined
         ? {}
         : { slowestTimeConstant: slowest, cyclesToSettle: Math.ceil((4.605170186 * slowest) / input.cycle.period) }),

@@ -1,3 +1,4 @@
+import { heatBalance } from '../../bodies/heat-balance.ts'
 import { defineCase, type Resolved } from '../../case.ts'
 import { imposedHeatFlux, initialTemperature, solid, thickness } from '../../statement/fields.ts'
 import { quantity } from '../../statement/quantity.ts'
@@ -5,7 +6,6 @@ import { passesNoHeat } from '../../statement/side.ts'
 import { sideField } from '../../statement/side-field.ts'
 import { resolveSolid } from '../../statement/solid.ts'
 import {
-  balanceCheck,
   insideCheck,
   netFlux,
   refuseFluxAtJump,
@@ -158,6 +158,14 @@ export default defineCase<typeof fields, SurfaceFluxResolved>({
     const drift = net ? { driftRate: net / (input.volumetricHeatCapacity * input.thickness) } : {}
     return { ...twoSidedNumbers(problem), ...drift }
   },
-  checks: (input) => [insideCheck(input.depths, input.thickness), ...balanceCheck(problemOf(input))],
+  checks: (input) => [
+    insideCheck(input.depths, input.thickness),
+    ...heatBalance(
+      solve,
+      input,
+      { surfaceHeatFlux: 1, backHeatFlux: 1 },
+      { instants: input.pulseDuration === undefined ? [] : [input.pulseDuration] },
+    ),
+  ],
   warnings: ({ back }) => sideWarnings(back),
 })

@@ -1,7 +1,9 @@
+import { heldNumbers } from '../../bodies/held-face.ts'
+import { heatBalance } from '../../bodies/heat-balance.ts'
 import { defineCase, type Resolved } from '../../case.ts'
 import { exposedFaces, initialTemperature, solid, surfaceTemperature, thickness } from '../../statement/fields.ts'
 import { refuseFluxAtStep } from '../../bodies/singular.ts'
-import { characteristicLength } from '../../bodies/slab-step.ts'
+import { characteristicLength, slabLateNumbers } from '../../bodies/slab-step.ts'
 import { resolveSolid } from '../../statement/solid.ts'
 import { solve, type SlabInput } from './solve.ts'
 
@@ -90,7 +92,8 @@ export default defineCase<typeof fields, SlabResolved>({
   solve,
   numbers(input) {
     const length = characteristicLength(input)
-    return { fourier: input.times.map((time) => (input.diffusivity / (length * length)) * time), length }
+    const fourier = input.times.map((time) => (input.diffusivity / (length * length)) * time)
+    return { fourier, length, ...slabLateNumbers(input, Infinity), ...heldNumbers(input, length) }
   },
   checks(input) {
     const deepest = input.depths.reduce((most, depth) => Math.max(most, depth), 0)
@@ -102,6 +105,7 @@ export default defineCase<typeof fields, SlabResolved>({
         limit: input.thickness,
         text: 'Every depth lies inside the body.',
       },
+      ...heatBalance(solve, input, { surfaceHeatFlux: 1 }),
     ]
   },
   warnings: () => [],

@@ -1,3 +1,4 @@
+import { heatBalance } from '../../bodies/heat-balance.ts'
 import { defineCase, type Resolved } from '../../case.ts'
 import { solid, thickness } from '../../statement/fields.ts'
 import { resolveStart } from '../../statement/initial-profile.ts'
@@ -5,7 +6,6 @@ import { start } from '../../statement/initial-profile-field.ts'
 import { sideField } from '../../statement/side-field.ts'
 import { resolveSolid } from '../../statement/solid.ts'
 import {
-  balanceCheck,
   insideCheck,
   netFlux,
   refuseFluxAtJump,
@@ -140,6 +140,9 @@ export default defineCase<typeof fields, TwoSidesResolved>({
     const drift = net ? { driftRate: net / (input.volumetricHeatCapacity * input.thickness) } : {}
     return { ...twoSidedNumbers(problemOf(input)), ...drift }
   },
-  checks: (input) => [insideCheck(input.depths, input.thickness), ...balanceCheck(problemOf(input))],
+  checks: (input) => [
+    insideCheck(input.depths, input.thickness),
+    ...heatBalance(solve, input, { leftHeatFlux: 1, rightHeatFlux: 1 }),
+  ],
   warnings: ({ left, right }) => sideWarnings(left, right),
 })

@@ -55,6 +55,12 @@ function Whole({ description: c, answer }: { description: Case; answer: Answer }
             value={(Array.isArray(value) ? value : [value]).map((v) => plain(v as number, 6)).join(', ')}
           />
         ))}
+        {answer.errs && (
+          <Row
+            name="the model errs"
+            value={`${answer.errs}: it reaches a temperature ${answer.errs === 'early' ? 'before' : 'after'} the body that was stated`}
+          />
+        )}
         <Row
           name="method"
           value={`${accuracy.method.join(', ')}${accuracy.terms ? `, ${accuracy.terms} terms` : ''}`}
