@@ -17,6 +17,13 @@ export function risesOf({ depths, temperatures }: InitialProfile, length: number
   }))
 }
 
+/** A jump right at a face has nothing on its outer side: after time 0 the body is as if it were not there. */
+export function withoutEdges({ depths, temperatures }: InitialProfile): InitialProfile {
+  const from = depths.findLastIndex((depth) => depth === depths[0])
+  const end = depths.indexOf(depths.at(-1)!) + 1
+  return { depths: depths.slice(from, end), temperatures: temperatures.slice(from, end) }
+}
+
 /** A depth along a body of length 1, with the piece of the profile that holds it. */
 export function placeOf(depth: number, profile: InitialProfile, length: number, reference: number): Place {
   const uniform = profile.temperatures.every((T) => T === reference)
@@ -33,7 +40,7 @@ export function placeOf(depth: number, profile: InitialProfile, length: number, 
     fromStart: (depth - from) / length,
     toEnd: (to - depth) / length,
     initial: linear(profile, piece, depth) - reference,
-    shift: piece === 0 ? 0 : 4,
+    shift: from === 0 ? 0 : 4,
   }
 }
 
@@ -91,10 +98,7 @@ export function meanOf({ depths, temperatures }: InitialProfile, length: number,
 }
 
 /** The temperatures just inside the two faces: a jump at a face itself holds no heat. */
-export function startAtFaces({ depths, temperatures }: InitialProfile): { first: number; last: number } {
-  const end = depths.length - 1
-  return {
-    first: temperatures[depths[1] === depths[0] ? 1 : 0]!,
-    last: temperatures[depths[end - 1] === depths[end] ? end - 1 : end]!,
-  }
+export function startAtFaces(profile: InitialProfile): { first: number; last: number } {
+  const { temperatures } = withoutEdges(profile)
+  return { first: temperatures[0]!, last: temperatures.at(-1)! }
 }

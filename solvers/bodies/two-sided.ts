@@ -2,7 +2,7 @@ import { type InitialProfile, profileOf, type Start } from '../statement/initial
 import { EPS, type Estimate } from '../math/rounding.ts'
 import { type Drive, faceOf, type Load, type Moment, type Place } from '../math/two-sided-body.ts'
 import { type SlabValues, TwoSidedSlab } from '../math/two-sided-slab.ts'
-import { meanOf, placeOf, risesOf, slopesAt, startAtFaces, temperatureIn } from './profile-along.ts'
+import { meanOf, placeOf, risesOf, slopesAt, startAtFaces, temperatureIn, withoutEdges } from './profile-along.ts'
 import { fluxOf, passesNoHeat, type Side, sideBiot, temperatureOf } from '../statement/side.ts'
 import { exactly, scaled } from './step-response.ts'
 
@@ -51,12 +51,13 @@ export class TwoSided {
     const { left, right, length, conductivity, start } = problem
     this.problem = problem
     this.profile = profileOf(start, length)
-    this.reference = this.profile.temperatures[0]!
+    const inside = withoutEdges(this.profile)
+    this.reference = inside.temperatures[0]!
     const given = [...this.profile.temperatures, temperatureOf(left) ?? 0, temperatureOf(right) ?? 0]
     this.rounding = 3 * EPS * given.reduce((most, T) => Math.max(most, Math.abs(T)), 0)
-    const rises = risesOf(this.profile, length)
+    const rises = risesOf(inside, length)
     this.places = problem.depths.map((depth, j) => {
-      const place = placeOf(depth, this.profile, length, this.reference)
+      const place = placeOf(depth, inside, length, this.reference)
       return problem.mirrored?.[j] ? { ...place, shift: 8 } : place
     })
     const body = {

@@ -11,6 +11,8 @@ const AMPLIFIED = 64 + 16 * timeOneExponent
  * measured at up to 6e-17 and taken as a few roundings.
  */
 const LEFT = 3 / AMPLIFIED
+/** In the same measure, all of a wave. */
+const ONE = EPS * AMPLIFIED
 
 /** Waves between two neighbouring rises, over all nodes. */
 interface Piece {
@@ -75,7 +77,7 @@ export class EarlyValues {
     const { first, second } = this.fading(place)
     const rise = this.load.rises[place.piece]
     const given = Math.abs(base) + (rise ? Math.abs(rise.start) + Math.abs(rise.rise.value) : 0)
-    const error = EPS * (piece.forwardSize * (first + LEFT) + piece.backwardSize * (second + LEFT) + 4 * given) + TINY
+    const error = EPS * (piece.forwardSize * first + piece.backwardSize * second + 4 * given) + TINY
     return { value: base + wave, error, method: 'contour' }
   }
 
@@ -84,7 +86,7 @@ export class EarlyValues {
     const piece = this.pieces[place.piece]!
     const { first, second } = this.fading(place)
     const value = piece.narrow ? this.narrowFlux(place, piece) : this.fluxWave(place, piece) - piece.slope
-    const own = piece.forwardFluxSize * (first + LEFT) + piece.backwardFluxSize * (second + LEFT)
+    const own = piece.forwardFluxSize * first + piece.backwardFluxSize * second
     return { value, error: EPS * (own + 8 * Math.abs(piece.narrow ? 0 : piece.slope)) + TINY, method: 'contour' }
   }
 
@@ -160,14 +162,17 @@ export class EarlyValues {
     return { ...piece, ...sizes }
   }
 
-  /** e^(−√p·x) and e^(−√p·x′) in size, with what the rounding of the place adds. */
+  /** e^(−√p·x) and e^(−√p·x′) in size, with what the rounding of the place adds and what the rule leaves. */
   private fading({ fromStart, toEnd, shift }: Place): { first: number; second: number } {
     const perLength = REAL / this.m.root
     const faded = (distance: number, shifted: number) => {
       const x = perLength * distance
       // A place that is on the spot where a wave starts is there whatever the rounding.
-      const slip = distance === 0 ? 0 : (shifted * perLength) / AMPLIFIED
-      return Math.exp(-x) * (1 + 0.2 * x + slip)
+      const slip = distance === 0 ? 0 : EPS * shifted * perLength
+      // No wave is moved by more than it is at the nearest that the place may be, and none that has died away leaves anything.
+      const moved = Math.exp(-Math.max(0, x - slip)) * Math.min(1, slip)
+      const faded = Math.exp(-x)
+      return faded * (1 + 0.2 * x) + moved / ONE + Math.min(LEFT, (4 * faded) / ONE)
     }
     return { first: faded(fromStart, shift), second: faded(toEnd, 4 + shift) }
   }

@@ -11,10 +11,10 @@ import { placeOf, risesOf } from '../../solvers/bodies/profile-along.ts'
 import type { OutputName } from '../../solvers/outputs.ts'
 import { ask, askSingle, contract, sensitivity, single, solveDirect, temperaturesOf } from './ask.ts'
 import { proof, seed } from './counts.ts'
+import { uniform as unit } from './draw.ts'
 import { D } from './exact/functions.ts'
 import { exactTwoSided, type ExactFace } from './exact/two-sided.ts'
 
-const unit = fc.double({ min: 0, max: 1, noNaN: true })
 const between = (low: number, high: number) => unit.map((u) => low + u * (high - low))
 const decades = (low: number, high: number) => between(low, high).map((e) => 10 ** e)
 const sample = <T>(arbitrary: fc.Arbitrary<T>, count: number): T[] => fc.sample(arbitrary, { numRuns: count, seed })
@@ -414,6 +414,33 @@ describe('limits', () => {
       )
   })
 
+  it.each([5e-324, 1e-300, 1e-100, 1e-30, 1e-9])(
+    'a jump right at a face is without effect at %f s, and no bound outgrows what it bounds',
+    (time) => {
+      const left = { kind: 'convection', ambientTemperature: 20, filmCoefficient: 10 }
+      const body = { ...solid, left, right: { kind: 'insulated' }, times: [time], outputs: ['temperature', 'heatFlux'] }
+      const plain = { depths: [0, 0.5, 1], temperatures: [50, 50, 80] }
+      const edged = { depths: [0, 0, 0.5, 1, 1], temperatures: [10, 50, 50, 80, -40] }
+      for (const depth of [5e-324, 1e-300, 1e-9, 0.25, 0.75, 1]) {
+        const [bare, jumping] = [plain, edged].map((initialProfile) =>
+          ask('slab-initial-profile', { ...body, depths: [depth], initialProfile }),
+        )
+        expect(jumping!.result).toEqual(bare!.result)
+        const { temperature, heatFlux } = bare!.accuracy.bound
+        expect(temperature!.absolute).toBeLessThan(1e-11)
+        expect(heatFlux!.absolute).toBeLessThan(1e-8)
+      }
+    },
+  )
+  it.each([5e-324, 1e-300, 1e-30])('what is far from a jump has not heard of it at %f s', (time) => {
+    const side = { kind: 'insulated' }
+    const body = { ...solid, left: side, right: side, times: [time], outputs: ['temperature', 'heatFlux'] }
+    const initialProfile = { depths: [0, 0.5, 0.5, 1], temperatures: [10, 10, 50, 50] }
+    const { result, accuracy } = ask('slab-initial-profile', { ...body, depths: [0.25, 0.75], initialProfile })
+    expect(result).toEqual({ temperature: [[10, 50]], heatFlux: [[0, 0]] })
+    expect(accuracy.bound['temperature']!.absolute).toBeLessThan(1e-12)
+    expect(accuracy.bound['heatFlux']!.absolute).toBeLessThan(1e-200)
+  })
   it('time 0 answers the start, the mean of a jump, and fluxes that are finite', () => {
     const initialProfile = { depths: [0, 0.5, 0.5, 1], temperatures: [10, 20, 40, 30] }
     const body = {
