@@ -1,3 +1,4 @@
+import { EPS, type Estimate } from '../math/rounding.ts'
 import type { InitialProfile } from '../statement/initial-profile.ts'
 import type { Place, Rise } from '../math/two-sided-body.ts'
 
@@ -81,8 +82,18 @@ export function jumpsAt({ depths, temperatures }: InitialProfile, depth: number)
 }
 
 /** Slopes of the profile on both sides of a depth, K/m. */
-export function slopesAt({ depths, temperatures }: InitialProfile, depth: number): { before: number; after: number } {
-  const slope = (k: number) => (temperatures[k + 1]! - temperatures[k]!) / (depths[k + 1]! - depths[k]!)
+export function slopesAt(
+  { depths, temperatures }: InitialProfile,
+  depth: number,
+): { before: Estimate; after: Estimate } {
+  const slope = (k: number): Estimate => {
+    const width = depths[k + 1]! - depths[k]!
+    const [from, to] = [temperatures[k]!, temperatures[k + 1]!]
+    const value = (to - from) / width
+    // The temperatures are rounded, and as parts of a difference may be far larger than it.
+    const given = (Math.abs(from) + Math.abs(to)) / width
+    return { value, error: EPS * (8 * Math.abs(value) + given), method: 'closed-form' }
+  }
   const pieces = depths.slice(1).flatMap((to, k) => (to > depths[k]! ? [k] : []))
   const before = pieces.findLast((k) => depths[k]! < depth) ?? pieces[0]!
   const after = pieces.find((k) => depths[k + 1]! > depth) ?? pieces.at(-1)!

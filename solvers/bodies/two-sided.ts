@@ -179,16 +179,16 @@ export class TwoSided {
     const { profile } = this
     const { first, last } = startAtFaces(profile)
     const slopes = (depth: number) => slopesAt(profile, depth)
-    const into = (side: Side, T: number, slope: number): Estimate => {
-      if (side.kind === 'temperature') return scaled(k, exactly(-slope))
+    const into = (side: Side, T: number, sign: 1 | -1, slope: Estimate): Estimate => {
+      if (side.kind === 'temperature') return scaled(-sign * k, slope)
       const film = side.kind === 'convection' ? side.filmCoefficient * (side.ambientTemperature - T) : 0
       const given =
         side.kind === 'convection' ? side.filmCoefficient * (Math.abs(side.ambientTemperature) + Math.abs(T)) : 0
       const value = film + fluxOf(side)
       return { value, error: EPS * (4 * given + 4 * Math.abs(fluxOf(side))), method: 'closed-form' }
     }
-    const leftFlux = () => into(left, first, slopes(0).after)
-    const rightFlux = () => into(right, last, -slopes(length).before)
+    const leftFlux = () => into(left, first, 1, slopes(0).after)
+    const rightFlux = () => into(right, last, -1, slopes(length).before)
     return {
       temperature: (j) => {
         const T = temperatureIn(profile, depths[j]!)
@@ -199,8 +199,8 @@ export class TwoSided {
         if (depth === 0) return leftFlux()
         if (depth === length) return { ...rightFlux(), value: -rightFlux().value }
         const { before, after } = slopes(depth)
-        const value = (-k * (before + after)) / 2
-        return { value, error: EPS * k * (8 * Math.abs(before) + 8 * Math.abs(after)), method: 'closed-form' }
+        const middle = { ...before, value: (before.value + after.value) / 2, error: before.error + after.error }
+        return scaled(-k, middle)
       },
       leftFlux,
       rightFlux,

@@ -17,6 +17,8 @@ const ONE = EPS * AMPLIFIED
 /** Waves between two neighbouring rises, over all nodes. */
 interface Piece {
   slope: number
+  /** What the rounding of the two temperatures may move the slope by, in units of EPS. */
+  slopeSlack: number
   width: number
   /** Too narrow for its waves to be told apart: they are taken together. */
   narrow: boolean
@@ -87,7 +89,8 @@ export class EarlyValues {
     const { first, second } = this.fading(place)
     const value = piece.narrow ? this.narrowFlux(place, piece) : this.fluxWave(place, piece) - piece.slope
     const own = piece.forwardFluxSize * first + piece.backwardFluxSize * second
-    return { value, error: EPS * (own + 8 * Math.abs(piece.narrow ? 0 : piece.slope)) + TINY, method: 'contour' }
+    const straight = piece.narrow ? 0 : 8 * Math.abs(piece.slope) + piece.slopeSlack
+    return { value, error: EPS * (own + straight) + TINY, method: 'contour' }
   }
 
   leftFlux(): Estimate {
@@ -139,10 +142,11 @@ export class EarlyValues {
     const rise = load.rises[k]
     const width = rise ? rise.width : 1
     const slope = rise && width > 0 ? rise.rise.value / width : 0
+    const slopeSlack = rise && width > 0 ? rise.rise.slack / width : 0
     const narrow = slope !== 0 && REAL * width < m.root
     const forward = new Float64Array(2 * waves.length)
     const backward = new Float64Array(2 * waves.length)
-    const piece = { slope, width, narrow, forward, backward }
+    const piece = { slope, slopeSlack, width, narrow, forward, backward }
     const sizes = { forwardSize: 0, backwardSize: 0, forwardFluxSize: 0, backwardFluxSize: 0 }
     waves.forEach((w, n) => {
       const root = roots[n]!

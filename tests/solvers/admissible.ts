@@ -11,11 +11,12 @@ import { uniform } from './draw.ts'
 
 type Input = Record<string, unknown>
 
-interface Field {
+export interface Field {
   minimum?: number
   maximum?: number
   const?: unknown
   'x-zero-or'?: number
+  'x-ucum'?: string
   items?: Field
   properties?: Record<string, Field>
   anyOf?: Field[]
@@ -69,7 +70,7 @@ function varied(c: Case, stated: unknown, field: Field | undefined, name = ''): 
 }
 
 /** The fields of an object; of alternatives, those of the kind that it is. */
-function propertiesOf(field: Field | undefined, stated: Input): Record<string, Field> {
+export function propertiesOf(field: Field | undefined, stated: Input): Record<string, Field> {
   const options = field?.anyOf ?? field?.oneOf
   const chosen = options?.find((one) => one.properties?.['kind']?.const === stated['kind']) ?? field
   return chosen?.properties ?? {}
@@ -126,8 +127,10 @@ function profiled(body: Input): Input {
   return { ...body, initialProfile: { depths: [0, ...between, end], temperatures: values } }
 }
 
+export const schemaOf = (c: Case): Field => z.toJSONSchema(solve.input(c), { io: 'input' }) as Field
+
 export function admissible(c: Case): fc.Arbitrary<Input> {
-  const schema = z.toJSONSchema(solve.input(c), { io: 'input' }) as Field
+  const schema = schemaOf(c)
   const stated = [c.example, ...(c.variants ?? []).map((v) => v.input)]
   return fc
     .oneof(...stated.map((one) => varied(c, one, schema) as fc.Arbitrary<Input>))

@@ -11,7 +11,10 @@ import { randomRows } from './random-rows.ts'
 /* Bounds against exact answers: never below the true error, never far above it, never above ten times the promise. */
 
 const count = proof ? 10_000 : 40
-/** What is so small may be answered as zero, times the unit that it has. */
+/**
+ * A fraction below 1e-290 may be answered as zero, and so may a flux or heat that is so small a share of its unit. That is a drive times a film,
+ * k/L or a heat capacity, up to some 1e20: fluxes long after the end need it (Bi 1e6, Fo 374: 6e-280).
+ */
 const NOTHING = 1e-270
 
 describe.each(Object.entries(randomRows))('bounds of %s', (_id, arbitrary) => {

@@ -439,7 +439,8 @@ describe('limits', () => {
     const { result, accuracy } = ask('slab-initial-profile', { ...body, depths: [0.25, 0.75], initialProfile })
     expect(result).toEqual({ temperature: [[10, 50]], heatFlux: [[0, 0]] })
     expect(accuracy.bound['temperature']!.absolute).toBeLessThan(1e-12)
-    expect(accuracy.bound['heatFlux']!.absolute).toBeLessThan(1e-200)
+    // Two temperatures that are the same number may have been two.
+    expect(accuracy.bound['heatFlux']!.absolute).toBeLessThan(1e-12)
   })
   it('time 0 answers the start, the mean of a jump, and fluxes that are finite', () => {
     const initialProfile = { depths: [0, 0.5, 0.5, 1], temperatures: [10, 20, 40, 30] }
