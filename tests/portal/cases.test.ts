@@ -89,7 +89,9 @@ test.each(cases.map(({ id }) => id))(
     await page.getByRole('button', { name: 'Back to the example' }).click()
     await page.getByRole('button', { name: 'Solve', exact: true }).click()
 
-    await expect.poll(() => page.locator('.formula math').count()).toBe(described.formula.length)
+    await expect.poll(() => page.locator('.formula').count()).toBe(described.formula.length)
+    // Each part of each formula is set.
+    await expect.poll(() => page.locator('.formula > div:not(:has(math))').count()).toBe(0)
     const answer = await answerShown(page)
     expect(answer['points']).toBe(described.weight * countNumbers(answer['result']) + described.setUp)
     const charged = Number(await page.locator('[data-charged]').innerText())
@@ -125,7 +127,7 @@ test('another question is asked on the page with the numbers of the reader, and 
   await form.locator('[data-own=target] input').fill('1')
   await form.getByRole('button', { name: 'Ask' }).click()
   const shown = JSON.parse(await form.getByRole('region', { name: /answer$/ }).innerText()) as Record<string, unknown>
-  const curl = await form.getByRole('region', { name: /curl$/ }).innerText()
+  const curl = await form.getByRole('region', { name: /curl snippet$/ }).innerText()
   expect(curl).toContain('"target": 1')
   expect(JSON.parse((await runWithKey('bash', ['-c', curl])).stdout)).toEqual(shown)
   await form.locator('[data-own=target] input').fill('warm')

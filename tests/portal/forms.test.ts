@@ -1,7 +1,10 @@
+import { readFile } from 'node:fs/promises'
+import type { Page } from 'playwright-core'
 import { afterAll, beforeAll, expect, test } from 'vitest'
 import { type Browser, openBrowser } from './harness/browser.ts'
 import { type Portal, startPortal } from './harness/portal.ts'
 import { signInAs } from './harness/sign-in.ts'
+import { watch } from './harness/watch.ts'
 
 let portal: Portal
 let browser: Browser
@@ -34,6 +37,76 @@ test('a refused number is told with label and unit of the form', async () => {
   const said = page.locator('[data-field=filmCoefficient] .err')
   await said.waitFor()
   expect(await said.innerText()).toMatch(/^Film coefficient is \u22121.*W\/\(m²·K\)/s)
+  await page.close()
+})
+
+test('what stands in a form, with units and material, is in the address; whoever opens it sees the same answer', async () => {
+  const page = await browser.context.newPage()
+  await page.goto(`${portal.url}/cases/slab-convection`)
+  await page.locator('.cuts').waitFor()
+  expect(new URL(page.url()).search, 'the example needs no address').toBe('')
+  await page.getByRole('radio', { name: 'material' }).check({ force: true })
+  await page.locator('[data-field=material] input').fill('clay-brick-solid-1800')
+  await page.locator('[data-field=thickness] input').fill('36')
+  await page.getByLabel('Unit of Thickness').selectOption('cm')
+  await page.getByRole('textbox', { name: 'Times' }).fill('1, 10')
+  await page.getByLabel('Unit of Times').selectOption('h')
+  await page.getByRole('button', { name: 'Solve', exact: true }).click()
+  const answer = page.getByRole('region', { name: 'Answer as JSON' })
+  await answer.getByText('"clay-brick-solid-1800"').first().waitFor()
+  await answer.getByText('[3600, 36000]').first().waitFor()
+  await expect.poll(() => new URL(page.url()).searchParams.get('thickness')).toBe('36 cm')
+  await expect.poll(() => new URL(page.url()).searchParams.get('times')).toBe('1, 10 h')
+  const shown = await answer.innerText()
+  await page.getByRole('button', { name: 'Copy a link to it' }).click()
+  const link = await page.evaluate<string>('navigator.clipboard.readText()')
+
+  const other = await browser.context.newPage()
+  await other.goto(link)
+  await other.locator('.cuts').waitFor()
+  expect(JSON.parse(await other.getByRole('region', { name: 'Answer as JSON' }).innerText())).toEqual(JSON.parse(shown))
+  expect(await other.getByLabel('Unit of Times').inputValue()).toBe('h')
+  expect(await other.locator('[data-field=material] .hint[role=status]').innerText()).toMatch(/ρ 1800/)
+  await other.getByRole('button', { name: 'Back to the example' }).click()
+  await expect.poll(() => new URL(other.url()).search).toBe('')
+  await other.goto(link.replace('36', '-36'))
+  await other.locator('[data-field=thickness] .err').waitFor()
+  await other.close()
+  await page.close()
+}, 60_000)
+
+async function saved(page: Page, button: string): Promise<Buffer> {
+  const download = page.waitForEvent('download')
+  await page.getByRole('button', { name: button }).click()
+  return readFile(await (await download).path())
+}
+
+test('a curve is saved as it is seen, and its numbers to their last digit', async () => {
+  const page = await browser.context.newPage()
+  const faults = watch(page)
+  await page.goto(`${portal.url}/cases/slab-convection`)
+  await page.locator('.cuts').waitFor()
+  const svg = (await saved(page, 'Save as SVG')).toString()
+  expect(svg).toMatch(/^<svg xmlns="http:\/\/www\.w3\.org\/2000\/svg"/)
+  expect(svg).toMatch(/<pattern id="[^"]+"/)
+  expect(svg, 'it stands without the sheet').not.toMatch(/class=|var\(|url\("| style=/)
+  const png = await saved(page, 'Save as PNG')
+  expect(png.subarray(1, 4).toString()).toBe('PNG')
+  expect(png.readUInt32BE(16), 'two pixels for one').toBeGreaterThan(2000)
+  const answer = JSON.parse(await page.getByRole('region', { name: 'Answer as JSON' }).innerText()) as {
+    result: { temperature: number[][] }
+  }
+  await page.getByRole('button', { name: 'Table' }).click()
+  expect(await page.getByRole('button', { name: /^Save as/ }).count()).toBe(0)
+  const csv = (await saved(page, 'Save all numbers as CSV')).toString().split('\r\n')
+  expect(csv[0]).toMatch(/^"time, s","temperature at depth 0 m, Cel",/)
+  const row =
+    csv
+      .find((line) => line.startsWith('3600,'))
+      ?.split(',')
+      .map(Number) ?? []
+  expect(row[1]).toBe(answer.result.temperature[0]?.[0])
+  expect(faults).toEqual([])
   await page.close()
 })
 

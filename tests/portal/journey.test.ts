@@ -119,7 +119,7 @@ test('a revoked key is refused, and the dialog says so before', async () => {
 test('what the service refuses lands on its field', async () => {
   const page = await browser.context.newPage()
   await page.goto(`${portal.url}/cases/slab-convection`)
-  const depths = page.getByLabel('Depths')
+  const depths = page.getByRole('textbox', { name: 'Depths' })
   await depths.fill('0, 0.4')
   await page.getByRole('button', { name: 'Solve', exact: true }).click()
   const refusal = page.locator('[data-field=depths] .err')

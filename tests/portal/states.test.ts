@@ -34,14 +34,14 @@ test('without a connection a solve fails at once, says so, and is never sent lat
   const sent: string[] = []
   page.on('request', (request) => sent.push(request.url()))
   await page.context().setOffline(true)
-  await page.getByLabel('Times').fill('3600, 7200')
+  await page.getByRole('textbox', { name: 'Times' }).fill('3600, 7200')
   await solveButton(page).click()
   const offline = page.locator('#case-form .state')
   await offline.getByText('No connection since').waitFor()
   expect(await offline.innerText()).toMatch(/The numbers below were solved at \d\d:\d\d UTC/)
   expect(await solveButton(page).innerText()).toBe('Solve')
   expect(await staleParts(page), 'curve, answer and call').toBe(3)
-  expect(await page.getByLabel('Times').inputValue(), 'typing is kept').toBe('3600, 7200')
+  expect(await page.getByRole('textbox', { name: 'Times' }).inputValue(), 'typing is kept').toBe('3600, 7200')
   sent.length = 0
   await page.context().setOffline(false)
   await offline.waitFor({ state: 'detached' })
@@ -62,7 +62,7 @@ test('a slow solve can be left, and what is shown meanwhile is said to be old', 
     await held
     await route.continue().catch(() => undefined)
   })
-  await page.getByLabel('Times').fill('3600, 7200')
+  await page.getByRole('textbox', { name: 'Times' }).fill('3600, 7200')
   await solveButton(page).click()
   await page.getByRole('button', { name: 'Cancel' }).waitFor()
   expect(await solveButton(page).innerText()).toBe('Solving')
@@ -88,7 +88,7 @@ test('too many calls: the button counts the seconds and then sends', async () =>
       body: refusal('rate-limited', 429, true),
     }),
   )
-  await page.getByLabel('Times').fill('3600, 7200')
+  await page.getByRole('textbox', { name: 'Times' }).fill('3600, 7200')
   await solveButton(page).click()
   await expect.poll(() => solveButton(page).innerText()).toMatch(/^Try again in [12] s$/)
   expect(await solveButton(page).isDisabled()).toBe(true)
@@ -147,7 +147,7 @@ test.each(['slab-convection', 'semi-infinite-convection'])(
   'the latest time of the contract has a curve: %s',
   async (id) => {
     const page = await openCase(id)
-    await page.getByLabel('Times').fill('1e17')
+    await page.getByRole('textbox', { name: 'Times' }).fill('1e17')
     await solveButton(page).click()
     await page.getByRole('region', { name: 'Answer as JSON' }).getByText('100000000000000000').first().waitFor()
     // The curve of the example stands until the new one is solved.

@@ -16,11 +16,24 @@ export function scientific(value: number, digits = 2): string {
 
 const superscripts: Record<string, string> = { 2: '²', 3: '³', 4: '⁴' }
 
+const byHand = [
+  ['Cel', '°C'],
+  ['um', 'µm'],
+  ['[degF]', '°F'],
+  ['[degR]', '°R'],
+  ['[in_i]', 'in'],
+  ['[ft_i]', 'ft'],
+  ['[yd_i]', 'yd'],
+  ['[lb_av]', 'lb'],
+  ['[Btu_IT]', 'Btu'],
+  ['kcal_IT', 'kcal'],
+] as const
+
 /** A unit code as it is written by hand. */
 export function unitText(ucum: string): string {
   if (ucum === '1') return ''
-  return ucum
-    .replace('Cel', '°C')
+  return byHand
+    .reduce((text, [code, said]) => text.replaceAll(code, said), ucum)
     .replaceAll('.', '·')
     .replace(/[234]/g, (d) => superscripts[d] ?? d)
 }

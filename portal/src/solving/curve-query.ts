@@ -25,14 +25,15 @@ export const curveQuery = (c: Described, body: Body, answer: Answer | CompactAns
 
 async function drawingOf(
   c: Described,
-  body: Body,
+  given: Body,
   answer: Answer | CompactAnswer,
   signal: AbortSignal,
 ): Promise<Drawing> {
-  const asked = askedIn(body)
-  if (body['times'] === undefined) return { kind: 'none', why: 'Only an answer over times is drawn, in °C.' }
-  const first = isFull(answer) ? answer : await trySolve(c.id, { ...body, detail: 'full' }, signal)
+  if (given['times'] === undefined) return { kind: 'none', why: 'Only an answer over times is drawn, in °C.' }
+  const first = isFull(answer) ? answer : await trySolve(c.id, { ...given, detail: 'full' }, signal)
   if (!isFull(first)) throw new Error('a full answer was asked for')
+  const body = { ...given, ...axesIn(given, first) }
+  const asked = askedIn(body)
   if (c.places !== 'none' && !body['points'] && asked.places.length === 0 && (hasClock(c) || !mayLackPlaces(c)))
     return { kind: 'none', why: 'No place was asked for. Give one to see its history.' }
   if (hasClock(c)) return historyDrawing(c, body, first, clockSpan(first, asked), signal)
@@ -46,6 +47,10 @@ async function drawingOf(
   const initial = numberIn(first, 'initialTemperature')
   return fieldDrawing(c, rest, part, { end, time, asked, initial, together: broughtBy(body, first) }, signal)
 }
+
+/** Times and places as they were used, whatever unit they were given in. */
+const axesIn = (given: Body, { axes }: Answer): Body =>
+  Object.fromEntries(Object.entries(axes).filter(([name]) => name in given))
 
 /** Depths are drawn from the face on, whether some were asked for or not. */
 const mayLackPlaces = (c: Described): boolean => c.places === 'depths' || c.places === 'depths-or-radii'

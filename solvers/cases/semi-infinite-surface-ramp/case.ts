@@ -34,8 +34,8 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
   notes:
     'For kilns, autoclaves, cooling programmes and weather that turns: any surface whose temperature is led along a straight line. The rate may have any sign. With rampDuration the surface is held at what it has reached; long after, that is a step taken half the duration after the start. It holds while the far side has felt nothing: numbers.penetrationDepth is where 1 % of a surface step has arrived at the last time, and the body must be deeper.',
   formula: [
-    'T - T_i = 4 r t\\;\\operatorname{i^2erfc}(\\eta), \\qquad q = 2 r b\\,t^{1/2} \\operatorname{ierfc}(\\eta), \\qquad Q = \\tfrac{4}{3}\\,r b\\,t\\,(t/\\pi)^{1/2}',
-    '\\eta = \\frac{x}{2\\,(at)^{1/2}}, \\qquad b = (k\\rho c)^{1/2}, \\qquad 4 \\operatorname{i^2erfc}(s) = \\operatorname{erfc}(s) - 2 s \\operatorname{ierfc}(s)',
+    'T - T_i = 4 r t\\;\\mathrm{i}^2\\operatorname{erfc}(\\eta), \\qquad q = 2 r b\\,t^{1/2} \\operatorname{ierfc}(\\eta), \\qquad Q = \\tfrac{4}{3}\\,r b\\,t\\,(t/\\pi)^{1/2}',
+    '\\eta = \\frac{x}{2\\,(at)^{1/2}}, \\qquad b = (k\\rho c)^{1/2}, \\qquad 4 \\mathrm{i}^2\\operatorname{erfc}(s) = \\operatorname{erfc}(s) - 2 s \\operatorname{ierfc}(s)',
     '\\text{held after } d:\\quad T(t) - T(t - d)',
   ],
   sources: ['H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, section 2.5'],

@@ -1,32 +1,35 @@
 import type { ReactNode } from 'react'
 import { Link } from 'react-router-dom'
-import { withMinus } from '../../api/form-words.ts'
+import { type FormWords, inFormWords, withMinus } from '../../api/form-words.ts'
 import { CopyButton } from '../../components/copy-button.tsx'
 import { counted, whole } from '../../components/formats.ts'
 import { jsonText } from '../../components/json-text.ts'
 import { Note } from '../../components/note.tsx'
 import { plain } from '../../figure/measures.ts'
-import { type Answer, type CompactAnswer, isFull } from '../../solving/solve.ts'
+import { type Answer, isFull } from '../../solving/solve.ts'
 import { Checks } from './checks.tsx'
+import { wordsOf } from './form-labels.ts'
+import { valuesOf } from './form-values.ts'
 import { OutputValues } from './output-values.tsx'
 import type { Case } from './described.ts'
 import { type Stale, StaleFrame } from './stale-frame.tsx'
+import type { Solved } from './use-solve.ts'
 
 interface Props {
   description: Case
-  answer: Answer | CompactAnswer
+  solved: Solved
   stale: Stale | undefined
 }
 
 /** The answer in words: numbers with their error limits, checks, warnings, cautions, sources. */
-export function AnswerView({ description: c, answer, stale }: Props) {
+export function AnswerView({ description: c, solved: { body, answer }, stale }: Props) {
   return (
     <div className="min-w-0" aria-live="polite">
       <h2 className="mb-3">{stale ? 'The answer of the last solve' : 'The answer'}</h2>
       <StaleFrame stale={stale}>
         <OutputValues description={c} answer={answer} />
         {isFull(answer) ? (
-          <Whole description={c} answer={answer} />
+          <Whole description={c} answer={answer} words={wordsOf(c.fields, valuesOf(c.fields, body))} />
         ) : (
           <>
             <h3 className="mt-5">Warnings</h3>
@@ -43,7 +46,7 @@ export function AnswerView({ description: c, answer, stale }: Props) {
   )
 }
 
-function Whole({ description: c, answer }: { description: Case; answer: Answer }) {
+function Whole({ description: c, answer, words }: { description: Case; answer: Answer; words: FormWords }) {
   const { accuracy, numbers } = answer
   return (
     <>
@@ -78,7 +81,7 @@ function Whole({ description: c, answer }: { description: Case; answer: Answer }
             <code>{code}</code>
           </Link>
           <br />
-          {withMinus(text)}
+          {inFormWords(text, words)}
         </Note>
       ))}
       {answer.cautions.length > 0 && <h3 className="mt-5">Cautions</h3>}
@@ -117,10 +120,17 @@ function Price({ points, least }: { points: number; least: number }) {
   )
 }
 
+const units: readonly (readonly [RegExp, string])[] = [
+  [/(depth|length)$/, 'm'],
+  [/(time constant|time|lag|f value|valid from|valid until)$/, 's'],
+  [/drift rate$/, 'K/s'],
+]
+
 /** "penetrationDepth" as "penetration depth, m"; numbers with a name of their own by their letters. */
 function spoken(name: string): string {
   if (name === 'fourier') return 'Fo'
   if (name === 'biot') return 'Bi'
   const words = name.replace(/[A-Z]/g, (letter) => ` ${letter.toLowerCase()}`)
-  return /(depth|length)$/.test(words) ? `${words}, m` : words
+  const unit = units.find(([end]) => end.test(words))?.[1]
+  return unit ? `${words}, ${unit}` : words
 }

@@ -51,7 +51,7 @@ function Section({ shown, title, width }: { shown: Shown; title: string; width: 
   const flat = body === 'slab' || body === 'half-space' || body === 'two-bodies'
   const ring = body === 'hollow-cylinder'
   const level = flat || ring || body === 'hole' || body === 'endless'
-  const left = !ring && x > frame.left + (frame.right - frame.left) * 0.6
+  const left = !ring && body !== 'hole' && x > frame.left + (frame.right - frame.left) * 0.6
   const measured = shape.measured(frame).filter(({ field }) => shown.symbols[field])
   const base = frame.bottom + 22
   const depth = flat && place.along > 0 && !shown.signed

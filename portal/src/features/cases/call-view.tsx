@@ -1,11 +1,9 @@
 import { CodeBlock } from '../../components/code-block.tsx'
 import { JsonCode } from '../../components/json-code.tsx'
 import { jsonText } from '../../components/json-text.ts'
-import { Tabs } from '../../components/tabs.tsx'
 import { ButtonLink } from '../../components/button.tsx'
 import { isFull } from '../../solving/solve.ts'
-import { SnippetCode } from './snippet-code.tsx'
-import { snippets } from '../../solving/snippets.ts'
+import { SnippetTabs } from './snippet-tabs.tsx'
 import type { Case } from './described.ts'
 import { type Stale, StaleFrame } from './stale-frame.tsx'
 import type { Solved } from './use-solve.ts'
@@ -16,32 +14,16 @@ interface Props {
   stale: Stale | undefined
 }
 
-/** Exactly the call that was solved, in two languages, and its answer. */
+/** Exactly the call that was solved, in every language, and its answer. */
 export function CallView({ description: c, solved: { body, answer }, stale }: Props) {
   const copy = stale ? 'Copy the last solve' : 'Copy'
   const path = c.operations.find(({ id }) => id === 'solve')!.path
-  const tabs = snippets.map(({ name, language, write }) => {
-    const text = write(location.origin + path, body)
-    return {
-      name,
-      content: (
-        <CodeBlock
-          caption={stale ? 'of the last solve' : 'with your numbers'}
-          text={text}
-          label={`${name} snippet`}
-          copy={copy}
-        >
-          <SnippetCode text={text} language={language} />
-        </CodeBlock>
-      ),
-    }
-  })
   const json = jsonText(answer)
   return (
     <div className="min-w-0">
       <h2 className="mb-3">{stale ? 'The call of the last solve' : 'The call'}</h2>
       <StaleFrame stale={stale}>
-        <Tabs label="Language" tabs={tabs} />
+        <SnippetTabs path={path} body={body} caption={stale ? 'of the last solve' : 'with your numbers'} copy={copy} />
         <p className="prose mt-3">
           It reads the key from <code>SOAK_KEY</code>.
         </p>

@@ -4,20 +4,24 @@ import { withMinus } from '../../api/form-words.ts'
 import { unitText } from '../../components/formats.ts'
 import { Symbol } from '../../components/symbol.tsx'
 import { plain } from '../../figure/measures.ts'
-import { type Field, controlOf, optionsOf } from './fields.ts'
+import { type Field, controlOf, isMaterial, optionsOf, unitsOf } from './fields.ts'
+import { MaterialBox } from './material-box.tsx'
 
 interface Props {
   field: Field
   /** Where the field stands in the body. */
   path: string
   register: UseFormRegisterReturn
+  /** Of the unit in which it is given. */
+  registerUnit: UseFormRegisterReturn
   error: string | undefined
 }
 
 /** One field of the contract, in the control that its schema asks for. */
-export function CaseField({ field, path, register, error }: Props) {
+export function CaseField({ field, path, register, registerUnit, error }: Props) {
   const id = useId()
   const kind = controlOf(field)
+  const units = unitsOf(field)
   const title = field.title ?? field.name
   const hint = hintOf(field)
   const grouped = kind === 'several' || (kind === 'choice' && field.required)
@@ -41,12 +45,30 @@ export function CaseField({ field, path, register, error }: Props) {
           <span className="control">
             <input id={id} className="box" inputMode="text" autoComplete="off" {...access} {...register} />
           </span>
-          <span className="unit">{unitText(field.unit ?? '')}</span>
+          {units.length === 0 && <span className="unit">{unitText(field.unit ?? '')}</span>}
         </>
       )}
-      {['list', 'rows', 'text'].includes(kind) && (
+      {['list', 'rows'].includes(kind) && (
         <span className="control">
           <input id={id} className="box" autoComplete="off" {...access} {...register} />
+        </span>
+      )}
+      {units.length > 0 && (
+        <select className="box unit-box" aria-label={`Unit of ${title}`} {...registerUnit}>
+          {units.map((code) => (
+            <option key={code} value={code === field.unit ? '' : code}>
+              {unitText(code)}
+            </option>
+          ))}
+        </select>
+      )}
+      {kind === 'text' && (
+        <span className="control">
+          {isMaterial(field) ? (
+            <MaterialBox id={id} access={access} register={register} />
+          ) : (
+            <input id={id} className="box" autoComplete="off" {...access} {...register} />
+          )}
         </span>
       )}
       {kind === 'choice' && !grouped && (
@@ -91,7 +113,8 @@ export function CaseField({ field, path, register, error }: Props) {
       )}
     </>
   )
-  const name = `field${kind === 'number' ? ' quantity' : kind === 'several' ? ' several' : ''}${error ? ' bad' : ''}`
+  const form = kind === 'number' ? ' quantity' : units.length > 0 ? ' listed' : kind === 'several' ? ' several' : ''
+  const name = `field${form}${error ? ' bad' : ''}`
   if (!grouped)
     return (
       <div className={name} data-field={path}>
@@ -114,11 +137,15 @@ const short = (value: number): string =>
 function hintOf(field: Field): string {
   const [low, high] = field.typical ?? []
   const unit = unitText(field.unit ?? '')
-  const typical = low !== undefined && high !== undefined ? `usually ${short(low)} to ${short(high)}` : ''
+  const typical =
+    low !== undefined && high !== undefined ? `usually ${short(low)} to ${short(high)}${unit && ` ${unit}`}` : ''
   const control = controlOf(field)
-  const between = control === 'list' ? `in ${unit}, commas between` : control === 'rows' ? rowsHint(field, unit) : ''
+  const between = control === 'list' ? listHint(field, unit) : control === 'rows' ? rowsHint(field, unit) : ''
   return [between, withMinus(field.hint ?? ''), typical].filter(Boolean).join(' · ')
 }
+
+const listHint = (field: Field, unit: string): string =>
+  unit && unitsOf(field).length === 0 ? `in ${unit}, commas between` : 'commas between'
 
 /** How a row is typed: its columns in their order, or by name where some may be left out. */
 function rowsHint({ fields = [] }: Field, unit: string): string {

@@ -1,25 +1,29 @@
 import { useEffect, useRef } from 'react'
 import { useForm, useWatch } from 'react-hook-form'
 import { ApiError, refusalsOf } from '../../api/api-error.ts'
-import type { FormWords } from '../../api/form-words.ts'
 import { Button, LinkButton } from '../../components/button.tsx'
-import { unitText } from '../../components/formats.ts'
 import { FormFailure } from '../../components/form-failure.tsx'
+import { CopyButton } from '../../components/copy-button.tsx'
 import { SendButton } from '../../components/send-button.tsx'
 import { Offline } from '../../components/states.tsx'
 import { clockText, useOfflineSince } from '../../components/use-online.ts'
 import type { Body } from '../../solving/body.ts'
 import { FieldList } from './field-list.tsx'
-import { type Field, fieldsInside } from './fields.ts'
+import type { Field } from './fields.ts'
+import { LONGEST, addressOf } from './form-address.ts'
 import { FORM_ID } from './form-id.ts'
+import { wordsOf } from './form-labels.ts'
 import { type FormValues, bodyOf, isComplete, valuesOf } from './form-values.ts'
 import type { Case } from './described.ts'
 import { refusalAt } from './refusals.ts'
-import { isSent, waysOf } from './solid-ways.ts'
+import { waysOf } from './solid-ways.ts'
+import { useSettled } from '../../solving/use-settled.ts'
 import type { Solved } from './use-solve.ts'
 
 interface Props {
   description: Case
+  /** What stands in the form first. */
+  first: FormValues
   /** The body that was last sent. */
   asked: Body
   /** The body that the sheet shows the answer of. */
@@ -30,13 +34,16 @@ interface Props {
   onCancel(): void
   /** Told whether the form differs from what was solved. */
   onChanged(changed: boolean): void
+  /** Told what the address of the page is to say of the form; empty for the example. */
+  onAddress(address: string): void
 }
 
 /** Every field of the contract. It solves when a field is left changed, and on Solve. */
-export function CaseForm({ description: c, asked, solved, pending, error, onSolve, onCancel, onChanged }: Props) {
+export function CaseForm(props: Props) {
+  const { description: c, first, asked, solved, pending, error, onSolve, onCancel, onChanged, onAddress } = props
   const { fields } = c
   const { control, register, handleSubmit, getValues, reset } = useForm<FormValues>({
-    defaultValues: valuesOf(fields, c.example),
+    defaultValues: first,
   })
   const values = useWatch({ control }) as FormValues
   const form = useRef<HTMLFormElement>(null)
@@ -49,6 +56,9 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
   const since = useOfflineSince()
   const unsent = since !== undefined && error instanceof ApiError && !error.problem
   useEffect(() => onChanged(stale), [stale, onChanged])
+  const address = addressIn(c, values)
+  const settled = useSettled(address, 400)
+  useEffect(() => onAddress(settled), [settled, onAddress])
 
   useEffect(() => {
     if (error) form.current?.querySelector<HTMLElement>('[aria-invalid=true]')?.focus()
@@ -109,6 +119,9 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
         >
           Back to the example
         </LinkButton>
+        <CopyButton text={location.origin + location.pathname + (address && `?${address}`)}>
+          Copy a link to it
+        </CopyButton>
       </div>
       <p role="status" className="lab mt-3 min-h-4">
         {stale
@@ -119,19 +132,14 @@ export function CaseForm({ description: c, asked, solved, pending, error, onSolv
   )
 }
 
-const same = (a: Body, b: Body): boolean => JSON.stringify(a) === JSON.stringify(b)
-
-/** The labels and units of the fields that stand in the form. */
-function wordsOf(fields: readonly Field[], values: FormValues): FormWords {
-  const sent = fields.filter(({ name }) => isSent(fields, name, values.solid))
-  const inside = sent.flatMap((field) => {
-    const own = values.fields[field.name]
-    return fieldsInside(field, (own as FormValues | undefined)?.kind ?? '')
-  })
-  const labels = (list: readonly Field[]) => Object.fromEntries(list.map(({ name, title }) => [name, title ?? name]))
-  const units = [...sent, ...inside].flatMap(({ unit }) => (unit ? [[unit, unitText(unit)] as const] : []))
-  return { labels: labels(sent), inside: labels(inside), units: Object.fromEntries(units) }
+/** What the address says of the form: nothing where the example stands in it, or where it would be too long. */
+function addressIn({ fields, example }: Case, values: FormValues): string {
+  if (same(bodyOf(fields, values), bodyOf(fields, valuesOf(fields, example)))) return ''
+  const address = addressOf(fields, values).toString()
+  return address.length > LONGEST ? '' : address
 }
+
+const same = (a: Body, b: Body): boolean => JSON.stringify(a) === JSON.stringify(b)
 
 /** Shown at once: what must be given, and what the example gives. */
 function isOpen({ fields, example }: Case, { name, required }: Field): boolean {

@@ -1,13 +1,17 @@
 import { useQuery } from '@tanstack/react-query'
-import { useState } from 'react'
+import { useCallback, useState } from 'react'
+import { useSearchParams } from 'react-router-dom'
 import { Band, Sheet } from '../../components/sheet.tsx'
 import { Failed, Loading } from '../../components/states.tsx'
 import { TitleBlock } from '../../components/title-block.tsx'
 import { isDrawn } from '../../solving/described.ts'
+import { asUsed } from '../../solving/as-used.ts'
 import { trySolve } from '../../solving/solve.ts'
 import { AnswerView } from './answer-view.tsx'
 import { CallView } from './call-view.tsx'
 import { CaseForm } from './case-form.tsx'
+import { formIn } from './form-address.ts'
+import { bodyOf, valuesOf } from './form-values.ts'
 import { CurveBand } from './curve-band.tsx'
 import { AboutBody } from './about-body.tsx'
 import { OperationsBand } from './operations-band.tsx'
@@ -15,18 +19,29 @@ import type { Case } from './described.ts'
 import type { Stale } from './stale-frame.tsx'
 import { type Solved, useSolve } from './use-solve.ts'
 
-/** One case: what it is, its form, the curve, the answer and the call. It opens with its own example solved. */
+/** One case: what it is, its form, the curve, the answer and the call. It opens with
+ * what its address says, or with its own example, solved. */
 export function CaseSheet({ description: c }: { description: Case }) {
-  const example = useQuery({
-    queryKey: ['try', c.id, c.example],
-    queryFn: ({ signal }) => trySolve(c.id, c.example, signal),
+  const [search, setSearch] = useSearchParams()
+  const [first] = useState(() => formIn(c.fields, search) ?? valuesOf(c.fields, c.example))
+  const [body] = useState(() => bodyOf(c.fields, first))
+  const opening = useQuery({
+    queryKey: ['try', c.id, body],
+    queryFn: ({ signal }) => trySolve(c.id, body, signal),
     staleTime: Infinity,
   })
-  const own = useSolve(c.id, c.example)
+  const own = useSolve(c.id, body)
   const solved: Solved | undefined =
-    own.solved ?? (example.data && { body: c.example, answer: example.data, at: example.dataUpdatedAt })
+    own.solved ?? (opening.data && { body, answer: opening.data, at: opening.dataUpdatedAt })
+  const onAddress = useCallback(
+    (address: string) => {
+      if (address !== search.toString()) setSearch(address, { replace: true, preventScrollReset: true })
+    },
+    [search, setSearch],
+  )
+  const error = own.error ?? (own.solved || own.pending ? null : opening.error)
   const [changed, setChanged] = useState(false)
-  const stale: Stale | undefined = changed ? (own.error ? 'refused' : 'changed') : undefined
+  const stale: Stale | undefined = changed ? (error ? 'refused' : 'changed') : undefined
   return (
     <Sheet title={c.title}>
       <TitleBlock
@@ -42,16 +57,18 @@ export function CaseSheet({ description: c }: { description: Case }) {
       </TitleBlock>
       <Band>
         <div className="two">
-          <AboutBody description={c} body={solved?.body ?? c.example} />
+          <AboutBody description={c} body={solved ? asUsed(solved) : c.example} />
           <CaseForm
             description={c}
+            first={first}
             asked={own.asked}
             solved={solved}
             pending={own.pending}
-            error={own.error}
+            error={error}
             onSolve={own.solve}
             onCancel={own.cancel}
             onChanged={setChanged}
+            onAddress={onAddress}
           />
         </div>
       </Band>
@@ -60,7 +77,7 @@ export function CaseSheet({ description: c }: { description: Case }) {
           {isDrawn(c) && <CurveBand description={c} solved={solved} stale={stale} />}
           <Band>
             <div className="two flip">
-              <AnswerView description={c} answer={solved.answer} stale={stale} />
+              <AnswerView description={c} solved={solved} stale={stale} />
               <CallView description={c} solved={solved} stale={stale} />
             </div>
           </Band>
@@ -68,10 +85,10 @@ export function CaseSheet({ description: c }: { description: Case }) {
         </>
       ) : (
         <Band>
-          {example.isError ? (
-            <Failed error={example.error} retry={() => void example.refetch()} />
+          {opening.isError ? (
+            <Failed error={opening.error} retry={() => void opening.refetch()} />
           ) : (
-            <Loading what="Solving the example." />
+            <Loading what="Solving it." />
           )}
         </Band>
       )}

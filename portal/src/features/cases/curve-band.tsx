@@ -1,10 +1,11 @@
 import { useQuery } from '@tanstack/react-query'
-import { useState } from 'react'
+import { useRef, useState } from 'react'
 import { Segmented } from '../../components/segmented.tsx'
 import { Band } from '../../components/sheet.tsx'
 import { QueryView } from '../../components/query-view.tsx'
 import { hatchFor } from '../../figure/sketch/shapes.ts'
 import { type Drawing, curveQuery } from '../../solving/curve-query.ts'
+import { CurveDownloads } from './curve-downloads.tsx'
 import { FieldCurve } from './field-curve.tsx'
 import { FieldTable } from './field-table.tsx'
 import { HistoryCurve } from './history-curve.tsx'
@@ -26,6 +27,7 @@ interface Props {
 /** The solve drawn, and the same numbers as a table. */
 export function CurveBand({ description: c, solved: { body, answer }, stale }: Props) {
   const query = useQuery(curveQuery(c, body, answer))
+  const drawn = useRef<HTMLDivElement>(null)
   const [view, setView] = useState<'curve' | 'table'>('curve')
   return (
     <Band label="Curve">
@@ -36,9 +38,14 @@ export function CurveBand({ description: c, solved: { body, answer }, stale }: P
       <StaleFrame stale={stale}>
         <QueryView query={query} what="Solving for the curve.">
           {(drawing) => (
-            <div data-drawn={drawing.kind}>
-              <Shown drawing={drawing} view={view} body={c.sketch.body} />
-            </div>
+            <>
+              <div data-drawn={drawing.kind} ref={drawn}>
+                <Shown drawing={drawing} view={view} body={c.sketch.body} />
+              </div>
+              {drawing.kind !== 'none' && (
+                <CurveDownloads drawing={drawing} name={c.id} drawn={view === 'curve' ? drawn : undefined} />
+              )}
+            </>
           )}
         </QueryView>
       </StaleFrame>

@@ -42,6 +42,7 @@ export function FieldList({ fields, shown = fields, ...list }: ListProps) {
             path={path + field.name}
             error={refusalAt(refusals, path + field.name)}
             register={register(`${box}fields.${field.name}`)}
+            registerUnit={register(`${box}units.${field.name}`)}
           />
         ))}
     </Fragment>

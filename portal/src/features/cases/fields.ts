@@ -5,6 +5,8 @@ export type TopField = Case['fields'][number]
 export type Field = Omit<TopField, 'fields' | 'kinds'> & Pick<TopField, 'fields' | 'kinds'>
 
 interface FieldSchema {
+  'x-units'?: readonly string[]
+  'x-material'?: boolean
   type?: string
   const?: unknown
   enum?: readonly unknown[]
@@ -41,6 +43,16 @@ export const optionsOf = (field: Field): readonly unknown[] => {
   const schema = field.schema as FieldSchema
   return choicesOf(schema.items ?? schema)
 }
+
+/** The codes in which a number, or the numbers of a list, may be given; none where there is only one. */
+export function unitsOf(field: Field): readonly string[] {
+  const schema = field.schema as FieldSchema
+  const units = schema['x-units'] ?? schema.items?.['x-units'] ?? []
+  return ['number', 'list'].includes(controlOf(field)) && units.length > 1 ? units : []
+}
+
+/** A field that takes the id of a material. */
+export const isMaterial = (field: Field): boolean => (field.schema as FieldSchema)['x-material'] === true
 
 export const defaultOf = (field: Field): unknown => (field.schema as FieldSchema).default
 

@@ -1,5 +1,5 @@
 import type { Body } from '../../solving/body.ts'
-import { type Field, allInside, controlOf, defaultOf, fieldsInside, optionsOf } from './fields.ts'
+import { type Field, allInside, controlOf, defaultOf, fieldsInside, optionsOf, unitsOf } from './fields.ts'
 import { listOf, numberOf, rowsOf, rowsText } from './number-text.ts'
 import { isSent, wayName, waysOf } from './solid-ways.ts'
 
@@ -9,6 +9,8 @@ export interface FormValues {
   solid: string
   /** Which kind an object is of; empty for none, and where it has no kinds. */
   kind: string
+  /** The unit of a number or list where it is not that of the contract. */
+  units: { [name: string]: string }
   fields: { [name: string]: Value }
 }
 
@@ -20,7 +22,29 @@ const isGroup = (value: unknown): value is FormValues =>
 export function valuesOf(fields: readonly Field[], body: Body): FormValues {
   const given = waysOf(fields).find((way) => way.some((name) => name in body))
   const boxes = fields.map((field) => [field.name, valueIn(field, body[field.name])] as const)
-  return { solid: given ? wayName(given) : '', kind: String(body['kind'] ?? ''), fields: Object.fromEntries(boxes) }
+  const units = fields.map((field) => [field.name, unitIn(field, body[field.name])] as const)
+  return {
+    solid: given ? wayName(given) : '',
+    kind: String(body['kind'] ?? ''),
+    units: Object.fromEntries(units),
+    fields: Object.fromEntries(boxes),
+  }
+}
+
+interface WithUnit {
+  value: unknown
+  unit: string
+}
+
+const isWithUnit = (given: unknown): given is WithUnit =>
+  typeof given === 'object' && given !== null && 'value' in given && 'unit' in given
+
+const bare = (given: unknown): unknown => (isWithUnit(given) ? given.value : given)
+
+/** A list is in one unit. */
+function unitIn(field: Field, given: unknown): string {
+  const one: unknown = Array.isArray(given) ? given[0] : given
+  return unitsOf(field).length > 0 && isWithUnit(one) ? one.unit : ''
 }
 
 function valueIn(field: Field, given: unknown): Value {
@@ -34,7 +58,7 @@ function valueIn(field: Field, given: unknown): Value {
       return given === undefined ? '' : rowsText(field.fields ?? [], given as Body[])
     default:
       if (given === undefined) return ''
-      return Array.isArray(given) ? given.join(', ') : String(given)
+      return Array.isArray(given) ? given.map(bare).join(', ') : String(bare(given))
   }
 }
 
@@ -42,9 +66,16 @@ function valueIn(field: Field, given: unknown): Value {
 export function bodyOf(fields: readonly Field[], values: FormValues): Record<string, unknown> {
   const sent = fields.flatMap((field) => {
     const value = isSent(fields, field.name, values.solid) ? sentOf(field, values.fields[field.name]) : undefined
-    return value === undefined ? [] : [[field.name, value] as const]
+    return value === undefined ? [] : [[field.name, inUnit(value, field, values.units[field.name])] as const]
   })
   return Object.fromEntries(sent)
+}
+
+/** Numbers with a unit, where it is not that of the contract; what is no number is left for the service to refuse. */
+function inUnit(value: unknown, field: Field, unit: string | undefined): unknown {
+  if (!unit || unit === field.unit) return value
+  if (Array.isArray(value)) return value.map((one) => inUnit(one, field, unit))
+  return typeof value === 'number' ? { value, unit } : value
 }
 
 function sentOf(field: Field, value: Value | undefined): unknown {

@@ -1,7 +1,18 @@
 import { useEffect, useRef } from 'react'
 
-/** A formula as MathML; until the typesetter is there, and where it fails, its TeX stands. */
+/** A line of formulas: each that follows a wide space may stand below the one before. */
 export function Formula({ tex }: { tex: string }) {
+  return (
+    <div className="formula">
+      {tex.split('\\qquad').map((part) => (
+        <Part key={part} tex={part} />
+      ))}
+    </div>
+  )
+}
+
+/** As MathML; until the typesetter is there, and where it fails, the TeX stands. */
+function Part({ tex }: { tex: string }) {
   const ref = useRef<HTMLDivElement>(null)
   useEffect(() => {
     let left = false
@@ -12,9 +23,5 @@ export function Formula({ tex }: { tex: string }) {
       left = true
     }
   }, [tex])
-  return (
-    <div ref={ref} className="formula">
-      {tex}
-    </div>
-  )
+  return <div ref={ref}>{tex}</div>
 }

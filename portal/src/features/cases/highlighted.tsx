@@ -1,3 +1,5 @@
+import csharp from '@shikijs/langs/csharp'
+import python from '@shikijs/langs/python'
 import shellscript from '@shikijs/langs/shellscript'
 import typescript from '@shikijs/langs/typescript'
 import { toJsxRuntime } from 'hast-util-to-jsx-runtime'
@@ -11,7 +13,7 @@ const theme = createCssVariablesTheme({ name: 'sheet', variablePrefix: '--code-'
 
 const highlighter = createHighlighterCore({
   themes: [theme],
-  langs: [shellscript, typescript],
+  langs: [shellscript, typescript, python, csharp],
   engine: createJavaScriptRegexEngine(),
 })
 

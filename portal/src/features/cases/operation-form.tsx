@@ -6,12 +6,11 @@ import { FormFailure } from '../../components/form-failure.tsx'
 import { JsonCode } from '../../components/json-code.tsx'
 import { jsonText } from '../../components/json-text.ts'
 import { SendButton } from '../../components/send-button.tsx'
-import { snippets } from '../../solving/snippets.ts'
 import { tryQuestion } from '../../solving/solve.ts'
 import type { Body } from '../../solving/body.ts'
 import { type Operation, ownNames, ownText, questionOf } from './asking.ts'
 import type { Case } from './described.ts'
-import { SnippetCode } from './snippet-code.tsx'
+import { SnippetTabs } from './snippet-tabs.tsx'
 
 interface Props {
   description: Case
@@ -35,8 +34,6 @@ export function OperationForm({ description: c, operation, solved }: Props) {
     event.preventDefault()
     asking.mutate(question)
   }
-  const curl = snippets[0]!
-  const call = curl.write(location.origin + operation.path, question)
   return (
     <form onSubmit={send} noValidate className="grid gap-4 pb-4" aria-label={operation.title}>
       <p className="prose">{withMinus(operation.summary)}</p>
@@ -65,9 +62,7 @@ export function OperationForm({ description: c, operation, solved }: Props) {
           {asking.isPending ? 'Asking' : 'Ask'}
         </SendButton>
       </div>
-      <CodeBlock caption={operation.path} text={call} label={`${operation.title}, curl`}>
-        <SnippetCode text={call} language={curl.language} />
-      </CodeBlock>
+      <SnippetTabs path={operation.path} body={question} caption={operation.path} of={`${operation.title}, `} />
       <div aria-live="polite">
         {asking.data !== undefined && (
           <CodeBlock caption="Answer · 200" text={jsonText(asking.data)} label={`${operation.title}, answer`} tall>

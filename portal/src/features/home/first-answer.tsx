@@ -6,7 +6,7 @@ import { CASE, wallBody } from './wall.ts'
 
 /** The way to the first answer, as a chain of dimensions. */
 export function FirstAnswer({ film, hours }: { film: number; hours: number }) {
-  const curl = snippets[0]!.write(`${location.origin}/v1/cases/${CASE}/solve`, wallBody(film, hours))
+  const curl = snippets[0].write(`${location.origin}/v1/cases/${CASE}/solve`, wallBody(film, hours))
   return (
     <Band label="To the first answer">
       <h2>To the first answer</h2>

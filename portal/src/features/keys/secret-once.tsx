@@ -2,6 +2,7 @@ import { useState } from 'react'
 import { Button } from '../../components/button.tsx'
 import { CodeBlock } from '../../components/code-block.tsx'
 import { CopyButton } from '../../components/copy-button.tsx'
+import { download } from '../../components/download.ts'
 import { Dialog } from '../../components/dialog.tsx'
 
 interface Props {
@@ -28,7 +29,9 @@ export function SecretOnce({ name, secret, onDone }: Props) {
           <CopyButton main text={secret}>
             Copy the key
           </CopyButton>
-          <Button onClick={() => download(secret)}>Download as .env</Button>
+          <Button onClick={() => download('soakstone.env', new Blob([`SOAK_KEY=${secret}\n`], { type: 'text/plain' }))}>
+            Download as .env
+          </Button>
         </div>
         <CodeBlock caption="try it" text={trial} label="First call with this key">
           <code>{trial.replace(secret, '…')}</code>
@@ -46,13 +49,4 @@ export function SecretOnce({ name, secret, onDone }: Props) {
       </div>
     </Dialog>
   )
-}
-
-function download(secret: string) {
-  const url = URL.createObjectURL(new Blob([`SOAK_KEY=${secret}\n`], { type: 'text/plain' }))
-  const link = document.createElement('a')
-  link.href = url
-  link.download = 'soakstone.env'
-  link.click()
-  URL.revokeObjectURL(url)
 }

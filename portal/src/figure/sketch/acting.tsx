@@ -1,5 +1,5 @@
 import type { Frame } from './frame.ts'
-import { InnerSign } from './round-bodies.tsx'
+import { HeldRing, InnerSign } from './round-bodies.tsx'
 import { SignAt } from './face-sign.tsx'
 import { shapeOf } from './shapes.ts'
 
@@ -12,6 +12,9 @@ interface Props {
   second: string
 }
 
+const round = ['cylinder', 'sphere', 'hollow-cylinder']
+const held = ['temperature', 'held']
+
 /** Signs of what acts on a body, at its faces and inside it. */
 export function Acting({ frame, body, boundary, first, second }: Props) {
   const faces = shapeOf(body).faces(frame)
@@ -19,9 +22,14 @@ export function Acting({ frame, body, boundary, first, second }: Props) {
   const kinds = hollow ? [second, second] : [first, second]
   return (
     <g>
-      {faces.map((face, i) => (
-        <SignAt key={i} face={face} kind={kinds[i] ?? first} />
-      ))}
+      {faces.map((face, i) => {
+        const kind = kinds[i] ?? first
+        return round.includes(body) && held.includes(kind) ? (
+          <HeldRing key={i} frame={frame} />
+        ) : (
+          <SignAt key={i} face={face} kind={kind} />
+        )
+      })}
       {hollow && (
         <InnerSign frame={frame} body={body} kind={body === 'hole' && boundary === 'source' ? 'source' : first} />
       )}

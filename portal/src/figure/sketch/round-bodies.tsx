@@ -129,6 +129,12 @@ export const roundBodies: Record<string, BodyShape> = {
   },
 }
 
+/** A round surface that is held is held all around. */
+export function HeldRing({ frame }: { frame: Frame }) {
+  const { x, y, r } = circleIn(frame)
+  return <circle className="now" cx={x} cy={y} r={r + 5} />
+}
+
 /** What acts inside a hollow or a hole: a clay ring where it is held, arrows of a flux, a wave of a fluid. */
 export function InnerSign({ frame, body, kind }: { frame: Frame; body: string; kind: string }) {
   const { x, y, r: whole } = circleIn(frame)
