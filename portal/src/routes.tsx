@@ -22,6 +22,14 @@ export const router = createBrowserRouter([
         lazy: async () => ({ Component: (await import('./features/cases/case-screen.tsx')).CaseScreen }),
       },
       {
+        path: '/docs',
+        lazy: async () => ({ Component: (await import('./features/docs/docs-screen.tsx')).DocsScreen }),
+      },
+      {
+        path: '/docs/:slug',
+        lazy: async () => ({ Component: (await import('./features/docs/guide-screen.tsx')).GuideScreen }),
+      },
+      {
         path: '/reference',
         lazy: async () => ({ Component: (await import('./features/reference/reference-screen.tsx')).ReferenceScreen }),
       },

@@ -36,6 +36,8 @@ test.each([
   'home/home-screen',
   'cases/catalogue-screen',
   'cases/case-screen',
+  'docs/docs-screen',
+  'docs/guide-screen',
   'keys/keys-screen',
   'usage/usage-screen',
   'materials/materials-screen',

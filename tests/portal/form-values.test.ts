@@ -84,6 +84,7 @@ test('each solid states its heat capacity in its own way, and an object that may
   own.fields['density'] = '7'
   expect(bodyOf([other, films], values)).toEqual({ other: { diffusivity: 1e-6 } })
   own.solid = 'density+specificHeat'
+  expect(isComplete([other], values), 'half of the way is missing').toBe(false)
   expect(bodyOf([other, films], values)).toEqual({ other: { density: 7 } })
   const partly = values.fields['films'] as ReturnType<typeof valuesOf>
   partly.fields['width'] = '4'

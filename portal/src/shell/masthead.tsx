@@ -5,6 +5,7 @@ import { ThemeSwitch } from './theme-switch.tsx'
 
 const sheets = [
   { to: '/cases', text: 'Cases' },
+  { to: '/docs', text: 'Docs' },
   { to: '/reference', text: 'Reference' },
   { to: '/problems', text: 'Problems' },
 ]

@@ -1,5 +1,6 @@
 import { useQuery } from '@tanstack/react-query'
 import { useSearchParams } from 'react-router-dom'
+import { casesQuery } from '../../api/cases.ts'
 import { LinkButton } from '../../components/button.tsx'
 import { counted } from '../../components/formats.ts'
 import { QueryView } from '../../components/query-view.tsx'
@@ -10,7 +11,6 @@ import { CaseGroup } from './case-group.tsx'
 import { FacetMarks } from './facet-marks.tsx'
 import { marked, narrowed, narrowingIn, worded } from './narrowing.ts'
 import type { CaseList } from './described.ts'
-import { casesQuery } from './queries.ts'
 
 const none: CaseList = { cases: [], families: [], facets: [] }
 

@@ -110,8 +110,10 @@ function readAs(field: Field, text: string): unknown {
   }
 }
 
-/** Whether everything that must be given stands in its box. */
+/** Whether everything that must be given stands in its box; a solid in the way that is chosen. */
 export function isComplete(fields: readonly Field[], values: FormValues): boolean {
+  const way = waysOf(fields).find((names) => wayName(names) === values.solid) ?? []
+  if (!way.every((name) => values.fields[name] !== '')) return false
   return fields.every((field) => {
     if (!isSent(fields, field.name, values.solid)) return true
     const value = values.fields[field.name]

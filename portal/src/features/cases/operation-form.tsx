@@ -35,7 +35,7 @@ export function OperationForm({ description: c, operation, solved }: Props) {
     asking.mutate(question)
   }
   return (
-    <form onSubmit={send} noValidate className="grid gap-4 pb-4" aria-label={operation.title}>
+    <form onSubmit={send} noValidate className="grid grid-cols-1 gap-4 pb-4" aria-label={operation.title}>
       <p className="prose">{withMinus(operation.summary)}</p>
       <div>
         {names.map((name) => (

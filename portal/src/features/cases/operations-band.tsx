@@ -1,9 +1,10 @@
-import { useState } from 'react'
+import { Suspense, lazy, useState } from 'react'
 import { Band } from '../../components/sheet.tsx'
 import type { Body } from '../../solving/body.ts'
 import type { Operation } from './asking.ts'
 import type { Case } from './described.ts'
-import { OperationForm } from './operation-form.tsx'
+
+const OperationForm = lazy(() => import('./operation-form.tsx').then((read) => ({ default: read.OperationForm })))
 
 /** What else can be asked of the same body, each with its path, an example and a form to try it. */
 export function OperationsBand({ description: c, solved }: { description: Case; solved: Body }) {
@@ -31,7 +32,11 @@ function Question({ operation, ...rest }: { description: Case; operation: Operat
       <summary>
         {operation.title} <code className="lab">{operation.path}</code>
       </summary>
-      {opened && <OperationForm operation={operation} {...rest} />}
+      {opened && (
+        <Suspense fallback={null}>
+          <OperationForm operation={operation} {...rest} />
+        </Suspense>
+      )}
     </details>
   )
 }

@@ -2,13 +2,6 @@ import { queryOptions } from '@tanstack/react-query'
 import { unwrap } from '../../api/api-error.ts'
 import { portalApi, publicApi } from '../../api/clients.ts'
 
-export const casesQuery = () =>
-  queryOptions({
-    queryKey: ['cases'],
-    queryFn: ({ signal }) => unwrap(publicApi.GET('/v1/cases', { signal })),
-    staleTime: Infinity,
-  })
-
 export const caseQuery = (caseId: string) =>
   queryOptions({
     queryKey: ['cases', caseId],

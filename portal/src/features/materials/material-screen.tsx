@@ -96,7 +96,7 @@ function Figures({ material }: { material: Material }) {
                   {label}, <i>{symbol}</i>
                 </th>
                 <td className="num">
-                  {plain(material[name], 6)} <span className="lab">{unitText(unit).replace('s0.5', 's½')}</span>
+                  {plain(material[name], 6)} <span className="lab">{unitText(unit.replace('s0.5', 's½'))}</span>
                 </td>
               </tr>
             ))}

@@ -5,7 +5,8 @@ import { QueryView } from '../../components/query-view.tsx'
 import { Band, Sheet } from '../../components/sheet.tsx'
 import { Empty } from '../../components/states.tsx'
 import { type Fact, TitleBlock } from '../../components/title-block.tsx'
-import { type ProblemEntry, problemsQuery } from './queries.ts'
+import { problemsQuery } from '../../api/codes.ts'
+import type { ProblemEntry } from '../../api/problem-entry.ts'
 
 const places = {
   problem: 'code of a problem',

@@ -4,7 +4,8 @@ import { type Column, DataTable } from '../../components/data-table.tsx'
 import { QueryView } from '../../components/query-view.tsx'
 import { Band, Sheet } from '../../components/sheet.tsx'
 import { TitleBlock } from '../../components/title-block.tsx'
-import { type ProblemEntry, problemsQuery } from './queries.ts'
+import { problemsQuery } from '../../api/codes.ts'
+import type { ProblemEntry } from '../../api/problem-entry.ts'
 
 const code: Column<ProblemEntry> = {
   header: 'Code',

@@ -1,23 +1,12 @@
 import { queryOptions } from '@tanstack/react-query'
-import { unwrap } from '../../api/api-error.ts'
-import { publicApi } from '../../api/clients.ts'
-
-interface Described {
-  title: string
-  text: string
-}
+import { unwrap } from './api-error.ts'
+import { publicApi } from './clients.ts'
+import type { Described, ProblemEntry } from './problem-entry.ts'
 
 interface Contract {
   'x-problems': Record<string, Described & { status: number; retryable: boolean }>
   'x-error-codes': Record<string, Described>
   'x-warnings': Record<string, Described>
-}
-
-export interface ProblemEntry extends Described {
-  code: string
-  kind: 'problem' | 'entry' | 'warning'
-  status?: number
-  retryable?: boolean
 }
 
 /** Every code that an answer can carry, from the contract itself. */
