@@ -135,6 +135,26 @@ test('what is refused stands beside its field; whoever was overtaken is told wha
   await page.close()
 }, 60_000)
 
+test('what was typed of a material outlasts the session', async () => {
+  const page = await openMaterials('owner')
+  await page.getByRole('button', { name: 'Keep a material' }).click()
+  await page.getByLabel('Name').fill('Typed before the end')
+  await page.context().clearCookies()
+  await page.getByRole('button', { name: 'Keep it' }).click()
+  await page.waitForURL('**/sign-in?next=%2Fmaterials')
+  const owner = portal.demo?.signIns.find(({ role }) => role === 'owner')
+  await page.getByLabel('Mail address').fill(owner?.mail ?? '')
+  await page.getByLabel('Password').fill(owner?.password ?? '')
+  await page.getByRole('button', { name: 'Sign in' }).click()
+  await page.waitForURL('**/materials')
+  await page.getByRole('button', { name: 'Keep a material' }).click()
+  expect(await page.getByLabel('Name').inputValue()).toBe('Typed before the end')
+  await page.getByRole('button', { name: 'Cancel' }).click()
+  await page.getByRole('button', { name: 'Keep a material' }).click()
+  expect(await page.getByLabel('Name').inputValue(), 'a form that was left is empty').toBe('')
+  await page.close()
+}, 60_000)
+
 test('a file is examined row by row before anything is kept; the good rows are kept', async () => {
   const page = await openMaterials('integrator')
   const text = [

@@ -1,6 +1,7 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
 import { signOut } from './queries.ts'
 import { noteSignedIn } from '../../api/signed-in.ts'
+import { dropDrafts } from '../../components/drafts.ts'
 
 /** Ends the session on the server and forgets what was read; the page starts anew. */
 export function SignOut() {
@@ -9,6 +10,7 @@ export function SignOut() {
     mutationFn: signOut,
     onSuccess: () => {
       noteSignedIn('member', false)
+      dropDrafts()
       client.clear()
       location.assign('/')
     },

@@ -1,26 +1,37 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
-import { useForm } from 'react-hook-form'
+import { useEffect } from 'react'
+import { useForm, useWatch } from 'react-hook-form'
 import { useNavigate } from 'react-router-dom'
 import { Button } from '../../components/button.tsx'
+import { draftOf, dropDrafts, keepDraft } from '../../components/drafts.ts'
 import { Dialog } from '../../components/dialog.tsx'
 import { SendButton } from '../../components/send-button.tsx'
 import { MaterialFields, blank } from './material-fields.tsx'
-import { allLists, createMaterial } from './queries.ts'
+import { type Typed, allLists, createMaterial } from './queries.ts'
 
-/** A new material; its own sheet opens when it is kept. */
+const FORM = 'material'
+
+/** A new material; its own sheet opens when it is kept. What is typed outlasts a session that ends. */
 export function CreateMaterial({ onClose }: { onClose(): void }) {
   const client = useQueryClient()
   const navigate = useNavigate()
-  const { register, handleSubmit } = useForm({ defaultValues: blank })
+  const { register, handleSubmit, control } = useForm({ defaultValues: { ...blank, ...draftOf<Typed>(FORM) } })
+  const typed = useWatch({ control })
+  useEffect(() => keepDraft(FORM, typed), [typed])
+  const leave = () => {
+    dropDrafts(FORM)
+    onClose()
+  }
   const create = useMutation({
     mutationFn: createMaterial,
     onSuccess: async ({ id }) => {
+      dropDrafts(FORM)
       await client.invalidateQueries(allLists)
       await navigate(`/materials/${id}`)
     },
   })
   return (
-    <Dialog title="Keep a material" onClose={onClose}>
+    <Dialog title="Keep a material" onClose={leave}>
       <form noValidate onSubmit={handleSubmit((typed) => create.mutate(typed))}>
         <div className="body">
           <MaterialFields register={register} error={create.error} />
@@ -29,7 +40,7 @@ export function CreateMaterial({ onClose }: { onClose(): void }) {
           <SendButton kind="main" type="submit" error={create.error} disabled={create.isPending}>
             {create.isPending ? 'Keeping' : 'Keep it'}
           </SendButton>
-          <Button onClick={onClose}>Cancel</Button>
+          <Button onClick={leave}>Cancel</Button>
         </div>
       </form>
     </Dialog>
