@@ -240,7 +240,7 @@ test('on a narrow sheet no figure covers another, and a drawing keeps to its col
   const words = await state.getByRole('link').boundingBox()
   expect((drawing?.x ?? 0) + (drawing?.width ?? 0)).toBeLessThanOrEqual(words?.x ?? 0)
 
-  await page.goto(`${portal.url}/cases/lumped-convection`)
+  await page.goto(`${portal.url}/cases/lumped-varying-ambient`)
   const formula = page.getByRole('region', { name: 'Formula' })
   await formula.locator('math').first().waitFor()
   await page.getByText('Wider than the sheet: it scrolls sideways.').waitFor()
