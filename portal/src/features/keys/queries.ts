@@ -21,7 +21,7 @@ export const createKey = ({ name, quota }: { name: string; quota: string }) => {
   const typed = quota.trim()
   const text = grouped.test(typed) ? typed.replace(/\D/g, '') : typed
   const points = text === '' ? {} : { quota: (Number.isFinite(Number(text)) ? Number(text) : text) as number }
-  return unwrap(portalApi.POST('/portal/v1/keys', { body: { name, ...points } }))
+  return unwrap(portalApi.POST('/portal/v1/keys', { body: { name, environment: 'trial', ...points } }))
 }
 
 export const revokeKey = (keyId: string) =>
