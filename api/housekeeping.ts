@@ -1,4 +1,5 @@
 import type { Deps } from './deps.ts'
+import { forgetKeys } from './idempotency/claim.ts'
 import { pruneLimits } from './http/limits.ts'
 import { sweep } from './metering/sweep.ts'
 import { dropOldLog } from './requests/retention.ts'
@@ -18,6 +19,7 @@ export function keepHouse({ pool, log }: Deps): () => Promise<void> {
       if (days > 0) log.info({ days }, 'days of the log that are no longer kept were dropped')
     },
     limits: () => pruneLimits(pool),
+    idempotency: () => forgetKeys(pool),
   }
   let round = Promise.resolve()
   const doAll = () => {

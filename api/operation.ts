@@ -51,6 +51,11 @@ export interface CallRecord {
   bytesOut?: number
   /** Done when an answer of many lines is written, or is not to be. */
   streaming?: Promise<void>
+  /** The caller's own tag of the call. */
+  reference?: string
+  traceId?: string
+  /** It is the answer of a call before, computed again and not charged again. */
+  replayed?: boolean
   /** Headers of the limits that the call counted against, on its answer whatever that is. */
   limits?: Record<string, string>
 }
@@ -112,6 +117,13 @@ export type LimiterName = 'sign-up' | 'sign-in' | 'staff-sign-in' | 'try' | 'lea
 export type Tag =
   'Catalogue' | 'Cases' | 'Usage' | 'Requests' | 'Health' | 'Session' | 'Keys' | 'Materials' | 'Batches' | 'Try'
 
+/** An operation that will go: since when that is known, when it ends, and what to use instead. */
+export interface Deprecation {
+  since: Date
+  sunset: Date
+  successor?: string
+}
+
 interface Description<P, Q, B, A extends Access> {
   id: string
   document: 'openapi' | 'portal' | 'support'
@@ -128,6 +140,7 @@ interface Description<P, Q, B, A extends Access> {
   /** Starts or ends a session although it needs none. */
   session?: boolean
   metered?: boolean
+  deprecated?: Deprecation
   limiter?: LimiterName
   params?: z.ZodObject & z.ZodType<P>
   query?: z.ZodObject & z.ZodType<Q>
@@ -199,12 +212,16 @@ export const malformed = {
   'text/csv': 'malformed-csv',
 } as const satisfies Record<string, ProblemCode>
 
+/** True where a client may send the same call twice, with a key, for one effect. */
+export const takesIdempotencyKey = (o: Operation) => o.access === 'key' && o.method === 'post'
+
 /** Every problem an operation can answer: its own, and those of its access, body, query and limits. */
 export function problemsOf(o: Operation): ProblemCode[] {
   const codes: ProblemCode[] = ['method-not-allowed', 'not-acceptable', 'internal', 'unavailable', 'malformed-request']
   codes.push('invalid-parameter', 'header-too-large', 'request-timeout', 'expectation-failed')
   if (o.access === 'key') codes.push(...ofKeys)
   if (o.access === 'session' || o.access === 'staff') codes.push('sign-in-needed', 'forbidden')
+  if (takesIdempotencyKey(o)) codes.push('call-in-flight', 'idempotency-key-reused')
   if (usesSession(o) && o.method !== 'get') codes.push('cross-site')
   if (o.params) codes.push('not-found')
   if (o.body)

@@ -148,6 +148,12 @@ export const problems = {
     text: 'A revoked key is not changed any more. Make a new one.',
     retryable: false,
   },
+  'call-in-flight': {
+    status: 409,
+    title: 'The same call is under way',
+    text: 'A call with this Idempotency-Key is not answered yet. Send it again after the time that Retry-After states.',
+    retryable: true,
+  },
   'too-many-keys': {
     status: 409,
     title: 'The account has too many keys',
@@ -202,10 +208,16 @@ export const problems = {
     text: 'Each entry of errors names the field, what is wrong with it and what would be accepted.',
     retryable: false,
   },
+  'idempotency-key-reused': {
+    status: 422,
+    title: 'The Idempotency-Key belongs to another call',
+    text: 'Within 24 hours the same key may only repeat the same call: method, address and body. Take a new key for each new call.',
+    retryable: false,
+  },
   'invalid-parameter': {
     status: 422,
     title: 'A parameter is refused',
-    text: 'Each entry of errors names the query parameter, what is wrong with it and what would be accepted.',
+    text: 'Each entry of errors names the query parameter or header, what is wrong with it and what would be accepted.',
     retryable: false,
   },
   'precondition-required': {
@@ -264,7 +276,7 @@ export { domainCodes }
 
 /** One entry of `errors`: what is refused, where it stands, and what would do. */
 export type ProblemIssue = { code: DomainCode; detail: string; accepted?: string } & (
-  { pointer: string } | { parameter: string }
+  { pointer: string } | { parameter: string } | { header: string }
 )
 
 interface Extras {
@@ -321,6 +333,11 @@ export function problemDetails(problem: Problem, publicUrl: string, requestId?: 
 /** A refused body, from the issues of a DomainError. */
 export function invalidInput(issues: readonly Issue[]): Problem {
   return new Problem('invalid-input', issues[0]?.detail, { errors: issues })
+}
+
+/** A refused header. */
+export function invalidHeader(header: string, detail: string, accepted: string): Problem {
+  return new Problem('invalid-parameter', detail, { errors: [{ header, code: 'wrong-form', detail, accepted }] })
 }
 
 /** Refused query parameters, from the issues of a DomainError. */

@@ -203,6 +203,8 @@ export const ledger = pgTable(
     environment: environment(),
     caseId: text(),
     points: points().notNull(),
+    /** The caller's own tag of the call. */
+    reference: text(),
     at: createdAt(),
   },
   (t) => [
@@ -216,6 +218,27 @@ export const ledger = pgTable(
 export const openCharges = pgTable('open_charges', { requestId: text().primaryKey(), at: createdAt() }, (t) => [
   index('open_charges_at').on(t.at),
 ])
+
+/** Calls that their clients may send again, for a day; the answer only of what cannot be computed again. */
+export const idempotency = pgTable(
+  'idempotency',
+  {
+    accountId: text()
+      .notNull()
+      .references(() => accounts.id),
+    key: text().notNull(),
+    /** SHA-256 of method, address and body. */
+    fingerprint: bytes().notNull(),
+    /** Of the call that has the key, whose charge in the ledger says that it was answered. */
+    requestId: text().notNull(),
+    day: date({ mode: 'string' })
+      .notNull()
+      .default(sql`(now() AT TIME ZONE 'UTC')::date`),
+    at: createdAt(),
+    answer: json(),
+  },
+  (t) => [primaryKey({ columns: [t.accountId, t.key] }), index('idempotency_at').on(t.at)],
+)
 
 /** One row a call, partitioned by day; never a body, never a key. */
 export const log = pgTable(
@@ -236,6 +259,9 @@ export const log = pgTable(
     points: points().notNull(),
     problem: json(),
     solver: text().notNull(),
+    reference: text(),
+    /** Of the trace that the call is a part of, as of W3C Trace Context. */
+    traceId: text(),
   },
   (t) => [
     primaryKey({ columns: [t.at, t.id] }),

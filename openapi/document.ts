@@ -9,7 +9,7 @@ import { cautions, warningCodes } from '../api/catalogue/codes.ts'
 import { caseList } from '../api/catalogue/describe.ts'
 import { LINES } from '../api/http/answer.ts'
 import { sizeText } from '../api/http/size-text.ts'
-import { type Operation, type Tag, problemsOf } from '../api/operation.ts'
+import { type Operation, type Tag, problemsOf, takesIdempotencyKey } from '../api/operation.ts'
 import { rolesWith } from '../api/permissions.ts'
 import { sharedFields } from './shared-fields.ts'
 import { type SessionKind, cookieName } from '../api/session-kinds.ts'
@@ -82,6 +82,7 @@ const issueSchema = z
       .optional()
       .meta({ description: 'Where in the body, as an RFC 6901 pointer such as #/times/3.' }),
     parameter: z.string().optional().meta({ description: 'Which query parameter.' }),
+    header: z.string().optional().meta({ description: 'Which header.' }),
     code: z.enum(Object.keys(domainCodes) as (keyof typeof domainCodes)[]),
     detail: z.string(),
     accepted: z.string().optional().meta({ description: 'What would be accepted instead.' }),
@@ -169,6 +170,10 @@ const headers = {
   'Request-Id': header('Names the call, for its record and for support.'),
   ETag: header('Names the body by its bytes: equal answers have equal tags.'),
   Location: header('Path of what was made.'),
+  'Idempotency-Replayed': header('true where a call before, with the same Idempotency-Key, had this effect.'),
+  Deprecation: header('Since when it is known that the operation will end, as @ and seconds.'),
+  Sunset: header('When the operation ends.'),
+  Link: header('A page about the end of the operation, and what to use instead.'),
   RateLimit: header('What is left of each limit of calls: r calls within t seconds.'),
   'RateLimit-Policy': header('Each limit of calls: q calls in w seconds.'),
   'Points-Charged': header('Points that the call cost.', 'integer'),
@@ -189,6 +194,7 @@ function routeOf(o: Operation): RouteConfig {
     tags: [o.caseId ?? o.tag],
     summary: o.summary,
     ...(o.description ? { description: o.description } : {}),
+    ...(o.deprecated ? { deprecated: true } : {}),
     security: o.scope ? [{ key: [o.scope] }] : security[o.access],
     request: requestOf(o),
     responses: { [o.status]: success(o), ...unchanged(o), ...failures(codes) },
@@ -215,9 +221,33 @@ function requestOf(o: Operation): NonNullable<RouteConfig['request']> {
     ...(params ? { params } : {}),
     ...(o.query ? { query: o.query } : {}),
     ...((body ?? upload) ? { body: body ?? upload } : {}),
-    ...(o.conditional ? { headers: ifMatch } : {}),
+    ...headersTaken(o),
   }
 }
+
+function headersTaken(o: Operation): { headers?: z.ZodObject } {
+  const taken = {
+    ...(o.conditional ? ifMatch.shape : {}),
+    ...(takesIdempotencyKey(o) ? idempotencyKey.shape : {}),
+    ...(o.access === 'key' ? clientReference.shape : {}),
+  }
+  return Object.keys(taken).length > 0 ? { headers: z.object(taken) } : {}
+}
+
+const idempotencyKey = z.object({
+  'Idempotency-Key': z.string().min(1).max(512).optional().meta({
+    description: 'Names the call, so that it can be sent again within 24 hours for one effect and one charge.',
+  }),
+})
+
+const clientReference = z.object({
+  'Client-Reference': z
+    .string()
+    .min(1)
+    .max(64)
+    .optional()
+    .meta({ description: "The caller's own tag, kept with the call and grouped by in usage." }),
+})
 
 const ifMatch = z.object({
   'If-Match': z.string().meta({ description: 'ETag of the version that the change is of; * for whichever it is.' }),
@@ -236,6 +266,8 @@ function success(o: Operation): RouteConfig['responses'][string] {
   const names = [
     'Request-Id',
     ...(o.answer ? ['ETag'] : []),
+    ...(takesIdempotencyKey(o) ? ['Idempotency-Replayed'] : []),
+    ...(o.deprecated ? ['Deprecation', 'Sunset', 'Link'] : []),
     ...(o.status === 201 && o.document === 'openapi' ? ['Location'] : []),
     ...(o.metered ? ['Points-Charged'] : []),
     ...(o.access === 'key' ? ['Points-Remaining', 'RateLimit', 'RateLimit-Policy'] : []),
@@ -261,6 +293,7 @@ const headersOf: Partial<Record<ProblemCode, keyof typeof headers>> = {
   'scope-missing': 'WWW-Authenticate',
   'method-not-allowed': 'Allow',
   'rate-limited': 'Retry-After',
+  'call-in-flight': 'Retry-After',
   'too-many-at-once': 'Retry-After',
   'quota-exceeded': 'Points-Remaining',
   'solve-too-slow': 'Retry-After',

@@ -4625,7 +4625,7 @@ export interface components {
              * @description What clients match.
              * @enum {string}
              */
-            code: "malformed-request" | "malformed-json" | "malformed-csv" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "key-expired" | "sign-in-needed" | "sign-in-refused" | "plan-needed" | "address-refused" | "origin-refused" | "scope-missing" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "key-revoked" | "too-many-keys" | "too-many-materials" | "precondition-failed" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "invalid-parameter" | "precondition-required" | "rate-limited" | "too-many-at-once" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
+            code: "malformed-request" | "malformed-json" | "malformed-csv" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "key-expired" | "sign-in-needed" | "sign-in-refused" | "plan-needed" | "address-refused" | "origin-refused" | "scope-missing" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "key-revoked" | "call-in-flight" | "too-many-keys" | "too-many-materials" | "precondition-failed" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "idempotency-key-reused" | "invalid-parameter" | "precondition-required" | "rate-limited" | "too-many-at-once" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
             title: string;
             status: number;
             detail: string;
@@ -4644,6 +4644,8 @@ export interface components {
             pointer?: string;
             /** @description Which query parameter. */
             parameter?: string;
+            /** @description Which header. */
+            header?: string;
             /** @enum {string} */
             code: "missing-field" | "unknown-field" | "wrong-type" | "out-of-range" | "not-in-list" | "wrong-length" | "wrong-form" | "conflicting-fields" | "unit-not-accepted" | "material-unknown" | "depth-outside-body" | "sizes-do-not-fit" | "output-not-defined" | "target-at-asymptote" | "no-rate-at-change" | "singular-at-time-zero";
             detail: string;
@@ -23875,7 +23877,7 @@ export interface components {
              * @description An instant in UTC, RFC 3339.
              */
             asOf: string;
-            groupBy: ("day" | "key" | "case" | "environment")[];
+            groupBy: ("day" | "key" | "case" | "environment" | "reference")[];
             account: components["schemas"]["AccountStatus"];
             rows: {
                 /**
@@ -23888,6 +23890,7 @@ export interface components {
                 case?: string | null;
                 /** @enum {string|null} */
                 environment?: "trial" | "metered" | null;
+                reference?: string | null;
                 calls: number;
                 points: number;
                 /** @description Calls that were refused or failed; they cost nothing. */
@@ -23947,6 +23950,10 @@ export interface components {
             problem: {
                 [key: string]: unknown;
             } | null;
+            /** @description As in the Client-Reference header of the call. */
+            reference: string | null;
+            /** @description As in the traceparent header of the call. */
+            traceId: string | null;
             bytesIn: number;
             bytesOut: number;
             ledger: {
@@ -25085,6 +25092,20 @@ export interface components {
                 };
             };
         };
+        /** @description The same call is under way (call-in-flight). */
+        "call-in-flight": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                "Retry-After": components["headers"]["Retry-After"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "call-in-flight";
+                };
+            };
+        };
         /** @description The body is too large (body-too-large). Too much for one call (too-many-points). */
         "body-too-large.too-many-points": {
             headers: {
@@ -25111,8 +25132,8 @@ export interface components {
                 };
             };
         };
-        /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
-        "invalid-input.invalid-parameter": {
+        /** @description The Idempotency-Key belongs to another call (idempotency-key-reused). The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
+        "idempotency-key-reused.invalid-input.invalid-parameter": {
             headers: {
                 "Request-Id": components["headers"]["Request-Id"];
                 [name: string]: unknown;
@@ -25120,7 +25141,7 @@ export interface components {
             content: {
                 "application/problem+json": components["schemas"]["Problem"] & {
                     /** @enum {unknown} */
-                    code?: "invalid-input" | "invalid-parameter";
+                    code?: "idempotency-key-reused" | "invalid-input" | "invalid-parameter";
                 };
             };
         };
@@ -25193,16 +25214,17 @@ export interface components {
                 };
             };
         };
-        /** @description The account has too many materials (too-many-materials). */
-        "too-many-materials": {
+        /** @description The same call is under way (call-in-flight). The account has too many materials (too-many-materials). */
+        "call-in-flight.too-many-materials": {
             headers: {
                 "Request-Id": components["headers"]["Request-Id"];
+                "Retry-After": components["headers"]["Retry-After"];
                 [name: string]: unknown;
             };
             content: {
                 "application/problem+json": components["schemas"]["Problem"] & {
                     /** @enum {unknown} */
-                    code?: "too-many-materials";
+                    code?: "call-in-flight" | "too-many-materials";
                 };
             };
         };
@@ -25229,6 +25251,19 @@ export interface components {
                 "application/problem+json": components["schemas"]["Problem"] & {
                     /** @enum {unknown} */
                     code?: "precondition-failed";
+                };
+            };
+        };
+        /** @description The input is refused (invalid-input). A parameter is refused (invalid-parameter). */
+        "invalid-input.invalid-parameter": {
+            headers: {
+                "Request-Id": components["headers"]["Request-Id"];
+                [name: string]: unknown;
+            };
+            content: {
+                "application/problem+json": components["schemas"]["Problem"] & {
+                    /** @enum {unknown} */
+                    code?: "invalid-input" | "invalid-parameter";
                 };
             };
         };
@@ -25269,6 +25304,14 @@ export interface components {
         ETag: string;
         /** @description Path of what was made. */
         Location: string;
+        /** @description true where a call before, with the same Idempotency-Key, had this effect. */
+        "Idempotency-Replayed": string;
+        /** @description Since when it is known that the operation will end, as @ and seconds. */
+        Deprecation: string;
+        /** @description When the operation ends. */
+        Sunset: string;
+        /** @description A page about the end of the operation, and what to use instead. */
+        Link: string;
         /** @description What is left of each limit of calls: r calls within t seconds. */
         RateLimit: string;
         /** @description Each limit of calls: q calls in w seconds. */
@@ -25418,7 +25461,12 @@ export interface operations {
     "solve-lumped-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -25447,6 +25495,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -25463,10 +25512,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -25476,7 +25526,12 @@ export interface operations {
     "time-to-reach-lumped-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -25502,6 +25557,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -25518,10 +25574,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -25531,7 +25588,12 @@ export interface operations {
     "extremes-lumped-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -25557,6 +25619,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -25573,10 +25636,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -25586,7 +25650,12 @@ export interface operations {
     "chart-lumped-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -25615,6 +25684,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -25678,10 +25748,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -25691,7 +25762,12 @@ export interface operations {
     "cost-lumped-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -25723,6 +25799,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -25749,10 +25826,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -25762,7 +25840,12 @@ export interface operations {
     "solve-lumped-varying-ambient": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -25795,6 +25878,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -25811,10 +25895,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -25824,7 +25909,12 @@ export interface operations {
     "time-to-reach-lumped-varying-ambient": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -25854,6 +25944,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -25870,10 +25961,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -25883,7 +25975,12 @@ export interface operations {
     "extremes-lumped-varying-ambient": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -25913,6 +26010,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -25929,10 +26027,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -25942,7 +26041,12 @@ export interface operations {
     "chart-lumped-varying-ambient": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -25975,6 +26079,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -26038,10 +26143,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -26051,7 +26157,12 @@ export interface operations {
     "cost-lumped-varying-ambient": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -26087,6 +26198,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -26113,10 +26225,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -26126,7 +26239,12 @@ export interface operations {
     "solve-semi-infinite-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -26159,6 +26277,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -26175,10 +26294,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -26188,7 +26308,12 @@ export interface operations {
     "time-to-reach-semi-infinite-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -26214,6 +26339,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -26230,10 +26356,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -26243,7 +26370,12 @@ export interface operations {
     "depth-reached-semi-infinite-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -26269,6 +26401,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -26285,10 +26418,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -26298,7 +26432,12 @@ export interface operations {
     "extremes-semi-infinite-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -26324,6 +26463,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -26340,10 +26480,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -26353,7 +26494,12 @@ export interface operations {
     "chart-semi-infinite-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -26386,6 +26532,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -26449,10 +26596,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -26462,7 +26610,12 @@ export interface operations {
     "cost-semi-infinite-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -26498,6 +26651,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -26524,10 +26678,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -26537,7 +26692,12 @@ export interface operations {
     "solve-semi-infinite-surface-ramp": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -26571,6 +26731,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -26587,10 +26748,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -26600,7 +26762,12 @@ export interface operations {
     "time-to-reach-semi-infinite-surface-ramp": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -26627,6 +26794,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -26643,10 +26811,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -26656,7 +26825,12 @@ export interface operations {
     "depth-reached-semi-infinite-surface-ramp": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -26683,6 +26857,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -26699,10 +26874,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -26712,7 +26888,12 @@ export interface operations {
     "extremes-semi-infinite-surface-ramp": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -26739,6 +26920,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -26755,10 +26937,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -26768,7 +26951,12 @@ export interface operations {
     "chart-semi-infinite-surface-ramp": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -26802,6 +26990,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -26865,10 +27054,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -26878,7 +27068,12 @@ export interface operations {
     "cost-semi-infinite-surface-ramp": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -26915,6 +27110,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -26941,10 +27137,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -26954,7 +27151,12 @@ export interface operations {
     "solve-semi-infinite-surface-flux": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -26988,6 +27190,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -27004,10 +27207,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -27017,7 +27221,12 @@ export interface operations {
     "time-to-reach-semi-infinite-surface-flux": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -27044,6 +27253,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -27060,10 +27270,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -27073,7 +27284,12 @@ export interface operations {
     "depth-reached-semi-infinite-surface-flux": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -27100,6 +27316,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -27116,10 +27333,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -27129,7 +27347,12 @@ export interface operations {
     "extremes-semi-infinite-surface-flux": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -27156,6 +27379,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -27172,10 +27396,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -27185,7 +27410,12 @@ export interface operations {
     "chart-semi-infinite-surface-flux": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -27219,6 +27449,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -27282,10 +27513,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -27295,7 +27527,12 @@ export interface operations {
     "cost-semi-infinite-surface-flux": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -27332,6 +27569,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -27358,10 +27596,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -27371,7 +27610,12 @@ export interface operations {
     "solve-semi-infinite-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -27406,6 +27650,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -27422,10 +27667,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -27435,7 +27681,12 @@ export interface operations {
     "time-to-reach-semi-infinite-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -27463,6 +27714,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -27479,10 +27731,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -27492,7 +27745,12 @@ export interface operations {
     "depth-reached-semi-infinite-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -27520,6 +27778,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -27536,10 +27795,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -27549,7 +27809,12 @@ export interface operations {
     "extremes-semi-infinite-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -27577,6 +27842,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -27593,10 +27859,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -27606,7 +27873,12 @@ export interface operations {
     "chart-semi-infinite-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -27641,6 +27913,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -27704,10 +27977,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -27717,7 +27991,12 @@ export interface operations {
     "cost-semi-infinite-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -27755,6 +28034,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -27781,10 +28061,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -27794,7 +28075,12 @@ export interface operations {
     "solve-semi-infinite-periodic-surface": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -27829,6 +28115,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -27845,10 +28132,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -27858,7 +28146,12 @@ export interface operations {
     "time-to-reach-semi-infinite-periodic-surface": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -27887,6 +28180,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -27903,10 +28197,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -27916,7 +28211,12 @@ export interface operations {
     "depth-reached-semi-infinite-periodic-surface": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -27944,6 +28244,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -27960,10 +28261,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -27973,7 +28275,12 @@ export interface operations {
     "extremes-semi-infinite-periodic-surface": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -28001,6 +28308,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -28017,10 +28325,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -28030,7 +28339,12 @@ export interface operations {
     "chart-semi-infinite-periodic-surface": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -28065,6 +28379,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -28128,10 +28443,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -28141,7 +28457,12 @@ export interface operations {
     "cost-semi-infinite-periodic-surface": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -28179,6 +28500,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -28205,10 +28527,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -28218,7 +28541,12 @@ export interface operations {
     "solve-semi-infinite-periodic-ambient": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -28254,6 +28582,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -28270,10 +28599,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -28283,7 +28613,12 @@ export interface operations {
     "time-to-reach-semi-infinite-periodic-ambient": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -28313,6 +28648,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -28329,10 +28665,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -28342,7 +28679,12 @@ export interface operations {
     "depth-reached-semi-infinite-periodic-ambient": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -28371,6 +28713,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -28387,10 +28730,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -28400,7 +28744,12 @@ export interface operations {
     "extremes-semi-infinite-periodic-ambient": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -28429,6 +28778,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -28445,10 +28795,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -28458,7 +28809,12 @@ export interface operations {
     "chart-semi-infinite-periodic-ambient": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -28494,6 +28850,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -28557,10 +28914,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -28570,7 +28928,12 @@ export interface operations {
     "cost-semi-infinite-periodic-ambient": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -28609,6 +28972,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -28635,10 +28999,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -28648,7 +29013,12 @@ export interface operations {
     "solve-semi-infinite-contact": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -28687,6 +29057,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -28703,10 +29074,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -28716,7 +29088,12 @@ export interface operations {
     "time-to-reach-semi-infinite-contact": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -28748,6 +29125,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -28764,10 +29142,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -28777,7 +29156,12 @@ export interface operations {
     "depth-reached-semi-infinite-contact": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -28809,6 +29193,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -28825,10 +29210,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -28838,7 +29224,12 @@ export interface operations {
     "extremes-semi-infinite-contact": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -28870,6 +29261,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -28886,10 +29278,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -28899,7 +29292,12 @@ export interface operations {
     "chart-semi-infinite-contact": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -28938,6 +29336,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -29001,10 +29400,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -29014,7 +29414,12 @@ export interface operations {
     "cost-semi-infinite-contact": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -29056,6 +29461,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -29082,10 +29488,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -29095,7 +29502,12 @@ export interface operations {
     "solve-slab-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -29131,6 +29543,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -29147,10 +29560,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -29160,7 +29574,12 @@ export interface operations {
     "time-to-reach-slab-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -29190,6 +29609,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -29206,10 +29626,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -29219,7 +29640,12 @@ export interface operations {
     "depth-reached-slab-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -29249,6 +29675,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -29265,10 +29692,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -29278,7 +29706,12 @@ export interface operations {
     "extremes-slab-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -29308,6 +29741,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -29324,10 +29758,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -29337,7 +29772,12 @@ export interface operations {
     "chart-slab-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -29373,6 +29813,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -29436,10 +29877,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -29449,7 +29891,12 @@ export interface operations {
     "cost-slab-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -29488,6 +29935,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -29514,10 +29962,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -29527,7 +29976,12 @@ export interface operations {
     "solve-slab-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -29562,6 +30016,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -29578,10 +30033,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -29591,7 +30047,12 @@ export interface operations {
     "time-to-reach-slab-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -29620,6 +30081,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -29636,10 +30098,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -29649,7 +30112,12 @@ export interface operations {
     "depth-reached-slab-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -29678,6 +30146,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -29694,10 +30163,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -29707,7 +30177,12 @@ export interface operations {
     "extremes-slab-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -29736,6 +30211,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -29752,10 +30228,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -29765,7 +30242,12 @@ export interface operations {
     "chart-slab-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -29800,6 +30282,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -29863,10 +30346,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -29876,7 +30360,12 @@ export interface operations {
     "cost-slab-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -29914,6 +30403,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -29940,10 +30430,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -29953,7 +30444,12 @@ export interface operations {
     "solve-slab-two-sides": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -29997,6 +30493,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -30013,10 +30510,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -30026,7 +30524,12 @@ export interface operations {
     "time-to-reach-slab-two-sides": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -30063,6 +30566,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -30079,10 +30583,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -30092,7 +30597,12 @@ export interface operations {
     "depth-reached-slab-two-sides": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -30129,6 +30639,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -30145,10 +30656,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -30158,7 +30670,12 @@ export interface operations {
     "extremes-slab-two-sides": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -30195,6 +30712,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -30211,10 +30729,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -30224,7 +30743,12 @@ export interface operations {
     "chart-slab-two-sides": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -30268,6 +30792,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -30331,10 +30856,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -30344,7 +30870,12 @@ export interface operations {
     "cost-slab-two-sides": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -30391,6 +30922,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -30417,10 +30949,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -30430,7 +30963,12 @@ export interface operations {
     "solve-slab-surface-flux": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -30468,6 +31006,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -30484,10 +31023,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -30497,7 +31037,12 @@ export interface operations {
     "time-to-reach-slab-surface-flux": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -30529,6 +31074,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -30545,10 +31091,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -30558,7 +31105,12 @@ export interface operations {
     "depth-reached-slab-surface-flux": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -30590,6 +31142,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -30606,10 +31159,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -30619,7 +31173,12 @@ export interface operations {
     "extremes-slab-surface-flux": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -30651,6 +31210,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -30667,10 +31227,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -30680,7 +31241,12 @@ export interface operations {
     "chart-slab-surface-flux": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -30718,6 +31284,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -30781,10 +31348,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -30794,7 +31362,12 @@ export interface operations {
     "cost-slab-surface-flux": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -30835,6 +31408,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -30861,10 +31435,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -30874,7 +31449,12 @@ export interface operations {
     "solve-slab-internal-heat": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -30916,6 +31496,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -30932,10 +31513,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -30945,7 +31527,12 @@ export interface operations {
     "time-to-reach-slab-internal-heat": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -30980,6 +31567,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -30996,10 +31584,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -31009,7 +31598,12 @@ export interface operations {
     "depth-reached-slab-internal-heat": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -31044,6 +31638,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -31060,10 +31655,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -31073,7 +31669,12 @@ export interface operations {
     "extremes-slab-internal-heat": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -31108,6 +31709,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -31124,10 +31726,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -31137,7 +31740,12 @@ export interface operations {
     "chart-slab-internal-heat": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -31179,6 +31787,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -31242,10 +31851,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -31255,7 +31865,12 @@ export interface operations {
     "cost-slab-internal-heat": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -31300,6 +31915,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -31326,10 +31942,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -31339,7 +31956,12 @@ export interface operations {
     "solve-slab-periodic": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -31377,6 +31999,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -31393,10 +32016,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -31406,7 +32030,12 @@ export interface operations {
     "time-to-reach-slab-periodic": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -31439,6 +32068,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -31455,10 +32085,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -31468,7 +32099,12 @@ export interface operations {
     "depth-reached-slab-periodic": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -31500,6 +32136,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -31516,10 +32153,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -31529,7 +32167,12 @@ export interface operations {
     "extremes-slab-periodic": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -31561,6 +32204,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -31577,10 +32221,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -31590,7 +32235,12 @@ export interface operations {
     "chart-slab-periodic": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -31628,6 +32278,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -31691,10 +32342,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -31704,7 +32356,12 @@ export interface operations {
     "cost-slab-periodic": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -31745,6 +32402,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -31771,10 +32429,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -31784,7 +32443,12 @@ export interface operations {
     "solve-slab-initial-profile": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -31842,6 +32506,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -31858,10 +32523,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -31871,7 +32537,12 @@ export interface operations {
     "time-to-reach-slab-initial-profile": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -31922,6 +32593,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -31938,10 +32610,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -31951,7 +32624,12 @@ export interface operations {
     "depth-reached-slab-initial-profile": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -32002,6 +32680,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -32018,10 +32697,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -32031,7 +32711,12 @@ export interface operations {
     "extremes-slab-initial-profile": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -32082,6 +32767,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -32098,10 +32784,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -32111,7 +32798,12 @@ export interface operations {
     "chart-slab-initial-profile": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -32169,6 +32861,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -32232,10 +32925,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -32245,7 +32939,12 @@ export interface operations {
     "cost-slab-initial-profile": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -32306,6 +33005,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -32332,10 +33032,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -32345,7 +33046,12 @@ export interface operations {
     "solve-slab-finite-bath": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -32382,6 +33088,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -32398,10 +33105,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -32411,7 +33119,12 @@ export interface operations {
     "time-to-reach-slab-finite-bath": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -32442,6 +33155,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -32458,10 +33172,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -32471,7 +33186,12 @@ export interface operations {
     "depth-reached-slab-finite-bath": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -32502,6 +33222,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -32518,10 +33239,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -32531,7 +33253,12 @@ export interface operations {
     "extremes-slab-finite-bath": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -32562,6 +33289,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -32578,10 +33306,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -32591,7 +33320,12 @@ export interface operations {
     "chart-slab-finite-bath": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -32628,6 +33362,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -32691,10 +33426,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -32704,7 +33440,12 @@ export interface operations {
     "cost-slab-finite-bath": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -32744,6 +33485,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -32770,10 +33512,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -32783,7 +33526,12 @@ export interface operations {
     "solve-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -32818,6 +33566,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -32834,10 +33583,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -32847,7 +33597,12 @@ export interface operations {
     "time-to-reach-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -32878,6 +33633,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -32894,10 +33650,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -32907,7 +33664,12 @@ export interface operations {
     "depth-reached-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -32936,6 +33698,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -32952,10 +33715,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -32965,7 +33729,12 @@ export interface operations {
     "extremes-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -32996,6 +33765,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -33012,10 +33782,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -33025,7 +33796,12 @@ export interface operations {
     "chart-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -33060,6 +33836,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -33123,10 +33900,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -33136,7 +33914,12 @@ export interface operations {
     "cost-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -33174,6 +33957,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -33200,10 +33984,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -33213,7 +33998,12 @@ export interface operations {
     "solve-cylinder-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -33247,6 +34037,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -33263,10 +34054,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -33276,7 +34068,12 @@ export interface operations {
     "time-to-reach-cylinder-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -33306,6 +34103,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -33322,10 +34120,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -33335,7 +34134,12 @@ export interface operations {
     "depth-reached-cylinder-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -33363,6 +34167,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -33379,10 +34184,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -33392,7 +34198,12 @@ export interface operations {
     "extremes-cylinder-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -33422,6 +34233,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -33438,10 +34250,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -33451,7 +34264,12 @@ export interface operations {
     "chart-cylinder-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -33485,6 +34303,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -33548,10 +34367,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -33561,7 +34381,12 @@ export interface operations {
     "cost-cylinder-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -33598,6 +34423,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -33624,10 +34450,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -33637,7 +34464,12 @@ export interface operations {
     "solve-sphere-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -33672,6 +34504,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -33688,10 +34521,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -33701,7 +34535,12 @@ export interface operations {
     "time-to-reach-sphere-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -33732,6 +34571,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -33748,10 +34588,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -33761,7 +34602,12 @@ export interface operations {
     "depth-reached-sphere-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -33790,6 +34636,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -33806,10 +34653,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -33819,7 +34667,12 @@ export interface operations {
     "extremes-sphere-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -33850,6 +34703,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -33866,10 +34720,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -33879,7 +34734,12 @@ export interface operations {
     "chart-sphere-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -33914,6 +34774,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -33977,10 +34838,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -33990,7 +34852,12 @@ export interface operations {
     "cost-sphere-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -34028,6 +34895,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -34054,10 +34922,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -34067,7 +34936,12 @@ export interface operations {
     "solve-sphere-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -34101,6 +34975,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -34117,10 +34992,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -34130,7 +35006,12 @@ export interface operations {
     "time-to-reach-sphere-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -34160,6 +35041,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -34176,10 +35058,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -34189,7 +35072,12 @@ export interface operations {
     "depth-reached-sphere-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -34217,6 +35105,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -34233,10 +35122,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -34246,7 +35136,12 @@ export interface operations {
     "extremes-sphere-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -34276,6 +35171,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -34292,10 +35188,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -34305,7 +35202,12 @@ export interface operations {
     "chart-sphere-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -34339,6 +35241,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -34402,10 +35305,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -34415,7 +35319,12 @@ export interface operations {
     "cost-sphere-surface-temperature": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -34452,6 +35361,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -34478,10 +35388,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -34491,7 +35402,12 @@ export interface operations {
     "solve-hollow-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -34535,6 +35451,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -34551,10 +35468,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -34564,7 +35482,12 @@ export interface operations {
     "time-to-reach-hollow-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -34601,6 +35524,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -34617,10 +35541,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -34630,7 +35555,12 @@ export interface operations {
     "depth-reached-hollow-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -34667,6 +35597,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -34683,10 +35614,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -34696,7 +35628,12 @@ export interface operations {
     "extremes-hollow-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -34733,6 +35670,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -34749,10 +35687,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -34762,7 +35701,12 @@ export interface operations {
     "chart-hollow-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -34806,6 +35750,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -34869,10 +35814,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -34882,7 +35828,12 @@ export interface operations {
     "cost-hollow-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -34929,6 +35880,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -34955,10 +35907,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -34968,7 +35921,12 @@ export interface operations {
     "solve-cylinder-in-infinite-medium": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -35007,6 +35965,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -35023,10 +35982,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -35036,7 +35996,12 @@ export interface operations {
     "time-to-reach-cylinder-in-infinite-medium": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -35069,6 +36034,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -35085,10 +36051,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -35098,7 +36065,12 @@ export interface operations {
     "depth-reached-cylinder-in-infinite-medium": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -35129,6 +36101,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -35145,10 +36118,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -35158,7 +36132,12 @@ export interface operations {
     "extremes-cylinder-in-infinite-medium": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -35191,6 +36170,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -35207,10 +36187,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -35220,7 +36201,12 @@ export interface operations {
     "chart-cylinder-in-infinite-medium": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -35258,6 +36244,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -35321,10 +36308,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -35334,7 +36322,12 @@ export interface operations {
     "cost-cylinder-in-infinite-medium": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -35376,6 +36369,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -35402,10 +36396,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -35415,7 +36410,12 @@ export interface operations {
     "solve-bar-rectangular": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -35459,6 +36459,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -35475,10 +36476,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -35488,7 +36490,12 @@ export interface operations {
     "time-to-reach-bar-rectangular": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -35523,6 +36530,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -35539,10 +36547,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -35552,7 +36561,12 @@ export interface operations {
     "extremes-bar-rectangular": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -35587,6 +36601,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -35603,10 +36618,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -35616,7 +36632,12 @@ export interface operations {
     "chart-bar-rectangular": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -35660,6 +36681,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -35723,10 +36745,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -35736,7 +36759,12 @@ export interface operations {
     "cost-bar-rectangular": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -35783,6 +36811,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -35809,10 +36838,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -35822,7 +36852,12 @@ export interface operations {
     "solve-brick-rectangular": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -35870,6 +36905,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -35886,10 +36922,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -35899,7 +36936,12 @@ export interface operations {
     "time-to-reach-brick-rectangular": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -35937,6 +36979,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -35953,10 +36996,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -35966,7 +37010,12 @@ export interface operations {
     "extremes-brick-rectangular": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -36004,6 +37053,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -36020,10 +37070,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -36033,7 +37084,12 @@ export interface operations {
     "chart-brick-rectangular": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -36081,6 +37137,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -36144,10 +37201,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -36157,7 +37215,12 @@ export interface operations {
     "cost-brick-rectangular": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -36208,6 +37271,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -36234,10 +37298,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -36247,7 +37312,12 @@ export interface operations {
     "solve-short-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -36290,6 +37360,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -36306,10 +37377,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -36319,7 +37391,12 @@ export interface operations {
     "time-to-reach-short-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -36353,6 +37430,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -36369,10 +37447,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -36382,7 +37461,12 @@ export interface operations {
     "extremes-short-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -36416,6 +37500,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -36432,10 +37517,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -36445,7 +37531,12 @@ export interface operations {
     "chart-short-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -36488,6 +37579,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -36551,10 +37643,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -36564,7 +37657,12 @@ export interface operations {
     "cost-short-cylinder-convection": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -36610,6 +37708,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -36636,10 +37735,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -36649,7 +37749,12 @@ export interface operations {
     "solve-semi-infinite-bar-end": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -36690,6 +37795,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -36706,10 +37812,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -36719,7 +37826,12 @@ export interface operations {
     "time-to-reach-semi-infinite-bar-end": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -36751,6 +37863,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -36767,10 +37880,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -36780,7 +37894,12 @@ export interface operations {
     "extremes-semi-infinite-bar-end": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -36812,6 +37931,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -36828,10 +37948,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -36841,7 +37962,12 @@ export interface operations {
     "chart-semi-infinite-bar-end": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -36882,6 +38008,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -36945,10 +38072,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -36958,7 +38086,12 @@ export interface operations {
     "cost-semi-infinite-bar-end": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -37002,6 +38135,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -37028,10 +38162,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -37041,7 +38176,12 @@ export interface operations {
     "solve-edge-quarter-space": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -37081,6 +38221,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -37097,10 +38238,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -37110,7 +38252,12 @@ export interface operations {
     "time-to-reach-edge-quarter-space": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -37141,6 +38288,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -37157,10 +38305,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -37170,7 +38319,12 @@ export interface operations {
     "extremes-edge-quarter-space": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -37201,6 +38355,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -37217,10 +38372,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -37230,7 +38386,12 @@ export interface operations {
     "chart-edge-quarter-space": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -37270,6 +38431,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -37333,10 +38495,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -37346,7 +38509,12 @@ export interface operations {
     "cost-edge-quarter-space": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -37389,6 +38557,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -37415,10 +38584,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -37428,7 +38598,12 @@ export interface operations {
     "solve-corner-octant": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -37470,6 +38645,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -37486,10 +38662,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -37499,7 +38676,12 @@ export interface operations {
     "time-to-reach-corner-octant": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -37531,6 +38713,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -37547,10 +38730,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -37560,7 +38744,12 @@ export interface operations {
     "extremes-corner-octant": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -37592,6 +38781,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -37608,10 +38798,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -37621,7 +38812,12 @@ export interface operations {
     "chart-corner-octant": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -37663,6 +38859,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -37726,10 +38923,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -37739,7 +38937,12 @@ export interface operations {
     "cost-corner-octant": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -37784,6 +38987,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -37810,10 +39014,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -37823,7 +39028,12 @@ export interface operations {
     "solve-line-source": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -37856,6 +39066,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -37872,10 +39083,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -37885,7 +39097,12 @@ export interface operations {
     "time-to-reach-line-source": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -37911,6 +39128,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -37927,10 +39145,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -37940,7 +39159,12 @@ export interface operations {
     "depth-reached-line-source": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -37966,6 +39190,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -37982,10 +39207,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -37995,7 +39221,12 @@ export interface operations {
     "extremes-line-source": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -38021,6 +39252,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -38037,10 +39269,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -38050,7 +39283,12 @@ export interface operations {
     "chart-line-source": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -38083,6 +39321,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -38146,10 +39385,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -38159,7 +39399,12 @@ export interface operations {
     "cost-line-source": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -38195,6 +39440,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -38221,10 +39467,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -38234,7 +39481,12 @@ export interface operations {
     "solve-point-source": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -38267,6 +39519,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -38283,10 +39536,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -38296,7 +39550,12 @@ export interface operations {
     "time-to-reach-point-source": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -38322,6 +39581,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -38338,10 +39598,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -38351,7 +39612,12 @@ export interface operations {
     "depth-reached-point-source": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -38377,6 +39643,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -38393,10 +39660,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -38406,7 +39674,12 @@ export interface operations {
     "extremes-point-source": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -38432,6 +39705,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -38448,10 +39722,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -38461,7 +39736,12 @@ export interface operations {
     "chart-point-source": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -38494,6 +39774,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -38557,10 +39838,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -38570,7 +39852,12 @@ export interface operations {
     "cost-point-source": {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -38606,6 +39893,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -38632,10 +39920,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -38645,7 +39934,12 @@ export interface operations {
     runBatch: {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -38664,6 +39958,7 @@ export interface operations {
             200: {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Charged": components["headers"]["Points-Charged"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -38680,10 +39975,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
+            409: components["responses"]["call-in-flight"];
             413: components["responses"]["body-too-large.too-many-points"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["quota-exceeded.rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -38704,7 +40000,10 @@ export interface operations {
                 /** @description From `next` of the page before. */
                 cursor?: string;
             };
-            header?: never;
+            header?: {
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -38750,7 +40049,12 @@ export interface operations {
     createMaterial: {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -38778,6 +40082,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     Location: components["headers"]["Location"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
@@ -38794,11 +40099,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
-            409: components["responses"]["too-many-materials"];
+            409: components["responses"]["call-in-flight.too-many-materials"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -38811,7 +40116,12 @@ export interface operations {
                 /** @description true: every row is examined and none kept. */
                 dryRun?: "true" | "false";
             };
-            header?: never;
+            header?: {
+                /** @description Names the call, so that it can be sent again within 24 hours for one effect and one charge. */
+                "Idempotency-Key"?: string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -38831,6 +40141,7 @@ export interface operations {
                 headers: {
                     "Request-Id": components["headers"]["Request-Id"];
                     ETag: components["headers"]["ETag"];
+                    "Idempotency-Replayed": components["headers"]["Idempotency-Replayed"];
                     "Points-Remaining": components["headers"]["Points-Remaining"];
                     RateLimit: components["headers"]["RateLimit"];
                     "RateLimit-Policy": components["headers"]["RateLimit-Policy"];
@@ -38846,11 +40157,11 @@ export interface operations {
             405: components["responses"]["method-not-allowed"];
             406: components["responses"]["not-acceptable"];
             408: components["responses"]["request-timeout"];
-            409: components["responses"]["too-many-materials"];
+            409: components["responses"]["call-in-flight.too-many-materials"];
             413: components["responses"]["body-too-large"];
             415: components["responses"]["unsupported-media-type"];
             417: components["responses"]["expectation-failed"];
-            422: components["responses"]["invalid-input.invalid-parameter"];
+            422: components["responses"]["idempotency-key-reused.invalid-input.invalid-parameter"];
             429: components["responses"]["rate-limited.too-many-at-once"];
             431: components["responses"]["header-too-large"];
             500: components["responses"]["internal"];
@@ -38860,7 +40171,10 @@ export interface operations {
     readMaterial: {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path: {
                 /**
                  * @description Id of a material, as listed.
@@ -38916,6 +40230,8 @@ export interface operations {
             header: {
                 /** @description ETag of the version that the change is of; * for whichever it is. */
                 "If-Match": string;
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
             };
             path: {
                 /**
@@ -38981,7 +40297,10 @@ export interface operations {
     deleteMaterial: {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path: {
                 /**
                  * @description Id of a material of the account.
@@ -39026,10 +40345,13 @@ export interface operations {
                 from?: string;
                 /** @description Last UTC day, included; today unless given. */
                 to?: string;
-                /** @description One or more of day, key, case and environment, with commas between. */
+                /** @description One or more of day, key, case, environment and reference, with commas between. */
                 groupBy?: string;
             };
-            header?: never;
+            header?: {
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path?: never;
             cookie?: never;
         };
@@ -39075,7 +40397,10 @@ export interface operations {
     readRequest: {
         parameters: {
             query?: never;
-            header?: never;
+            header?: {
+                /** @description The caller's own tag, kept with the call and grouped by in usage. */
+                "Client-Reference"?: string;
+            };
             path: {
                 /**
                  * @description As in the Request-Id header.

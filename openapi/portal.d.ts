@@ -3891,7 +3891,7 @@ export interface components {
              * @description What clients match.
              * @enum {string}
              */
-            code: "malformed-request" | "malformed-json" | "malformed-csv" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "key-expired" | "sign-in-needed" | "sign-in-refused" | "plan-needed" | "address-refused" | "origin-refused" | "scope-missing" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "key-revoked" | "too-many-keys" | "too-many-materials" | "precondition-failed" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "invalid-parameter" | "precondition-required" | "rate-limited" | "too-many-at-once" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
+            code: "malformed-request" | "malformed-json" | "malformed-csv" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "key-expired" | "sign-in-needed" | "sign-in-refused" | "plan-needed" | "address-refused" | "origin-refused" | "scope-missing" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "key-revoked" | "call-in-flight" | "too-many-keys" | "too-many-materials" | "precondition-failed" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "idempotency-key-reused" | "invalid-parameter" | "precondition-required" | "rate-limited" | "too-many-at-once" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable";
             title: string;
             status: number;
             detail: string;
@@ -3910,6 +3910,8 @@ export interface components {
             pointer?: string;
             /** @description Which query parameter. */
             parameter?: string;
+            /** @description Which header. */
+            header?: string;
             /** @enum {string} */
             code: "missing-field" | "unknown-field" | "wrong-type" | "out-of-range" | "not-in-list" | "wrong-length" | "wrong-form" | "conflicting-fields" | "unit-not-accepted" | "material-unknown" | "depth-outside-body" | "sizes-do-not-fit" | "output-not-defined" | "target-at-asymptote" | "no-rate-at-change" | "singular-at-time-zero";
             detail: string;
@@ -4203,7 +4205,7 @@ export interface components {
              * @description An instant in UTC, RFC 3339.
              */
             asOf: string;
-            groupBy: ("day" | "key" | "case" | "environment")[];
+            groupBy: ("day" | "key" | "case" | "environment" | "reference")[];
             account: components["schemas"]["AccountStatus"];
             rows: {
                 /**
@@ -4216,6 +4218,7 @@ export interface components {
                 case?: string | null;
                 /** @enum {string|null} */
                 environment?: "trial" | "metered" | null;
+                reference?: string | null;
                 calls: number;
                 points: number;
                 /** @description Calls that were refused or failed; they cost nothing. */
@@ -4257,7 +4260,11 @@ export interface components {
              * @description Code of the problem answered.
              * @enum {string|null}
              */
-            problem: "malformed-request" | "malformed-json" | "malformed-csv" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "key-expired" | "sign-in-needed" | "sign-in-refused" | "plan-needed" | "address-refused" | "origin-refused" | "scope-missing" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "key-revoked" | "too-many-keys" | "too-many-materials" | "precondition-failed" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "invalid-parameter" | "precondition-required" | "rate-limited" | "too-many-at-once" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable" | null;
+            problem: "malformed-request" | "malformed-json" | "malformed-csv" | "duplicate-name" | "too-deep" | "too-many-parts" | "key-missing" | "key-unknown" | "key-expired" | "sign-in-needed" | "sign-in-refused" | "plan-needed" | "address-refused" | "origin-refused" | "scope-missing" | "forbidden" | "cross-site" | "not-found" | "method-not-allowed" | "not-acceptable" | "request-timeout" | "mail-in-use" | "key-revoked" | "call-in-flight" | "too-many-keys" | "too-many-materials" | "precondition-failed" | "body-too-large" | "too-many-points" | "too-many-values" | "unsupported-media-type" | "expectation-failed" | "invalid-input" | "idempotency-key-reused" | "invalid-parameter" | "precondition-required" | "rate-limited" | "too-many-at-once" | "quota-exceeded" | "header-too-large" | "internal" | "solve-too-slow" | "unavailable" | null;
+            /** @description As in the Client-Reference header of the call. */
+            reference: string | null;
+            /** @description As in the traceparent header of the call. */
+            traceId: string | null;
         };
         Request: {
             id: string;
@@ -4283,6 +4290,10 @@ export interface components {
             problem: {
                 [key: string]: unknown;
             } | null;
+            /** @description As in the Client-Reference header of the call. */
+            reference: string | null;
+            /** @description As in the traceparent header of the call. */
+            traceId: string | null;
             bytesIn: number;
             bytesOut: number;
             ledger: {
@@ -24564,6 +24575,14 @@ export interface components {
         ETag: string;
         /** @description Path of what was made. */
         Location: string;
+        /** @description true where a call before, with the same Idempotency-Key, had this effect. */
+        "Idempotency-Replayed": string;
+        /** @description Since when it is known that the operation will end, as @ and seconds. */
+        Deprecation: string;
+        /** @description When the operation ends. */
+        Sunset: string;
+        /** @description A page about the end of the operation, and what to use instead. */
+        Link: string;
         /** @description What is left of each limit of calls: r calls within t seconds. */
         RateLimit: string;
         /** @description Each limit of calls: q calls in w seconds. */
@@ -25352,7 +25371,7 @@ export interface operations {
                 from?: string;
                 /** @description Last UTC day, included; today unless given. */
                 to?: string;
-                /** @description One or more of day, key, case and environment, with commas between. */
+                /** @description One or more of day, key, case, environment and reference, with commas between. */
                 groupBy?: string;
             };
             header?: never;
@@ -25401,6 +25420,8 @@ export interface operations {
                 cursor?: string;
                 /** @description Only calls of this key. */
                 keyId?: string;
+                /** @description Only calls with this Client-Reference. */
+                reference?: string;
                 /** @description ok: 2xx and 3xx; refused: 4xx; failed: 5xx. */
                 status?: "ok" | "refused" | "failed";
             };

@@ -47,11 +47,20 @@ export const runBatch = operation({
     const priced = await priceBatch(batch, deps.compute)
     if (priced.points > MAX_POINTS)
       throw new Problem('too-many-points', `The batch needs ${priced.points} points; one may need ${MAX_POINTS}.`)
-    const points = chargedFor(priced)
-    const { requestId } = call
+    const points = call.replayed ? 0 : chargedFor(priced)
+    const { requestId, reference } = call
     const { accountId, keyId } = caller
     refuseGone(call)
-    call.limits = (await deps.meter.spend({ requestId, accountId, keyId, points, open: points > 0 })).headers
+    call.limits = (
+      await deps.meter.spend({
+        requestId,
+        accountId,
+        keyId,
+        points,
+        open: points > 0,
+        ...(reference ? { reference } : {}),
+      })
+    ).headers
     call.points = points
     return { headers: { 'Points-Charged': String(points) }, lines: answered(batch, points, call, deps) }
   },
@@ -96,7 +105,7 @@ async function* answered(batch: Batch, charged: number, call: RecordedCall, deps
   } finally {
     if (hungUp) await meter.close(requestId)
   }
-  call.points = chargedFor(sum)
+  call.points = Math.min(charged, chargedFor(sum))
   if (call.points < charged) await meter.refund(requestId, charged - call.points)
   else if (charged > 0) await meter.close(requestId)
   yield `${JSON.stringify({ summary: sum })}\n`

@@ -11,14 +11,27 @@ const SMALL = 200
 
 /** Spends and solves. Whenever the process dies, the points of a call that was not answered come back. */
 export async function solveMetered(task: SolveTask, caller: KeyCaller, call: RecordedCall, deps: Deps): Promise<Reply> {
+  if (call.replayed) return replay(task, caller, call, deps)
   const points = chargeOf(task.call.points)
-  const { requestId } = call
+  const { requestId, reference } = call
   const { accountId, keyId } = caller
-  const charge = { requestId, accountId, keyId, caseId: task.case, points }
+  const charge = { requestId, accountId, keyId, caseId: task.case, points, ...(reference ? { reference } : {}) }
   const pay = isSmall(task.call) ? solveThenPay : payThenSolve
   const answer = await pay(task, charge, call, deps)
   call.points = points
   return { ...answer, headers: { 'Points-Charged': String(points) } }
+}
+
+/* Paid before, so it only counts as a call. */
+async function replay(
+  task: SolveTask,
+  caller: KeyCaller,
+  call: RecordedCall,
+  { compute, meter }: Deps,
+): Promise<Reply> {
+  const { accountId, keyId } = caller
+  call.limits = (await meter.spend({ requestId: call.requestId, accountId, keyId, points: 0 })).headers
+  return { ...(await compute.solve(task)), headers: { 'Points-Charged': '0' } }
 }
 
 const isSmall = ({ size, points }: Call) => Math.max(size, points) <= SMALL

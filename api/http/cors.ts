@@ -10,6 +10,9 @@ const exposed = [
   'RateLimit',
   'RateLimit-Policy',
   'Retry-After',
+  'Idempotency-Replayed',
+  'Deprecation',
+  'Sunset',
   'ETag',
   'Location',
   'Link',
@@ -17,7 +20,10 @@ const exposed = [
   'WWW-Authenticate',
 ].join(', ')
 
-const accepted = ['Authorization', 'Content-Type', 'Accept', 'If-Match', 'If-None-Match'].join(', ')
+const accepted = [
+  ...['Authorization', 'Content-Type', 'Accept', 'If-Match', 'If-None-Match'],
+  ...['Idempotency-Key', 'Client-Reference', 'traceparent', 'tracestate'],
+].join(', ')
 const PREFLIGHT_SECONDS = 7200
 
 const isApi = (req: Request) => req.path.startsWith('/v1/')

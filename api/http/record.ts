@@ -29,7 +29,7 @@ export function recordCalls({ log, requestLog }: Deps): RequestHandler {
       const milliseconds = Math.round((performance.now() - started) * 1000) / 1000
       const path = readableText(routed).slice(0, 300)
       const line = { requestId: call.requestId, method: req.method, path, status, milliseconds }
-      log.info({ ...line, ...(call.keyId ? { keyId: call.keyId } : {}) }, 'call')
+      log.info({ ...line, keyId: call.keyId, traceId: call.traceId }, 'call')
       if (!routed.startsWith('/v1/')) return
       const { requestId: id, points = 0, ...rest } = call
       const at = instantOf(id) as Date

@@ -20,9 +20,12 @@ import { authenticateKey } from '../keys/authenticate.ts'
 import { authenticate, authorizeKey } from './authenticate.ts'
 import { problemOf } from './errors.ts'
 import { ownMaterialsIn } from '../materials/own-materials.ts'
+import { once } from '../idempotency/once.ts'
 import { readBody } from './body.ts'
 import { decode, parseJson } from './json.ts'
+import { deprecationHeaders } from './deprecation.ts'
 import { handleOf } from './session.ts'
+import { tagsOf } from './tags.ts'
 
 /** One operation as a handler: authenticate, authorise, validate, do, answer. Whatever is refused is thrown. */
 export function run(o: Operation, deps: Deps): RequestHandler {
@@ -31,6 +34,7 @@ export function run(o: Operation, deps: Deps): RequestHandler {
     const call: CallRecord = res.locals.call
     if (o.caseId) call.caseId = o.caseId
     call.operation = o.caseOperation ?? o.id
+    if (o.deprecated) res.set(deprecationHeaders(o.deprecated, deps.config.publicUrl))
     if (!req.accepts(o.answersLines ? LINES : 'application/json')) throw new Problem('not-acceptable')
     await answer(o, req, res, deps)
   }
@@ -53,6 +57,7 @@ async function answerKey(o: Operation, req: Request, res: Response, deps: Deps):
   }
   try {
     const caller = authorizeKey(o, found, req, res, deps)
+    Object.assign(call, tagsOf(req))
     await answerCaller(o, caller, req, res, deps, o.metered ? undefined : count)
   } catch (error) {
     if (!call.limits && isRefusal(error)) await count()
@@ -76,17 +81,19 @@ async function answerCaller(
   deps: Deps,
   count?: () => Promise<void>,
 ): Promise<void> {
-  const ifMatch = ifMatchOf(o, req)
-  const input = await inputOf(o, req, res, deps, caller)
-  await count?.()
   const { call } = res.locals
-  const reply = await o.handle({ ...input, ...ifMatch, caller, call, session: handleOf(req), deps })
+  const ifMatch = ifMatchOf(o, req)
+  const { bytes, ...input } = await inputOf(o, req, res, deps, caller)
+  await count?.()
+  const context = { ...input, ...ifMatch, caller, call, session: handleOf(req) }
+  const work = async (given: Deps) => o.handle({ ...context, deps: given })
+  const reply = await once({ o, req, caller, call, bytes }, deps, work)
   if (!reply.lines) return sendReply(o, res, reply)
   call.streaming = sendLines(o, res, reply, reply.lines)
   await call.streaming
 }
 
-type Input = Pick<Context<unknown, unknown, unknown, 'public'>, 'params' | 'query' | 'body'>
+type Input = Pick<Context<unknown, unknown, unknown, 'public'>, 'params' | 'query' | 'body'> & { bytes?: Buffer }
 
 /* The version is asked for before the body is read, since a change that names none is refused whatever it holds. */
 function ifMatchOf(o: Operation, req: Request): { ifMatch?: string } {
@@ -99,17 +106,20 @@ function ifMatchOf(o: Operation, req: Request): { ifMatch?: string } {
 async function inputOf(o: Operation, req: Request, res: Response, deps: Deps, caller: Caller): Promise<Input> {
   const params = readParams(o, req)
   const query = readQuery(o, req)
-  if (o.upload) return { params, query, body: await readText(o.upload, req, res) }
+  if (o.upload) {
+    const bytes = await readBody(req, res, o.upload.limit, o.upload.kind)
+    return { params, query, body: textOf(bytes, o.upload.kind), bytes }
+  }
   if (!o.body) return { params, query, body: undefined }
   const bytes = await readBody(req, res, o.body.limit)
   const own = o.body.materials ? await ownMaterialsIn(bytes, caller, deps.db) : none
-  return { params, query, body: await parseBody(o.body, bytes, deps, own) }
+  return { params, query, body: await parseBody(o.body, bytes, deps, own), bytes }
 }
 
 const none: OwnMaterials = new Map()
 
-async function readText({ kind, limit }: Upload, req: Request, res: Response): Promise<string> {
-  const text = decode(await readBody(req, res, limit, kind))
+function textOf(bytes: Buffer, kind: Upload['kind']): string {
+  const text = decode(bytes)
   if (text === undefined) throw new Problem(malformed[kind], 'The body is not UTF-8.')
   return text
 }

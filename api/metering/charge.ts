@@ -82,15 +82,15 @@ const record = {
   name: 'record-charges',
   text: `
     WITH spent AS MATERIALIZED (
-      SELECT * FROM unnest($2::text[], $3::text[], $4::text[], $5::text[], $6::date[], $7::text[], $8::bigint[], $9::timestamptz[], $10::bool[])
-        AS s(request_id, account_id, key_id, environment, period, case_id, points, at, open)),
+      SELECT * FROM unnest($2::text[], $3::text[], $4::text[], $5::text[], $6::date[], $7::text[], $8::bigint[], $9::timestamptz[], $10::bool[], $12::text[])
+        AS s(request_id, account_id, key_id, environment, period, case_id, points, at, open, reference)),
     counted AS (
       UPDATE rates r SET minute = $1, calls = CASE WHEN r.minute = $1 THEN r.calls ELSE 0 END + c.calls
       FROM (SELECT subject, count(*) AS calls FROM spent, unnest(ARRAY[account_id, key_id]) AS s(subject) GROUP BY subject) c
       WHERE r.subject = c.subject),
     entered AS (
-      INSERT INTO ledger (day, request_id, kind, account_id, key_id, environment, case_id, points, at)
-      SELECT $11::date, request_id, 'charge', account_id, key_id, environment, case_id, points, coalesce(at, now())
+      INSERT INTO ledger (day, request_id, kind, account_id, key_id, environment, case_id, points, at, reference)
+      SELECT $11::date, request_id, 'charge', account_id, key_id, environment, case_id, points, coalesce(at, now()), reference
       FROM spent WHERE points > 0),
     opened AS (INSERT INTO open_charges (request_id) SELECT request_id FROM spent WHERE open),
     by_key AS (
@@ -157,5 +157,6 @@ function valuesOf(charges: readonly Charge[], rowOf: (charge: Charge) => Row, mi
     ...[rows.map((row) => row.environment), rows.map((row) => row.period)],
     ...[column('caseId'), column('points'), column('at'), charges.map((c) => c.open === true)],
     rows[0]?.day,
+    column('reference'),
   ]
 }

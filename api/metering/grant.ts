@@ -5,6 +5,7 @@ export interface Charge {
   accountId: string
   keyId: string
   caseId?: string
+  reference?: string
   /** 0 for a call that only counts as one. */
   points: number
   /** Charged before the work: refunded unless it is closed when the answer is there. */

@@ -18,8 +18,8 @@ const giveBack = {
   name: 'give-back',
   text: `
     WITH refund AS (
-      INSERT INTO ledger (day, request_id, kind, account_id, key_id, environment, case_id, points)
-      SELECT day, request_id, 'refund', account_id, key_id, environment, case_id, -coalesce($3::bigint, points)
+      INSERT INTO ledger (day, request_id, kind, account_id, key_id, environment, case_id, points, reference)
+      SELECT day, request_id, 'refund', account_id, key_id, environment, case_id, -coalesce($3::bigint, points), reference
       FROM ledger WHERE day = $2 AND request_id = $1 AND kind = 'charge'
       ON CONFLICT DO NOTHING
       RETURNING *),

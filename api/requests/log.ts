@@ -21,6 +21,8 @@ export interface LogEntry {
   bytesOut: number
   points: number
   problem?: object
+  reference?: string
+  traceId?: string
 }
 
 const names = [
@@ -35,15 +37,15 @@ const names = [
   'status',
   'milliseconds',
 ] as const
-const more = ['bytesIn', 'bytesOut', 'points', 'problem'] as const
+const more = ['bytesIn', 'bytesOut', 'points', 'problem', 'reference', 'traceId'] as const
 
 const insert = {
   name: 'log-calls',
   text: `
     INSERT INTO log (at, id, account_id, key_id, method, path, case_id, operation, status, milliseconds,
-      bytes_in, bytes_out, points, problem, solver)
-    SELECT e.*, $15 FROM unnest($1::timestamptz[], $2::text[], $3::text[], $4::text[], $5::text[], $6::text[], $7::text[],
-      $8::text[], $9::smallint[], $10::real[], $11::int[], $12::int[], $13::bigint[], $14::json[]) e
+      bytes_in, bytes_out, points, problem, reference, trace_id, solver)
+    SELECT e.*, $17 FROM unnest($1::timestamptz[], $2::text[], $3::text[], $4::text[], $5::text[], $6::text[], $7::text[],
+      $8::text[], $9::smallint[], $10::real[], $11::int[], $12::int[], $13::bigint[], $14::json[], $15::text[], $16::text[]) e
     ON CONFLICT DO NOTHING`,
 }
 

@@ -7,7 +7,7 @@ import type { requestListQuery } from './schemas.ts'
 const PAGE = 50
 
 const entry = `
-  g.id, g.at, g.method, g.path, g.case_id, g.operation, g.status, g.milliseconds, g.points, g.problem,
+  g.id, g.at, g.method, g.path, g.case_id, g.operation, g.status, g.milliseconds, g.points, g.problem, g.reference, g.trace_id,
   k.id AS key_id, k.name AS key_name, k.prefix AS key_prefix, a.id AS account_id, a.name AS account_name`
 const joined = 'log g LEFT JOIN keys k ON k.id = g.key_id LEFT JOIN accounts a ON a.id = g.account_id'
 
@@ -22,6 +22,8 @@ export interface LogRow {
   milliseconds: number
   points: string
   problem: { code: string } | null
+  reference: string | null
+  trace_id: string | null
   key_id: string | null
   key_name: string
   key_prefix: string
@@ -42,6 +44,8 @@ function toEntry(row: LogRow) {
     milliseconds: row.milliseconds,
     points: Number(row.points),
     problem: row.problem?.code ?? null,
+    reference: row.reference,
+    traceId: row.trace_id,
   }
 }
 
@@ -61,6 +65,7 @@ export async function listRequests(pool: pg.Pool, accountId: string, query: z.ou
     add((at, id) => `(g.at, g.id) < (${at}, ${id})`, instantOf(last), last)
   }
   if (query.keyId) add((keyId) => `g.key_id = ${keyId}`, query.keyId)
+  if (query.reference) add((reference) => `g.reference = ${reference}`, query.reference)
   if (query.status) add((low, high) => `g.status BETWEEN ${low} AND ${high}`, ...ranges[query.status])
   const { rows } = await pool.query<LogRow>(
     `SELECT ${entry} FROM ${joined} WHERE ${conditions.join(' AND ')} ORDER BY g.at DESC, g.id DESC LIMIT ${PAGE + 1}`,

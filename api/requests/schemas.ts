@@ -19,6 +19,8 @@ const shape = {
   milliseconds: z.number(),
   points: count,
   problem: z.enum(problemCodes).nullable().meta({ description: 'Code of the problem answered.' }),
+  reference: text.nullable().meta({ description: 'As in the Client-Reference header of the call.' }),
+  traceId: text.nullable().meta({ description: 'As in the traceparent header of the call.' }),
 }
 const detail = {
   ...shape,
@@ -37,6 +39,7 @@ export const requestParams = z.strictObject({
 export const requestListQuery = z.strictObject({
   cursor: text.max(200).optional().meta({ description: 'From `next` of the page before.' }),
   keyId: idField('key').optional().meta({ description: 'Only calls of this key.', 'x-accepted': 'the id of a key' }),
+  reference: text.max(64).optional().meta({ description: 'Only calls with this Client-Reference.' }),
   status: z
     .enum(['ok', 'refused', 'failed'])
     .optional()

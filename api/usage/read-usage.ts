@@ -9,7 +9,13 @@ import type { Group, usageQuery } from './schemas.ts'
 
 const MAX_DAYS = 400
 const DAY = 86_400_000
-const columns: Record<Group, string> = { day: 'day', key: 'key_id', case: 'case_id', environment: 'environment' }
+const columns: Record<Group, string> = {
+  day: 'day',
+  key: 'key_id',
+  case: 'case_id',
+  environment: 'environment',
+  reference: 'reference',
+}
 
 const usage = (groups: readonly Group[]) => {
   const by = groups.map((group) => columns[group]).join(', ')
@@ -17,14 +23,14 @@ const usage = (groups: readonly Group[]) => {
     SELECT ${by}, sum(calls)::int AS calls, sum(points)::bigint AS points, sum(refused)::int AS refused
       ${groups.includes('key') ? ', (SELECT name FROM keys k WHERE k.id = u.key_id) AS key_name' : ''}
     FROM (
-      SELECT day::text, key_id, case_id, environment, sum(CASE kind WHEN 'charge' THEN 1 ELSE -1 END) AS calls,
+      SELECT day::text, key_id, case_id, environment, reference, sum(CASE kind WHEN 'charge' THEN 1 ELSE -1 END) AS calls,
         sum(points) AS points, 0 AS refused
-      FROM ledger WHERE account_id = $1 AND day BETWEEN $2 AND $3 GROUP BY day, key_id, case_id, environment
+      FROM ledger WHERE account_id = $1 AND day BETWEEN $2 AND $3 GROUP BY day, key_id, case_id, environment, reference
       UNION ALL
-      SELECT (at AT TIME ZONE 'UTC')::date::text, g.key_id, g.case_id, k.environment, 0, 0, count(*)
+      SELECT (at AT TIME ZONE 'UTC')::date::text, g.key_id, g.case_id, k.environment, g.reference, 0, 0, count(*)
       FROM log g LEFT JOIN keys k ON k.id = g.key_id WHERE g.account_id = $1 AND status >= 400 AND status <> 499
         AND at >= $2::date::timestamp AT TIME ZONE 'UTC' AND at < ($3::date + 1)::timestamp AT TIME ZONE 'UTC'
-      GROUP BY 1, 2, 3, 4
+      GROUP BY 1, 2, 3, 4, 5
     ) u
     GROUP BY ${by} ORDER BY ${by}`
 }
@@ -43,6 +49,7 @@ export async function readUsage(pool: pg.Pool, accountId: string, query: z.outpu
     ...(groups.includes('key') ? { keyId: row.key_id as string | null, keyName: row.key_name as string | null } : {}),
     ...(groups.includes('case') ? { case: row.case_id as string | null } : {}),
     ...(groups.includes('environment') ? { environment: row.environment as Environment | null } : {}),
+    ...(groups.includes('reference') ? { reference: row.reference as string | null } : {}),
     calls: row.calls as number,
     points: Number(row.points),
     refused: row.refused as number,

@@ -20,7 +20,7 @@ export const statusSchema = z
   })
   .meta({ id: 'AccountStatus' })
 
-const groups = ['day', 'key', 'case', 'environment'] as const
+const groups = ['day', 'key', 'case', 'environment', 'reference'] as const
 export type Group = (typeof groups)[number]
 
 export const usageQuery = z.strictObject({
@@ -33,11 +33,11 @@ export const usageQuery = z.strictObject({
     .meta({ description: 'Last UTC day, included; today unless given.', 'x-accepted': 'a day such as 2026-03-31' }),
   groupBy: z
     .string()
-    .regex(/^(day|key|case|environment)(,(day|key|case|environment)){0,3}$/)
+    .regex(/^(day|key|case|environment|reference)(,(day|key|case|environment|reference)){0,4}$/)
     .default('day')
     .meta({
-      description: 'One or more of day, key, case and environment, with commas between.',
-      'x-accepted': 'day, key, case, environment, or several with commas between',
+      description: 'One or more of day, key, case, environment and reference, with commas between.',
+      'x-accepted': 'day, key, case, environment, reference, or several with commas between',
     }),
 })
 
@@ -61,6 +61,7 @@ export const usageSchema = z
         keyName: z.string().nullable().optional(),
         case: z.string().nullable().optional(),
         environment: z.enum(environments).nullable().optional(),
+        reference: z.string().nullable().optional(),
         ...figures,
       }),
     ),
