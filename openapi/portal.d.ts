@@ -4061,11 +4061,10 @@ export interface components {
             /** @description Origins of pages whose browsers may send the key; no page where there is none. Whoever opens such a page can read the key. */
             origins?: string[];
             /**
-             * @description trial: points of the day, never invoiced. metered: points of the month, of the plan.
-             * @default trial
+             * @description trial (unless given): points of the day, never invoiced. metered: points of the month, of the plan.
              * @enum {string}
              */
-            environment: "trial" | "metered";
+            environment?: "trial" | "metered";
         };
         ChangedKey: {
             key: components["schemas"]["Key"];

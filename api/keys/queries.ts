@@ -67,7 +67,7 @@ export async function selectKeys(db: Pick<Database, 'select'>, caller: MemberCal
   }))
 }
 
-export type NewKey = KeySettings & { environment?: Environment }
+export type NewKey = KeySettings & { environment?: Environment | undefined }
 
 /** The columns of what was set; an end that has passed is refused. */
 export function columnsOf({ name, quota, rate, scopes, expiresAt, addresses, origins }: KeySettings) {

@@ -77,11 +77,12 @@ export const newKeySchema = z
     ...settings,
     environment: z
       .enum(environments)
-      .default('trial')
+      .optional()
       .meta({
         'x-accepted': environments.join(' or '),
         title: 'Environment',
-        description: 'trial: points of the day, never invoiced. metered: points of the month, of the plan.',
+        description:
+          'trial (unless given): points of the day, never invoiced. metered: points of the month, of the plan.',
       }),
   })
   .meta({ id: 'NewKey' })
