@@ -22,7 +22,7 @@ export const warningCodes = {
   },
   'lumped-errs-early': {
     title: 'The lumped body reaches its target early',
-    text: 'A body with one temperature changes faster than the real one: the time to a temperature errs early, the unsafe side when a core must be cooled or heated.',
+    text: 'A body with one temperature changes faster than the real one: the time to a temperature errs early, and the core of the real body comes to it later.',
   },
   'material-confidence-low': {
     title: 'The figures of the material are known roughly only',

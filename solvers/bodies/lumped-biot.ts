@@ -39,7 +39,7 @@ export function biotWarnings(biot: number | undefined): Warning[] {
     },
     {
       code: 'lumped-errs-early',
-      text: 'The time to a temperature errs early, the unsafe side when a core must be cooled or heated.',
+      text: 'The time to a temperature errs early: the core of the real body comes to it later.',
       value: biot,
     },
   ]

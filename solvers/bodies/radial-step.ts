@@ -23,20 +23,28 @@ export interface HeldDrive {
   surfaceTemperature: number
 }
 
-interface Form {
+export interface Form {
   unit(body: FilmedBody): UnitCylinder | UnitSphere
   /** m³ of the body, per m of a cylinder. */
   volume(radius: number): number
+  /** m² of its surface, per m of a cylinder. */
+  surface(radius: number): number
+  /** Unit of its heat. */
+  heat: 'J/m' | 'J'
 }
 
 export const cylinder: Form = {
   unit: (body) => new UnitCylinder(body),
   volume: (R) => Math.PI * R * R,
+  surface: (R) => 2 * Math.PI * R,
+  heat: 'J/m',
 }
 
 export const sphere: Form = {
   unit: (body) => new UnitSphere(body),
   volume: (R) => ((4 * Math.PI) / 3) * R * R * R,
+  surface: (R) => 4 * Math.PI * R * R,
+  heat: 'J',
 }
 
 /** A depth keeps its digits near the face, a radius near the axis; what was given is not made from the other. */

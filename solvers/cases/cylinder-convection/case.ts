@@ -1,28 +1,9 @@
-import { heatBalance } from '../../bodies/heat-balance.ts'
+import { cylinder } from '../../bodies/radial-step.ts'
+import { allRoundOutputs, roundInFluid } from '../../bodies/round-case.ts'
 import { defineCase } from '../../case.ts'
-import { film } from '../../statement/fields.ts'
-import { filmWarnings } from '../../statement/film.ts'
-import { cylinder, radialLateNumbers } from '../../bodies/radial-step.ts'
-import {
-  allRoundOutputs,
-  fourierOf,
-  insideCheck,
-  lumpedCheck,
-  type RadialResolved,
-  roundAbsentOutputs,
-  roundFields,
-  roundOutputs,
-} from '../../bodies/round-case.ts'
-import { resolveSolid } from '../../statement/solid.ts'
-import { solve, type CylinderInput } from './solve.ts'
+import { solve } from './solve.ts'
 
-type Resolved = CylinderInput & RadialResolved
-
-const biotOf = (input: Resolved) => (input.filmCoefficient * input.radius) / input.conductivity
-
-const fields = { ...roundFields, ...film }
-
-export default defineCase<typeof fields, Resolved>({
+export default defineCase({
   id: 'cylinder-convection',
   title: 'Cylinder, convection at its surface',
   summary: 'A long cylinder at one temperature meets a fluid at another.',
@@ -34,17 +15,8 @@ export default defineCase<typeof fields, Resolved>({
     '\\mathrm{Bi} = hR/k, \\qquad \\mathrm{Fo} = at/R^2',
   ],
   sources: ['H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, section 7.7'],
-  family: 'round',
   sketch: { body: 'cylinder', boundary: 'convection' },
-  fields,
-  places: 'depths-or-radii',
-  depthsEndAt: 'radius',
-  dimensionless: { radius: 1 },
-  drive: 'ambientTemperature',
-  outputs: roundOutputs('J/m'),
-  absentOutputs: roundAbsentOutputs('ambient'),
-  weight: 1,
-  setUp: 3,
+  ...roundInFluid(cylinder, solve),
   cautions: ['concrete', 'food', 'general'],
   example: {
     conductivity: 1.7,
@@ -86,21 +58,4 @@ export default defineCase<typeof fields, Resolved>({
       },
     },
   ],
-  resolve(input, refuse): Resolved {
-    const body = resolveSolid(input, refuse)
-    const { radius, filmCoefficient, initialTemperature, ambientTemperature, depths, radii, times, outputs } = input
-    const own = { radius, filmCoefficient, initialTemperature, ambientTemperature }
-    return { ...body!, ...own, ...(radii ? { radii } : { depths: depths ?? [] }), times, outputs }
-  },
-  solve,
-  numbers(input) {
-    const late = radialLateNumbers(cylinder, input, biotOf(input))
-    return { biot: biotOf(input), fourier: fourierOf(input), length: input.radius, ...late }
-  },
-  checks: (input) => [
-    insideCheck(input),
-    lumpedCheck(biotOf(input)),
-    ...heatBalance(solve, input, { surfaceHeatFlux: 2 * Math.PI * input.radius }),
-  ],
-  warnings: (input) => filmWarnings(input.filmCoefficient),
 })

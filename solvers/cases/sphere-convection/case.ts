@@ -1,28 +1,9 @@
-import { heatBalance } from '../../bodies/heat-balance.ts'
+import { sphere } from '../../bodies/radial-step.ts'
+import { allRoundOutputs, roundInFluid } from '../../bodies/round-case.ts'
 import { defineCase } from '../../case.ts'
-import { film } from '../../statement/fields.ts'
-import { filmWarnings } from '../../statement/film.ts'
-import { sphere, radialLateNumbers } from '../../bodies/radial-step.ts'
-import {
-  allRoundOutputs,
-  fourierOf,
-  insideCheck,
-  lumpedCheck,
-  type RadialResolved,
-  roundAbsentOutputs,
-  roundFields,
-  roundOutputs,
-} from '../../bodies/round-case.ts'
-import { resolveSolid } from '../../statement/solid.ts'
-import { solve, type SphereInput } from './solve.ts'
+import { solve } from './solve.ts'
 
-type Resolved = SphereInput & RadialResolved
-
-const biotOf = (input: Resolved) => (input.filmCoefficient * input.radius) / input.conductivity
-
-const fields = { ...roundFields, ...film }
-
-export default defineCase<typeof fields, Resolved>({
+export default defineCase({
   id: 'sphere-convection',
   title: 'Sphere, convection at its surface',
   summary: 'A sphere at one temperature meets a fluid at another.',
@@ -34,17 +15,8 @@ export default defineCase<typeof fields, Resolved>({
     '\\mathrm{Bi} = hR/k, \\qquad \\mathrm{Fo} = at/R^2',
   ],
   sources: ['H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, section 9.4'],
-  family: 'round',
   sketch: { body: 'sphere', boundary: 'convection' },
-  fields,
-  places: 'depths-or-radii',
-  depthsEndAt: 'radius',
-  dimensionless: { radius: 1 },
-  drive: 'ambientTemperature',
-  outputs: roundOutputs('J'),
-  absentOutputs: roundAbsentOutputs('ambient'),
-  weight: 1,
-  setUp: 3,
+  ...roundInFluid(sphere, solve),
   cautions: ['food', 'general'],
   example: {
     conductivity: 0.5,
@@ -86,21 +58,4 @@ export default defineCase<typeof fields, Resolved>({
       },
     },
   ],
-  resolve(input, refuse): Resolved {
-    const body = resolveSolid(input, refuse)
-    const { radius, filmCoefficient, initialTemperature, ambientTemperature, depths, radii, times, outputs } = input
-    const own = { radius, filmCoefficient, initialTemperature, ambientTemperature }
-    return { ...body!, ...own, ...(radii ? { radii } : { depths: depths ?? [] }), times, outputs }
-  },
-  solve,
-  numbers(input) {
-    const late = radialLateNumbers(sphere, input, biotOf(input))
-    return { biot: biotOf(input), fourier: fourierOf(input), length: input.radius, ...late }
-  },
-  checks: (input) => [
-    insideCheck(input),
-    lumpedCheck(biotOf(input)),
-    ...heatBalance(solve, input, { surfaceHeatFlux: 4 * Math.PI * input.radius * input.radius }),
-  ],
-  warnings: (input) => filmWarnings(input.filmCoefficient),
 })

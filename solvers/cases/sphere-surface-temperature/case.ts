@@ -1,26 +1,9 @@
-import { heldNumbers } from '../../bodies/held-face.ts'
-import { heatBalance } from '../../bodies/heat-balance.ts'
+import { sphere } from '../../bodies/radial-step.ts'
+import { allRoundOutputs, roundHeld } from '../../bodies/round-case.ts'
 import { defineCase } from '../../case.ts'
-import { surfaceTemperature } from '../../statement/fields.ts'
-import { sphere, radialLateNumbers } from '../../bodies/radial-step.ts'
-import {
-  allRoundOutputs,
-  fourierOf,
-  insideCheck,
-  type RadialResolved,
-  roundAbsentOutputs,
-  roundFields,
-  roundOutputs,
-} from '../../bodies/round-case.ts'
-import { refuseFluxAtStep } from '../../bodies/singular.ts'
-import { resolveSolid } from '../../statement/solid.ts'
-import { solve, type SphereInput } from './solve.ts'
+import { solve } from './solve.ts'
 
-type Resolved = SphereInput & RadialResolved
-
-const fields = { ...roundFields, surfaceTemperature }
-
-export default defineCase<typeof fields, Resolved>({
+export default defineCase({
   id: 'sphere-surface-temperature',
   title: 'Sphere, fixed surface temperature',
   summary: 'A sphere at one temperature is held at another at its surface.',
@@ -31,17 +14,8 @@ export default defineCase<typeof fields, Resolved>({
     '\\mathrm{Fo} = at/R^2',
   ],
   sources: ['H. S. Carslaw, J. C. Jaeger, Conduction of Heat in Solids, 2nd ed. 1959, section 9.3'],
-  family: 'round',
   sketch: { body: 'sphere', boundary: 'temperature' },
-  fields,
-  places: 'depths-or-radii',
-  depthsEndAt: 'radius',
-  dimensionless: { radius: 1 },
-  drive: 'surfaceTemperature',
-  outputs: roundOutputs('J'),
-  absentOutputs: roundAbsentOutputs('surface'),
-  weight: 1,
-  setUp: 3,
+  ...roundHeld(sphere, solve),
   cautions: ['food', 'general'],
   example: {
     conductivity: 0.55,
@@ -68,22 +42,4 @@ export default defineCase<typeof fields, Resolved>({
       },
     },
   ],
-  resolve(input, refuse): Resolved {
-    const body = resolveSolid(input, refuse)
-    const { radius, initialTemperature, surfaceTemperature, depths, radii, times, outputs } = input
-    const places = radii ? radii.map((r) => radius - r) : depths
-    refuseFluxAtStep({ times, depths: places, outputs }, (depth) => depth === 0, refuse)
-    const own = { radius, initialTemperature, surfaceTemperature }
-    return { ...body!, ...own, ...(radii ? { radii } : { depths: depths ?? [] }), times, outputs }
-  },
-  solve,
-  numbers(input) {
-    const late = radialLateNumbers(sphere, input, Infinity)
-    return { fourier: fourierOf(input), length: input.radius, ...late, ...heldNumbers(input, input.radius) }
-  },
-  checks: (input) => [
-    insideCheck(input),
-    ...heatBalance(solve, input, { surfaceHeatFlux: 4 * Math.PI * input.radius * input.radius }),
-  ],
-  warnings: () => [],
 })
