@@ -51,7 +51,7 @@ describe.each(cases.map((c) => [c.id, c] as const))('%s over all admissible inpu
       // Sensitivities take hundreds of solves each; they are asked on their own.
       const names = outputNamesOf(c).filter((name) => name !== 'sensitivities')
       const placeless = names.filter((name) => ['times', 'single'].includes(shapeOf(c, name)))
-      let answered = 0
+      let [asked, answered] = [0, 0]
       const ask = (body: Record<string, unknown>, outputs: OutputName[]): string | undefined => {
         try {
           const answer = solve.prepare(c, { ...body, outputs }, 'full').run() as Answer
@@ -80,11 +80,13 @@ describe.each(cases.map((c) => [c.id, c] as const))('%s over all admissible inpu
           return left.length ? ask(body, left) : undefined
         }
       }
+      // A rate takes twelve solves: one input in five asks for it.
+      const wanted = (list: readonly OutputName[]) => list.filter((name) => name !== 'rate' || asked % 5 === 0)
       fc.assert(
         fc.property(admissible(c), (body) => {
-          expect(
-            ask(body, placeFields[c.places].every((name) => !body[name]) && c.places !== 'none' ? placeless : names),
-          ).toBeUndefined()
+          asked++
+          const nowhere = c.places !== 'none' && placeFields[c.places].every((name) => !body[name])
+          expect(ask(body, wanted(nowhere ? placeless : names))).toBeUndefined()
         }),
         { numRuns: count, seed },
       )
