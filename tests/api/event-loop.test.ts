@@ -60,17 +60,19 @@ test.each(
     'content-type': 'application/json',
     'content-encoding': 'gzip',
   }
+  const send = async () => {
+    const statuses: number[] = []
+    for (let n = 0; n < ROUNDS; n++) {
+      const answer = await fetch(service.url + path, { method: 'POST', headers, body })
+      await answer.arrayBuffer()
+      statuses.push(answer.status)
+    }
+    return statuses
+  }
+  const refused = (await send())[0]
+  expect([400, 422]).toContain(refused)
   const once = async () => {
     let under = true
-    const send = async () => {
-      const statuses: number[] = []
-      for (let n = 0; n < ROUNDS; n++) {
-        const answer = await fetch(service.url + path, { method: 'POST', headers, body })
-        await answer.arrayBuffer()
-        statuses.push(answer.status)
-      }
-      return statuses
-    }
     const sending = Promise.all(Array.from({ length: CONNECTIONS }, send)).finally(() => (under = false))
     let longest = 0
     while (under) {
@@ -81,7 +83,9 @@ test.each(
     }
     const statuses = (await sending).flat()
     if (process.env['SHOW']) console.log(`MEASURED ${path} ${bytes} ${name}: ${longest.toFixed(0)} ms, ${statuses}`)
-    expect(statuses.every((status) => status === 400 || status === 422)).toBe(true)
+    // On a busy machine a body may also be given up, which is said as 503.
+    expect(statuses.filter((status) => ![400, 422, 503].includes(status))).toEqual([])
+    expect(statuses).toContain(refused)
     return longest
   }
   // A neighbour on the same machine holds a call up now and then; a body read on the way does so every time.
