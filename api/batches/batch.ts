@@ -1,22 +1,17 @@
 import type { Compute } from '../compute/compute.ts'
-import { readable } from '../http/readable.ts'
-import { Problem, problemDetails } from '../problems.ts'
-import type { AnsweredLines, Counts, LineTask } from './lines.ts'
+import { Problem } from '../problems.ts'
+import { type AnsweredLines, type Counts, type LineTask, refusedLine } from './lines.ts'
 
 /** Lines that a thread reads at a time: some ten milliseconds. */
 const CHUNK = 200
 /** Chunks of one batch that are computed at once, so that others find a thread as well. */
 const AT_ONCE = 3
 
-/** A batch as it was read: its lines, and what they need. */
-export type Batch = Omit<LineTask, 'first'>
-
-function chunksOf(batch: Batch): LineTask[] {
+function chunksOf(batch: LineTask): LineTask[] {
   const count = Math.ceil(batch.lines.length / CHUNK)
   return Array.from({ length: count }, (_, n) => ({
     ...batch,
     lines: batch.lines.slice(n * CHUNK, (n + 1) * CHUNK),
-    first: n * CHUNK + 1,
   }))
 }
 
@@ -37,7 +32,7 @@ async function* inOrder<T, R>(list: readonly T[], work: (one: T) => Promise<R>):
 }
 
 /** Reads all lines and sums their price. */
-export async function priceBatch(batch: Batch, compute: Compute): Promise<Counts> {
+export async function priceBatch(batch: LineTask, compute: Compute): Promise<Counts> {
   const sum: Counts = { ok: 0, failed: 0, points: 0 }
   for await (const counts of inOrder(chunksOf(batch), compute.priceLines)) add(sum, counts)
   return sum
@@ -47,7 +42,7 @@ export async function priceBatch(batch: Batch, compute: Compute): Promise<Counts
 const LIMIT = 60_000
 
 /** Answers all lines in their order, piece by piece. */
-export function answerBatch(batch: Batch, compute: Compute, limit = LIMIT): AsyncGenerator<AnsweredLines> {
+export function answerBatch(batch: LineTask, compute: Compute, limit = LIMIT): AsyncGenerator<AnsweredLines> {
   const end = performance.now() + limit
   return inOrder(chunksOf(batch), async (task) =>
     performance.now() < end ? answerLines(task, compute) : failedLines(task, new Problem('solve-too-slow')),
@@ -70,7 +65,7 @@ async function answerLines(task: LineTask, compute: Compute): Promise<AnsweredLi
     const middle = Math.ceil(task.lines.length / 2)
     const [first, second] = [
       await answerLines({ ...task, lines: task.lines.slice(0, middle) }, compute),
-      await answerLines({ ...task, lines: task.lines.slice(middle), first: task.first + middle }, compute),
+      await answerLines({ ...task, lines: task.lines.slice(middle) }, compute),
     ]
     const both = { ...first, text: first.text + second.text, faults: [...first.faults, ...second.faults] }
     add(both, second)
@@ -79,15 +74,15 @@ async function answerLines(task: LineTask, compute: Compute): Promise<AnsweredLi
 }
 
 function failedLines({ lines, publicUrl }: LineTask, problem: Problem): AnsweredLines {
-  const details = readable(problemDetails(problem, publicUrl))
-  const texts = lines.map((line) => `${JSON.stringify({ id: idIn(line), status: problem.status, problem: details })}\n`)
+  const texts = lines.map((line) => `${JSON.stringify(refusedLine(idIn(line), problem, publicUrl))}\n`)
   return { ok: 0, failed: lines.length, points: 0, faults: [], text: texts.join('') }
 }
 
-/* The line was read before, or its own problem would stand here. */
-function idIn(line: string): unknown {
+/* The line was not read here; whatever else is wrong with it, its id may be right. */
+function idIn(line: string): string | null {
   try {
-    return (JSON.parse(line) as { id?: unknown }).id ?? null
+    const { id } = JSON.parse(line) as { id?: unknown }
+    return typeof id === 'string' ? id : null
   } catch {
     return null
   }

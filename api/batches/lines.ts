@@ -1,15 +1,14 @@
 import { z } from 'zod'
-import type { Case } from '../../solvers/case.ts'
 import { cases } from '../../solvers/cases/index.ts'
 import { DomainError } from '../../solvers/errors.ts'
 import { withOwnMaterials } from '../../solvers/materials/own-material.ts'
-import { type Call, caseOperations, operationsOf } from '../../solvers/operations/index.ts'
+import { type Call, operationsOf } from '../../solvers/operations/index.ts'
+import { MAX_POINTS } from '../../solvers/operations/price.ts'
 import { parse } from '../../solvers/statement/validate.ts'
-import { caseNamed, operationNamed } from '../cases/named.ts'
 import { parseJson } from '../http/json.ts'
 import { readable } from '../http/readable.ts'
 import type { OwnMaterials } from '../operation.ts'
-import { invalidInput, Problem, problemDetails } from '../problems.ts'
+import { invalidInput, Problem, type ProblemDetails, problemDetails } from '../problems.ts'
 
 /** Lines that one batch may hold. */
 export const MOST_LINES = 10_000
@@ -17,8 +16,6 @@ export const MOST_LINES = 10_000
 /** Lines of a batch as they stand in its body, and what reading them needs. */
 export interface LineTask {
   lines: readonly string[]
-  /** Number of the first of them in the body, from 1. */
-  first: number
   own: OwnMaterials
   publicUrl: string
 }
@@ -36,57 +33,20 @@ export interface AnsweredLines extends Counts {
   faults: string[]
 }
 
-const caseIds = cases.map((c) => c.id)
-const operationIds = caseOperations.map((o) => o.id)
+/** The answer to one line; a problem of a line has no request of its own. */
+export type LineAnswer =
+  | { id: string | null; status: 200; points: number; answer: object }
+  | { id: string | null; status: number; problem: ProblemDetails }
 
 /** One call of a batch, before its own input is read. */
-export const lineSchema = z.strictObject({
-  id: z.string().min(1).max(100).meta({
-    title: 'Id',
-    description: 'Id: the name of the line, repeated in its answer.',
-    'x-accepted': '1 to 100 characters',
-  }),
-  case: z.enum(caseIds as [string, ...string[]]).meta({
-    title: 'Case',
-    description: 'Case: one of the catalogue.',
-    'x-accepted': 'the id of a case',
-  }),
-  operation: z
-    .enum(operationIds as [string, ...string[]])
-    .default('solve')
-    .meta({
-      title: 'Operation',
-      description: `Operation: ${operationIds.join(', ')}. Default solve.`,
-      'x-accepted': operationIds.join(', '),
-    }),
-  input: z.record(z.string(), z.unknown()).meta({
-    title: 'Input',
-    description: 'Input: the body that the case takes for this operation. Its detail is compact unless it says full.',
-    'x-accepted': 'the body of the operation, an object',
-  }),
+const lineSchema = z.strictObject({
+  id: z.string().min(1).max(200),
+  case: z.string().max(100),
+  operation: z.string().max(100).default('solve'),
+  input: z.record(z.string(), z.unknown()),
 })
 
-interface Read {
-  id: string | null
-  call: Call
-}
-
-/** A line as a call, validated whole and priced. Throws a LineProblem. */
-function readLine(text: string, number: number, own: OwnMaterials): Read {
-  let id: string | null = null
-  try {
-    const raw = parseJson(new TextEncoder().encode(text))
-    id = idOf(raw)
-    const line = parse(lineSchema, raw)
-    const c = caseNamed(line.case)
-    const o = operationNamed(c, line.operation)
-    if (!o) throw notOfCase(c, line.operation)
-    return { id, call: within('input', () => o.prepare(c, withOwnMaterials(line.input, own), 'compact')) }
-  } catch (error) {
-    throw new LineProblem(id, toProblem(error, number))
-  }
-}
-
+/** A refused line, with its id where that could be read. */
 class LineProblem extends Error {
   readonly id: string | null
   readonly problem: Problem
@@ -98,77 +58,107 @@ class LineProblem extends Error {
   }
 }
 
-const idOf = (raw: unknown): string | null => {
-  const id = (raw as { id?: unknown } | null)?.id
-  return typeof id === 'string' && id.length <= 100 ? id : null
+interface Read {
+  id: string | null
+  call: Call
 }
 
-const notOfCase = (c: Case, operation: string) =>
-  new DomainError([
-    {
-      pointer: '#/operation',
-      code: 'not-in-list',
-      detail: `${c.id} has no ${operation}.`,
-      accepted: operationsOf(c)
-        .map((o) => o.id)
-        .join(', '),
-    },
-  ])
-
-/** Issues of the input are told by their place in the line. */
-function within<T>(name: string, work: () => T): T {
+/** A line as a call, validated whole and priced. Throws a LineProblem. */
+function readLine(text: string, own: OwnMaterials): Read {
+  let id: string | null = null
   try {
-    return work()
+    const raw = parseJson(new TextEncoder().encode(text))
+    id = idOf(raw)
+    return { id, call: callOf(raw, own) }
   } catch (error) {
-    if (!(error instanceof DomainError)) throw error
-    throw new DomainError(error.issues.map((one) => ({ ...one, pointer: one.pointer.replace(/^#/, `#/${name}`) })))
+    if (error instanceof DomainError) throw new LineProblem(id, invalidInput(error.issues))
+    if (error instanceof Problem) throw new LineProblem(id, error)
+    throw error
   }
 }
 
-function toProblem(error: unknown, number: number): Problem {
-  if (error instanceof DomainError) return invalidInput(error.issues)
-  if (error instanceof Problem) return new Problem(error.code, `Line ${number}: ${error.message}`, error.extras)
-  throw error
+/** The id is given back even where the rest of the line is refused. */
+function idOf(raw: unknown): string | null {
+  const parsed = z.object({ id: lineSchema.shape.id }).safeParse(raw)
+  return parsed.success ? parsed.data.id : null
+}
+
+function callOf(raw: unknown, own: OwnMaterials): Call {
+  const line = parse(lineSchema, raw)
+  const c = cases.find(({ id }) => id === line.case)
+  if (!c) throw new Problem('not-found', `There is no case "${line.case}".`)
+  const o = operationsOf(c).find(({ id }) => id === line.operation)
+  if (!o) throw new Problem('not-found', `There is no operation "${line.operation}" of ${c.id}.`)
+  const call = within('#/input', () => o.prepare(c, withOwnMaterials(line.input, own), 'compact'))
+  if (call.points > MAX_POINTS)
+    throw new Problem('too-many-points', `The line needs ${call.points} points; one line may need ${MAX_POINTS}.`)
+  return call
+}
+
+/** A line's pointers start at the line, so that those of a refused input pass through its member. */
+function within<T>(prefix: string, prepare: () => T): T {
+  try {
+    return prepare()
+  } catch (error) {
+    if (!(error instanceof DomainError)) throw error
+    throw new DomainError(error.issues.map((issue) => ({ ...issue, pointer: prefix + issue.pointer.slice(1) })))
+  }
+}
+
+export function refusedLine(id: string | null, problem: Problem, publicUrl: string): LineAnswer {
+  return { id, status: problem.status, problem: readable(problemDetails(problem, publicUrl)) }
+}
+
+/** Answers one line; what fails in a solver fails alone, and is told to `onFault`. */
+export function answerLine(
+  text: string,
+  { own, publicUrl }: Pick<LineTask, 'own' | 'publicUrl'>,
+  onFault: (error: unknown) => void,
+): LineAnswer {
+  let id: string | null = null
+  try {
+    const read = readLine(text, own)
+    id = read.id
+    return { id, status: 200, points: read.call.points, answer: read.call.run() }
+  } catch (error) {
+    if (error instanceof LineProblem) return refusedLine(error.id, error.problem, publicUrl)
+    onFault(error)
+    return refusedLine(id, new Problem('internal'), publicUrl)
+  }
+}
+
+/** Counts an answer into a sum. */
+export function count(sum: Counts, answered: LineAnswer): void {
+  if ('answer' in answered) {
+    sum.ok++
+    sum.points += answered.points
+  } else sum.failed++
 }
 
 /** Reads and prices lines; a line that is refused counts as failed and costs nothing. */
-export function priceLines({ lines, first, own }: LineTask): Counts {
+export function priceLines({ lines, own }: LineTask): Counts {
   const counts: Counts = { ok: 0, failed: 0, points: 0 }
-  lines.forEach((text, i) => {
+  for (const text of lines)
     try {
-      counts.points += readLine(text, first + i, own).call.points
+      counts.points += readLine(text, own).call.points
       counts.ok++
     } catch (error) {
       if (!(error instanceof LineProblem)) throw error
       counts.failed++
     }
-  })
   return counts
 }
 
-/** Answers lines, a line each, in their order. What fails in a solver fails alone, and its points are not counted. */
-export function answerLines({ lines, first, own, publicUrl }: LineTask): AnsweredLines {
+/** Answers lines, a line each, in their order. */
+export function answerLines(task: LineTask): AnsweredLines {
   const counts: Counts = { ok: 0, failed: 0, points: 0 }
   const faults: string[] = []
-  const failed = (id: string | null, problem: Problem) => {
-    counts.failed++
-    return JSON.stringify({ id, status: problem.status, problem: readable(problemDetails(problem, publicUrl)) })
-  }
-  const answers = lines.map((text, i) => {
-    let read: Read | undefined
-    try {
-      read = readLine(text, first + i, own)
-      const answer = read.call.run()
-      counts.ok++
-      counts.points += read.call.points
-      return JSON.stringify({ id: read.id, status: 200, points: read.call.points, answer })
-    } catch (error) {
-      if (error instanceof LineProblem) return failed(error.id, error.problem)
-      faults.push((error as Error).stack ?? String(error))
-      return failed(read?.id ?? null, new Problem('internal'))
-    }
+  const texts = task.lines.map((text) => {
+    const answered = answerLine(text, task, (error) => faults.push((error as Error).stack ?? String(error)))
+    count(counts, answered)
+    return `${JSON.stringify(answered)}\n`
   })
-  return { ...counts, faults, text: answers.map((answer) => `${answer}\n`).join('') }
+  return { ...counts, faults, text: texts.join('') }
 }
 
 /** The lines of a body: as they stand, blank ones passed over. */

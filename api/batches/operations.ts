@@ -8,8 +8,8 @@ import type { RecordedCall } from '../http/record.ts'
 import { ownMaterialsIn } from '../materials/own-materials.ts'
 import { operation } from '../operation.ts'
 import { Problem } from '../problems.ts'
-import { type Batch, add, answerBatch, priceBatch } from './batch.ts'
-import { type Counts, linesOf, MOST_LINES } from './lines.ts'
+import { add, answerBatch, priceBatch } from './batch.ts'
+import { type Counts, linesOf, type LineTask, MOST_LINES } from './lines.ts'
 
 const exampleLines = (cases[0] ? [cases[0]] : []).flatMap((c) => [
   { id: 'r1', case: c.id, operation: 'solve', input: c.example },
@@ -43,7 +43,7 @@ export const runBatch = operation({
     const lines = linesOf(body as string)
     refuseCount(lines.length)
     const own = await ownMaterialsIn(Buffer.from(body as string), caller, deps.db)
-    const batch: Batch = { lines, own, publicUrl: deps.config.publicUrl }
+    const batch: LineTask = { lines, own, publicUrl: deps.config.publicUrl }
     const priced = await priceBatch(batch, deps.compute)
     if (priced.points > MAX_POINTS)
       throw new Problem('too-many-points', `The batch needs ${priced.points} points; one may need ${MAX_POINTS}.`)
@@ -85,7 +85,7 @@ const chargedFor = ({ ok, points }: Counts): number => (ok === 0 ? 0 : chargeOf(
  * The lines of the answer. Their charge is open until all are there; then it stands, less what failed. Who hangs up
  * meanwhile pays for the whole.
  */
-async function* answered(batch: Batch, charged: number, call: RecordedCall, deps: Deps): AsyncGenerator<string> {
+async function* answered(batch: LineTask, charged: number, call: RecordedCall, deps: Deps): AsyncGenerator<string> {
   const { meter, log } = deps
   const { requestId } = call
   const sum: Counts = { ok: 0, failed: 0, points: 0 }

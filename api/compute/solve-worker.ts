@@ -1,7 +1,7 @@
 import { DomainError } from '../../solvers/errors.ts'
 import { withOwnMaterials } from '../../solvers/materials/own-material.ts'
-import type { Call } from '../../solvers/operations/index.ts'
-import { caseNamed, operationNamed } from '../cases/named.ts'
+import { type Call, caseOperations } from '../../solvers/operations/index.ts'
+import { cases } from '../../solvers/cases/index.ts'
 import { parseJson } from '../http/json.ts'
 import { type Rendered, render } from '../http/render.ts'
 import type { OwnMaterials } from '../operation.ts'
@@ -21,9 +21,9 @@ interface Names {
 export type Prepared = { call: Priced } | { refusal: ConstructorParameters<typeof Problem> }
 
 function callOf(task: Names, body: unknown): Call {
-  const c = caseNamed(task.case)
-  const o = operationNamed(c, task.operation)
-  if (!o) throw new Error(`there is no ${task.operation} of ${task.case}`)
+  const c = cases.find((one) => one.id === task.case)
+  const o = caseOperations.find((one) => one.id === task.operation)
+  if (!c || !o) throw new Error(`there is no ${task.operation} of ${task.case}`)
   return o.prepare(c, withOwnMaterials(body, task.own), 'full')
 }
 

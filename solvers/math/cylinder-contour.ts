@@ -37,13 +37,17 @@ export class CylinderContour {
 
   /** In units of Bi, or of 1 where the face is held. */
   flux(j: number, m: Moment): Estimate {
-    const { inner, deltas, shifts } = this.body
     const found = this.at(j, m, 1)
-    // The flux falls by its own size over the depth reached.
+    const value = this.body.inner[j] === 0 ? 0 : found.value / this.unit
+    return { ...found, value, error: found.error / this.unit + this.fluxMoved(j, m) }
+  }
+
+  /** What the rounding of a depth moves the flux by: it falls by its own size over the depth reached. */
+  fluxMoved(j: number, m: Moment): number {
+    const { deltas, shifts } = this.body
+    if (shifts[j] === 0) return 0
     const bend = (2 * (deltas[j]! / (2 * m.root) + 1)) / m.root
-    const moved = shifts[j] === 0 ? 0 : this.steepest(j, m) * Math.min(1, EPS * shifts[j]! * bend)
-    const value = inner[j] === 0 ? 0 : found.value / this.unit
-    return { ...found, value, error: (found.error + moved) / this.unit }
+    return (this.steepest(j, m) * Math.min(1, EPS * shifts[j]! * bend)) / this.unit
   }
 
   /** 1 − completed while that is small; from there on the transform of θ itself, which keeps its digits at the face. */
@@ -112,7 +116,7 @@ export class CylinderContour {
   }
 
   /** What the rounding of a depth that is reckoned from a radius moves the response by. */
-  private moved(j: number, m: Moment): number {
+  moved(j: number, m: Moment): number {
     const shift = EPS * this.body.shifts[j]!
     return shift === 0 ? 0 : shift * this.steepest(j, m)
   }

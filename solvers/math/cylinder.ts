@@ -13,8 +13,8 @@ const SHARE_BY_SERIES_FROM = 0.0005
 /** Up to here also where the series errs by more than this share of its value. */
 const CONTOUR_TO = 0.2
 const LOOSE = 1e-12
-/** Below, the body is a half space to the last digit, and its transform would overflow. */
-const PLANE = 1e-200
+/** Below, the body is a half space to the last digit; far below, its transform would overflow. */
+const PLANE = 1e-36
 
 /** A cylinder of radius 1 after a unit step: of the fluid behind a film, or where Bi is Infinity of its face itself. */
 export class UnitCylinder implements UnitBody {
@@ -38,7 +38,7 @@ export class UnitCylinder implements UnitBody {
   }
 
   remaining(j: number, m: Moment): Estimate {
-    if (m.fourier < PLANE) return closed(Math.min(1, remaining(...this.arguments(j, m))))
+    if (m.fourier < PLANE) return closed(Math.min(1, remaining(...this.arguments(j, m))), this.contour.moved(j, m))
     return choose(
       m,
       () => this.contour.remaining(j, m),
@@ -47,7 +47,7 @@ export class UnitCylinder implements UnitBody {
   }
 
   completed(j: number, m: Moment): Estimate {
-    if (m.fourier < PLANE) return closed(completed(...this.arguments(j, m)))
+    if (m.fourier < PLANE) return closed(completed(...this.arguments(j, m)), this.contour.moved(j, m))
     return choose(
       m,
       () => this.contour.completed(j, m),
@@ -56,7 +56,7 @@ export class UnitCylinder implements UnitBody {
   }
 
   flux(j: number, m: Moment): Estimate {
-    if (m.fourier < PLANE) return closed(this.planeFlux(j, m))
+    if (m.fourier < PLANE) return closed(this.planeFlux(j, m), this.contour.fluxMoved(j, m))
     return m.fourier < SERIES_FROM ? this.contour.flux(j, m) : this.series.flux(j, m)
   }
 
@@ -97,9 +97,9 @@ export class UnitCylinder implements UnitBody {
   }
 }
 
-/** A fraction of a half space at so short a time is 0 or 1, or at the face itself. */
-function closed(value: number): Estimate {
-  return { value, error: 200 * EPS * value + TINY, method: 'closed-form' }
+/** Of a half space; `moved` is what the rounding of its place makes. */
+function closed(value: number, moved = 0): Estimate {
+  return { value, error: 200 * EPS * value + moved + TINY, method: 'closed-form' }
 }
 
 function choose(m: Moment, contour: () => Estimate, series: () => Estimate): Estimate {

@@ -85,7 +85,7 @@ async function meteredTarget(databaseUrl: string, ending: (() => Promise<void>)[
   const key = await makeKey(service)
   const client = new pg.Client(databaseUrl)
   await client.connect()
-  await client.query('UPDATE accounts SET trial_limit = 1000000000000')
+  await client.query('UPDATE accounts SET trial_limit = 1000000000000, rate = 2000000000')
   await client.end()
   return { url: `${service}/v1/cases/${slab.id}/solve`, headers: { authorization: `Bearer ${key}` } }
 }

@@ -184,6 +184,22 @@ const forms = ['cylinder', 'sphere'] as const
 
 describe.each(forms)('limits of the %s', (form) => {
   const film = `${form}-convection`
+  it.each([1e-30, 1.01e-36, 0.99e-36, 1e-150, 1e-199, 1e-260])(
+    'a weak film has given what it carries at once, however early: Fo %s',
+    (fourier) => {
+      // The share of all heat is 2 or 3 times Bi Fo.
+      const body = { conductivity: 100, diffusivity: 1e-6, radius: 1e-3, initialTemperature: 0, ambientTemperature: 1 }
+      const names: OutputName[] = ['heatFraction', 'completedFraction']
+      const input = { ...body, filmCoefficient: 1e-4, depths: [0], times: [fourier], outputs: names }
+      const { result, accuracy } = ask(film, input)
+      const heat = (form === 'cylinder' ? 2 : 3) * 1e-9 * fourier
+      const face = 2e-9 * Math.sqrt(fourier / Math.PI)
+      expect(Math.abs((result.heatFraction as number[])[0]! / heat - 1)).toBeLessThan(1e-12)
+      expect(Math.abs((result.completedFraction as number[][])[0]![0]! / face - 1)).toBeLessThan(1e-12)
+      expect(accuracy.bound.heatFraction!.relative).toBeLessThan(1e-12)
+    },
+  )
+
   it('at time 0 the body is as it was, the film flux at its face', () => {
     const { result } = ask(film, { ...rod, filmCoefficient: 10, depths: [0, 0.05, 0.1], times: [0], outputs })
     expect(result).toEqual({
