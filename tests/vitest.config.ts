@@ -12,6 +12,7 @@ export default defineConfig({
     maxWorkers: 2,
     testTimeout: process.env['SOAKSTONE_PROOF'] === '1' ? 30 * 60_000 : 60_000,
     hookTimeout: 120_000,
+    expect: { poll: { timeout: 20_000 } },
     teardownTimeout: 30_000,
     sequence: { seed },
     allowOnly: false,
