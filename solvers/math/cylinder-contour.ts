@@ -45,7 +45,7 @@ export class CylinderContour {
   /** What the rounding of a depth moves the flux by: it falls by its own size over the depth reached. */
   fluxMoved(j: number, m: Moment): number {
     const { deltas, shifts } = this.body
-    if (shifts[j] === 0) return 0
+    if (shifts[j] === 0 || m.root === 0) return 0
     const bend = (2 * (deltas[j]! / (2 * m.root) + 1)) / m.root
     return (this.steepest(j, m) * Math.min(1, EPS * shifts[j]! * bend)) / this.unit
   }
@@ -118,13 +118,14 @@ export class CylinderContour {
   /** What the rounding of a depth that is reckoned from a radius moves the response by. */
   moved(j: number, m: Moment): number {
     const shift = EPS * this.body.shifts[j]!
-    return shift === 0 ? 0 : shift * this.steepest(j, m)
+    return shift === 0 || m.root === 0 ? 0 : Math.min(1, shift * this.steepest(j, m))
   }
 
   /** The most that the slope of the response is within that rounding: a half space is at least as steep. */
   private steepest(j: number, m: Moment): number {
     const { biot, deltas, inner, shifts } = this.body
     const near = Math.max(0, deltas[j]! - EPS * shifts[j]!) / (2 * m.root)
+    if (near * near > VANISHED) return 0
     const slope =
       biot === Infinity ? Math.exp(-near * near) / (1.77 * m.root) : biot * fluxFraction(near, biot * m.root)
     return (1.5 * slope) / Math.sqrt(Math.max(inner[j]!, m.fourier))
