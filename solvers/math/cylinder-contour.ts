@@ -18,6 +18,8 @@ import type { FilmedBody, Moment } from './unit-body.ts'
 
 /** e^(−δ²/(4Fo)) and all that it multiplies count as zero beyond. */
 const VANISHED = 680
+/** Before it a place is the face itself or deep, and its rounding changes nothing. */
+const AT_ONCE = 1e-200
 
 export class CylinderContour {
   private readonly body: FilmedBody
@@ -45,7 +47,7 @@ export class CylinderContour {
   /** What the rounding of a depth moves the flux by: it falls by its own size over the depth reached. */
   fluxMoved(j: number, m: Moment): number {
     const { deltas, shifts } = this.body
-    if (shifts[j] === 0 || m.root === 0) return 0
+    if (shifts[j] === 0 || m.fourier < AT_ONCE) return 0
     const bend = (2 * (deltas[j]! / (2 * m.root) + 1)) / m.root
     return (this.steepest(j, m) * Math.min(1, EPS * shifts[j]! * bend)) / this.unit
   }
@@ -118,7 +120,7 @@ export class CylinderContour {
   /** What the rounding of a depth that is reckoned from a radius moves the response by. */
   moved(j: number, m: Moment): number {
     const shift = EPS * this.body.shifts[j]!
-    return shift === 0 || m.root === 0 ? 0 : Math.min(1, shift * this.steepest(j, m))
+    return shift === 0 || m.fourier < AT_ONCE ? 0 : Math.min(1, shift * this.steepest(j, m))
   }
 
   /** The most that the slope of the response is within that rounding: a half space is at least as steep. */
