@@ -104,11 +104,15 @@ export interface Body<B> {
 }
 
 /** A body that is a text of its own kind. */
-export interface Upload {
+export interface Upload<B> {
   kind: 'text/csv' | 'application/x-ndjson'
   limit: number
   description: string
   example: string
+  /** It may name materials of the account, as a body may. */
+  materials?: true
+  /** Throws DomainError. */
+  parse(text: string, own: OwnMaterials): B
 }
 
 export type Method = 'get' | 'post' | 'put' | 'delete'
@@ -145,8 +149,8 @@ interface Description<P, Q, B, A extends Access> {
   params?: z.ZodObject & z.ZodType<P>
   query?: z.ZodObject & z.ZodType<Q>
   body?: Body<B>
-  /** In place of a JSON body; handlers get it as text. */
-  upload?: Upload
+  /** In place of a JSON body. */
+  upload?: Upload<B>
   /** A change that must state by If-Match which version it is of. */
   conditional?: true
   status: 200 | 201 | 204

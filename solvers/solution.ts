@@ -7,6 +7,9 @@ export interface Bound {
   relative: number
 }
 
+/** What one value may be off. */
+export const errorOf = ({ absolute, relative }: Bound, value: number): number => absolute + relative * Math.abs(value)
+
 export type { Method }
 
 export interface Output {

@@ -5,8 +5,7 @@ import { BODY_LIMIT } from '../cases/limits.ts'
 import { refuseGone } from '../cases/solve-metered.ts'
 import type { Deps } from '../deps.ts'
 import type { RecordedCall } from '../http/record.ts'
-import { ownMaterialsIn } from '../materials/own-materials.ts'
-import { operation } from '../operation.ts'
+import { type OwnMaterials, operation } from '../operation.ts'
 import { Problem } from '../problems.ts'
 import { add, answerBatch, priceBatch } from './batch.ts'
 import { type Counts, linesOf, type LineTask, MOST_LINES } from './lines.ts'
@@ -36,14 +35,13 @@ export const runBatch = operation({
     limit: BODY_LIMIT,
     description: 'Calls as JSON objects, one a line.',
     example: exampleLines.map((line) => `${JSON.stringify(line)}\n`).join(''),
+    materials: true,
+    parse: readBatch,
   },
   status: 200,
   answersLines: 'Answers as JSON objects, one a line, and a summary last.',
   async handle({ body, caller, call, deps }) {
-    const lines = linesOf(body as string)
-    refuseCount(lines.length)
-    const own = await ownMaterialsIn(Buffer.from(body as string), caller, deps.db)
-    const batch: LineTask = { lines, own, publicUrl: deps.config.publicUrl }
+    const batch: LineTask = { ...body, publicUrl: deps.config.publicUrl }
     const priced = await priceBatch(batch, deps.compute)
     if (priced.points > MAX_POINTS)
       throw new Problem('too-many-points', `The batch needs ${priced.points} points; one may need ${MAX_POINTS}.`)
@@ -66,8 +64,10 @@ export const runBatch = operation({
   },
 })
 
-function refuseCount(count: number): void {
-  if (count > 0 && count <= MOST_LINES) return
+function readBatch(text: string, own: OwnMaterials): Omit<LineTask, 'publicUrl'> {
+  const lines = linesOf(text)
+  const count = lines.length
+  if (count > 0 && count <= MOST_LINES) return { lines, own }
   throw new DomainError([
     {
       pointer: '#',

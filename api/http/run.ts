@@ -106,29 +106,31 @@ function ifMatchOf(o: Operation, req: Request): { ifMatch?: string } {
 async function inputOf(o: Operation, req: Request, res: Response, deps: Deps, caller: Caller): Promise<Input> {
   const params = readParams(o, req)
   const query = readQuery(o, req)
-  if (o.upload) {
-    const bytes = await readBody(req, res, o.upload.limit, o.upload.kind)
-    return { params, query, body: textOf(bytes, o.upload.kind), bytes }
-  }
-  if (!o.body) return { params, query, body: undefined }
-  const bytes = await readBody(req, res, o.body.limit)
-  const own = o.body.materials ? await ownMaterialsIn(bytes, caller, deps.db) : none
-  return { params, query, body: await parseBody(o.body, bytes, deps, own), bytes }
+  const asked = o.upload ?? o.body
+  if (!asked) return { params, query, body: undefined }
+  const bytes = await readBody(req, res, asked.limit, o.upload?.kind)
+  const own = asked.materials ? await ownMaterialsIn(bytes, caller, deps.db) : none
+  const body = 'kind' in asked ? parseText(asked, bytes, own) : await parseBody(asked, bytes, deps, own)
+  return { params, query, body, bytes }
 }
 
 const none: OwnMaterials = new Map()
 
-function textOf(bytes: Buffer, kind: Upload['kind']): string {
+function parseText({ kind, parse }: Upload<unknown>, bytes: Buffer, own: OwnMaterials): unknown {
   const text = decode(bytes)
   if (text === undefined) throw new Problem(malformed[kind], 'The body is not UTF-8.')
-  return text
+  return refusing(() => parse(text, own))
 }
 
 async function parseBody(body: Body<unknown>, bytes: Buffer, deps: Deps, own: OwnMaterials): Promise<unknown> {
   if (body.parseLong && bytes.length > INLINE_BYTES) return body.parseLong(bytes, deps, own)
   const raw = parseJson(bytes)
+  return refusing(() => body.parse(raw, own))
+}
+
+function refusing<T>(parse: () => T): T {
   try {
-    return body.parse(raw, own)
+    return parse()
   } catch (error) {
     throw error instanceof DomainError ? invalidInput(error.issues) : error
   }

@@ -3,7 +3,7 @@ import { genericMaterial, genericMaterials } from '../../solvers/materials/gener
 import type { Database } from '../database.ts'
 import { type Context, operation, statedBody } from '../operation.ts'
 import { Problem } from '../problems.ts'
-import { readMaterials } from './import-csv.ts'
+import { type ImportedRow, readMaterials } from './import-csv.ts'
 import { listMaterials } from './list-materials.ts'
 import { deleteMaterial, keepMaterials, readOwn, replaceMaterial } from './queries.ts'
 import {
@@ -148,15 +148,15 @@ const importAll = {
       '"Lime render, north wall",0.72,1650,950,dry,"Own laboratory, report 12",medium',
       '',
     ].join('\n'),
+    parse: readMaterials,
   },
   query: importQuery,
   status: 200,
   answer: importReportSchema,
   problems: ['too-many-materials'],
 } as const
-async function handleImport(context: Context<unknown, z.output<typeof importQuery>, string, 'key' | 'session'>) {
-  const { body, query, caller, deps } = context
-  const rows = readMaterials(body)
+async function handleImport(context: Context<unknown, z.output<typeof importQuery>, ImportedRow[], 'key' | 'session'>) {
+  const { body: rows, query, caller, deps } = context
   const dryRun = query.dryRun === 'true'
   const good = rows.flatMap((row) => ('material' in row ? [row.material] : []))
   const kept = dryRun ? [] : await keepMaterials(deps.db, caller, good)

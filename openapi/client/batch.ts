@@ -1,3 +1,5 @@
+import type { components } from '../openapi.d.ts'
+
 /** One call of a batch. */
 export interface BatchLine {
   /** Repeated in the answer to the line. */
@@ -20,16 +22,7 @@ export interface BatchSummary {
 }
 
 /** What the service says of a call that it refuses, by RFC 9457. Match `code`; the texts may change. */
-export interface Problem {
-  type: string
-  code: string
-  title: string
-  status: number
-  detail: string
-  retryable: boolean
-  requestId?: string
-  errors?: { pointer?: string; parameter?: string; code: string; detail: string; accepted?: string }[]
-}
+export type Problem = components['schemas']['Problem']
 
 /** A call that was refused. */
 export class ProblemError extends Error {

@@ -1,6 +1,7 @@
 import type { Check, Numbers } from '../case.ts'
 import type { Warning } from '../warnings.ts'
-import { penetrationDepth } from './half-space-reach.ts'
+import { penetrationDepth, REACH } from './half-space-reach.ts'
+import { latestOf } from '../math/latest.ts'
 
 /* How long a body with an end may be taken for one without, where its thickness is given. */
 
@@ -19,10 +20,10 @@ interface Asked {
   thickness?: number
 }
 
-/** Until 1 % of a step at the face has arrived at the far one: erfc(1.8214) = 0.01, at/L² = 0.0754. */
+/** Until 1 % of a step at the face has arrived at the far one: at/L² = 0.0754. */
 function ownEnd({ diffusivity, thickness }: Asked): Thin[] {
   if (thickness === undefined) return []
-  const root = thickness / 3.642772
+  const root = thickness / REACH
   return [{ id: 'body-deep-enough', name: 'The body', until: (root / diffusivity) * root, thickness }]
 }
 
@@ -34,10 +35,8 @@ export function halfSpaceNumbers(input: Asked): Numbers {
   }
 }
 
-const lastOf = (times: readonly number[]) => times.reduce((most, t) => Math.max(most, t), 0)
-
 export function deepCheck(times: readonly number[], { id, name, until }: Thin): Check {
-  const value = lastOf(times)
+  const value = latestOf(times)
   const text = `${name} feels less than 1 % of its far face at the last time.`
   return { id, holds: value <= until, value, limit: until, text }
 }
@@ -45,7 +44,7 @@ export function deepCheck(times: readonly number[], { id, name, until }: Thin): 
 export const deepEnough = (input: Asked): Check[] => ownEnd(input).map((thin) => deepCheck(input.times, thin))
 
 export function thinWarnings(times: readonly number[], { name, until }: Thin): Warning[] {
-  if (lastOf(times) <= until) return []
+  if (latestOf(times) <= until) return []
   const text = `${name} feels its far face after ${until} s; later answers are those of a deeper one. A heated or backed surface keeps rising.`
   return [{ code: 'body-too-thin', text, value: until }]
 }

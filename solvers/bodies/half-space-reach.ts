@@ -1,9 +1,13 @@
 import type { Check } from '../case.ts'
+import { latestOf } from '../math/latest.ts'
 
-/** Depth at which 1 % of a step at the surface has arrived after a time: erfc(1.8214) = 0.01. */
+/** 1 % of a step at the surface has arrived at so many times √(at): erfc(1.8214) = 0.01. */
+export const REACH = 3.642772
+
+/** Depth at which 1 % of a step at the surface has arrived after the latest time. */
 export function penetrationDepth(diffusivity: number, times: readonly number[]): number {
-  const longest = times.reduce((most, t) => Math.max(most, t), 0)
-  return 3.642772 * Math.sqrt(diffusivity) * Math.sqrt(longest)
+  const longest = latestOf(times)
+  return REACH * Math.sqrt(diffusivity) * Math.sqrt(longest)
 }
 
 /** Whether the change has come as far as the deepest place asked for; where it has not, the answer is the start. */

@@ -1,7 +1,8 @@
 import type { Check } from '../case.ts'
 import { gaussOver } from '../math/gauss-panels.ts'
 import type { OutputName } from '../outputs.ts'
-import type { Solution } from '../solution.ts'
+import { errorOf, type Output, type Solution } from '../solution.ts'
+import { latestOf } from '../math/latest.ts'
 
 /* Whether the heat that an answer says was gained is what its own fluxes brought in: two ways to one number. */
 
@@ -44,7 +45,7 @@ export function balanceOf(
   sample: (times: number[]) => HeatSample,
   { instants = [], longest = Infinity, released = () => 0 }: BalanceOptions = {},
 ): Check[] {
-  const last = times.reduce((most, t) => Math.max(most, t), 0)
+  const last = latestOf(times)
   const change = instants.reduce((most, t) => (t < last ? Math.max(most, t) : most), 0)
   const width = Math.min((last - change) / 2, longest)
   if (!(width > 1e-290)) return []
@@ -62,6 +63,10 @@ export function balanceOf(
   const limit = RULE + (before.error + after.error + flowError * width) / size
   return [{ id: 'heat-balance', holds: value <= limit, value, limit, text: TEXT }]
 }
+
+/** Heats as they were answered, each with what it may be off. */
+export const heatsOf = ({ values, bound }: Output): HeatSample['heats'] =>
+  (values as number[]).map((value) => ({ value, error: errorOf(bound, value) }))
 
 interface Places {
   times: readonly number[]
@@ -83,13 +88,11 @@ export function heatBalance<I extends Places>(
     (times) => {
       const { outputs } = solve({ ...withoutPlaces(input), times, outputs: ['heatGained', ...names] })
       const of = (name: OutputName) => outputs[name]!.values as number[]
-      const heat = outputs.heatGained!.bound
       const flowError = names.reduce((sum, name) => {
-        const { absolute, relative } = outputs[name]!.bound
-        return sum + faces[name]! * (absolute + relative * Math.max(...of(name).map(Math.abs)))
+        return sum + faces[name]! * errorOf(outputs[name]!.bound, Math.max(...of(name).map(Math.abs)))
       }, 0)
       return {
-        heats: of('heatGained').map((value) => ({ value, error: heat.absolute + heat.relative * Math.abs(value) })),
+        heats: heatsOf(outputs.heatGained!),
         flows: times.map((_, i) => names.map((name) => faces[name]! * of(name)[i]!)),
         flowError,
       }
@@ -113,7 +116,7 @@ export function contentBalance<I extends Places & { initialTemperature: number }
   input: I,
   body: { diffusivity: number; capacityAt: (depth: number) => number; places: (depths: number[]) => Partial<I> },
 ): Check[] {
-  const last = input.times.reduce((most, t) => Math.max(most, t), 0)
+  const last = latestOf(input.times)
   const reach = 12 * Math.sqrt(body.diffusivity) * Math.sqrt(last)
   if (!(reach > 1e-290)) return []
   const depths: number[] = []

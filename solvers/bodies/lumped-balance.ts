@@ -1,5 +1,5 @@
 import type { Check } from '../case.ts'
-import { balanceOf } from './heat-balance.ts'
+import { balanceOf, heatsOf } from './heat-balance.ts'
 import type { OutputName } from '../outputs.ts'
 import type { Solution } from '../solution.ts'
 
@@ -11,12 +11,8 @@ export function lumpedBalance<
     input.times,
     (times) => {
       const { temperature, heatGained } = solve({ ...input, times, outputs: ['temperature', 'heatGained'] }).outputs
-      const { absolute, relative } = heatGained!.bound
       return {
-        heats: (heatGained!.values as number[]).map((value) => ({
-          value,
-          error: absolute + relative * Math.abs(value),
-        })),
+        heats: heatsOf(heatGained!),
         flows: (temperature!.values as number[]).map((T, i) => flows(times[i]!, T)),
         flowError: input.conductance * temperature!.bound.absolute,
       }

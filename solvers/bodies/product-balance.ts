@@ -1,16 +1,13 @@
 import { momentsOf } from './body-step.ts'
 import type { Check } from '../case.ts'
-import { balanceOf } from './heat-balance.ts'
-import { UnitCylinder } from '../math/cylinder.ts'
-import { SlabFilm } from '../math/slab-film.ts'
-import { SlabFixed } from '../math/slab-fixed.ts'
+import { balanceOf, heatsOf } from './heat-balance.ts'
 import { driveTemperature } from './product-films.ts'
-import type { ProductInput } from './product-step.ts'
+import { type ProductInput, type DirectionShape, unitAcross } from './product-step.ts'
 import type { Solution } from '../solution.ts'
 
 /** A direction of a product: how far from its mid-plane, insulated face or axis to its face, and the film there. */
 export interface Direction {
-  shape: 'slab' | 'cylinder'
+  shape: DirectionShape
   reach: number
   film: number
 }
@@ -23,8 +20,7 @@ function alone(input: ProductInput, { shape, reach, film }: Direction, times: nu
   if (film === 0) return times.map(() => ({ flux: 0, mean: 1 }))
   const moments = momentsOf({ ...input, times }, reach)
   const body = { biot: (film * reach) / input.conductivity, ...face }
-  const unit =
-    shape === 'cylinder' ? new UnitCylinder(body) : film === Infinity ? new SlabFixed(body) : new SlabFilm(body)
+  const unit = unitAcross(shape, body)
   const fluxUnit = film === Infinity ? input.conductivity / reach : film
   return moments.map((m) => ({ flux: fluxUnit * unit.flux(0, m).value, mean: unit.meanRemaining(m).value }))
 }
@@ -38,7 +34,7 @@ export function productBalance<I extends ProductInput>(
 ): Check[] {
   const step = driveTemperature(input) - input.initialTemperature
   return balanceOf(input.times, (times) => {
-    const { values, bound } = solve({ ...input, points: [], times, outputs: ['heatGained'] }).outputs.heatGained!
+    const { heatGained } = solve({ ...input, points: [], times, outputs: ['heatGained'] }).outputs
     const single = directions.map((direction) => alone(input, direction, times))
     const areas = directions.map(({ shape, reach }) => ((shape === 'cylinder' ? 2 : 1) * volume) / reach)
     const flows = times.map((_, i) =>
@@ -47,10 +43,6 @@ export function productBalance<I extends ProductInput>(
         return step * areas[d]! * own[i]!.flux * others
       }),
     )
-    const heats = (values as number[]).map((value) => ({
-      value,
-      error: bound.absolute + bound.relative * Math.abs(value),
-    }))
-    return { heats, flows, flowError: 0 }
+    return { heats: heatsOf(heatGained!), flows, flowError: 0 }
   })
 }

@@ -26,25 +26,25 @@ export interface Span {
 /** Distance from the mid-plane, or from the insulated face, to a face. */
 export const reachOf = ({ size, faces }: Span): number => size / faces
 
+export type DirectionShape = 'slab' | 'cylinder'
+
+/** One direction of a product as a body of size 1. */
+export function unitAcross(shape: DirectionShape, body: FilmedBody): UnitBody {
+  if (shape === 'cylinder') return new UnitCylinder(body)
+  return body.biot === Infinity ? new SlabFixed(body) : new SlabFilm(body)
+}
+
 /** A slab across `span`, the points measured along `axis` from its mid-plane or insulated face. */
 export function slabFactor(input: ProductInput, span: Span, axis: PointAxis, film: number): Factor {
-  const length = reachOf(span)
-  const unit = (body: FilmedBody) => (film === Infinity ? new SlabFixed(body) : new SlabFilm(body))
-  return factorOf(input, length, axis, film, unit)
+  return factorOf(input, reachOf(span), axis, film, 'slab')
 }
 
 /** A cylinder, the points measured by their radius. */
 export function cylinderFactor(input: ProductInput, radius: number, film: number): Factor {
-  return factorOf(input, radius, 'r', film, (body) => new UnitCylinder(body))
+  return factorOf(input, radius, 'r', film, 'cylinder')
 }
 
-function factorOf(
-  input: ProductInput,
-  size: number,
-  axis: PointAxis,
-  film: number,
-  unitOf: (body: FilmedBody) => UnitBody,
-): Factor {
+function factorOf(input: ProductInput, size: number, axis: PointAxis, film: number, shape: DirectionShape): Factor {
   if (film === 0) return idleFactor
   const moments = momentsOf(input, size)
   const { distances, places } = differentOf(input.points.map((point) => Math.abs(point[axis]!)))
@@ -55,7 +55,7 @@ function factorOf(
     // The depth is a difference, which keeps the rounding of the whole size.
     shifts: Float64Array.from(distances, () => 6),
   }
-  return bodyFactor(unitOf(body), places, moments)
+  return bodyFactor(unitAcross(shape, body), places, moments)
 }
 
 /** Points of a grid have few different coordinates: each once, and which of them every point has. */

@@ -4,6 +4,7 @@ import type { OutputName } from '../outputs.ts'
 import { filmOf, fluxOf, passesNoHeat, type Side, temperatureOf } from '../statement/side.ts'
 import { profileOf } from '../statement/initial-profile.ts'
 import type { Solution } from '../solution.ts'
+import { latestOf } from '../math/latest.ts'
 
 /** The outputs of a slab between two sides, under their names in the cases; `also` gives a case's own. */
 export function solveTwoSided(
@@ -38,7 +39,7 @@ export function solveTwoSided(
 /** The largest rise by each flux, and the spread of all temperatures. */
 export function twoSidedScale(problem: TwoSidedProblem): number {
   const { left, right, start, length, times } = problem
-  const longest = times.reduce((most, t) => Math.max(most, t), 0)
+  const longest = latestOf(times)
   const acting = Math.min(longest, problem.pulse ?? Infinity)
   const given = [...profileOf(start, length).temperatures, temperatureOf(left), temperatureOf(right)]
   const temperatures = given.filter((T) => T !== undefined)

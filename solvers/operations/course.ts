@@ -3,7 +3,7 @@ import type { Asked } from './curve/curve.ts'
 import type { Course } from './curve/grid.ts'
 
 /** Fields that hold an instant at which what drives a case changes its law. */
-const instantNames = ['pulseDuration', 'rampDuration', 'fireDuration']
+export const instantNames: readonly string[] = ['pulseDuration', 'rampDuration', 'fireDuration']
 
 const isObject = (value: unknown): value is Record<string, unknown> => typeof value === 'object' && value !== null
 

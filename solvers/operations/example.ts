@@ -3,6 +3,7 @@ import { courseOf } from './course.ts'
 import { LONGEST } from './end-state.ts'
 import { DomainError } from '../errors.ts'
 import { quantitiesOf } from './question.ts'
+import { latestOf } from '../math/latest.ts'
 
 /** The last time of the case's example, the place that lies deepest, and its fields. */
 export function partsOf(c: Case) {
@@ -10,7 +11,7 @@ export function partsOf(c: Case) {
   const axis = placeFields[c.places].find((name) => rest[name] !== undefined)
   const places = axis ? (rest[axis] as unknown[]) : []
   const fields = Object.fromEntries(Object.entries(rest).filter(([name]) => name !== axis))
-  return { fields, axis, place: places.at(-1), last: times.reduce((most, t) => Math.max(most, t), 0) }
+  return { fields, axis, place: places.at(-1), last: latestOf(times) }
 }
 
 /** A number between two others, away from both, with as few digits as that allows. */

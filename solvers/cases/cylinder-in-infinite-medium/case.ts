@@ -11,6 +11,7 @@ import { sideField } from '../../statement/side-field.ts'
 import { resolveSolid } from '../../statement/solid.ts'
 import type { Warning } from '../../warnings.ts'
 import { type MediumBoundary, type MediumInput, solve } from './solve.ts'
+import { latestOf } from '../../math/latest.ts'
 
 type MediumResolved = MediumInput & Resolved & { length?: number }
 
@@ -239,11 +240,10 @@ function refuseSingular(
 /** The time from which the middle of a cylinder of this length is 1 % off. */
 const endsFeltAfter = ({ length, diffusivity }: MediumResolved) =>
   length === undefined ? Infinity : (length / 90 / diffusivity) * length
-const latestOf = ({ times }: MediumResolved) => times.reduce((most, t) => Math.max(most, t), 0)
 
 function endsNotFelt(input: MediumResolved): Check[] {
   if (input.length === undefined) return []
-  const value = latestOf(input)
+  const value = latestOf(input.times)
   const limit = endsFeltAfter(input)
   const text = 'The last time is before length²/(90a), when the ends of the cylinder are felt at its middle by 1 %.'
   return [{ id: 'ends-not-felt', holds: value <= limit, value, limit, text }]
@@ -251,7 +251,7 @@ function endsNotFelt(input: MediumResolved): Check[] {
 
 function endWarnings(input: MediumResolved): Warning[] {
   const value = endsFeltAfter(input)
-  if (latestOf(input) <= value) return []
+  if (latestOf(input.times) <= value) return []
   const text = `After ${value.toPrecision(3)} s the ends of the cylinder are felt at its middle: heat leaves beyond them too, and the change is overstated.`
   return [{ code: 'end-effects', text, value }]
 }

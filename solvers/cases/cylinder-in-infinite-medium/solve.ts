@@ -5,6 +5,7 @@ import type { OutputName } from '../../outputs.ts'
 import { fluxOf, type Side } from '../../statement/side.ts'
 import type { Solution } from '../../solution.ts'
 import { exactly, scaled } from '../../bodies/step-response.ts'
+import { latestOf } from '../../math/latest.ts'
 
 /** What happens at the cylinder: a side of the medium, or a power that enters along it. */
 export type MediumBoundary = Side | { kind: 'line-power'; linePower: number }
@@ -141,7 +142,7 @@ function momentsOf({ conductivity, radius }: MediumInput, { held, film }: Medium
 
 /** The difference, and beside it what the flux alone would cause: q·R/k, growing with the logarithm of time. */
 function scaleOf({ conductivity: k, diffusivity, radius, times }: MediumInput, drive: MediumDrive): number {
-  const latest = times.reduce((most, t) => Math.max(most, t), 0)
+  const latest = latestOf(times)
   const grown = Math.max(1, Math.log(4) + 2 * Math.log((Math.sqrt(diffusivity) * Math.sqrt(latest)) / radius))
   const alone = (radius / k) * grown
   const absorbed = Math.abs(drive.flux) * (drive.film === 0 ? alone : Math.min(1 / drive.film, alone))

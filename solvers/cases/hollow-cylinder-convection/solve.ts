@@ -7,6 +7,7 @@ import type { OutputName } from '../../outputs.ts'
 import { filmOf, fluxOf, passesNoHeat, type Side, temperatureOf } from '../../statement/side.ts'
 import type { Solution } from '../../solution.ts'
 import { exactly, scaled } from '../../bodies/step-response.ts'
+import { latestOf } from '../../math/latest.ts'
 
 export interface HollowInput {
   conductivity: number
@@ -132,7 +133,7 @@ function responseOf(input: HollowInput): AnnulusResponse {
   const length = wallOf(input)
   const annulus = annulusOf(input)
   const places = radii.map((r) => ({ fromInner: (r - innerRadius) / length, fromOuter: (outerRadius - r) / length }))
-  const latest = times.reduce((most, t) => Math.max(most, t), 0)
+  const latest = latestOf(times)
   const reach = outputs.includes('steadyTemperature') ? Infinity : momentOf(input, latest).fourier
   return new AnnulusResponse(annulus, [driveOf(inner, input), driveOf(outer, input)], places, reach)
 }
@@ -199,7 +200,7 @@ function riseBy(input: HollowInput, side: Side, other: Side, radius: number, oth
   const flux = Math.abs(fluxOf(side))
   if (flux === 0) return 0
   const { conductivity: k, diffusivity: a, volumetricHeatCapacity: capacity, innerRadius, outerRadius, times } = input
-  const latest = times.reduce((most, t) => Math.max(most, t), 0)
+  const latest = latestOf(times)
   const near = (Math.sqrt(4 / Math.PI) * Math.sqrt(a) * Math.sqrt(latest)) / k
   const drift = ((2 * radius) / (innerRadius + outerRadius) / wallOf(input)) * (latest / capacity)
   if (passesNoHeat(other)) return flux * (near + drift)

@@ -5,6 +5,7 @@ import { EPS, type Estimate } from '../../math/rounding.ts'
 import type { OutputName } from '../../outputs.ts'
 import type { Solution } from '../../solution.ts'
 import { exactly, scaled } from '../../bodies/step-response.ts'
+import { latestOf } from '../../math/latest.ts'
 
 export interface LineSourceInput {
   conductivity: number
@@ -55,7 +56,7 @@ export function solve(input: LineSourceInput): Solution {
     }),
     heatFlux: grid((i, j) => scaled(linePower, flux(i, j)), 'relative'),
   }
-  const latest = times.reduce((most, t) => Math.max(most, t), 0)
+  const latest = latestOf(times)
   const nearest = radii.reduce((least, r) => Math.min(least, r), Infinity)
   const most = latest === 0 ? 0 : exponentialIntegral(argument(latest, nearest))
   const scale = Math.abs(unit) * Math.max(1, most)

@@ -8,6 +8,7 @@ import { quantity } from '../../statement/quantity.ts'
 import { resolveSolid } from '../../statement/solid.ts'
 import { rampRate } from '../../statement/ramp.ts'
 import { solve, type HalfSpaceInput } from './solve.ts'
+import { latestOf } from '../../math/latest.ts'
 
 type HalfSpaceResolved = HalfSpaceInput & Resolved & { thickness?: number; volumetricHeatCapacity: number }
 
@@ -117,7 +118,7 @@ export default defineCase<typeof fields, HalfSpaceResolved>({
 /** A ramp of a length is nearly a step in its middle: by how much they differ at the last time, as a share of the whole rise. */
 function stepAtHalfRamp(input: HalfSpaceResolved): Check[] {
   const { diffusivity, depths, times, rampDuration: length, rampRate, initialTemperature } = input
-  const last = times.reduce((most, t) => Math.max(most, t), 0)
+  const last = latestOf(times)
   const since = length === undefined ? 0 : last - length / 2
   if (length === undefined || since <= 0 || rampRate === 0 || depths.length === 0) return []
   const { values } = solve({ ...input, times: [last], outputs: ['temperature'] }).outputs.temperature!

@@ -6,6 +6,7 @@ import type { Side } from '../../statement/side.ts'
 import type { Solution } from '../../solution.ts'
 import type { TwoSidedProblem } from '../../bodies/two-sided.ts'
 import { solveTwoSided } from '../../bodies/two-sided-outputs.ts'
+import { latestOf } from '../../math/latest.ts'
 
 export type HeatSource =
   | { kind: 'constant'; powerDensity: number }
@@ -113,7 +114,7 @@ export function scaleOf(input: InternalHeatInput): number {
     given.reduce((most, T) => Math.max(most, T), -Infinity) - given.reduce((least, T) => Math.min(least, T), Infinity)
   if (source.kind === 'hydration') return spread + source.adiabaticRise
   const power = Math.abs(source.powerDensity)
-  const longest = times.reduce((most, t) => Math.max(most, t), 0)
+  const longest = latestOf(times)
   const settled = h === 0 ? Infinity : ((power * length) / k) * (length / 2) + (power * length) / h
   return spread + Math.min(settled, (power * longest) / C)
 }

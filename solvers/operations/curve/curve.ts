@@ -1,6 +1,7 @@
 import type { Case } from '../../case.ts'
 import { EPS } from '../../math/rounding.ts'
 import type { OutputName } from '../../outputs.ts'
+import { errorOf } from '../../solution.ts'
 
 /** What a case answers along one of its axes, with what each value may be off. */
 export interface Curve {
@@ -20,7 +21,7 @@ export function overTime(c: Case, asked: Asked, output: OutputName): Curve {
     sample(times) {
       const { values, bound } = c.solve(c.resolve({ ...asked, times, outputs: [output] })).outputs[output]!
       const rows = values as number[] | number[][]
-      const off = (value: number) => bound.absolute + bound.relative * Math.abs(value)
+      const off = (value: number) => errorOf(bound, value)
       const sampled: Sampled = { values: [], bounds: [] }
       for (const row of rows) {
         const [first, second] = typeof row === 'number' ? [row] : row
@@ -40,7 +41,7 @@ export function overPlaces(c: Case, asked: Asked, axis: 'depths' | 'radii', time
       const input = { ...asked, [axis]: places, times: [time], outputs: ['temperature'] }
       const { values, bound } = c.solve(c.resolve(input)).outputs.temperature!
       const row = (values as number[][])[0]!
-      return { values: row, bounds: row.map((value) => bound.absolute + bound.relative * Math.abs(value)) }
+      return { values: row, bounds: row.map((value) => errorOf(bound, value)) }
     },
   }
 }

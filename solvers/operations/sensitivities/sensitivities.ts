@@ -5,6 +5,7 @@ import { EPS, lastPlaces } from '../../math/rounding.ts'
 import type { Bound } from '../../solution.ts'
 import { placesOutside } from '../places.ts'
 import { type Parameter, parametersOf, withoutMaterials, withParameter } from './parameters.ts'
+import { instantNames } from '../course.ts'
 
 /** First step of ln p, to either side or to one. */
 const FIRST_STEP = 0.25
@@ -20,9 +21,6 @@ export interface Sensitivities {
 
 type Grid = number[][]
 type Fields = Record<string, unknown>
-
-/** Fields that hold an instant at which what drives a case changes: near it the temperature bends. */
-const instantNames = ['pulseDuration', 'rampDuration']
 
 /** An instant that is a parameter has no one sensitivity at itself. */
 export function refuseSensitivities(c: Case, input: Fields & { times: number[] }): void {
